@@ -1,0 +1,3 @@
+/** Angular-momentum algebra: no atoms, no units. */
+module org.toprung.angular {
+}

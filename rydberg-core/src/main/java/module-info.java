@@ -1,0 +1,4 @@
+/** Alkali atoms and the lasers that drive them from a ground sublevel to a Rydberg sublevel. */
+module org.toprung.core {
+  requires transitive org.toprung.angular;
+}
