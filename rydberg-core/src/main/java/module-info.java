@@ -1,4 +1,10 @@
 /** Alkali atoms and the lasers that drive them from a ground sublevel to a Rydberg sublevel. */
+@SuppressWarnings("module") // the budget module is built after this one
 module org.toprung.core {
   requires transitive org.toprung.angular;
+  requires org.apache.commons.math4.legacy;
+
+  exports org.toprung.core.drive;
+  exports org.toprung.core.linear to
+      org.toprung.budget;
 }

@@ -1,0 +1,44 @@
+package org.toprung.budget.cause;
+
+import java.util.Locale;
+
+/**
+ * A cause with a strength that can be halved.
+ *
+ * <p>The lever is always the same question, what remains at half the strength, so it is answered here.
+ */
+abstract class Disturbance implements Cause {
+  private final String name;
+  private final String source;
+  private final String strength; // what to halve, "the rms magnetic noise"
+
+  Disturbance(String name, String strength, String source) {
+    this.name = name;
+    this.strength = strength;
+    this.source = source;
+  }
+
+  @Override
+  public final String name() {
+    return name;
+  }
+
+  @Override
+  public final String source() {
+    return source;
+  }
+
+  @Override
+  public final double error(PulseModel model) {
+    return error(model, 1);
+  }
+
+  /** Error when the disturbance is {@code scale} times as strong. */
+  abstract double error(PulseModel model, double scale);
+
+  @Override
+  public final String lever(PulseModel model) {
+    return String.format(
+        Locale.ROOT, "halve %s: %.2g remains", strength, error(model, 0.5));
+  }
+}

@@ -1,0 +1,237 @@
+package org.toprung.budget.cause;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.toprung.budget.dynamics.NoiseFreePulse;
+import org.toprung.budget.pulse.Pulse;
+import org.toprung.core.atom.Level;
+import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.Elimination;
+import org.toprung.core.drive.Ladder;
+import org.toprung.core.drive.LadderSetting;
+import org.toprung.core.drive.PulsePlan;
+import org.toprung.core.drive.PulsePlanner;
+import org.toprung.core.quantity.Estimate;
+import org.toprung.core.quantity.Temperature;
+import org.toprung.core.structure.Lifetimes;
+import org.toprung.core.structure.StaticPolarizability;
+
+/**
+ * A pulse on a drive, reduced to what causes need: the effective two-level system, how each beam moves
+ * it, and the rates of loss.
+ *
+ * <p>{@link #variations()} are the same pulse with one atomic input moved by its standard uncertainty;
+ * each is planned anew, because length and frequency of a real pulse are calibrated on the atom.
+ *
+ * <p>Immutable.
+ */
+public final class PulseModel {
+
+  /** Factors on the atomic inputs; 1 is the catalogue's value. */
+  private record Inputs(
+      double first,
+      double second,
+      double intermediateDecay,
+      double spontaneous,
+      double blackbody,
+      double polarizability,
+      double farShift) {
+    static final Inputs NOMINAL = new Inputs(1, 1, 1, 1, 1, 1, 1);
+  }
+
+  private final Drive drive;
+  private final Pulse pulse;
+  private final Inputs inputs;
+  private final PulsePlan plan;
+  private final Elimination elimination;
+  private final NoiseFreePulse noiseFree;
+
+  private PulseModel(Drive drive, Pulse pulse, Inputs inputs) {
+    this.drive = drive;
+    this.pulse = pulse;
+    this.inputs = inputs;
+    Ladder ladder =
+        drive
+            .ladder()
+            .withElementScaled(0, inputs.first())
+            .withElementScaled(1, inputs.second())
+            .withIntermediateDecayScaled(inputs.intermediateDecay())
+            .withFarShiftsScaled(inputs.farShift());
+    this.plan = PulsePlanner.plan(ladder, pulse.areaRadians());
+    this.elimination = Elimination.of(ladder);
+    this.noiseFree =
+        NoiseFreePulse.of(ladder, setting(plan.frequencyOffset().hertz()), seconds());
+  }
+
+  /**
+   * The model of a pulse with the atomic values as they are.
+   *
+   * @param drive the drive
+   * @param pulse the pulse
+   * @return the model
+   */
+  public static PulseModel of(Drive drive, Pulse pulse) {
+    return new PulseModel(drive, pulse, Inputs.NOMINAL);
+  }
+
+  /**
+   * The same pulse with each uncertain atomic input raised by one standard uncertainty.
+   *
+   * @return one model per input
+   */
+  public List<PulseModel> variations() {
+    Lifetimes lifetimes = Lifetimes.of(drive.species());
+    double first = 1 + drive.steps().get(0).relativeUncertainty();
+    double second = 1 + drive.steps().get(1).relativeUncertainty();
+    double decay =
+        1 + lifetimes.spontaneousRatePerSecond(drive.intermediate()).relative();
+    double spontaneous = 1 + lifetimes.spontaneousRatePerSecond(target()).relative();
+    double blackbody =
+        1 + lifetimes.blackbodyRatePerSecond(target(), Temperature.ofKelvin(300)).relative();
+    double polarizability = 1 + polarizability().scalarHertzPerFieldSquared().relative();
+    double far = 1 + drive.farShiftRelativeUncertainty();
+    List<PulseModel> models = new ArrayList<>();
+    for (Inputs varied :
+        List.of(
+            new Inputs(first, 1, 1, 1, 1, 1, 1),
+            new Inputs(1, second, 1, 1, 1, 1, 1),
+            new Inputs(1, 1, decay, 1, 1, 1, 1),
+            new Inputs(1, 1, 1, spontaneous, 1, 1, 1),
+            new Inputs(1, 1, 1, 1, blackbody, 1, 1),
+            new Inputs(1, 1, 1, 1, 1, polarizability, 1),
+            new Inputs(1, 1, 1, 1, 1, 1, far))) {
+      models.add(new PulseModel(drive, pulse, varied));
+    }
+    return models;
+  }
+
+  private Level target() {
+    return drive.target().level();
+  }
+
+  /**
+   * The drive.
+   *
+   * @return the drive as resolved, with nominal atomic values
+   */
+  public Drive drive() {
+    return drive;
+  }
+
+  /**
+   * Length and frequency of the pulse.
+   *
+   * @return the plan
+   */
+  public PulsePlan plan() {
+    return plan;
+  }
+
+  /**
+   * Duration of the pulse.
+   *
+   * @return the duration, s
+   */
+  public double seconds() {
+    return plan.duration().seconds();
+  }
+
+  /**
+   * Setting of the ladder during the pulse, with the laser moved to the shifted resonance and by the
+   * pulse's own offset.
+   *
+   * @return the setting
+   */
+  public LadderSetting setting() {
+    return setting(plan.frequencyOffset().hertz() + pulse.offset().hertz());
+  }
+
+  private LadderSetting setting(double offsetHertz) {
+    int last = drive.steps().size() - 1;
+    return LadderSetting.nominal(drive.steps().size()).withLaserOffset(last, offsetHertz);
+  }
+
+  /**
+   * Laser minus light-shifted resonance by intention.
+   *
+   * @return the offset, Hz
+   */
+  double offsetHertz() {
+    return pulse.offset().hertz();
+  }
+
+  /** Error of the square pulse at another Rabi frequency (relative) and detuning, Hz. */
+  double twoLevelError(double rabiFactor, double detuningHertz) {
+    double rabi = plan.rabi().hertz() * rabiFactor;
+    double generalized = Math.hypot(rabi, detuningHertz);
+    if (generalized == 0) {
+      return 1;
+    }
+    double amplitude = rabi / generalized * Math.sin(Math.PI * generalized * seconds());
+    return 1 - amplitude * amplitude;
+  }
+
+  /** Error of the undisturbed two-level pulse, with its offset. */
+  double baseline() {
+    return twoLevelError(1, offsetHertz());
+  }
+
+  /** Move of the two-photon resonance with the relative intensity of one beam, Hz. */
+  double resonanceShiftHertz(int step) {
+    return elimination.targetShiftHertz(step) - elimination.startShiftHertz(step);
+  }
+
+  double scatteringPerSecond() {
+    return 0.5 * (elimination.startScatteringPerSecond() + elimination.targetScatteringPerSecond());
+  }
+
+  /**
+   * Probability that the intermediate level scatters a photon during the pulse.
+   *
+   * @return the probability
+   */
+  public double scatteringPerPulse() {
+    return -Math.expm1(-scatteringPerSecond() * seconds());
+  }
+
+  /**
+   * Spontaneous decay rate of the target level.
+   *
+   * @return the rate, 1/s
+   */
+  public double spontaneousPerSecond() {
+    return inputs.spontaneous()
+        * Lifetimes.of(drive.species()).spontaneousRatePerSecond(target()).value();
+  }
+
+  /**
+   * Rate of blackbody-driven transitions from the target level.
+   *
+   * @param environment temperature of the walls
+   * @return the rate, 1/s
+   */
+  public double blackbodyPerSecond(Temperature environment) {
+    Estimate rate = Lifetimes.of(drive.species()).blackbodyRatePerSecond(target(), environment);
+    return inputs.blackbody() * rate.value();
+  }
+
+  private StaticPolarizability polarizability() {
+    return StaticPolarizability.of(drive.species(), target());
+  }
+
+  /** Stark shift of the target in a field with these components, Hz. */
+  double starkShiftHertz(double ex, double ey, double ez) {
+    double square = ex * ex + ey * ey + ez * ez;
+    double scalar = polarizability().scalarHertzPerFieldSquared().value();
+    double tensor =
+        polarizability().tensorHertzPerFieldSquared().value()
+            * polarizability().tensorFactor(drive.target().doubledM());
+    return -0.5
+        * inputs.polarizability()
+        * (scalar * square + tensor * 0.5 * (3 * ez * ez - square));
+  }
+
+  NoiseFreePulse noiseFree() {
+    return noiseFree;
+  }
+}

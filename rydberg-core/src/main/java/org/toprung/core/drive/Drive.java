@@ -1,0 +1,443 @@
+package org.toprung.core.drive;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import org.toprung.core.atom.Level;
+import org.toprung.core.atom.Species;
+import org.toprung.core.atom.Sublevel;
+import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Length;
+import org.toprung.core.quantity.MagneticField;
+import org.toprung.core.quantity.PhysicalConstants;
+import org.toprung.core.structure.DipoleElement;
+
+/**
+ * A resolved two-photon drive from a ground sublevel to a Rydberg sublevel: couplings, light shifts
+ * and what else follows from atom, beams and field before any noise.
+ *
+ * <pre>{@code
+ * Drive drive = Drive.of(Species.RUBIDIUM_87)
+ *     .from(Sublevel.hyperfine("5S1/2", 2, 2))
+ *     .step(Level.parse("6P3/2"), lowerBeam)
+ *     .step(Sublevel.fine("68S1/2", 0.5), upperBeam)
+ *     .detuned(gigahertz(1.2))
+ *     .in(gauss(4))
+ *     .resolve();
+ * }</pre>
+ *
+ * <p>The effective Rabi frequency and the light shifts are the second-order ones of {@link
+ * Elimination}, summed coherently over all sublevels of the intermediate level at the given field;
+ * they are good to about the square of {@link #admixture()}. {@link #plan} goes beyond second order.
+ *
+ * <p>Immutable and thread-safe.
+ */
+public final class Drive {
+  private static final double LARGE_ADMIXTURE = 0.1;
+
+  /**
+   * One resolved step.
+   *
+   * @param to name of the level or sublevel the step leads to
+   * @param wavelength vacuum wavelength of the laser, light shifts not compensated
+   * @param rabi root of the summed squares of the couplings over 2π from the start (first step) or to
+   *     the target (last step) over the sublevels of the intermediate level
+   * @param element reduced dipole element between the two levels
+   * @param beam the beam that drives it
+   */
+  public record Step(
+      String to, Length wavelength, Frequency rabi, DipoleElement element, Beam beam) {
+
+    /**
+     * Relative standard uncertainty of the dipole element, and so of the step's Rabi frequency.
+     *
+     * @return the relative uncertainty
+     */
+    public double relativeUncertainty() {
+      return element.uncertaintyA0() / Math.abs(element.valueA0());
+    }
+  }
+
+  /**
+   * A Rydberg sublevel that the light reaches besides the wanted one.
+   *
+   * @param sublevel name with m<sub>J</sub> and m<sub>I</sub>
+   * @param rabi effective Rabi frequency over 2π from the start
+   * @param detuning sum of the laser frequencies minus the transition frequency, light shifts left
+   *     out, with the lasers on bare resonance with the wanted target
+   */
+  public record OtherTarget(String sublevel, Frequency rabi, Frequency detuning) {}
+
+  private final DriveSetup setup;
+  private final Ladder ladder;
+  private final Elimination elimination;
+  private final List<Step> steps;
+  private final List<OtherTarget> otherTargets;
+  private final List<String> warnings;
+  private final double[] waveVector; // 1/m
+  private final double[][] stepWaveVectors; // 1/m
+  private final double magneticSensitivity; // Hz/T
+  private final double farShiftUncertainty; // relative
+
+  private Drive(DriveSetup setup) {
+    this.setup = setup;
+    LadderBuilder builder = new LadderBuilder(setup);
+    this.ladder = builder.build();
+    this.elimination = Elimination.of(ladder);
+    int reference = strongest();
+    this.steps = List.of(step(builder, 0, reference), step(builder, 1, reference));
+    this.otherTargets = others();
+    this.warnings = warnings();
+    this.stepWaveVectors = new double[2][];
+    this.waveVector = new double[3];
+    for (int k = 0; k < 2; k++) {
+      double number = 2 * Math.PI / steps.get(k).wavelength().metres();
+      stepWaveVectors[k] = setup.beam(k).direction();
+      for (int a = 0; a < 3; a++) {
+        stepWaveVectors[k][a] *= number;
+        waveVector[a] += stepWaveVectors[k][a];
+      }
+    }
+    this.magneticSensitivity =
+        ladder.states().get(reference).hertzPerTesla()
+            - ladder.states().get(ladder.start()).hertzPerTesla();
+    this.farShiftUncertainty = builder.farShiftRelativeUncertainty();
+  }
+
+  /**
+   * Begins the description of a drive.
+   *
+   * @param species the atom
+   * @return an empty description
+   */
+  public static DriveSetup of(Species species) {
+    return DriveSetup.of(species);
+  }
+
+  static Drive resolved(DriveSetup setup) {
+    return new Drive(setup);
+  }
+
+  /** The wanted sublevel that takes the largest part of the coupling. */
+  private int strongest() {
+    int best = ladder.wanted()[0];
+    double largest = 0;
+    for (int w : ladder.wanted()) {
+      double rabi = Elimination.of(ladder, new int[] {w}).rabiHertz();
+      if (rabi > largest) {
+        largest = rabi;
+        best = w;
+      }
+    }
+    return best;
+  }
+
+  private Step step(LadderBuilder builder, int k, int reference) {
+    double sum = 0;
+    for (Ladder.Coupling c : ladder.couplings()) {
+      boolean ofStep =
+          c.step() == k && (k == 0 ? c.lower() == ladder.start() : c.upper() == reference);
+      int middle = k == 0 ? c.upper() : c.lower();
+      if (ofStep && builder.isNamed(ladder.states().get(middle))) {
+        sum += c.rabiReHertz() * c.rabiReHertz() + c.rabiImHertz() * c.rabiImHertz();
+      }
+    }
+    return new Step(
+        k == 0 ? setup.intermediate().toString() : setup.target().toString(),
+        Length.ofMetres(PhysicalConstants.SPEED_OF_LIGHT / builder.laserHertz(k)),
+        Frequency.ofHertz(Math.sqrt(sum)),
+        builder.element(k),
+        setup.beam(k));
+  }
+
+  private List<OtherTarget> others() {
+    List<OtherTarget> others = new ArrayList<>();
+    for (int i = 0; i < ladder.size(); i++) {
+      Ladder.State s = ladder.states().get(i);
+      if (s.rung() == 2 && !isWanted(i)) {
+        double rabi = Elimination.of(ladder, new int[] {i}).rabiHertz();
+        others.add(
+            new OtherTarget(
+                s.label(), Frequency.ofHertz(rabi), Frequency.ofHertz(-s.energyHertz())));
+      }
+    }
+    others.sort((a, b) -> Double.compare(b.rabi().hertz(), a.rabi().hertz()));
+    return List.copyOf(others);
+  }
+
+  private boolean isWanted(int index) {
+    for (int w : ladder.wanted()) {
+      if (w == index) {
+        return true;
+      }
+    }
+    return false;
+  }
+
+  private List<String> warnings() {
+    List<String> found = new ArrayList<>();
+    for (int i = 0; i < ladder.size(); i++) {
+      Ladder.State s = ladder.states().get(i);
+      if (s.rung() != 1) {
+        continue;
+      }
+      double coupling = 0;
+      for (Ladder.Coupling c : ladder.couplings()) {
+        boolean touches =
+            c.step() == 0
+                ? c.lower() == ladder.start() && c.upper() == i
+                : c.step() == 1 && c.lower() == i && isWanted(c.upper());
+        if (touches) {
+          coupling = Math.max(coupling, Math.hypot(c.rabiReHertz(), c.rabiImHertz()));
+        }
+      }
+      double gap = Math.hypot(s.energyHertz(), s.decayPerSecond() / (4 * Math.PI));
+      if (coupling > 2 * LARGE_ADMIXTURE * gap) {
+        found.add(
+            String.format(
+                Locale.ROOT,
+                "%s is nearly resonant: the first laser is %.4g MHz from it and the coupling is"
+                    + " %.4g MHz, so second-order values are poor (admixture %.2g, should be below"
+                    + " %.1g)",
+                s.label(),
+                -s.energyHertz() * 1e-6,
+                coupling * 1e-6,
+                coupling / (2 * gap),
+                LARGE_ADMIXTURE));
+      }
+    }
+    return List.copyOf(found);
+  }
+
+  /**
+   * The atom.
+   *
+   * @return the species
+   */
+  public Species species() {
+    return setup.species();
+  }
+
+  /**
+   * The start sublevel.
+   *
+   * @return a hyperfine sublevel of the ground level
+   */
+  public Sublevel start() {
+    return setup.start();
+  }
+
+  /**
+   * The intermediate level.
+   *
+   * @return the level the first step leads to
+   */
+  public Level intermediate() {
+    return setup.intermediate();
+  }
+
+  /**
+   * The wanted target.
+   *
+   * @return a Rydberg sublevel
+   */
+  public Sublevel target() {
+    return setup.target();
+  }
+
+  /**
+   * The magnetic field along lab z.
+   *
+   * @return the field
+   */
+  public MagneticField field() {
+    return setup.field();
+  }
+
+  /**
+   * Detuning of the first laser from the intermediate level's centre of gravity.
+   *
+   * @return the detuning, positive when the laser lies above
+   */
+  public Frequency detuning() {
+    return setup.detuning();
+  }
+
+  /**
+   * The steps in order.
+   *
+   * @return an immutable list of two steps
+   */
+  public List<Step> steps() {
+    return steps;
+  }
+
+  /**
+   * Effective Rabi frequency over 2π between the start and the wanted target.
+   *
+   * @return the modulus
+   */
+  public Frequency rabi() {
+    return Frequency.ofHertz(elimination.rabiHertz());
+  }
+
+  /**
+   * Relative standard uncertainty of the effective Rabi frequency, from the dipole elements.
+   *
+   * @return the relative uncertainty
+   */
+  public double relativeUncertainty() {
+    return Math.hypot(steps.get(0).relativeUncertainty(), steps.get(1).relativeUncertainty());
+  }
+
+  /**
+   * Light shift of the start by all beams, near- and far-resonant.
+   *
+   * @return the move of its energy over h, positive upwards
+   */
+  public Frequency startLightShift() {
+    return Frequency.ofHertz(elimination.startShiftHertz());
+  }
+
+  /**
+   * Light shift of the wanted target by all beams, near- and far-resonant.
+   *
+   * @return the move of its energy over h, positive upwards
+   */
+  public Frequency targetLightShift() {
+    return Frequency.ofHertz(elimination.targetShiftHertz());
+  }
+
+  /**
+   * Light shift of the start by one beam.
+   *
+   * @param step index of the step, 0 or 1
+   * @return the move of its energy over h, positive upwards
+   */
+  public Frequency startLightShift(int step) {
+    return Frequency.ofHertz(elimination.startShiftHertz(step));
+  }
+
+  /**
+   * Light shift of the wanted target by one beam.
+   *
+   * @param step index of the step, 0 or 1
+   * @return the move of its energy over h, positive upwards
+   */
+  public Frequency targetLightShift(int step) {
+    return Frequency.ofHertz(elimination.targetShiftHertz(step));
+  }
+
+  /**
+   * Relative standard uncertainty of the far-off-resonant part of the light shifts.
+   *
+   * @return the relative uncertainty
+   */
+  public double farShiftRelativeUncertainty() {
+    return farShiftUncertainty;
+  }
+
+  /**
+   * Rates at which start and target scatter photons through the intermediate level, averaged: the
+   * scattering rate of an atom that spends equal times in both, as during a π pulse.
+   *
+   * @return the rate, 1/s
+   */
+  public double meanScatteringPerSecond() {
+    return 0.5 * (elimination.startScatteringPerSecond() + elimination.targetScatteringPerSecond());
+  }
+
+  /**
+   * The largest amplitude Ω/2|Δ| of an intermediate sublevel in the dressed start or target.
+   *
+   * @return the admixture; second-order results are good to about its square
+   */
+  public double admixture() {
+    return elimination.admixture();
+  }
+
+  /**
+   * Sum of the wave vectors of all beams, which is what the Doppler shift of the ladder counts.
+   *
+   * @return a fresh array of three components, 1/m (2π over the wavelength)
+   */
+  public double[] waveVectorPerMetre() {
+    return waveVector.clone();
+  }
+
+  /**
+   * Wave vector of one beam.
+   *
+   * @param step index of the step, 0 or 1
+   * @return a fresh array of three components, 1/m (2π over the wavelength)
+   */
+  public double[] waveVectorPerMetre(int step) {
+    return stepWaveVectors[step].clone();
+  }
+
+  /**
+   * Doppler shift of the ladder for a moving atom.
+   *
+   * @param x velocity along lab x, m/s
+   * @param y velocity along lab y, m/s
+   * @param z velocity along lab z, m/s
+   * @return −k·v/2π: the change of the summed laser frequencies as the atom sees them
+   */
+  public Frequency dopplerShift(double x, double y, double z) {
+    return Frequency.ofHertz(
+        -(waveVector[0] * x + waveVector[1] * y + waveVector[2] * z) / (2 * Math.PI));
+  }
+
+  /**
+   * Derivative of the transition frequency from start to target with the magnetic field.
+   *
+   * @return d(target − start)/dB over h, Hz/T
+   */
+  public double magneticSensitivityHertzPerTesla() {
+    return magneticSensitivity;
+  }
+
+  /**
+   * Rydberg sublevels that the light reaches besides the wanted one, strongest first.
+   *
+   * @return an immutable list
+   */
+  public List<OtherTarget> otherTargets() {
+    return otherTargets;
+  }
+
+  /**
+   * What makes the second-order values of this drive doubtful.
+   *
+   * @return an immutable list of sentences, empty when all is well
+   */
+  public List<String> warnings() {
+    return warnings;
+  }
+
+  /**
+   * The sublevels and couplings behind this drive.
+   *
+   * @return the ladder
+   */
+  public Ladder ladder() {
+    return ladder;
+  }
+
+  /**
+   * The plan of a square pulse at nominal powers, beyond second order where the dressed states of the
+   * ladder can be told apart.
+   *
+   * @param areaRadians Ωt, positive; π for full transfer
+   * @return duration and frequency offset
+   * @throws IllegalArgumentException if the area is not positive
+   */
+  public PulsePlan plan(double areaRadians) {
+    return PulsePlanner.plan(ladder, areaRadians);
+  }
+
+  @Override
+  public String toString() {
+    return species().name() + " " + start() + " to " + target() + " through " + intermediate();
+  }
+}

@@ -1,0 +1,198 @@
+package org.toprung.core.drive;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.toprung.core.atom.Level;
+import org.toprung.core.atom.Species;
+import org.toprung.core.atom.Sublevel;
+import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.MagneticField;
+
+/**
+ * The description of a drive before it is resolved: start, steps, detuning and field.
+ *
+ * <p>Immutable: every method gives a copy, so that one description can be the root of many. Nothing
+ * is computed before {@link #resolve()}.
+ */
+public final class DriveSetup {
+
+  /** One step as described: where it leads and the beam that drives it. */
+  record Step(Level to, Sublevel target, Beam beam) {
+    @Override
+    public String toString() {
+      return target == null ? to.toString() : target.toString();
+    }
+  }
+
+  private final Species species;
+  private final Sublevel start;
+  private final List<Step> steps;
+  private final Frequency detuning;
+  private final MagneticField field;
+
+  private DriveSetup(
+      Species species,
+      Sublevel start,
+      List<Step> steps,
+      Frequency detuning,
+      MagneticField field) {
+    this.species = species;
+    this.start = start;
+    this.steps = steps;
+    this.detuning = detuning;
+    this.field = field;
+  }
+
+  static DriveSetup of(Species species) {
+    if (species == null) {
+      throw new IllegalArgumentException("a drive needs a species, not null");
+    }
+    return new DriveSetup(species, null, List.of(), null, null);
+  }
+
+  /**
+   * Sets the start.
+   *
+   * @param sublevel a hyperfine sublevel of the ground level
+   * @return a copy with this start
+   * @throws IllegalArgumentException if the species has no such sublevel, or it is not one of the
+   *     ground level labelled by F and m<sub>F</sub>
+   */
+  public DriveSetup from(Sublevel sublevel) {
+    species.requireValid(sublevel);
+    if (!sublevel.isHyperfine() || !sublevel.level().equals(species.groundLevel())) {
+      throw new IllegalArgumentException(
+          "the start "
+              + sublevel
+              + " must be a hyperfine sublevel of the ground level "
+              + species.groundLevel());
+    }
+    return new DriveSetup(species, sublevel, steps, detuning, field);
+  }
+
+  /**
+   * Adds a step to an intermediate level: all its sublevels take part.
+   *
+   * @param to the intermediate level
+   * @param beam the beam that drives the step, with polarization and direction
+   * @return a copy with this step
+   * @throws IllegalArgumentException if the species has no such level, or the beam cannot have its
+   *     polarization
+   * @throws IllegalStateException if the beam lacks polarization or direction
+   */
+  public DriveSetup step(Level to, Beam beam) {
+    species.requireValid(to);
+    return withStep(new Step(to, null, beam));
+  }
+
+  /**
+   * Adds the last step, to the wanted target.
+   *
+   * @param target a Rydberg sublevel with its m<sub>J</sub>; the nuclear spin is a spectator
+   * @param beam the beam that drives the step, with polarization and direction
+   * @return a copy with this step
+   * @throws IllegalArgumentException if the species has no such sublevel, it is labelled by F, or the
+   *     beam cannot have its polarization
+   * @throws IllegalStateException if the beam lacks polarization or direction
+   */
+  public DriveSetup step(Sublevel target, Beam beam) {
+    species.requireValid(target);
+    if (target.isHyperfine()) {
+      throw new IllegalArgumentException(
+          "the target "
+              + target
+              + " must be given by its mJ: the nuclear spin of a Rydberg level is a spectator");
+    }
+    return withStep(new Step(target.level(), target, beam));
+  }
+
+  private DriveSetup withStep(Step step) {
+    step.beam().polarizationVector();
+    List<Step> longer = new ArrayList<>(steps);
+    longer.add(step);
+    return new DriveSetup(species, start, List.copyOf(longer), detuning, field);
+  }
+
+  /**
+   * Sets the detuning of the first laser from the intermediate level.
+   *
+   * @param newDetuning laser frequency minus the frequency from the start (its own energy at the
+   *     field) to the centre of gravity of the intermediate level's hyperfine manifold; positive when
+   *     the laser lies above
+   * @return a copy with this detuning
+   */
+  public DriveSetup detuned(Frequency newDetuning) {
+    if (newDetuning == null) {
+      throw new IllegalArgumentException("a drive needs a detuning, not null");
+    }
+    return new DriveSetup(species, start, steps, newDetuning, field);
+  }
+
+  /**
+   * Sets the magnetic field, which is the quantization axis and lab z.
+   *
+   * @param newField size of the field, at least 0
+   * @return a copy in this field
+   * @throws IllegalArgumentException if the field is negative
+   */
+  public DriveSetup in(MagneticField newField) {
+    if (!(newField.tesla() >= 0)) {
+      throw new IllegalArgumentException(
+          "magnetic field " + newField + " must be at least 0: it points along lab z by convention");
+    }
+    return new DriveSetup(species, start, steps, detuning, newField);
+  }
+
+  /**
+   * Works out couplings, shifts and everything else of the drive.
+   *
+   * @return the resolved drive
+   * @throws IllegalStateException if start, steps, detuning or field is missing
+   * @throws IllegalArgumentException if a step is forbidden by a selection rule or the light cannot
+   *     reach the target; the message names the rule
+   */
+  public Drive resolve() {
+    requireGiven(start, "a start: call from(...)");
+    requireGiven(detuning, "a detuning: call detuned(...)");
+    requireGiven(field, "a magnetic field: call in(...)");
+    if (steps.size() != 2 || steps.get(0).target() != null || steps.get(1).target() == null) {
+      throw new IllegalStateException(
+          "a drive has two steps, the first to a level, the second to a sublevel, not " + steps);
+    }
+    return Drive.resolved(this);
+  }
+
+  private static void requireGiven(Object value, String what) {
+    if (value == null) {
+      throw new IllegalStateException("the drive still needs " + what);
+    }
+  }
+
+  Species species() {
+    return species;
+  }
+
+  Sublevel start() {
+    return start;
+  }
+
+  Level intermediate() {
+    return steps.get(0).to();
+  }
+
+  Sublevel target() {
+    return steps.get(1).target();
+  }
+
+  Beam beam(int step) {
+    return steps.get(step).beam();
+  }
+
+  Frequency detuning() {
+    return detuning;
+  }
+
+  MagneticField field() {
+    return field;
+  }
+}

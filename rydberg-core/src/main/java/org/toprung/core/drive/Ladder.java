@@ -1,0 +1,267 @@
+package org.toprung.core.drive;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import org.toprung.core.atom.Level;
+
+/**
+ * The driven sublevels and their couplings in the frame that rotates with the lasers: the numbers
+ * behind a resolved {@link Drive}, from which everything else is computed.
+ *
+ * <p>Every sublevel sits on a rung: 0 for the ground manifold, 1 for the intermediate level, 2 for
+ * the Rydberg level. Its energy here is its energy over h minus the photon energies that lead up to
+ * its rung, with the start at zero and the lasers on bare N-photon resonance with the wanted target,
+ * so that an intermediate sublevel lies at minus its detuning. In a {@link LadderSetting} with field
+ * factors a<sub>k</sub> and laser offsets ν<sub>k</sub> the Hamiltonian over h (Hz) is
+ *
+ * <ul>
+ *   <li>on the diagonal: energy + Σ<sub>k</sub> a<sub>k</sub>² · (light shift by far-off-resonant
+ *       levels) + dν/dB · δB − Σ<sub>k below the rung</sub> ν<sub>k</sub> (+ the target shift on the
+ *       last rung), with −iΓ/4π for decay when loss is asked for;
+ *   <li>between neighbouring rungs: a<sub>k</sub> Ω/4π, Ω = E0⟨d·ε⟩/ħ;
+ *   <li>between first and last rung: a<sub>1</sub>a<sub>2</sub> times the coupling through the
+ *       fine-structure partner of the intermediate level, which is far off resonance and eliminated.
+ * </ul>
+ *
+ * <p>Immutable and thread-safe.
+ */
+public final class Ladder {
+
+  /**
+   * One sublevel of the ladder.
+   *
+   * @param label name for people, such as {@code 6P3/2 F=3 mF=3}
+   * @param level the level it belongs to
+   * @param rung 0 ground, 1 intermediate, 2 Rydberg
+   * @param energyHertz energy in the rotating frame over h, Hz
+   * @param decayPerSecond natural decay rate of an intermediate sublevel, 1/s; 0 on other rungs
+   * @param hertzPerTesla derivative of the energy over h with the magnetic field, Hz/T
+   */
+  public record State(
+      String label,
+      Level level,
+      int rung,
+      double energyHertz,
+      double decayPerSecond,
+      double hertzPerTesla) {}
+
+  /**
+   * A coupling of two sublevels on neighbouring rungs, or of the first and the last rung through
+   * eliminated levels.
+   *
+   * @param lower index of the state on the lower rung
+   * @param upper index of the state on the upper rung
+   * @param step the step whose beam drives it, or {@link #DIRECT}
+   * @param rabiReHertz real part of the Rabi frequency over 2π at nominal power, Hz
+   * @param rabiImHertz imaginary part of the Rabi frequency over 2π at nominal power, Hz
+   */
+  public record Coupling(int lower, int upper, int step, double rabiReHertz, double rabiImHertz) {}
+
+  /** Step index of a coupling that needs one photon of every step. */
+  public static final int DIRECT = -1;
+
+  private static final int LAST_RUNG = 2;
+
+  private final List<State> states;
+  private final List<Coupling> couplings;
+  private final double[][] farShift; // Hz at nominal power, [state][step]
+  private final int start;
+  private final int[] wanted;
+
+  Ladder(
+      List<State> states,
+      List<Coupling> couplings,
+      double[][] farShift,
+      int start,
+      int[] wanted) {
+    this.states = List.copyOf(states);
+    this.couplings = List.copyOf(couplings);
+    this.farShift = new double[farShift.length][];
+    for (int i = 0; i < farShift.length; i++) {
+      this.farShift[i] = farShift[i].clone();
+    }
+    this.start = start;
+    this.wanted = wanted.clone();
+  }
+
+  /**
+   * The number of sublevels.
+   *
+   * @return the number of states
+   */
+  public int size() {
+    return states.size();
+  }
+
+  /**
+   * The number of lasers.
+   *
+   * @return number of steps
+   */
+  public int steps() {
+    return LAST_RUNG;
+  }
+
+  /**
+   * The sublevels.
+   *
+   * @return an immutable list
+   */
+  public List<State> states() {
+    return states;
+  }
+
+  /**
+   * The couplings.
+   *
+   * @return an immutable list
+   */
+  public List<Coupling> couplings() {
+    return couplings;
+  }
+
+  /**
+   * Index of the start sublevel.
+   *
+   * @return index into {@link #states()}
+   */
+  public int start() {
+    return start;
+  }
+
+  /**
+   * Indices of the wanted target: the target sublevel with each nuclear projection it can carry.
+   *
+   * @return a fresh array of indices into {@link #states()}
+   */
+  public int[] wanted() {
+    return wanted.clone();
+  }
+
+  /**
+   * Light shift of a sublevel by levels outside the ladder, from one beam at nominal power.
+   *
+   * @param state index of the state
+   * @param step index of the step
+   * @return the shift over h, positive upwards, Hz
+   */
+  public double farShiftHertz(int state, int step) {
+    return farShift[state][step];
+  }
+
+  /**
+   * Writes the Hamiltonian over h without loss.
+   *
+   * @param setting what differs from the nominal drive
+   * @param re receives the real parts, row-major, length size², Hz
+   * @param im receives the imaginary parts, row-major, length size², Hz
+   */
+  public void hamiltonianHertz(LadderSetting setting, double[] re, double[] im) {
+    int n = size();
+    Arrays.fill(re, 0);
+    Arrays.fill(im, 0);
+    for (int i = 0; i < n; i++) {
+      State s = states.get(i);
+      double energy = s.energyHertz() + s.hertzPerTesla() * setting.magneticOffsetTesla();
+      for (int k = 0; k < steps(); k++) {
+        double a = setting.fieldFactor(k);
+        energy += a * a * farShift[i][k];
+        if (k < s.rung()) {
+          energy -= setting.laserOffsetHertz(k);
+        }
+      }
+      if (s.rung() == LAST_RUNG) {
+        energy += setting.targetShiftHertz();
+      }
+      re[i * n + i] = energy;
+    }
+    for (Coupling c : couplings) {
+      double half = 0.5 * strength(c, setting);
+      re[c.upper() * n + c.lower()] += half * c.rabiReHertz();
+      im[c.upper() * n + c.lower()] += half * c.rabiImHertz();
+      re[c.lower() * n + c.upper()] += half * c.rabiReHertz();
+      im[c.lower() * n + c.upper()] -= half * c.rabiImHertz();
+    }
+  }
+
+  /**
+   * Adds the loss terms −iΓ/4π to a Hamiltonian over h: natural decay on the intermediate rung and
+   * the given rate on the Rydberg rung.
+   *
+   * @param rydbergDecayPerSecond total decay rate of the Rydberg level, 1/s
+   * @param im imaginary parts to add to, row-major, length size², Hz
+   */
+  public void addLossHertz(double rydbergDecayPerSecond, double[] im) {
+    int n = size();
+    for (int i = 0; i < n; i++) {
+      State s = states.get(i);
+      double rate = s.rung() == LAST_RUNG ? rydbergDecayPerSecond : s.decayPerSecond();
+      im[i * n + i] -= rate / (4 * Math.PI);
+    }
+  }
+
+  /**
+   * The same ladder with the dipole elements of one step multiplied.
+   *
+   * @param step index of the step
+   * @param factor real factor on the reduced element
+   * @return a new ladder
+   */
+  public Ladder withElementScaled(int step, double factor) {
+    List<Coupling> scaled = new ArrayList<>();
+    for (Coupling c : couplings) {
+      double f = c.step() == step || c.step() == DIRECT ? factor : 1;
+      scaled.add(
+          new Coupling(
+              c.lower(), c.upper(), c.step(), f * c.rabiReHertz(), f * c.rabiImHertz()));
+    }
+    return new Ladder(states, scaled, farShift, start, wanted);
+  }
+
+  /**
+   * The same ladder with the decay rate of the intermediate sublevels multiplied.
+   *
+   * @param factor factor, positive
+   * @return a new ladder
+   */
+  public Ladder withIntermediateDecayScaled(double factor) {
+    List<State> scaled = new ArrayList<>();
+    for (State s : states) {
+      scaled.add(
+          new State(
+              s.label(),
+              s.level(),
+              s.rung(),
+              s.energyHertz(),
+              factor * s.decayPerSecond(),
+              s.hertzPerTesla()));
+    }
+    return new Ladder(scaled, couplings, farShift, start, wanted);
+  }
+
+  /**
+   * The same ladder with the far-off-resonant light shifts multiplied.
+   *
+   * @param factor factor
+   * @return a new ladder
+   */
+  public Ladder withFarShiftsScaled(double factor) {
+    double[][] scaled = new double[farShift.length][];
+    for (int i = 0; i < scaled.length; i++) {
+      scaled[i] = Arrays.stream(farShift[i]).map(x -> factor * x).toArray();
+    }
+    return new Ladder(states, couplings, scaled, start, wanted);
+  }
+
+  private static double strength(Coupling c, LadderSetting setting) {
+    if (c.step() != DIRECT) {
+      return setting.fieldFactor(c.step());
+    }
+    double product = 1;
+    for (int k = 0; k < setting.steps(); k++) {
+      product *= setting.fieldFactor(k);
+    }
+    return product;
+  }
+}
