@@ -1,4 +1,7 @@
 /** Alkali atoms and the lasers that drive them from a ground sublevel to a Rydberg sublevel. */
 module org.toprung.core {
   requires transitive org.toprung.angular;
+
+  exports org.toprung.core.atom;
+  exports org.toprung.core.quantity;
 }
