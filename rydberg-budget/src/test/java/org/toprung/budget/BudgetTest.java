@@ -162,7 +162,7 @@ class BudgetTest {
     Bench[] alone = {
       none.withTemperature(microkelvin(200)),
       none.withTemperature(microkelvin(20))
-          .withTrapFrequencies(kilohertz(4), kilohertz(4), kilohertz(4)),
+          .withTrapFrequencies(kilohertz(7), kilohertz(7), kilohertz(7)),
       none.withMagneticNoise(MagneticField.ofTesla(1e-2)),
       none.withElectricField(ElectricField.ofVoltsPerMetre(6)),
       none.withDrifts(kilohertz(200), hertz(0)),
@@ -174,7 +174,7 @@ class BudgetTest {
     };
     for (Bench bench : alone) {
       Budget budget = budget(RUBIDIUM, bench);
-      Check check = budget.check(4000, 11);
+      Check check = budget.check(20_000, 11);
       double simulated = check.total() - quiet;
       double composed = budget.total() - budget(RUBIDIUM, none).total();
       assertTrue(composed > 3e-4, "too weak to test: " + composed);
