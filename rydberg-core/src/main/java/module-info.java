@@ -4,4 +4,6 @@ module org.toprung.core {
 
   exports org.toprung.core.atom;
   exports org.toprung.core.quantity;
+  exports org.toprung.core.radial;
+  exports org.toprung.core.structure;
 }
