@@ -12,20 +12,36 @@ import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.quantity.Temperature;
 
 /**
- * Decay rates of levels: spontaneous, and driven by blackbody radiation to other bound levels (in and
- * out of which the atom leaves the level). Ionization by blackbody radiation is left out; it adds a few
- * per cent to the blackbody rate at room temperature (Beterov, Ryabtsev, Tretyakov and Entin, Phys.
- * Rev. A 79, 052504 (2009)).
+ * Decay rates of levels: spontaneous, and driven by blackbody radiation to all other levels and into
+ * the continuum.
  *
  * <p>A = ω³ |⟨‖d‖⟩|² / (3π ε0 ħ c³ (2J+1)) summed over lower levels; blackbody: the same expression
- * times the photon number 1/(e^{ħω/kT} − 1), over levels below and above.
+ * times the photon number 1/(e^{ħω/kT} − 1), over levels below and above (Gallagher and Cooke, Phys.
+ * Rev. Lett. 42, 835 (1979)). Beyond the levels summed one by one, the line strength per unit of energy,
+ * which is continuous across the ionization limit, is continued with the power of ω that it follows at
+ * the end of the sum, and integrated; this part is trusted to 20 %.
  */
 public final class Lifetimes {
   private static final Map<Species, Lifetimes> SHARED = new ConcurrentHashMap<>();
   private static final int LEVELS = 2000;
 
-  /** Levels above by more than this in n take less than 1 % of the blackbody rate. */
+  /** Levels above by up to this in n are summed one by one. */
   private static final int REACH = 25;
+
+  /** Levels that must be left above for the continuation. */
+  private static final int LEAST_REACH = 10;
+
+  private static final double CONTINUATION_TRUST = 0.2;
+
+  /** The power of ω is −10/3 between neighbours and steeper in the continuum. */
+  private static final double STEEPEST = -6;
+
+  private static final double FLATTEST = -2;
+
+  private static final int INTEGRATION_STEPS = 100;
+
+  /** Photon energies in units of kT beyond which there are none. */
+  private static final double HARDEST_PHOTON = 40;
 
   /** Rate coefficient, (e a0)² (2π)³ / (3π ε0 ħ c³) in s⁻¹ per Hz³ a0². */
   private static final double COEFFICIENT =
@@ -73,13 +89,14 @@ public final class Lifetimes {
   }
 
   /**
-   * The rate at which blackbody radiation moves the atom to other bound levels.
+   * The rate at which blackbody radiation takes the atom out of a level, to other levels or into the
+   * continuum.
    *
-   * @param level the level
+   * @param level the level, n up to 140
    * @param temperature temperature of the surroundings
-   * @return rate in s⁻¹; 0 at 0 K. For n above 125 the levels beyond n = 150 are missing; their part
-   *     is counted in the uncertainty
-   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
+   * @return rate in s⁻¹; 0 at 0 K
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue, or
+   *     if n is above 140
    */
   public Estimate blackbodyRatePerSecond(Level level, Temperature temperature) {
     return blackbody.get(new Warm(level, temperature));
@@ -120,22 +137,61 @@ public final class Lifetimes {
     if (thermalHertz == 0) {
       return new Estimate(0, 0);
     }
+    int last = Math.min(level.n() + REACH, Level.MAXIMUM_N);
+    if (last < level.n() + LEAST_REACH) {
+      throw new IllegalArgumentException(
+          "the blackbody rate of "
+              + level
+              + " needs the levels above it; n must be at most "
+              + (Level.MAXIMUM_N - LEAST_REACH));
+    }
     double energy = species.energyHertz(level).value();
     double rate = 0;
     double uncertainty = 0;
-    int missing = level.n() + REACH - Level.MAXIMUM_N;
-    for (Level other : Partners.of(species, level, level.n() + REACH)) {
+    for (Level other : Partners.of(species, level, last)) {
       double frequency = Math.abs(energy - species.energyHertz(other).value());
       Estimate part = rate(level, other, frequency);
       double photons = 1 / Math.expm1(frequency / thermalHertz);
       rate += part.value() * photons;
       uncertainty += part.uncertainty() * photons;
-      // what lies as far above as the grid of levels no longer reaches has its mirror below
-      if (level.n() - other.n() > REACH - missing && level.n() - other.n() <= REACH) {
-        uncertainty += part.value() * photons;
+      if (other.n() == last) {
+        double beyond = continuation(level, other, thermalHertz);
+        rate += beyond;
+        uncertainty += CONTINUATION_TRUST * beyond;
       }
     }
     return new Estimate(rate, uncertainty);
+  }
+
+  /** The rate into the levels beyond the last one of its series and into the continuum. */
+  private double continuation(Level level, Level last, double thermalHertz) {
+    double energy = species.energyHertz(level).value();
+    Level middle = Level.of((level.n() + last.n()) / 2, last.l(), last.doubledJ());
+    double frequency = species.energyHertz(last).value() - energy;
+    double density = strengthDensity(level, last);
+    double middleFrequency = species.energyHertz(middle).value() - energy;
+    double power =
+        Math.log(density / strengthDensity(level, middle))
+            / Math.log(frequency / middleFrequency);
+    power = Math.max(STEEPEST, Math.min(FLATTEST, power));
+    // the levels end half a level beyond the last one
+    double n = species.effectiveN(last) + 0.5;
+    double from = -species.rydbergHertz() / (n * n) - energy;
+    double step = Math.log(Math.max(2, HARDEST_PHOTON * thermalHertz / from)) / INTEGRATION_STEPS;
+    double sum = 0;
+    for (int i = 0; i < INTEGRATION_STEPS; i++) {
+      double nu = from * Math.exp((i + 0.5) * step);
+      sum +=
+          density * Math.pow(nu / frequency, power) * nu * nu * nu * nu
+              / Math.expm1(nu / thermalHertz);
+    }
+    return COEFFICIENT / (level.doubledJ() + 1) * sum * step;
+  }
+
+  /** Line strength per Hz of the series of a level, at that level. */
+  private double strengthDensity(Level from, Level to) {
+    double spacing = 2 * species.rydbergHertz() / Math.pow(species.effectiveN(to), 3);
+    return elements.reduced(from, to).strength().value() / spacing;
   }
 
   private Estimate rate(Level from, Level to, double frequencyHertz) {
