@@ -14,7 +14,7 @@ import org.toprung.core.drive.PulsePlanner;
 import org.toprung.core.quantity.Estimate;
 import org.toprung.core.quantity.Temperature;
 import org.toprung.core.structure.Lifetimes;
-import org.toprung.core.structure.StaticPolarizability;
+import org.toprung.core.structure.StarkShift;
 
 /**
  * A pulse on a drive, reduced to what causes need: the effective two-level system, how each beam moves
@@ -45,6 +45,7 @@ public final class PulseModel {
   private final PulsePlan plan;
   private final Elimination elimination;
   private final NoiseFreePulse noiseFree;
+  private final StarkShift stark;
 
   private PulseModel(Drive drive, Pulse pulse, Inputs inputs) {
     this.drive = drive;
@@ -59,6 +60,7 @@ public final class PulseModel {
             .withFarShiftsScaled(inputs.farShift());
     this.plan = PulsePlanner.plan(ladder, pulse.areaRadians());
     this.elimination = Elimination.of(ladder);
+    this.stark = StarkShift.of(drive.species(), drive.target());
     this.noiseFree =
         NoiseFreePulse.of(ladder, setting(plan.frequencyOffset().hertz()), seconds());
   }
@@ -88,7 +90,7 @@ public final class PulseModel {
     double spontaneous = 1 + lifetimes.spontaneousRatePerSecond(target()).relative();
     double blackbody =
         1 + lifetimes.blackbodyRatePerSecond(target(), Temperature.ofKelvin(300)).relative();
-    double polarizability = 1 + polarizability().scalarHertzPerFieldSquared().relative();
+    double polarizability = 1 + stark.relativeUncertainty();
     double far = 1 + drive.farShiftRelativeUncertainty();
     List<PulseModel> models = new ArrayList<>();
     for (Inputs varied :
@@ -215,20 +217,9 @@ public final class PulseModel {
     return inputs.blackbody() * rate.value();
   }
 
-  private StaticPolarizability polarizability() {
-    return StaticPolarizability.of(drive.species(), target());
-  }
-
   /** Stark shift of the target in a field with these components, Hz. */
   double starkShiftHertz(double ex, double ey, double ez) {
-    double square = ex * ex + ey * ey + ez * ez;
-    double scalar = polarizability().scalarHertzPerFieldSquared().value();
-    double tensor =
-        polarizability().tensorHertzPerFieldSquared().value()
-            * polarizability().tensorFactor(drive.target().doubledM());
-    return -0.5
-        * inputs.polarizability()
-        * (scalar * square + tensor * 0.5 * (3 * ez * ez - square));
+    return inputs.polarizability() * stark.hertz(ex, ey, ez);
   }
 
   NoiseFreePulse noiseFree() {
