@@ -4,6 +4,9 @@ module org.toprung.core {
   requires transitive org.toprung.angular;
   requires org.apache.commons.math4.legacy;
 
+  exports org.toprung.core.atom;
+  exports org.toprung.core.quantity;
+  exports org.toprung.core.structure;
   exports org.toprung.core.drive;
   exports org.toprung.core.linear to
       org.toprung.budget;

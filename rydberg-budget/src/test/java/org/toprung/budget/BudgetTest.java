@@ -1,0 +1,318 @@
+package org.toprung.budget;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+import static org.toprung.core.quantity.Frequency.hertz;
+import static org.toprung.core.quantity.Frequency.kilohertz;
+import static org.toprung.core.quantity.Frequency.megahertz;
+import static org.toprung.core.quantity.Temperature.kelvin;
+import static org.toprung.core.quantity.Temperature.microkelvin;
+
+import java.util.Locale;
+import java.util.concurrent.ForkJoinPool;
+import java.util.concurrent.atomic.AtomicInteger;
+import net.jqwik.api.ForAll;
+import net.jqwik.api.Property;
+import net.jqwik.api.constraints.DoubleRange;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.function.Executable;
+import org.toprung.budget.bench.Bench;
+import org.toprung.budget.pulse.Pulse;
+import org.toprung.core.drive.Drive;
+import org.toprung.core.quantity.ElectricField;
+import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.MagneticField;
+import org.toprung.core.quantity.PhysicalConstants;
+import org.toprung.core.quantity.Temperature;
+
+class BudgetTest {
+  private static final Drive RUBIDIUM = TestDrives.rubidium().resolve();
+  private static final Drive CAESIUM = TestDrives.caesium().resolve();
+
+  private static Budget budget(Drive drive, Bench bench) {
+    return Budget.of(drive, Pulse.pi()).on(bench).compose();
+  }
+
+  private static double error(Budget budget, String cause) {
+    return entry(budget, cause).error();
+  }
+
+  private static CauseEntry entry(Budget budget, String cause) {
+    return budget.causes().stream()
+        .filter(c -> c.cause().equals(cause))
+        .findFirst()
+        .orElseThrow(() -> new AssertionError("no cause " + cause + " in " + budget.causes()));
+  }
+
+  /** Closed form: 1 − P = δ²/Ω² for a static detuning of a π pulse. */
+  @Test
+  void countsASmallDetuningQuadratically() {
+    Budget drift = budget(RUBIDIUM, Bench.unknown().withDrifts(kilohertz(20), hertz(0)));
+    double ratio = 20e3 / drift.plan().rabi().hertz();
+    assertEquals(ratio * ratio, error(drift, "Laser drift, step 1"), 1e-3 * ratio * ratio);
+    assertEquals(0, error(drift, "Laser drift, step 2"), 1e-12);
+  }
+
+  /** Closed form: Gaussian Doppler spread k√(kT/m) of a free atom. */
+  @Test
+  void countsTheDopplerShiftOfTheSummedWaveVector() {
+    Budget budget = budget(RUBIDIUM, Bench.unknown().withTemperature(microkelvin(20)));
+    double k = RUBIDIUM.waveVectorPerMetre()[2];
+    double velocity =
+        Math.sqrt(
+            PhysicalConstants.BOLTZMANN * 20e-6 / RUBIDIUM.species().massKilograms());
+    double spread = k * velocity / (2 * Math.PI);
+    double ratio = spread / budget.plan().rabi().hertz();
+    assertEquals(ratio * ratio, error(budget, "Doppler shift"), 2e-3 * ratio * ratio);
+  }
+
+  /** Closed form: π²Δν/(4Ω), Ω in rad/s, for white noise of Lorentzian width Δν. */
+  @Test
+  void countsANarrowLaserLineByTheLorentzianFormula() {
+    Budget budget = budget(RUBIDIUM, Bench.unknown().withLinewidths(hertz(300), hertz(0)));
+    double expected =
+        Math.PI * Math.PI * 300 / (4 * budget.plan().rabi().radiansPerSecond());
+    assertEquals(expected, error(budget, "Laser linewidth, step 1"), 1e-3 * expected);
+  }
+
+  /**
+   * Closed form: relative amplitude error ε gives (πε/2)², a detuning δ gives δ²/Ω², and both add;
+   * intensity noise σ has ε = σ/2 and δ = σ times the differential light shift of that beam.
+   */
+  @Test
+  void countsIntensityNoiseOnRabiFrequencyAndLightShiftTogether() {
+    double sigma = 0.004;
+    Budget budget = budget(RUBIDIUM, Bench.unknown().withIntensityNoise(sigma, 0));
+    double shift =
+        RUBIDIUM.targetLightShift(0).hertz() - RUBIDIUM.startLightShift(0).hertz();
+    double detuning = sigma * shift / budget.plan().rabi().hertz();
+    double amplitude = Math.PI * sigma / 4;
+    double expected = detuning * detuning + amplitude * amplitude;
+    assertEquals(expected, error(budget, "Intensity noise, step 1"), 0.01 * expected);
+  }
+
+  /** Closed form: q = Ω2/Ω1, (πγ/4|Δ|)(q+1/q) (Saffman and Walker 2005). */
+  @Test
+  void countsIntermediateScatteringByTheTextbookFormula() {
+    double q =
+        RUBIDIUM.steps().get(1).rabi().hertz() / RUBIDIUM.steps().get(0).rabi().hertz();
+    double gamma = 1 / 118e-9 / (2 * Math.PI);
+    double detuning =
+        RUBIDIUM.steps().get(0).rabi().hertz()
+            * RUBIDIUM.steps().get(1).rabi().hertz()
+            / (2 * RUBIDIUM.rabi().hertz());
+    double expected = Math.PI * gamma / (4 * detuning) * (q + 1 / q);
+    Budget budget = budget(RUBIDIUM, Bench.unknown());
+    // first order against 1 − exp(−x), and the plan's Rabi frequency beyond second order
+    assertEquals(expected, budget.scatteringPerPulse(), 0.02 * expected);
+  }
+
+  /** Closed form: the cold limit keeps half a quantum, m σv² = hf/2. */
+  @Test
+  void keepsTheZeroPointMotionOfAColdAtom() {
+    Frequency trap = kilohertz(100);
+    Budget cold =
+        budget(
+            RUBIDIUM,
+            Bench.unknown()
+                .withTemperature(Temperature.ofKelvin(1e-9))
+                .withTrapFrequencies(trap, trap, trap));
+    double velocity =
+        Math.sqrt(
+            0.5
+                * PhysicalConstants.PLANCK
+                * trap.hertz()
+                / RUBIDIUM.species().massKilograms());
+    double spread = RUBIDIUM.waveVectorPerMetre()[2] * velocity / (2 * Math.PI);
+    double ratio = spread / cold.plan().rabi().hertz();
+    assertEquals(ratio * ratio, error(cold, "Doppler shift"), 2e-3 * ratio * ratio);
+  }
+
+  @Test
+  void agreesWithItsSimulationForBothSpecies() {
+    for (Drive drive : new Drive[] {RUBIDIUM, CAESIUM}) {
+      Budget budget = budget(drive, TestDrives.bench());
+      Check check = budget.check(2000, 42);
+      assertTrue(budget.total() > 1e-3 && budget.total() < 0.05, "total " + budget.total());
+      assertTrue(
+          check.agrees(),
+          drive + ": " + budget.total() + " against " + check.total() + " ± " + check.standardError());
+      // both bounds of the target at once: the sum itself lies within 10 %
+      assertEquals(check.total(), budget.total(), 0.1 * check.total());
+    }
+  }
+
+  @Test
+  void agreesWithItsSimulationWhenSeveralSublevelsTakePart() {
+    Budget budget = budget(TestDrives.impureRubidium().resolve(), TestDrives.bench());
+    assertTrue(error(budget, "Other Rydberg sublevels") > 1e-7);
+    Check check = budget.check(300, 5);
+    assertTrue(
+        check.agrees(),
+        budget.total() + " against " + check.total() + " ± " + check.standardError());
+  }
+
+  /** Each strong disturbance alone against the simulation, which shares no formula with it. */
+  @Test
+  void agreesWithTheSimulationForEachDisturbanceAlone() {
+    Bench none = Bench.unknown();
+    double quiet = budget(RUBIDIUM, none).check(2, 1).total();
+    Bench[] alone = {
+      none.withTemperature(microkelvin(200)),
+      none.withTemperature(microkelvin(20))
+          .withTrapFrequencies(kilohertz(4), kilohertz(4), kilohertz(4)),
+      none.withMagneticNoise(MagneticField.ofTesla(1e-2)),
+      none.withElectricField(ElectricField.ofVoltsPerMetre(6)),
+      none.withDrifts(kilohertz(200), hertz(0)),
+      none.withDrifts(hertz(0), kilohertz(200)),
+      none.withIntensityNoise(0.05, 0),
+      none.withIntensityNoise(0, 0.05),
+      none.withLinewidths(kilohertz(20), hertz(0)),
+      none.withLinewidths(hertz(0), kilohertz(20))
+    };
+    for (Bench bench : alone) {
+      Budget budget = budget(RUBIDIUM, bench);
+      Check check = budget.check(4000, 11);
+      double simulated = check.total() - quiet;
+      double composed = budget.total() - budget(RUBIDIUM, none).total();
+      assertTrue(composed > 3e-4, "too weak to test: " + composed);
+      assertEquals(
+          simulated,
+          composed,
+          4 * check.standardError() + 0.03 * simulated,
+          budget.causes().get(0).cause());
+    }
+  }
+
+  @Test
+  void addsItsCausesToTheTotal() {
+    Budget budget = budget(CAESIUM, TestDrives.bench());
+    double sum = budget.causes().stream().mapToDouble(CauseEntry::error).sum();
+    assertEquals(sum, budget.total(), 1e-15);
+    for (int i = 1; i < budget.causes().size(); i++) {
+      assertTrue(budget.causes().get(i - 1).error() >= budget.causes().get(i).error());
+    }
+    for (CauseEntry c : budget.causes()) {
+      assertTrue(c.error() >= 0 && c.error() < 1, c.toString());
+      assertTrue(c.uncertainty() >= 0 && Double.isFinite(c.uncertainty()), c.toString());
+      assertFalse(c.lever().isBlank() || c.source().isBlank());
+    }
+    assertTrue(budget.uncertainty() > 0);
+  }
+
+  /** More of a disturbance is never better for a pulse on resonance. */
+  @Property(tries = 20, seed = "17")
+  void growsWithEveryDisturbance(@ForAll @DoubleRange(min = 0, max = 1) double scale) {
+    Bench weak =
+        Bench.unknown()
+            .withMagneticNoise(MagneticField.ofTesla(scale * 1e-3))
+            .withDrifts(hertz(scale * 1e5), hertz(scale * 1e5))
+            .withLinewidths(hertz(scale * 1e4), hertz(scale * 1e4))
+            .withIntensityNoise(scale * 0.1, scale * 0.1)
+            .withElectricField(ElectricField.ofVoltsPerMetre(scale * 3));
+    Bench strong =
+        Bench.unknown()
+            .withMagneticNoise(MagneticField.ofTesla(1e-3))
+            .withDrifts(hertz(1e5), hertz(1e5))
+            .withLinewidths(hertz(1e4), hertz(1e4))
+            .withIntensityNoise(0.1, 0.1)
+            .withElectricField(ElectricField.ofVoltsPerMetre(3));
+    Budget less = budget(RUBIDIUM, weak);
+    for (CauseEntry c : budget(RUBIDIUM, strong).causes()) {
+      assertTrue(error(less, c.cause()) <= c.error() + 1e-12, c.cause());
+    }
+  }
+
+  /** A lever promises what a bench with half the disturbance then shows. */
+  @Test
+  void keepsThePromiseOfItsLevers() {
+    Budget full = budget(RUBIDIUM, Bench.unknown().withDrifts(kilohertz(100), hertz(0)));
+    Budget half = budget(RUBIDIUM, Bench.unknown().withDrifts(kilohertz(50), hertz(0)));
+    String promised =
+        String.format(
+            Locale.ROOT, "%.2g remains", error(half, "Laser drift, step 1"));
+    assertTrue(
+        entry(full, "Laser drift, step 1").lever().contains(promised),
+        entry(full, "Laser drift, step 1").lever() + " / " + promised);
+  }
+
+  @Test
+  void listsWhatItHasNoNumberFor() {
+    Budget budget = budget(RUBIDIUM, Bench.unknown().withTemperature(microkelvin(5)));
+    assertTrue(budget.notAssessed().contains("Position in the beams: no trap frequencies"));
+    assertTrue(
+        budget.notAssessed().stream().anyMatch(s -> s.startsWith("Rydberg decay, blackbody")));
+    assertTrue(budget.notAssessed().stream().noneMatch(s -> s.startsWith("Doppler")));
+    assertTrue(budget.causes().stream().noneMatch(c -> c.cause().equals("Electric field")));
+  }
+
+  @Test
+  void countsAnIntendedOffset() {
+    Frequency offset = megahertz(0.3);
+    Budget budget =
+        Budget.of(RUBIDIUM, Pulse.pi().offsetBy(offset)).on(Bench.unknown()).compose();
+    double ratio = offset.hertz() / budget.plan().rabi().hertz();
+    double error = error(budget, "Offset from resonance");
+    assertEquals(ratio * ratio, error, 0.05 * error);
+    assertEquals(0, error(budget(RUBIDIUM, Bench.unknown()), "Offset from resonance"), 1e-15);
+  }
+
+  /** The seed decides, not the machine: one thread or many, the same shots give the same sum. */
+  @Test
+  void repeatsACheckWithTheSameSeedOnAnyNumberOfThreads() throws Exception {
+    Budget budget = budget(RUBIDIUM, TestDrives.bench());
+    Check common = budget.check(333, 9);
+    ForkJoinPool single = new ForkJoinPool(1);
+    try {
+      Check alone = single.submit(() -> budget.check(333, 9)).get();
+      assertEquals(common, alone);
+    } finally {
+      single.shutdown();
+    }
+    assertFalse(common.equals(budget.check(333, 10)));
+  }
+
+  @Test
+  void reportsProgressToTheLastShot() {
+    AtomicInteger most = new AtomicInteger();
+    budget(RUBIDIUM, TestDrives.bench())
+        .check(120, 3, done -> most.accumulateAndGet(done, Math::max));
+    assertEquals(120, most.get());
+  }
+
+  /** Near resonance the numbers are poor, and said to be, but they are numbers. */
+  @Test
+  void staysFiniteWhenTheIntermediateLevelIsResonant() {
+    Drive drive = TestDrives.rubidium().detuned(megahertz(60)).resolve();
+    assertFalse(drive.warnings().isEmpty());
+    Budget budget = budget(drive, TestDrives.bench());
+    assertTrue(budget.total() > 0 && budget.total() <= 1);
+    Check check = budget.check(100, 1);
+    assertTrue(check.total() >= 0 && check.total() <= 1);
+  }
+
+  @Test
+  void refusesImpossibleValues() {
+    Bench bench = Bench.unknown();
+    refused(() -> bench.withTemperature(kelvin(0)));
+    refused(() -> bench.withEnvironment(kelvin(0)));
+    refused(() -> bench.withTrapFrequencies(hertz(1), hertz(0), hertz(1)));
+    refused(() -> bench.withMagneticNoise(MagneticField.ofTesla(-1)));
+    refused(() -> bench.withElectricField(ElectricField.ofVoltsPerMetre(-1)));
+    refused(() -> bench.withLinewidths(hertz(1), hertz(-1)));
+    refused(() -> bench.withDrifts(hertz(-1)));
+    refused(() -> bench.withIntensityNoise(0.6));
+    refused(() -> bench.withIntensityNoise(Double.NaN));
+    refused(() -> budget(RUBIDIUM, bench.withDrifts(hertz(1))));
+    refused(() -> budget(RUBIDIUM, bench.withIntensityNoise(0.1, 0.1, 0.1)));
+    refused(() -> budget(RUBIDIUM, bench).check(1, 1));
+    refused(() -> Budget.of(RUBIDIUM, Pulse.pi()).on(null));
+  }
+
+  private static void refused(Executable action) {
+    String message = assertThrows(IllegalArgumentException.class, action).getMessage();
+    assertTrue(message.length() > 20, message);
+  }
+}

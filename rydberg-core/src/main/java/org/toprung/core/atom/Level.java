@@ -1,0 +1,155 @@
+package org.toprung.core.atom;
+
+import java.util.Comparator;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+
+/**
+ * A fine-structure level n l j of the valence electron, written like "6P3/2". Immutable.
+ *
+ * <p>Orbital letters are S P D F G H I K L M N O Q R T U V W X Y Z for l = 0 to 20; from there on
+ * the number stands in brackets, as in "60[25]51/2".
+ */
+public final class Level implements Comparable<Level> {
+  /** Largest principal quantum number allowed. */
+  public static final int MAXIMUM_N = 150;
+
+  private static final String LETTERS = "SPDFGHIKLMNOQRTUVWXYZ";
+  private static final Pattern TEXT =
+      Pattern.compile("(\\d{1,9})(?:([A-Z])|\\[(\\d{1,9})\\])(\\d{1,9})/2");
+  private static final Comparator<Level> ORDER =
+      Comparator.comparingInt(Level::n)
+          .thenComparingInt(Level::l)
+          .thenComparingInt(Level::doubledJ);
+
+  private final int n;
+  private final int l;
+  private final int doubledJ;
+
+  private Level(int n, int l, int doubledJ) {
+    this.n = n;
+    this.l = l;
+    this.doubledJ = doubledJ;
+  }
+
+  /**
+   * The level with the given quantum numbers.
+   *
+   * @param n principal quantum number, 1 to {@value #MAXIMUM_N}
+   * @param l orbital quantum number, 0 to n − 1
+   * @param doubledJ twice the total electronic angular momentum: 2l + 1, or 2l − 1 where l &gt; 0
+   * @return the level
+   * @throws IllegalArgumentException if a quantum number is out of its range
+   */
+  public static Level of(int n, int l, int doubledJ) {
+    return checked(n, l, doubledJ, "n=" + n + " l=" + l + " j=" + doubledJ + "/2");
+  }
+
+  /**
+   * Reads a level.
+   *
+   * @param text n, the capital letter of l, j, for example "6P3/2"
+   * @return the level
+   * @throws IllegalArgumentException if the text has another form or names no possible level
+   */
+  public static Level parse(String text) {
+    Matcher matcher = TEXT.matcher(text);
+    if (!matcher.matches()) {
+      throw Refusal.of(
+          "level \"%s\" is not understood; write n, the letter of l and j, for example 6P3/2",
+          text);
+    }
+    int l =
+        matcher.group(2) != null
+            ? LETTERS.indexOf(matcher.group(2))
+            : Integer.parseInt(matcher.group(3));
+    if (l < 0) {
+      throw Refusal.of(
+          "level \"%s\": \"%s\" stands for no l; the letters are %s",
+          text, matcher.group(2), LETTERS);
+    }
+    return checked(Integer.parseInt(matcher.group(1)), l, Integer.parseInt(matcher.group(4)), text);
+  }
+
+  private static Level checked(int n, int l, int doubledJ, String given) {
+    if (!(n >= 1 && n <= MAXIMUM_N)) {
+      throw Refusal.of("level \"%s\": n must be 1 to %d, given %d", given, MAXIMUM_N, n);
+    }
+    if (!(l >= 0 && l < n)) {
+      throw Refusal.of("level \"%s\": l must be 0 to n-1=%d, given %d", given, n - 1, l);
+    }
+    if (doubledJ != 2 * l + 1 && (l == 0 || doubledJ != 2 * l - 1)) {
+      throw Refusal.of(
+          "level \"%s\": j must be %s, given %s",
+          given,
+          l == 0 ? "1/2" : (2 * l - 1) + "/2 or " + (2 * l + 1) + "/2",
+          Halves.text(doubledJ));
+    }
+    return new Level(n, l, doubledJ);
+  }
+
+  /**
+   * The principal quantum number.
+   *
+   * @return n, 1 to {@value #MAXIMUM_N}
+   */
+  public int n() {
+    return n;
+  }
+
+  /**
+   * The orbital quantum number.
+   *
+   * @return l, 0 to n − 1
+   */
+  public int l() {
+    return l;
+  }
+
+  /**
+   * Twice the total electronic angular momentum.
+   *
+   * @return 2j, an odd number
+   */
+  public int doubledJ() {
+    return doubledJ;
+  }
+
+  /**
+   * The name of the series the level belongs to.
+   *
+   * @return the level without n, for example "P3/2"
+   */
+  public String series() {
+    String letter = l < LETTERS.length() ? LETTERS.substring(l, l + 1) : "[" + l + "]";
+    return letter + doubledJ + "/2";
+  }
+
+  /** Orders by n, then l, then j. */
+  @Override
+  public int compareTo(Level other) {
+    return ORDER.compare(this, other);
+  }
+
+  /** {@inheritDoc} */
+  @Override
+  public boolean equals(Object other) {
+    return other instanceof Level that && that.n == n && that.l == l && that.doubledJ == doubledJ;
+  }
+
+  /** {@inheritDoc} */
+  @Override
+  public int hashCode() {
+    return (n * (MAXIMUM_N + 1) + l) * 2 + (doubledJ > 2 * l ? 1 : 0);
+  }
+
+  /**
+   * The level in the form {@link #parse} reads.
+   *
+   * @return for example "6P3/2"
+   */
+  @Override
+  public String toString() {
+    return n + series();
+  }
+}
