@@ -1,3 +1,4 @@
 /** Angular-momentum algebra: no atoms, no units. */
 module org.toprung.angular {
+  exports org.toprung.angular;
 }
