@@ -1,0 +1,2 @@
+/** Bounded concurrent caches. Not exported. */
+package org.toprung.core.cache;
