@@ -8,7 +8,9 @@ import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
+import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import org.knowm.xchart.VectorGraphicsEncoder;
 import org.knowm.xchart.XYChart;
 import org.knowm.xchart.XYSeries;
@@ -31,6 +33,7 @@ public final class ChartReport {
   private static final float MARK = 3; // px
   private static final double DECADES = 5; // that bars may span
   private static final double NOTHING = 1e-9; // error that is not worth a bar
+  private static final double JUST_BELOW = 0.99; // so that the decades at both ends get a label
   private static final Color BAR_COLOR = new Color(0x3B7A8C);
   private static final Color TOTAL_COLOR = new Color(0xB5533C);
   private static final Color MARK_COLOR = new Color(0x1F1F1F);
@@ -40,25 +43,30 @@ public final class ChartReport {
   private final double left; // error at the left end of the axis
 
   private ChartReport(ReportContent content) {
-    List<CauseEntry> causes =
-        content.budget().causes().stream().filter(c -> c.error() >= NOTHING).toList();
-    int rows = causes.size() + 1;
     double total = Math.max(NOTHING, content.budget().total());
-    double right =
-        decadeAbove(Math.max(total + content.budget().uncertainty(), content.check().total()));
-    double smallest = causes.isEmpty() ? total : causes.get(causes.size() - 1).error();
+    double right = decadeAbove(total + content.budget().uncertainty());
+    List<CauseEntry> all = content.budget().causes();
+    double smallest =
+        all.stream().mapToDouble(CauseEntry::error).filter(e -> e > NOTHING).min().orElse(total);
     this.left = Math.max(decadeBelow(smallest), right * Math.pow(10, -DECADES));
+    List<CauseEntry> shown = all.stream().filter(c -> c.error() > left).toList();
+    int rows = shown.size() + 1;
     this.chart = new XYChart(WIDTH, FRAME + ROW * rows, ChartTheme.Matlab);
     chart.setTitle(shortened(content.title()));
+    String axis = "error of one pulse (probability; dark line: ± 1 standard uncertainty)";
+    int hidden = all.size() - shown.size();
     chart.setXAxisTitle(
-        "error of one pulse by cause (probability, log scale; line: ± 1 standard"
-            + " uncertainty)");
-    style(rows, right, causes);
-    bar("total", rows, content.budget().total(), content.budget().uncertainty(), TOTAL_COLOR);
-    for (int i = 0; i < causes.size(); i++) {
-      CauseEntry cause = causes.get(i);
-      bar(cause.cause(), causes.size() - i, cause.error(), cause.uncertainty(), BAR_COLOR);
+        hidden == 0
+            ? axis
+            : axis + String.format(Locale.ROOT, "; %d causes below %.0e left out", hidden, left));
+    List<String> names = new ArrayList<>(); // from the bottom up
+    for (int i = shown.size() - 1; i >= 0; i--) {
+      CauseEntry cause = shown.get(i);
+      names.add(
+          bar(cause.cause(), names.size() + 1, cause.error(), cause.uncertainty(), BAR_COLOR));
     }
+    names.add(bar("TOTAL", rows, total, content.budget().uncertainty(), TOTAL_COLOR));
+    style(names, right);
   }
 
   /**
@@ -97,7 +105,7 @@ public final class ChartReport {
     }
   }
 
-  private void style(int rows, double right, List<CauseEntry> causes) {
+  private void style(List<String> names, double right) {
     XYStyler style = chart.getStyler();
     style.setLegendVisible(false);
     style.setChartBackgroundColor(Color.WHITE);
@@ -106,13 +114,13 @@ public final class ChartReport {
     style.setAxisTickLabelsFont(new Font(Font.SANS_SERIF, Font.PLAIN, 13));
     style.setXAxisLogarithmic(true);
     style.setXAxisLogarithmicDecadeOnly(true);
-    style.setXAxisMin(left);
-    style.setXAxisMax(right);
+    style.setXAxisMin(left * JUST_BELOW);
+    style.setXAxisMax(right / JUST_BELOW);
     style.setXAxisDecimalPattern("0E0");
     style.setYAxisMin(0.0);
-    style.setYAxisMax(rows + 1.0);
+    style.setYAxisMax(names.size() + 1.0);
     style.setYAxisTickMarkSpacingHint(ROW * 3 / 4);
-    style.setyAxisTickLabelsFormattingFunction(y -> rowName(y, rows, causes));
+    style.setyAxisTickLabelsFormattingFunction(y -> rowName(y, names));
     style.setPlotContentSize(1);
     style.setPlotGridHorizontalLinesVisible(false);
     style.setPlotGridLinesColor(GRID_COLOR);
@@ -121,27 +129,20 @@ public final class ChartReport {
   }
 
   /** Names the rows, which sit at whole numbers; the labels of other ticks are blank but differ. */
-  private static String rowName(double y, int rows, List<CauseEntry> causes) {
+  private static String rowName(double y, List<String> names) {
     long row = Math.round(y);
-    if (Math.abs(y - row) > 1e-6 || row < 1 || row > rows) {
+    if (Math.abs(y - row) > 1e-6 || row < 1 || row > names.size()) {
       return " ".repeat(1 + (int) Math.round(10 * Math.abs(y)));
     }
-    return row == rows ? "TOTAL" : causes.get((int) (causes.size() - row)).cause();
+    return names.get((int) row - 1);
   }
 
-  private void bar(String name, int row, double error, double uncertainty, Color color) {
-    if (error > left) {
-      line(name, row, left, error, BAR, color);
-    }
-    if (error + uncertainty > left) {
-      line(
-          "± " + name,
-          row,
-          Math.max(left, error - uncertainty),
-          error + uncertainty,
-          MARK,
-          MARK_COLOR);
-    }
+  /** Draws the bar of a row and its uncertainty; gives the row's label. */
+  private String bar(String name, int row, double error, double uncertainty, Color color) {
+    line(name, row, left * JUST_BELOW, error, BAR, color);
+    double low = Math.max(left, error - uncertainty);
+    line("± " + name, row, low, error + uncertainty, MARK, MARK_COLOR);
+    return String.format(Locale.ROOT, "%s  %.1e", name, error);
   }
 
   private void line(String name, int row, double from, double to, float width, Color color) {

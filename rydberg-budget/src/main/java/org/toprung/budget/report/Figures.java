@@ -11,6 +11,7 @@ import org.toprung.core.quantity.Time;
 /** Numbers as people read them: a few significant digits and a unit. */
 final class Figures {
   private static final int DIGITS = 4;
+  private static final double SMALLEST = 1e-10; // probability told from zero
 
   private Figures() {}
 
@@ -40,8 +41,11 @@ final class Figures {
     return value.hertz() > 0 ? "+" + of(value) : of(value);
   }
 
-  /** A probability in a column: three digits and a power of ten. */
+  /** A probability in a column: three digits and a power of ten; nothing smaller than matters. */
   static String probability(double value) {
+    if (Math.abs(value) < SMALLEST) {
+      return value == 0 ? "0" : "< 1e-10";
+    }
     return String.format(Locale.ROOT, "%.2e", value);
   }
 

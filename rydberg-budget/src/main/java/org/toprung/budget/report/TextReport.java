@@ -7,6 +7,7 @@ import org.toprung.budget.CauseEntry;
 import org.toprung.budget.Check;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.PulsePlan;
+import org.toprung.core.quantity.Frequency;
 
 /**
  * The report for people: one page of text that fits {@value Page#WIDTH} columns.
@@ -17,6 +18,7 @@ import org.toprung.core.drive.PulsePlan;
 public final class TextReport {
   private static final double WORTH_A_LEVER = 0.01; // share of the total
   private static final int MOST_TARGETS = 5;
+  private static final double TESLA_PER_GAUSS = 1e-4;
   private static final int CAUSE_COLUMNS = 28;
   private static final int ERROR_COLUMNS = 8;
   private static final int SHARE_COLUMNS = 8;
@@ -122,12 +124,21 @@ public final class TextReport {
         "intermediate scattering",
         Figures.probability(budget.scatteringPerPulse()) + " photons per pulse");
     double[] k = drive.waveVectorPerMetre();
+    double length = Math.sqrt(k[0] * k[0] + k[1] * k[1] + k[2] * k[2]);
     page.value(
-        "wave vector",
-        String.format(Locale.ROOT, "(%.4g, %.4g, %.4g) 1/m", k[0] + 0.0, k[1] + 0.0, k[2] + 0.0));
+        "summed wave vector",
+        String.format(
+            Locale.ROOT,
+            "(%s, %s, %s) 1/um: %s of Doppler shift per m/s along it",
+            Figures.number(k[0] * 1e-6, 4),
+            Figures.number(k[1] * 1e-6, 4),
+            Figures.number(k[2] * 1e-6, 4),
+            Figures.of(Frequency.ofHertz(length / (2 * Math.PI)))));
     page.value(
         "magnetic sensitivity",
-        String.format(Locale.ROOT, "%.4g kHz/G", drive.magneticSensitivityHertzPerTesla() * 1e-7));
+        Figures.signed(
+                Frequency.ofHertz(drive.magneticSensitivityHertzPerTesla() * TESLA_PER_GAUSS))
+            + " per gauss (target minus start)");
     otherTargets();
   }
 
