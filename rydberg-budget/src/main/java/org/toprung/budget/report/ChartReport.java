@@ -33,7 +33,6 @@ public final class ChartReport {
   private static final float MARK = 3; // px
   private static final double DECADES = 5; // that bars may span
   private static final double NOTHING = 1e-9; // error that is not worth a bar
-  private static final double JUST_BELOW = 0.99; // so that the decades at both ends get a label
   private static final Color BAR_COLOR = new Color(0x3B7A8C);
   private static final Color TOTAL_COLOR = new Color(0xB5533C);
   private static final Color MARK_COLOR = new Color(0x1F1F1F);
@@ -48,7 +47,8 @@ public final class ChartReport {
     List<CauseEntry> all = content.budget().causes();
     double smallest =
         all.stream().mapToDouble(CauseEntry::error).filter(e -> e > NOTHING).min().orElse(total);
-    this.left = Math.max(decadeBelow(smallest), right * Math.pow(10, -DECADES));
+    this.left =
+        Math.min(right / 10, Math.max(decadeBelow(smallest), right * Math.pow(10, -DECADES)));
     List<CauseEntry> shown = all.stream().filter(c -> c.error() > left).toList();
     int rows = shown.size() + 1;
     this.chart = new XYChart(WIDTH, FRAME + ROW * rows, ChartTheme.Matlab);
@@ -114,8 +114,8 @@ public final class ChartReport {
     style.setAxisTickLabelsFont(new Font(Font.SANS_SERIF, Font.PLAIN, 13));
     style.setXAxisLogarithmic(true);
     style.setXAxisLogarithmicDecadeOnly(true);
-    style.setXAxisMin(left * JUST_BELOW);
-    style.setXAxisMax(right / JUST_BELOW);
+    style.setXAxisMin(left);
+    style.setXAxisMax(right);
     style.setXAxisDecimalPattern("0E0");
     style.setYAxisMin(0.0);
     style.setYAxisMax(names.size() + 1.0);
@@ -139,7 +139,7 @@ public final class ChartReport {
 
   /** Draws the bar of a row and its uncertainty; gives the row's label. */
   private String bar(String name, int row, double error, double uncertainty, Color color) {
-    line(name, row, left * JUST_BELOW, error, BAR, color);
+    line(name, row, left, error, BAR, color);
     double low = Math.max(left, error - uncertainty);
     line("± " + name, row, low, error + uncertainty, MARK, MARK_COLOR);
     return String.format(Locale.ROOT, "%s  %.1e", name, error);

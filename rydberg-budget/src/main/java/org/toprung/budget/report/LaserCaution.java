@@ -48,7 +48,8 @@ final class LaserCaution {
     return cautions;
   }
 
-  private static String range(double metres, double watts) {
+  /** The range a beam counts in, or nothing where it needs no caution. */
+  static String range(double metres, double watts) {
     if (metres < MIDDLE_ULTRAVIOLET_METRES) {
       return "ultraviolet, treat as class 4 (its limits are lower here), eyes and skin at risk";
     }

@@ -59,7 +59,7 @@ public final class Scenario {
     this.setup = lastStep(steps.get(1), species, first);
     this.pulse = pulse(root.table("pulse", List.of("kind", "offset")));
     this.bench = Benches.read(root.optionalTable("bench", Benches.KEYS), STEPS);
-    this.drive = root.required("step", "").guarded(setup::resolve);
+    this.drive = root.guarded("step", setup::resolve);
   }
 
   /**

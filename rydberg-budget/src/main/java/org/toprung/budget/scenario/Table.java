@@ -96,4 +96,13 @@ final class Table {
   <T> T guarded(Supplier<T> action) {
     return new Value(file, path, node).guarded(action);
   }
+
+  /** Runs something that refuses what some tables say together, and names file and tables. */
+  <T> T guarded(String names, Supplier<T> action) {
+    try {
+      return action.get();
+    } catch (IllegalArgumentException e) {
+      throw ScenarioException.ofKey(file, keyOf(names), e.getMessage(), e);
+    }
+  }
 }

@@ -78,7 +78,13 @@ final class Value {
     } catch (ScenarioException e) {
       throw e;
     } catch (IllegalArgumentException e) {
-      throw ScenarioException.ofKey(file, key, e.getMessage(), e);
+      throw ScenarioException.ofKey(file, key, withGiven(e.getMessage()), e);
     }
+  }
+
+  /** The parser's complaint, with what stood in the file where it does not repeat that. */
+  private String withGiven(String complaint) {
+    boolean repeated = node.isObject() || node.isValueNode() && complaint.contains(node.asText());
+    return repeated ? complaint : "given " + Shown.value(node) + "; " + complaint;
   }
 }
