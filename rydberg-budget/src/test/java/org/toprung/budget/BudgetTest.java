@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.toprung.core.quantity.Frequency.hertz;
 import static org.toprung.core.quantity.Frequency.kilohertz;
 import static org.toprung.core.quantity.Frequency.megahertz;
+import static org.toprung.core.quantity.MagneticField.milligauss;
 import static org.toprung.core.quantity.Temperature.kelvin;
 import static org.toprung.core.quantity.Temperature.microkelvin;
 
@@ -20,6 +21,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.function.Executable;
 import org.toprung.budget.bench.Bench;
 import org.toprung.budget.pulse.Pulse;
+import org.toprung.core.atom.Sublevel;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.quantity.ElectricField;
 import org.toprung.core.quantity.Frequency;
@@ -162,8 +164,7 @@ class BudgetTest {
     Bench[] alone = {
       none.withTemperature(microkelvin(200)),
       none.withTemperature(microkelvin(20))
-          .withTrapFrequencies(kilohertz(4), kilohertz(4), kilohertz(4)),
-      none.withMagneticNoise(MagneticField.ofTesla(1e-2)),
+          .withTrapFrequencies(kilohertz(7), kilohertz(7), kilohertz(7)),
       none.withElectricField(ElectricField.ofVoltsPerMetre(6)),
       none.withDrifts(kilohertz(200), hertz(0)),
       none.withDrifts(hertz(0), kilohertz(200)),
@@ -174,7 +175,7 @@ class BudgetTest {
     };
     for (Bench bench : alone) {
       Budget budget = budget(RUBIDIUM, bench);
-      Check check = budget.check(4000, 11);
+      Check check = budget.check(20_000, 11);
       double simulated = check.total() - quiet;
       double composed = budget.total() - budget(RUBIDIUM, none).total();
       assertTrue(composed > 3e-4, "too weak to test: " + composed);
@@ -184,6 +185,23 @@ class BudgetTest {
           4 * check.standardError() + 0.03 * simulated,
           budget.causes().get(0).cause());
     }
+  }
+
+  /** The electron flips against the field: 2.1 MHz/G from F = 1, mF = 1 to mJ = 1/2. */
+  @Test
+  void agreesWithTheSimulationForMagneticNoise() {
+    Drive drive =
+        TestDrives.rubidium().from(Sublevel.hyperfine("5S1/2", 1, 1)).resolve();
+    assertEquals(2.1e10, drive.magneticSensitivityHertzPerTesla(), 0.02e10);
+    Bench bench = Bench.unknown().withMagneticNoise(milligauss(100));
+    Budget budget = budget(drive, bench);
+    double spread = 0.1 * 2.1e6 / budget.plan().rabi().hertz();
+    double composed = error(budget, "Magnetic field noise");
+    assertEquals(spread * spread, composed, 0.05 * composed);
+    double quiet = budget(drive, Bench.unknown()).check(2, 1).total();
+    Check check = budget.check(3000, 12);
+    assertEquals(
+        check.total() - quiet, composed, 4 * check.standardError() + 0.03 * composed);
   }
 
   @Test

@@ -87,7 +87,7 @@ public final class Drive {
     int reference = strongest();
     this.steps = List.of(step(builder, 0, reference), step(builder, 1, reference));
     this.otherTargets = others();
-    this.warnings = warnings();
+    this.warnings = nearResonances();
     this.stepWaveVectors = new double[2][];
     this.waveVector = new double[3];
     for (int k = 0; k < 2; k++) {
@@ -174,7 +174,7 @@ public final class Drive {
     return false;
   }
 
-  private List<String> warnings() {
+  private List<String> nearResonances() {
     List<String> found = new ArrayList<>();
     for (int i = 0; i < ladder.size(); i++) {
       Ladder.State s = ladder.states().get(i);

@@ -33,10 +33,8 @@ import org.toprung.core.structure.Lifetimes;
 final class LadderBuilder {
   private static final double NEAR_FACTOR = 30;
   private static final double NEGLIGIBLE = 1e-12; // of the largest coupling of a step
-  private static final double ATOMIC_DIPOLE = // e a0/h, Hz/(V/m)
-      PhysicalConstants.ELEMENTARY_CHARGE
-          * PhysicalConstants.BOHR_RADIUS
-          / PhysicalConstants.PLANCK;
+  private static final double DIPOLE_UNIT = // e a0/h, Hz/(V/m)
+      PhysicalConstants.ATOMIC_DIPOLE / PhysicalConstants.PLANCK;
 
   private final DriveSetup setup;
   private final Species species;
@@ -133,8 +131,7 @@ final class LadderBuilder {
     return 0.5
         * doubledMj
         * species.gJ(targetLevel)
-        * PhysicalConstants.BOHR_MAGNETON
-        / PhysicalConstants.PLANCK
+        * PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA
         * setup.field().tesla();
   }
 
@@ -257,7 +254,7 @@ final class LadderBuilder {
     }
     double scale =
         field[step]
-            * ATOMIC_DIPOLE
+            * DIPOLE_UNIT
             * dipoles.reduced(upper.level(), lower.level()).valueA0();
     return new double[] {scale * angular[0], scale * angular[1]};
   }

@@ -62,8 +62,7 @@ record ProductState(
         double slope =
             0.5
                 * (species.gJ(level) * tMj + species.gI() * tMi)
-                * PhysicalConstants.BOHR_MAGNETON
-                / PhysicalConstants.PLANCK;
+                * PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA;
         String label =
             String.format(
                 Locale.ROOT,

@@ -161,7 +161,7 @@ public final class HyperfineManifold {
     int tI = species.doubledNuclearSpin();
     int tJ = level.doubledJ();
     double bohrTimesField =
-        PhysicalConstants.BOHR_MAGNETON / PhysicalConstants.PLANCK * field.tesla();
+        PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA * field.tesla();
     double gJ = species.gJ(level);
     double gI = species.gI();
     List<Eigenstate> states = new ArrayList<>();
@@ -190,8 +190,7 @@ public final class HyperfineManifold {
                   * amplitude[k]
                   * (gJ * tMj[k] + gI * (tM - tMj[k]))
                   * 0.5
-                  * PhysicalConstants.BOHR_MAGNETON
-                  / PhysicalConstants.PLANCK;
+                  * PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA;
         }
         states.add(
             new Eigenstate(level, labels.get(i), tM, energies[column], slope, tMj, amplitude));

@@ -27,7 +27,7 @@ class HyperfineManifoldTest {
       Level level = species.groundLevel();
       double i = 0.5 * species.doubledNuclearSpin();
       double splitting = species.hyperfine(level).aHertz() * (i + 0.5);
-      double magneton = PhysicalConstants.BOHR_MAGNETON / PhysicalConstants.PLANCK;
+      double magneton = PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA;
       double x = (species.gJ(level) - species.gI()) * magneton * tesla / splitting;
       HyperfineManifold manifold =
           HyperfineManifold.of(species, level, MagneticField.ofTesla(tesla));
