@@ -6,6 +6,7 @@ module org.toprung.core {
 
   exports org.toprung.core.atom;
   exports org.toprung.core.quantity;
+  exports org.toprung.core.radial;
   exports org.toprung.core.structure;
   exports org.toprung.core.drive;
   exports org.toprung.core.linear to

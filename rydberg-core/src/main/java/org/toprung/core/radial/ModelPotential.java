@@ -19,8 +19,11 @@ import org.toprung.core.quantity.PhysicalConstants;
 final class ModelPotential implements ValencePotential {
   private static final String LETTERS = "SPDF";
 
-  /** The slowest screening exponent of the table is above 1, so e^{-a r} is below 1e-27 here. */
-  private static final double CORE_RADIUS = 64;
+  /** The slowest screening exponent in use is above 1, so that r² e^{-a r} is below 1e-14 here. */
+  private static final double CORE_RADIUS = 42;
+
+  /** e^−40 is below the resolution of a double next to 1. */
+  private static final double SURELY_OUTSIDE = 40;
 
   private final double charge;
   private final double a1;
@@ -73,9 +76,10 @@ final class ModelPotential implements ValencePotential {
     double shell = a3 + a4 * r;
     double z = 1 + inner - r * shell * outer;
     double zSlope = -a1 * inner - (shell + a4 * r) * outer + a2 * r * shell * outer;
-    double cut = Math.pow(r / rc, 6);
-    double inside = Math.exp(-cut);
-    double outside = -Math.expm1(-cut);
+    double ratio = r / rc * (r / rc);
+    double cut = ratio * ratio * ratio;
+    double outside = cut > SURELY_OUTSIDE ? 1 : -Math.expm1(-cut);
+    double inside = 1 - outside;
     double r2 = r * r;
     double r4 = r2 * r2;
     double v = -z / r - alpha / (2 * r4) * outside;

@@ -26,7 +26,8 @@ final class NumerovSolver {
 
   private static final double SEED = 1e-30;
 
-  private final ValencePotential potential;
+  private final double spinOrbit;
+  private final double polarization;
   private final double step;
   private final double centrifugal;
   private final int l;
@@ -35,7 +36,8 @@ final class NumerovSolver {
   private final double[] core;
 
   NumerovSolver(ValencePotential potential, int l, double step) {
-    this.potential = potential;
+    this.spinOrbit = 8 * potential.spinOrbit();
+    this.polarization = 4 * potential.polarizability();
     this.step = step;
     this.l = l;
     this.centrifugal = (2 * l + 0.5) * (2 * l + 1.5);
@@ -59,39 +61,40 @@ final class NumerovSolver {
         2 * effectiveN * effectiveN + TAIL * Math.pow(effectiveN, 4.0 / 3.0) + LEAST_TAIL;
     int last = (int) Math.ceil(Math.sqrt(outer) / step);
     double[] y = new double[last + 1];
-    double sign = (n - l - 1) % 2 == 0 ? 1 : -1;
-    y[last] = 0;
-    y[last - 1] = sign * SEED;
     double twelfth = step * step / 12;
-    double fNext = 1 - twelfth * strength(last, energy);
-    double f = 1 - twelfth * strength(last - 1, energy);
+    // Numerov in w = (1 - h²g/12) y: w(i-1) = (12/f(i) - 10) w(i) - w(i+1), which keeps the division
+    // out of the chain of dependent operations
+    double wOuter = 0;
+    double w = (n - l - 1) % 2 == 0 ? SEED : -SEED;
+    double inverse = 1 / (1 - twelfth * strength(last - 1, energy));
+    y[last - 1] = w * inverse;
     double sum = 0;
     int nodes = 0;
     int first = 1;
     boolean allowedSeen = false;
     for (int i = last - 1; i > 1; i--) {
-      double x = i * step;
-      sum += x * x * y[i] * y[i];
-      double strengthInner = strength(i - 1, energy);
-      double fInner = 1 - twelfth * strengthInner;
-      y[i - 1] = ((12 - 10 * f) * y[i] - fNext * y[i + 1]) / fInner;
-      boolean changedSign = y[i - 1] < 0 != y[i] < 0;
-      if (strengthInner < 0) {
+      double here = y[i];
+      sum += (double) i * i * here * here;
+      double wInner = (12 * inverse - 10) * w - wOuter;
+      double g = strength(i - 1, energy);
+      inverse = 1 / (1 - twelfth * g);
+      double inner = wInner * inverse;
+      boolean changedSign = inner < 0 != here < 0;
+      if (g < 0) {
         allowedSeen = true;
         nodes += changedSign ? 1 : 0;
-      } else if (allowedSeen && (changedSign || Math.abs(y[i - 1]) >= Math.abs(y[i]))) {
-        y[i - 1] = 0;
+      } else if (allowedSeen && (changedSign || Math.abs(inner) >= Math.abs(here))) {
         first = i;
         break;
       }
-      fNext = f;
-      f = fInner;
+      y[i - 1] = inner;
+      wOuter = w;
+      w = wInner;
     }
-    double norm = 1 / Math.sqrt(2 * step * sum);
+    double norm = 1 / Math.sqrt(2 * step * step * step * sum);
     if (!(norm > 0 && norm < Double.POSITIVE_INFINITY)) {
       throw new ArithmeticException(
-          String.format(
-              Locale.ROOT, "no wave found for n=%d l=%d at n*=%s", n, l, effectiveN));
+          String.format(Locale.ROOT, "no wave found for n=%d l=%d at n*=%s", n, l, effectiveN));
     }
     for (int i = first; i < last; i++) {
       y[i] *= norm;
@@ -99,6 +102,7 @@ final class NumerovSolver {
     return new RadialWave(step, first, y, nodes);
   }
 
+  /** The bracket of y″ = […] y at a grid index. */
   private double strength(int i, double energy) {
     double x = i * step;
     double x2 = x * x;
@@ -108,8 +112,6 @@ final class NumerovSolver {
     double inverse = 1 / x2;
     return -8
         - 8 * x2 * energy
-        + inverse
-            * (centrifugal
-                + inverse * (8 * potential.spinOrbit() - 4 * potential.polarizability() * inverse));
+        + inverse * (centrifugal + inverse * (spinOrbit - polarization * inverse));
   }
 }

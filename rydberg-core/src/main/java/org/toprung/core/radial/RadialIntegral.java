@@ -4,10 +4,10 @@ package org.toprung.core.radial;
  * A radial dipole integral of the valence electron.
  *
  * @param bareA0 ∫ P_a r P_b dr in a0
- * @param coreCorrectionA0 what the polarization of the core adds to it, −∫ P_a (α_c/r²) w(r) P_b dr in
- *     a0; 0 for hydrogen
+ * @param coreCorrectionA0 what the polarization of the core adds to it, in a0; 0 for hydrogen
+ * @param calibrated whether the core correction is calibrated on a measured element
  */
-public record RadialIntegral(double bareA0, double coreCorrectionA0) {
+public record RadialIntegral(double bareA0, double coreCorrectionA0, boolean calibrated) {
   /**
    * The integral with the core correction.
    *

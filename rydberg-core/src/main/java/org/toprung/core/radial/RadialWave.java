@@ -2,6 +2,8 @@ package org.toprung.core.radial;
 
 /** A normalized wave on the grid x = ih, see {@link NumerovSolver}. */
 final class RadialWave {
+  private static final double CORE_REACH = 400;
+
   private final double step;
   private final int first;
   private final double[] y;
@@ -38,17 +40,20 @@ final class RadialWave {
   }
 
   /**
-   * ∫ P_a w(r) P_b dr = 2∫ x² y_a y_b w dx.
-   *
-   * @param weight w by grid index; zero beyond its end
+   * ∫ P_a r (r² + r_c²)^−3/2 P_b dr = 2∫ x⁴ (x⁴ + r_c²)^−3/2 y_a y_b dx, up to {@value #CORE_REACH} a0: further
+   * out the operator is below 1e-5 of r even next to the first node of a wave.
    */
-  double weighted(RadialWave other, double[] weight) {
+  double corePolarization(RadialWave other, double rc) {
     int from = Math.max(first, other.first);
-    int to = Math.min(weight.length, Math.min(y.length, other.y.length));
+    int outermost = (int) (Math.sqrt(CORE_REACH) / step);
+    int to = Math.min(outermost, Math.min(y.length, other.y.length));
     double sum = 0;
     for (int i = from; i < to; i++) {
-      sum += (double) i * i * y[i] * other.y[i] * weight[i];
+      double x2 = i * step * i * step;
+      double square = x2 * x2;
+      double distance = square + rc * rc;
+      sum += square / (distance * Math.sqrt(distance)) * y[i] * other.y[i];
     }
-    return 2 * step * step * step * sum;
+    return 2 * step * sum;
   }
 }

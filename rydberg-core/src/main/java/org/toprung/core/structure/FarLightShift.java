@@ -1,0 +1,153 @@
+package org.toprung.core.structure;
+
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Set;
+import java.util.concurrent.ConcurrentHashMap;
+import org.toprung.angular.SphericalComponents;
+import org.toprung.core.atom.Level;
+import org.toprung.core.atom.Species;
+import org.toprung.core.quantity.Estimate;
+import org.toprung.core.quantity.PhysicalConstants;
+
+/**
+ * Light shifts of fine-structure sublevels by all levels that are far from resonance.
+ *
+ * <p>For a field E(t) = E0 cos ωt of unit polarization ε = Σ a_q e_q the shift of |a m⟩ is
+ *
+ * <p>ΔE = −(E0²/4) Σ_k [A_k/(E_k − E_a − ħω) + B_k/(E_k − E_a + ħω)],
+ *
+ * <p>A_k = Σ_q |a_q|² |⟨k m+q|d_q|a m⟩|² (absorbing first), B_k = Σ_q |a_q|² |⟨k m−q|d_−q|a m⟩|² (emitting
+ * first); the nuclear spin is a spectator. The polarizability of the core adds −α_c E0²/4, taken static.
+ * Terms that would mix different m are left out: this is the diagonal shift.
+ *
+ * <p><b>Above the ionization threshold of the level</b>, where a laser photon could free the electron, the
+ * sum over the continuum is done by closure: with Σ(A_k − B_k) = 0 and the Thomas-Reiche-Kuhn sum
+ * rule the same expression is
+ *
+ * <p>ΔE = e²E0²/(4mω²) + (E0²/4) Σ_k (ω_k/ω)² [A_k/(ħω − ħω_k) − B_k/(ħω + ħω_k)], ħω_k = E_k − E_a:
+ *
+ * <p>the energy of a free electron in the field, and a sum that low-lying levels dominate.
+ *
+ * <p><b>Near levels</b> are those the caller treats without perturbation theory: of them the resonant
+ * term (the first of an upper level, the second of a lower one) is left out, the other is kept.
+ *
+ * <p>Uncertainty: that of the elements; 5 % of the core part; without closure 1 atomic unit for the
+ * continuum.
+ */
+public final class FarLightShift {
+  private static final Map<Species, FarLightShift> SHARED = new ConcurrentHashMap<>();
+
+  /** Largest n of the levels summed; higher ones weigh as n^−3 and belong to the remainder. */
+  private static final int LARGEST_N = 25;
+
+  private static final double CORE_TRUST = 0.05;
+  private static final double CONTINUUM_AU = 1;
+
+  private final Species species;
+  private final DipoleElements elements;
+
+  private FarLightShift(Species species) {
+    this.species = species;
+    this.elements = DipoleElements.of(species);
+  }
+
+  /**
+   * The light shifts of an atom.
+   *
+   * @param species the atom
+   * @return the light shifts; one shared instance for each species
+   */
+  public static FarLightShift of(Species species) {
+    return SHARED.computeIfAbsent(species, FarLightShift::new);
+  }
+
+  /**
+   * The shift of a sublevel divided by the square of the field amplitude.
+   *
+   * @param level the level
+   * @param doubledMj twice the projection of its j on the axis of the polarization components
+   * @param laserFrequencyHertz frequency of the light in Hz, positive
+   * @param polarization components of the unit polarization vector about the axis of mJ
+   * @param nearLevels levels whose resonant term is left out
+   * @return shift/h in Hz/(V/m)², to be multiplied by E0²; positive where the level moves up
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue, the
+   *     projection is none of the level, or the frequency is not positive and finite
+   */
+  public Estimate hertzPerFieldSquared(
+      Level level,
+      int doubledMj,
+      double laserFrequencyHertz,
+      SphericalComponents polarization,
+      Set<Level> nearLevels) {
+    species.requireValid(level);
+    SecondOrder.requireProjection(level, doubledMj);
+    if (!(laserFrequencyHertz > 0 && laserFrequencyHertz < Double.POSITIVE_INFINITY)) {
+      throw new IllegalArgumentException(
+          String.format(
+              Locale.ROOT,
+              "laser frequency must be positive and finite, given %s Hz",
+              laserFrequencyHertz));
+    }
+    double energy = species.energyHertz(level).value();
+    boolean closure = laserFrequencyHertz > -energy;
+    List<Level> partners = Partners.of(species, level, LARGEST_N);
+    double coreAu = species.corePolarizabilityAu().value();
+    double unit = PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ / 4;
+    double shift = -unit * coreAu;
+    double uncertainty =
+        unit * (CORE_TRUST * coreAu + (closure ? 0 : CONTINUUM_AU));
+    if (closure) {
+      double photonAu = laserFrequencyHertz / PhysicalConstants.HARTREE_HERTZ;
+      shift += unit / (photonAu * photonAu);
+    }
+    for (Level other : partners) {
+      double absorbing = 0;
+      double emitting = 0;
+      for (int q = -1; q <= 1; q++) {
+        double power = polarization.power(q);
+        absorbing += power * SecondOrder.share(level, doubledMj, other, q);
+        emitting += power * SecondOrder.share(level, doubledMj, other, -q);
+      }
+      if (absorbing == 0 && emitting == 0) {
+        continue;
+      }
+      Estimate strength = elements.reduced(other, level).strength();
+      double distance = species.energyHertz(other).value() - energy;
+      boolean near = nearLevels.contains(other);
+      double sum =
+          closure
+              ? remainder(absorbing, emitting, distance, laserFrequencyHertz, near)
+              : direct(absorbing, emitting, distance, laserFrequencyHertz, near);
+      double factor = SecondOrder.COUPLING_SQUARED / 4 * sum;
+      shift += factor * strength.value();
+      uncertainty += Math.abs(factor) * strength.uncertainty();
+    }
+    return new Estimate(shift, uncertainty);
+  }
+
+  /** The two terms of a level, with the sign of a shift, in 1/Hz. */
+  private static double direct(
+      double absorbing, double emitting, double distance, double laser, boolean near) {
+    double first = near && distance > 0 ? 0 : absorbing / (distance - laser);
+    double second = near && distance <= 0 ? 0 : emitting / (distance + laser);
+    return -(first + second);
+  }
+
+  /** What a level adds to the free-electron shift, in 1/Hz. */
+  private static double remainder(
+      double absorbing, double emitting, double distance, double laser, boolean near) {
+    double ratio = distance / laser;
+    // taking the resonant term out of the closed sum leaves these finite expressions
+    double first =
+        near && distance > 0
+            ? -absorbing * (distance + laser) / (laser * laser)
+            : absorbing * ratio * ratio / (laser - distance);
+    double second =
+        near && distance <= 0
+            ? emitting * (laser - distance) / (laser * laser)
+            : -emitting * ratio * ratio / (laser + distance);
+    return first + second;
+  }
+}
