@@ -18,7 +18,8 @@ import org.toprung.core.structure.DipoleElement;
 
 /**
  * The report for programs: JSON with SI units in the key names. A value that is not finite is never
- * written.
+ * written. Reduced dipole elements are given by their size, since the sign of a single one means
+ * nothing without the phases of both wavefunctions.
  */
 public final class JsonReport {
   private final JsonGenerator json;
@@ -110,7 +111,7 @@ public final class JsonReport {
     json.writeStringField("polarization", step.beam().polarization().toString());
     vector("direction", step.beam().direction());
     number("rabi_Hz", step.rabi().hertz());
-    number("reduced_dipole_ea0", element.valueA0());
+    number("reduced_dipole_ea0", Math.abs(element.valueA0()));
     number("reduced_dipole_uncertainty_ea0", element.uncertaintyA0());
     json.writeStringField("dipole_origin", TextReport.origin(step));
     json.writeStringField("dipole_source", element.source());

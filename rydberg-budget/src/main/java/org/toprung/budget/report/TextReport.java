@@ -93,7 +93,7 @@ public final class TextReport {
         String.format(
             Locale.ROOT,
             "%s ± %s a0, %s: %s",
-            Figures.number(step.element().valueA0(), 4),
+            Figures.number(Math.abs(step.element().valueA0()), 4),
             Figures.number(step.element().uncertaintyA0(), 2),
             origin(step),
             step.element().source()));

@@ -212,7 +212,7 @@ class BadInputTest {
           kind = "pi" | kind = "pi"\\nkind = "pi" | Duplicate
           [bench]     | [atom]                    | redefined
           [atom]      | [atom                     | line 2
-          F = 2       | F =                       | line 7
+          F = 2       | F =                       | line 8
           """)
   void refusesOverlappingOrUnreadableToml(String old, String instead, String complaint)
       throws IOException {

@@ -114,8 +114,8 @@ class JsonReportTest {
             "intermediate_scattering_per_pulse");
     parsed(SampleReport.reference())
         .at("/drive")
-        .fields()
-        .forEachRemaining(
+        .properties()
+        .forEach(
             field -> {
               boolean number = field.getValue().isNumber();
               boolean unit = field.getKey().matches(".*_(Hz|T|Hz_per_T|per_m|m|s|W)");

@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.constraints.CharRange;
+import net.jqwik.api.constraints.Chars;
 import net.jqwik.api.constraints.StringLength;
 import org.junit.jupiter.api.Test;
 
@@ -14,7 +15,7 @@ class PageTest {
   /** Nothing is lost by wrapping, and nothing is wider than the page. */
   @Property(seed = "5", tries = 200)
   void wrapsWithoutLosingText(
-      @ForAll @StringLength(max = 400) @CharRange(from = 'a', to = 'd') @CharRange(from = ' ')
+      @ForAll @StringLength(max = 400) @CharRange(from = 'a', to = 'd') @Chars(' ')
           String sentence) {
     Page page = new Page();
     page.bullet(sentence);

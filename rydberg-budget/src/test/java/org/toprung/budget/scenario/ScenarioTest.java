@@ -14,6 +14,7 @@ import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.constraints.DoubleRange;
 import net.jqwik.api.constraints.IntRange;
+import net.jqwik.api.constraints.Scale;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -98,10 +99,10 @@ class ScenarioTest {
 
   @Property(seed = "11", tries = 12)
   void readsBackWhatQuantitiesPrint(
-      @ForAll @DoubleRange(min = 1e-6, max = 2) double watts,
-      @ForAll @DoubleRange(min = 1e-6, max = 1e-3) double metres,
+      @ForAll @DoubleRange(min = 1e-6, max = 2) @Scale(9) double watts,
+      @ForAll @DoubleRange(min = 1e-6, max = 1e-3) @Scale(12) double metres,
       @ForAll @DoubleRange(min = 1e8, max = 9e9) double detuning,
-      @ForAll @DoubleRange(min = 0, max = 0.01) double tesla,
+      @ForAll @DoubleRange(min = 0, max = 0.01) @Scale(9) double tesla,
       @ForAll @IntRange(min = 10, max = 120) int n) {
     String text =
         ReferenceScenario.text()
