@@ -3,7 +3,20 @@ module org.toprung.budget {
   requires transitive org.toprung.core;
   requires org.apache.commons.math4.legacy;
 
+  // what only scenario files, reports and the command line need
+  requires static com.fasterxml.jackson.core;
+  requires static com.fasterxml.jackson.databind;
+  requires static com.fasterxml.jackson.dataformat.toml;
+  requires static info.picocli;
+  requires static java.desktop;
+  requires static org.knowm.xchart;
+
   exports org.toprung.budget;
   exports org.toprung.budget.bench;
   exports org.toprung.budget.pulse;
+  exports org.toprung.budget.report;
+  exports org.toprung.budget.scenario;
+
+  opens org.toprung.budget.app to
+      info.picocli;
 }

@@ -1,0 +1,143 @@
+package org.toprung.budget.app;
+
+import java.io.PrintStream;
+import java.io.PrintWriter;
+import java.nio.file.Path;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.concurrent.Callable;
+import org.toprung.budget.Budget;
+import org.toprung.budget.Check;
+import org.toprung.budget.report.ChartReport;
+import org.toprung.budget.report.JsonReport;
+import org.toprung.budget.report.ReportContent;
+import org.toprung.budget.report.TextReport;
+import org.toprung.budget.scenario.Scenario;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.ParameterException;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
+
+/** Reads a scenario, composes its budget, checks it by simulation and reports. */
+@Command(
+    name = "budget",
+    description = "Print the error budget of the pulse of a scenario file, checked by simulation.",
+    mixinStandardHelpOptions = true,
+    versionProvider = Version.class)
+final class BudgetCommand implements Callable<Integer> {
+  private static final int FEWEST_SHOTS = 2;
+  private static final int MOST_SHOTS = 100_000_000;
+
+  @Spec private CommandSpec spec;
+
+  @Parameters(paramLabel = "SCENARIO", description = "Scenario file (TOML).")
+  private Path scenarioFile;
+
+  @Option(names = "--json", paramLabel = "FILE", description = "Also write the report as JSON.")
+  private String json;
+
+  @Option(
+      names = "--chart",
+      paramLabel = "FILE.svg",
+      description = "Also draw the causes as a bar chart (SVG).")
+  private String chart;
+
+  @Option(
+      names = "--shots",
+      paramLabel = "N",
+      defaultValue = "2000",
+      description = "Shots of the simulation (default: ${DEFAULT-VALUE}).")
+  private int shots;
+
+  @Option(
+      names = "--seed",
+      paramLabel = "S",
+      defaultValue = "1",
+      description = "Seed of the simulation, any integer (default: ${DEFAULT-VALUE}).")
+  private long seed;
+
+  private final PrintStream err;
+
+  BudgetCommand(PrintStream err) {
+    this.err = err;
+  }
+
+  @Override
+  public Integer call() {
+    requireAllowed();
+    Scenario scenario = Scenario.read(scenarioFile);
+    Optional<OutputFile> jsonFile = output("--json", json);
+    Optional<OutputFile> chartFile = output("--chart", chart);
+    if (chartFile.isPresent()) {
+      requireDistinct(jsonFile, chartFile.get());
+    }
+    Budget budget = Budget.of(scenario.drive(), scenario.pulse()).on(scenario.bench()).compose();
+    ReportContent content = new ReportContent(scenario.title(), budget, check(budget));
+    PrintWriter out = spec.commandLine().getOut();
+    out.println(TextReport.render(content));
+    jsonFile.ifPresent(
+        file -> {
+          file.write(JsonReport.render(content));
+          out.println("JSON written to " + file.target());
+        });
+    chartFile.ifPresent(
+        file -> {
+          file.write(ChartReport.render(content));
+          out.println("Chart written to " + file.target());
+        });
+    return Main.DONE;
+  }
+
+  private void requireAllowed() {
+    if (!(shots >= FEWEST_SHOTS && shots <= MOST_SHOTS)) {
+      throw new ParameterException(
+          spec.commandLine(),
+          "--shots: given " + shots + "; allowed: " + FEWEST_SHOTS + " to " + MOST_SHOTS);
+    }
+    if (chart == null) {
+      return;
+    }
+    if (!chart.toLowerCase(Locale.ROOT).endsWith(".svg")) {
+      throw new ParameterException(
+          spec.commandLine(),
+          "--chart: given " + chart + "; allowed: a file name that ends in .svg");
+    }
+    try {
+      ChartReport.requireFonts();
+    } catch (IllegalStateException e) {
+      throw new BadOutputException("--chart: " + e.getMessage() + ", or leave the chart out", e);
+    }
+  }
+
+  /** The checked output, which must not take the place of the scenario. */
+  private Optional<OutputFile> output(String option, String name) {
+    if (name == null) {
+      return Optional.empty();
+    }
+    OutputFile file = OutputFile.of(option, name);
+    if (file.isAt(scenarioFile)) {
+      throw new BadOutputException(
+          option + ": given " + name + ", which is the scenario itself; allowed: another file",
+          null);
+    }
+    return Optional.of(file);
+  }
+
+  private static void requireDistinct(Optional<OutputFile> jsonFile, OutputFile chartFile) {
+    if (jsonFile.isPresent() && jsonFile.get().isAt(chartFile.target())) {
+      throw new BadOutputException(
+          "--chart: given "
+              + chartFile.target()
+              + ", which --json names too; allowed: another file",
+          null);
+    }
+  }
+
+  private Check check(Budget budget) {
+    try (Progress progress = new Progress(err, Progress.isTerminal(), shots, System::nanoTime)) {
+      return budget.check(shots, seed, progress);
+    }
+  }
+}

@@ -1,0 +1,2 @@
+/** The command line: one scenario file in, one report out. */
+package org.toprung.budget.app;

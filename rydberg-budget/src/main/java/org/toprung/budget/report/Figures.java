@@ -1,0 +1,64 @@
+package org.toprung.budget.report;
+
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.util.Locale;
+import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Length;
+import org.toprung.core.quantity.Power;
+import org.toprung.core.quantity.Time;
+
+/** Numbers as people read them: a few significant digits and a unit. */
+final class Figures {
+  private static final int DIGITS = 4;
+  private static final double SMALLEST = 1e-10; // probability told from zero
+
+  private Figures() {}
+
+  static String of(Frequency value) {
+    return Frequency.ofHertz(rounded(value.hertz())).toString();
+  }
+
+  static String of(Time value) {
+    return Time.ofSeconds(rounded(value.seconds())).toString();
+  }
+
+  static String of(Power value) {
+    return Power.ofWatts(rounded(value.watts())).toString();
+  }
+
+  static String of(Length value) {
+    return Length.ofMetres(rounded(value.metres())).toString();
+  }
+
+  /** A wavelength: always in nanometres, to a picometre. */
+  static String nanometres(Length value) {
+    return String.format(Locale.ROOT, "%.3f nm", value.metres() * 1e9);
+  }
+
+  /** A frequency with its sign, for shifts and detunings. */
+  static String signed(Frequency value) {
+    return value.hertz() > 0 ? "+" + of(value) : of(value);
+  }
+
+  /** A probability in a column: three digits and a power of ten; nothing smaller than matters. */
+  static String probability(double value) {
+    if (Math.abs(value) < SMALLEST) {
+      return value == 0 ? "0" : "< 1e-10";
+    }
+    return String.format(Locale.ROOT, "%.2e", value);
+  }
+
+  static String percent(double fraction) {
+    return number(100 * fraction, 3) + " %";
+  }
+
+  static String number(double value, int digits) {
+    BigDecimal rounded = new BigDecimal(value).round(new MathContext(digits));
+    return rounded.signum() == 0 ? "0" : rounded.stripTrailingZeros().toPlainString();
+  }
+
+  private static double rounded(double value) {
+    return new BigDecimal(value).round(new MathContext(DIGITS)).doubleValue();
+  }
+}

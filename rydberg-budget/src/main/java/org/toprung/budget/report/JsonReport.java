@@ -1,0 +1,192 @@
+package org.toprung.budget.report;
+
+import com.fasterxml.jackson.core.JsonFactory;
+import com.fasterxml.jackson.core.JsonGenerator;
+import com.fasterxml.jackson.core.util.DefaultIndenter;
+import com.fasterxml.jackson.core.util.DefaultPrettyPrinter;
+import com.fasterxml.jackson.core.util.Separators;
+import java.io.IOException;
+import java.io.StringWriter;
+import java.io.UncheckedIOException;
+import java.util.List;
+import org.toprung.budget.Budget;
+import org.toprung.budget.CauseEntry;
+import org.toprung.budget.Check;
+import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.PulsePlan;
+import org.toprung.core.structure.DipoleElement;
+
+/**
+ * The report for programs: JSON with SI units in the key names. A value that is not finite is never
+ * written. Reduced dipole elements are given by their size, since the sign of a single one means
+ * nothing without the phases of both wavefunctions.
+ */
+public final class JsonReport {
+  private final JsonGenerator json;
+
+  private JsonReport(JsonGenerator json) {
+    this.json = json;
+  }
+
+  /**
+   * Renders the report.
+   *
+   * @param content what to tell about
+   * @return a JSON object, ended by a line feed
+   * @throws IllegalStateException if a number of the budget is not finite
+   */
+  public static String render(ReportContent content) {
+    StringWriter text = new StringWriter();
+    DefaultPrettyPrinter printer =
+        new DefaultPrettyPrinter(
+            Separators.createDefaultInstance()
+                .withObjectFieldValueSpacing(Separators.Spacing.AFTER)
+                .withRootSeparator(""));
+    printer.indentObjectsWith(new DefaultIndenter("  ", "\n"));
+    try (JsonGenerator json = new JsonFactory().createGenerator(text)) {
+      json.setPrettyPrinter(printer);
+      new JsonReport(json).write(content);
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+    return text.append('\n').toString();
+  }
+
+  private void write(ReportContent content) throws IOException {
+    Budget budget = content.budget();
+    json.writeStartObject();
+    json.writeStringField("title", content.title());
+    json.writeStringField("species", budget.drive().species().name());
+    json.writeStringField("start", budget.drive().start().toString());
+    json.writeStringField("intermediate", budget.drive().intermediate().toString());
+    json.writeStringField("target", budget.drive().target().toString());
+    drive(budget);
+    pulse(budget);
+    budget(content);
+    check(content.check());
+    strings("warnings", content.warnings());
+    strings("cautions", content.cautions());
+    json.writeEndObject();
+  }
+
+  private void drive(Budget budget) throws IOException {
+    Drive drive = budget.drive();
+    json.writeObjectFieldStart("drive");
+    number("magnetic_field_T", drive.field().tesla());
+    number("detuning_Hz", drive.detuning().hertz());
+    number("rabi_Hz", drive.rabi().hertz());
+    number("relative_uncertainty", drive.relativeUncertainty());
+    json.writeArrayFieldStart("steps");
+    for (int k = 0; k < drive.steps().size(); k++) {
+      step(drive, k);
+    }
+    json.writeEndArray();
+    number("start_light_shift_Hz", drive.startLightShift().hertz());
+    number("target_light_shift_Hz", drive.targetLightShift().hertz());
+    number("far_light_shift_relative_uncertainty", drive.farShiftRelativeUncertainty());
+    number("intermediate_admixture", drive.admixture());
+    number("intermediate_scattering_per_pulse", budget.scatteringPerPulse());
+    vector("wave_vector_per_m", drive.waveVectorPerMetre());
+    number("magnetic_sensitivity_Hz_per_T", drive.magneticSensitivityHertzPerTesla());
+    json.writeArrayFieldStart("other_targets");
+    for (Drive.OtherTarget other : drive.otherTargets()) {
+      json.writeStartObject();
+      json.writeStringField("sublevel", other.sublevel());
+      number("rabi_Hz", other.rabi().hertz());
+      number("detuning_Hz", other.detuning().hertz());
+      json.writeEndObject();
+    }
+    json.writeEndArray();
+    json.writeEndObject();
+  }
+
+  private void step(Drive drive, int k) throws IOException {
+    Drive.Step step = drive.steps().get(k);
+    DipoleElement element = step.element();
+    json.writeStartObject();
+    json.writeStringField("to", step.to());
+    number("wavelength_m", step.wavelength().metres());
+    number("power_W", step.beam().power().watts());
+    number("waist_m", step.beam().waist().metres());
+    json.writeStringField("polarization", step.beam().polarization().toString());
+    vector("direction", step.beam().direction());
+    number("rabi_Hz", step.rabi().hertz());
+    number("reduced_dipole_ea0", Math.abs(element.valueA0()));
+    number("reduced_dipole_uncertainty_ea0", element.uncertaintyA0());
+    json.writeStringField("dipole_origin", TextReport.origin(step));
+    json.writeStringField("dipole_source", element.source());
+    number("start_light_shift_Hz", drive.startLightShift(k).hertz());
+    number("target_light_shift_Hz", drive.targetLightShift(k).hertz());
+    json.writeEndObject();
+  }
+
+  private void pulse(Budget budget) throws IOException {
+    PulsePlan plan = budget.plan();
+    json.writeObjectFieldStart("pulse");
+    number("area_rad", budget.pulse().areaRadians());
+    number("duration_s", plan.duration().seconds());
+    number("rabi_Hz", plan.rabi().hertz());
+    number("frequency_offset_Hz", plan.frequencyOffset().hertz());
+    number("deliberate_offset_Hz", budget.pulse().offset().hertz());
+    json.writeEndObject();
+  }
+
+  private void budget(ReportContent content) throws IOException {
+    Budget budget = content.budget();
+    json.writeObjectFieldStart("budget");
+    number("total", budget.total());
+    number("uncertainty", budget.uncertainty());
+    json.writeArrayFieldStart("causes");
+    for (CauseEntry cause : budget.causes()) {
+      json.writeStartObject();
+      json.writeStringField("cause", cause.cause());
+      number("error", cause.error());
+      number("uncertainty", cause.uncertainty());
+      number("share", content.share(cause.error()));
+      json.writeStringField("lever", cause.lever());
+      json.writeStringField("source", cause.source());
+      json.writeEndObject();
+    }
+    json.writeEndArray();
+    strings("not_assessed", budget.notAssessed());
+    json.writeEndObject();
+  }
+
+  private void check(Check check) throws IOException {
+    json.writeObjectFieldStart("check");
+    number("total", check.total());
+    number("standard_error", check.standardError());
+    json.writeBooleanField("agrees", check.agrees());
+    json.writeNumberField("shots", check.shots());
+    json.writeNumberField("seed", check.seed());
+    json.writeEndObject();
+  }
+
+  private void number(String key, double value) throws IOException {
+    json.writeFieldName(key);
+    json.writeNumber(finite(key, value));
+  }
+
+  private void vector(String key, double[] values) throws IOException {
+    json.writeArrayFieldStart(key);
+    for (double value : values) {
+      json.writeNumber(finite(key, value));
+    }
+    json.writeEndArray();
+  }
+
+  private void strings(String key, List<String> values) throws IOException {
+    json.writeArrayFieldStart(key);
+    for (String value : values) {
+      json.writeString(value);
+    }
+    json.writeEndArray();
+  }
+
+  private static double finite(String key, double value) {
+    if (!(Math.abs(value) <= Double.MAX_VALUE)) {
+      throw new IllegalStateException("the value of " + key + " is " + value + ", not finite");
+    }
+    return value + 0.0; // no negative zero
+  }
+}

@@ -1,0 +1,242 @@
+package org.toprung.budget.report;
+
+import java.util.List;
+import java.util.Locale;
+import org.toprung.budget.Budget;
+import org.toprung.budget.CauseEntry;
+import org.toprung.budget.Check;
+import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.PulsePlan;
+import org.toprung.core.quantity.Frequency;
+
+/**
+ * The report for people: one page of text that fits {@value Page#WIDTH} columns.
+ *
+ * <p>Levers of causes below 1 % of the total are left out here to keep the table short; {@link
+ * JsonReport} has them all.
+ */
+public final class TextReport {
+  private static final double WORTH_A_LEVER = 0.01; // share of the total
+  private static final int MOST_TARGETS = 5;
+  private static final double TESLA_PER_GAUSS = 1e-4;
+  private static final int CAUSE_COLUMNS = 28;
+  private static final int ERROR_COLUMNS = 8;
+  private static final int SHARE_COLUMNS = 8;
+
+  private final Page page = new Page();
+  private final ReportContent content;
+  private final Budget budget;
+  private final Drive drive;
+
+  private TextReport(ReportContent content) {
+    this.content = content;
+    this.budget = content.budget();
+    this.drive = budget.drive();
+  }
+
+  /**
+   * Renders the report.
+   *
+   * @param content what to tell about
+   * @return lines of at most {@value Page#WIDTH} columns, each ended by a line feed
+   */
+  public static String render(ReportContent content) {
+    return new TextReport(content).render();
+  }
+
+  private String render() {
+    page.title(content.title());
+    drive();
+    for (int k = 0; k < drive.steps().size(); k++) {
+      step(k);
+    }
+    ladder();
+    plan();
+    causes();
+    check();
+    list("Not assessed, so not in the total", budget.notAssessed());
+    list("WARNINGS", content.warnings());
+    list("CAUTION", content.cautions());
+    return page.toString();
+  }
+
+  private void drive() {
+    page.heading("Drive");
+    page.value("atom", drive.species().name() + " in " + drive.field() + " along z");
+    page.value("ladder", drive.start() + " -> " + drive.intermediate() + " -> " + drive.target());
+    page.value(
+        "detuning",
+        Figures.signed(drive.detuning())
+            + " of the first laser from the centre of gravity of "
+            + drive.intermediate());
+  }
+
+  private void step(int k) {
+    Drive.Step step = drive.steps().get(k);
+    double[] direction = step.beam().direction();
+    page.heading("Step " + (k + 1) + " to " + step.to());
+    page.value("laser", Figures.nanometres(step.wavelength()) + " (vacuum)");
+    page.value(
+        "beam",
+        String.format(
+            Locale.ROOT,
+            "%s, waist %s, %s, along (%s, %s, %s)",
+            Figures.of(step.beam().power()),
+            Figures.of(step.beam().waist()),
+            step.beam().polarization(),
+            Figures.number(direction[0], 3),
+            Figures.number(direction[1], 3),
+            Figures.number(direction[2], 3)));
+    page.value("Rabi frequency", Figures.of(step.rabi()));
+    page.value(
+        "reduced dipole element",
+        String.format(
+            Locale.ROOT,
+            "%s ± %s a0, %s: %s",
+            Figures.number(Math.abs(step.element().valueA0()), 4),
+            Figures.number(step.element().uncertaintyA0(), 2),
+            origin(step),
+            step.element().source()));
+  }
+
+  static String origin(Drive.Step step) {
+    return step.element().origin().name().toLowerCase(Locale.ROOT);
+  }
+
+  private void ladder() {
+    page.heading("Whole ladder");
+    page.value(
+        "Rabi frequency",
+        Figures.of(drive.rabi()) + " ± " + Figures.percent(drive.relativeUncertainty()));
+    page.value(
+        "light shift of start",
+        Figures.signed(drive.startLightShift())
+            + byStep(
+                Figures.signed(drive.startLightShift(0)),
+                Figures.signed(drive.startLightShift(1))));
+    page.value(
+        "light shift of target",
+        Figures.signed(drive.targetLightShift())
+            + byStep(
+                Figures.signed(drive.targetLightShift(0)),
+                Figures.signed(drive.targetLightShift(1))));
+    page.value(
+        "intermediate scattering",
+        Figures.probability(budget.scatteringPerPulse()) + " photons per pulse");
+    double[] k = drive.waveVectorPerMetre();
+    double length = Math.sqrt(k[0] * k[0] + k[1] * k[1] + k[2] * k[2]);
+    page.value(
+        "summed wave vector",
+        String.format(
+            Locale.ROOT,
+            "(%s, %s, %s) 1/um: %s of Doppler shift per m/s along it",
+            Figures.number(k[0] * 1e-6, 4),
+            Figures.number(k[1] * 1e-6, 4),
+            Figures.number(k[2] * 1e-6, 4),
+            Figures.of(Frequency.ofHertz(length / (2 * Math.PI)))));
+    page.value(
+        "magnetic sensitivity",
+        Figures.signed(
+                Frequency.ofHertz(drive.magneticSensitivityHertzPerTesla() * TESLA_PER_GAUSS))
+            + " per gauss (target minus start)");
+    otherTargets();
+  }
+
+  private static String byStep(String first, String second) {
+    return " (" + first + " by beam 1, " + second + " by beam 2)";
+  }
+
+  private void otherTargets() {
+    List<Drive.OtherTarget> others = drive.otherTargets();
+    String label = "also coupled";
+    for (Drive.OtherTarget other : others.subList(0, Math.min(MOST_TARGETS, others.size()))) {
+      page.value(
+          label,
+          String.format(
+              Locale.ROOT,
+              "%s: Rabi frequency %s, detuned by %s",
+              other.sublevel(),
+              Figures.of(other.rabi()),
+              Figures.signed(other.detuning())));
+      label = "";
+    }
+    if (others.size() > MOST_TARGETS) {
+      page.value("", "and " + (others.size() - MOST_TARGETS) + " weaker ones");
+    }
+  }
+
+  private void plan() {
+    PulsePlan plan = budget.plan();
+    page.heading("Pulse");
+    page.value("duration", Figures.of(plan.duration()));
+    page.value("Rabi frequency", Figures.of(plan.rabi()) + " during the pulse");
+    page.value(
+        "frequency offset",
+        Figures.signed(plan.frequencyOffset())
+            + " added to the last laser puts the ladder on the light-shifted resonance");
+    if (budget.pulse().offset().hertz() != 0) {
+      page.value(
+          "deliberate offset", Figures.signed(budget.pulse().offset()) + " from that resonance");
+    }
+  }
+
+  private void causes() {
+    page.heading("Error budget (error: 1 - probability of the wanted outcome; ±: atomic values)");
+    page.hanging(row("cause", "error", "±", "share"), "lever");
+    for (CauseEntry cause : budget.causes()) {
+      double share = content.share(cause.error());
+      page.hanging(
+          row(
+              cause.cause(),
+              Figures.probability(cause.error()),
+              Figures.probability(cause.uncertainty()),
+              String.format(Locale.ROOT, "%.1f %%", 100 * share)),
+          share >= WORTH_A_LEVER ? cause.lever() : "");
+    }
+    page.hanging(
+        row(
+            "TOTAL",
+            Figures.probability(budget.total()),
+            Figures.probability(budget.uncertainty()),
+            ""),
+        "that is " + Figures.percent(budget.total()));
+  }
+
+  private static String row(String cause, String error, String uncertainty, String share) {
+    return "  "
+        + Page.padded(cause, CAUSE_COLUMNS)
+        + Page.right(error, ERROR_COLUMNS)
+        + "  "
+        + Page.right(uncertainty, ERROR_COLUMNS)
+        + Page.right(share, SHARE_COLUMNS)
+        + "   ";
+  }
+
+  private void check() {
+    Check check = content.check();
+    page.heading("Check by simulation of the whole ladder");
+    page.value(
+        "simulated total",
+        String.format(
+            Locale.ROOT,
+            "%s ± %s (%d shots, seed %d)",
+            Figures.probability(check.total()),
+            Figures.probability(check.standardError()),
+            check.shots(),
+            check.seed()));
+    page.value(
+        check.agrees() ? "agrees" : "DISAGREES",
+        String.format(
+            Locale.ROOT,
+            "composed %s, difference %s; agreement is 10 %% or three standard errors",
+            Figures.probability(budget.total()),
+            Figures.probability(budget.total() - check.total())));
+  }
+
+  private void list(String heading, List<String> sentences) {
+    if (!sentences.isEmpty()) {
+      page.heading(heading);
+      sentences.forEach(page::bullet);
+    }
+  }
+}

@@ -1,0 +1,196 @@
+package org.toprung.budget.scenario;
+
+import java.nio.file.Path;
+import java.util.List;
+import java.util.stream.Stream;
+import org.toprung.budget.bench.Bench;
+import org.toprung.budget.pulse.Pulse;
+import org.toprung.core.atom.Level;
+import org.toprung.core.atom.Species;
+import org.toprung.core.atom.Sublevel;
+import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.DriveSetup;
+import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.MagneticField;
+
+/**
+ * What a scenario file describes: a drive, a pulse and a bench.
+ *
+ * <pre>{@code
+ * Scenario scenario = Scenario.read(Path.of("rubidium-two-photon.toml"));
+ * Budget budget =
+ *     Budget.of(scenario.drive(), scenario.pulse()).on(scenario.bench()).compose();
+ * }</pre>
+ *
+ * <p>Tables: {@code atom}, {@code field}, {@code start}, two of {@code step}, {@code pulse} and,
+ * where something is known of the apparatus, {@code bench}. The last step has no detuning of its
+ * own: the lasers sit on two-photon resonance, light shifts compensated, unless {@code
+ * pulse.offset} says otherwise. Without a {@code title} the file's name stands in.
+ *
+ * <p>Immutable and thread-safe.
+ */
+public final class Scenario {
+  private static final int STEPS = 2;
+  private static final List<String> KEYS =
+      List.of("title", "atom", "field", "start", "step", "pulse", "bench");
+  private static final List<String> STEP_KEYS = joined(List.of("to", "detuning"), Beams.KEYS);
+  private static final List<String> LAST_STEP_KEYS = joined(List.of("to", "mJ"), Beams.KEYS);
+
+  private final String title;
+  private final DriveSetup setup;
+  private final Drive drive;
+  private final Pulse pulse;
+  private final Bench bench;
+
+  private Scenario(Path file, String text) {
+    Table root = Table.root(file, TomlFile.tree(file, text), KEYS);
+    this.title = root.optional("title").map(Scenario::title).orElseGet(() -> nameOf(file));
+    Species species =
+        root.table("atom", List.of("species"))
+            .required("species", "text such as \"Rb-87\"")
+            .parsed(Species::parse, "Rb-87");
+    Value magnetic =
+        root.table("field", List.of("magnetic")).required("magnetic", "text such as \"4 G\"");
+    MagneticField field = magnetic.parsed(MagneticField::parse, "4 G");
+    DriveSetup inField = magnetic.guarded(() -> Drive.of(species).in(field));
+    DriveSetup started = start(root.table("start", List.of("level", "F", "mF")), species, inField);
+    List<Table> steps = root.tables("step", STEPS, STEP_KEYS, LAST_STEP_KEYS);
+    DriveSetup first = firstStep(steps.get(0), species, started);
+    this.setup = lastStep(steps.get(1), species, first);
+    this.pulse = pulse(root.table("pulse", List.of("kind", "offset")));
+    this.bench = Benches.read(root.optionalTable("bench", Benches.KEYS), STEPS);
+    this.drive = root.guarded("step", setup::resolve);
+  }
+
+  /**
+   * Reads a scenario file and resolves its drive.
+   *
+   * @param file a TOML file in UTF-8
+   * @return the scenario
+   * @throws ScenarioException if the file cannot be read, is not TOML, or says something unknown or
+   *     impossible; the message gives file, key, what was given and what is allowed
+   */
+  public static Scenario read(Path file) {
+    return new Scenario(file, TomlFile.text(file));
+  }
+
+  /**
+   * Reads a scenario from text.
+   *
+   * @param toml the text of a scenario file
+   * @param name what messages call it, and its title where it gives none
+   * @return the scenario
+   * @throws ScenarioException if the text is not TOML, or says something unknown or impossible
+   */
+  public static Scenario parse(String toml, String name) {
+    return new Scenario(Path.of(name), toml);
+  }
+
+  private static List<String> joined(List<String> first, List<String> second) {
+    return Stream.concat(first.stream(), second.stream()).toList();
+  }
+
+  private static String nameOf(Path file) {
+    String name = String.valueOf(file.getFileName());
+    return name.endsWith(".toml") ? name.substring(0, name.length() - ".toml".length()) : name;
+  }
+
+  private static String title(Value value) {
+    String allowed = "one line of text";
+    String text = value.text(allowed);
+    if (text.isBlank() || text.codePoints().anyMatch(Shown::isControl)) {
+      throw value.refused(allowed);
+    }
+    return text.strip();
+  }
+
+  private static Level level(Value value, Species species) {
+    Level level = value.parsed(Level::parse, "6P3/2");
+    value.guarded(() -> species.requireValid(level));
+    return level;
+  }
+
+  private static DriveSetup start(Table table, Species species, DriveSetup setup) {
+    Value at = table.required("level", "text such as \"5S1/2\"");
+    Level level = level(at, species);
+    String number = "an integer or half-integer such as 2 or 2.5";
+    Value f = table.required("F", number);
+    double total = f.number(number);
+    // the stretched sublevel tells whether F alone is possible
+    f.guarded(() -> species.requireValid(Sublevel.hyperfine(level, total, total)));
+    Value m = table.required("mF", number);
+    Sublevel start = m.guarded(() -> Sublevel.hyperfine(level, total, m.number(number)));
+    return at.guarded(() -> setup.from(start));
+  }
+
+  private static DriveSetup firstStep(Table table, Species species, DriveSetup setup) {
+    Level to = level(table.required("to", "text such as \"6P3/2\""), species);
+    Frequency detuning =
+        table.required("detuning", "text such as \"1.2 GHz\"").parsed(Frequency::parse, "1.2 GHz");
+    return table.guarded(() -> setup.step(to, Beams.read(table)).detuned(detuning));
+  }
+
+  private static DriveSetup lastStep(Table table, Species species, DriveSetup setup) {
+    Level to = level(table.required("to", "text such as \"68S1/2\""), species);
+    String number = "a half-integer such as 0.5";
+    Value m = table.required("mJ", number);
+    Sublevel target = m.guarded(() -> Sublevel.fine(to, m.number(number)));
+    return table.guarded(() -> setup.step(target, Beams.read(table)));
+  }
+
+  private static Pulse pulse(Table table) {
+    Value kind = table.required("kind", "\"pi\"");
+    if (!kind.text("\"pi\"").equals("pi")) {
+      throw kind.refused("\"pi\"");
+    }
+    return table
+        .optional("offset")
+        .map(v -> Pulse.pi().offsetBy(v.parsed(Frequency::parse, "10 kHz")))
+        .orElse(Pulse.pi());
+  }
+
+  /**
+   * What the scenario is called.
+   *
+   * @return one line of text
+   */
+  public String title() {
+    return title;
+  }
+
+  /**
+   * The drive as described, for variations on it.
+   *
+   * @return the description
+   */
+  public DriveSetup setup() {
+    return setup;
+  }
+
+  /**
+   * The drive, resolved.
+   *
+   * @return the drive
+   */
+  public Drive drive() {
+    return drive;
+  }
+
+  /**
+   * The pulse.
+   *
+   * @return the pulse
+   */
+  public Pulse pulse() {
+    return pulse;
+  }
+
+  /**
+   * The disturbances; what the file does not give is not in it.
+   *
+   * @return the bench
+   */
+  public Bench bench() {
+    return bench;
+  }
+}

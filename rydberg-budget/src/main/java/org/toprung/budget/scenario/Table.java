@@ -1,0 +1,108 @@
+package org.toprung.budget.scenario;
+
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.Iterator;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.Supplier;
+
+/** One table of a scenario. It refuses keys that nobody would read. */
+final class Table {
+  private final Path file;
+  private final String path; // empty for the root
+  private final ObjectNode node;
+
+  private Table(Path file, String path, ObjectNode node, List<String> allowed) {
+    this.file = file;
+    this.path = path;
+    this.node = node;
+    for (Iterator<String> names = node.fieldNames(); names.hasNext(); ) {
+      String name = names.next();
+      if (!allowed.contains(name)) {
+        throw ScenarioException.ofKey(
+            file, keyOf(name), "unknown key; allowed: " + String.join(", ", allowed));
+      }
+    }
+  }
+
+  static Table root(Path file, ObjectNode node, List<String> allowed) {
+    return new Table(file, "", node, allowed);
+  }
+
+  private String keyOf(String name) {
+    return path.isEmpty() ? name : path + "." + name;
+  }
+
+  Value required(String name, String allowed) {
+    return optional(name).orElseThrow(() -> missing(name, allowed));
+  }
+
+  Optional<Value> optional(String name) {
+    return Optional.ofNullable(node.get(name)).map(n -> new Value(file, keyOf(name), n));
+  }
+
+  Table table(String name, List<String> allowed) {
+    return optionalTable(name, allowed)
+        .orElseThrow(
+            () ->
+                missing(
+                    name, "a table [" + name + "] with the keys " + String.join(", ", allowed)));
+  }
+
+  Optional<Table> optionalTable(String name, List<String> allowed) {
+    JsonNode found = node.get(name);
+    if (found == null) {
+      return Optional.empty();
+    }
+    if (found instanceof ObjectNode table) {
+      return Optional.of(new Table(file, keyOf(name), table, allowed));
+    }
+    throw new Value(file, keyOf(name), found).refused("one table [" + name + "]");
+  }
+
+  /** The tables of an array of tables; the last one has keys of its own. */
+  List<Table> tables(String name, int count, List<String> allowed, List<String> allowedInLast) {
+    String rule = count + " tables [[" + name + "]]";
+    JsonNode found = node.get(name);
+    if (found == null) {
+      throw missing(name, rule);
+    }
+    if (!found.isArray()) {
+      throw new Value(file, keyOf(name), found).refused(rule);
+    }
+    if (found.size() != count) {
+      throw ScenarioException.ofKey(
+          file, keyOf(name), "given " + found.size() + " of them; allowed: " + rule);
+    }
+    List<Table> tables = new ArrayList<>();
+    for (int i = 0; i < count; i++) {
+      String itemKey = keyOf(name) + "[" + (i + 1) + "]";
+      if (!(found.get(i) instanceof ObjectNode item)) {
+        throw new Value(file, itemKey, found.get(i)).refused("a table [[" + name + "]]");
+      }
+      tables.add(new Table(file, itemKey, item, i == count - 1 ? allowedInLast : allowed));
+    }
+    return tables;
+  }
+
+  private ScenarioException missing(String name, String allowed) {
+    return ScenarioException.ofKey(file, keyOf(name), "is missing; allowed: " + allowed);
+  }
+
+  /** Runs something that refuses the table as a whole, and names file and table. */
+  <T> T guarded(Supplier<T> action) {
+    return new Value(file, path, node).guarded(action);
+  }
+
+  /** Runs something that refuses what some tables say together, and names file and tables. */
+  <T> T guarded(String names, Supplier<T> action) {
+    try {
+      return action.get();
+    } catch (IllegalArgumentException e) {
+      throw ScenarioException.ofKey(file, keyOf(names), e.getMessage(), e);
+    }
+  }
+}

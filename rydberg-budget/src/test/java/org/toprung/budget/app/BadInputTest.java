@@ -1,0 +1,297 @@
+package org.toprung.budget.app;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
+import org.toprung.budget.ReferenceScenario;
+
+/** Bad input, case by case, as a user of the command line meets it. */
+class BadInputTest {
+  @TempDir private Path folder;
+
+  /** Runs a scenario and expects one line that names the file and each of the parts. */
+  private void refuses(String scenario, String... parts) throws IOException {
+    Path file = Files.writeString(folder.resolve("lab.toml"), scenario);
+    refusesFile(file, parts);
+    assertEquals(List.of("lab.toml"), namesIn(folder), "files left behind");
+  }
+
+  private void refusesFile(Path file, String... parts) {
+    CommandLineRun run =
+        CommandLineRun.of(
+            "budget",
+            file.toString(),
+            "--shots",
+            "2",
+            "--json",
+            folder.resolve("out.json").toString(),
+            "--chart",
+            folder.resolve("out.svg").toString());
+    assertEquals(2, run.status(), run.err());
+    assertEquals("", run.out());
+    assertEquals(1, run.errLines().size(), run.err());
+    assertTrue(run.err().contains(file.getFileName().toString()), run.err());
+    for (String part : parts) {
+      assertTrue(run.err().contains(part), () -> "no " + part + " in: " + run.err());
+    }
+  }
+
+  private static List<String> namesIn(Path folder) throws IOException {
+    try (Stream<Path> files = Files.list(folder)) {
+      return files.map(f -> f.getFileName().toString()).sorted().toList();
+    }
+  }
+
+  @ParameterizedTest(name = "{1} instead of {0}")
+  @CsvSource(
+      delimiter = '|',
+      quoteCharacter = '`',
+      textBlock =
+          """
+          # what the file says     | instead             | key               | given             | allowed
+          species = "Rb-87"        | species = "Rb-88"   | atom.species      | Rb-88             | Cs-133, Rb-87
+          species = "Rb-87"        | species = 87        | atom.species      | 87                | "Rb-87"
+          magnetic = "4 G"         | magnetic = "4 oz"   | field.magnetic    | oz                | mT, G
+          magnetic = "4 G"         | magnetic = "4"      | field.magnetic    | "4"               | mT, G
+          magnetic = "4 G"         | magnetic = "-4 G"   | field.magnetic    | -4 G              | at least 0
+          magnetic = "4 G"         | magnetic = 4        | field.magnetic    | given 4           | "4 G"
+          magnetic = "4 G"         | magnetic = "NaN G"  | field.magnetic    | NaN               | a number
+          level = "5S1/2"          | level = "4S1/2"     | start.level       | 4S1/2             | 5S1/2
+          level = "5S1/2"          | level = "6S1/2"     | start.level       | 6S1/2             | 5S1/2
+          level = "5S1/2"          | level = "5P3/2"     | start.level       | 5P3/2             | 5S1/2
+          level = "5S1/2"          | level = "5s"        | start.level       | 5s                | 6P3/2
+          F = 2                    | F = 3               | start.F           | F=3               | 1, 2
+          F = 2                    | F = 1.3             | start.F           | 1.3               | half-integer
+          F = 2                    | F = "2"             | start.F           | "2"               | half-integer
+          mF = 2                   | mF = 3              | start.mF          | given 3           | -2 to 2
+          mF = 2                   | mF = 0.5            | start.mF          | given 1/2         | steps of 1
+          mF = 2                   | mF = nan            | start.mF          | NaN               | half-integer
+          mF = 2                   | mF = inf            | start.mF          | Infinity          | half-integer
+          to = "6P3/2"             | to = "4P3/2"        | step[1].to        | 4P3/2             | 5P3/2
+          to = "6P3/2"             | to = "6P5/2"        | step[1].to        | 5/2               | 1/2 or 3/2
+          to = "6P3/2"             | to = 6              | step[1].to        | given 6           | "6P3/2"
+          to = "68S1/2"            | to = "151S1/2"      | step[2].to        | 151               | 150
+          to = "68S1/2"            | to = "68S3/2"       | step[2].to        | 3/2               | 1/2
+          mJ = 0.5                 | mJ = 1.5            | step[2].mJ        | given 3/2         | -1/2 to 1/2
+          mJ = 0.5                 | mJ = 0              | step[2].mJ        | given 0           | -1/2 to 1/2
+          power = "2 mW"           | power = "0 W"       | step[1].power     | "0 W"             | above zero
+          power = "2 mW"           | power = "-2 mW"     | step[1].power     | "-2 mW"           | above zero
+          power = "2 mW"           | power = "inf mW"    | step[1].power     | inf               | a number
+          power = "150 mW"         | power = "150 hp"    | step[2].power     | hp                | mW
+          waist = "20 um"          | waist = "0 um"      | step[1].waist     | "0 um"            | above zero
+          waist = "25 um"          | waist = "-25 um"    | step[2].waist     | "-25 um"          | above zero
+          detuning = "1.2 GHz"     | detuning = "fast"   | step[1].detuning  | fast              | GHz
+          detuning = "1.2 GHz"     | detuning = "900 THz"| step              | 900 THz           | positive frequency
+          polarization = "sigma+"  | polarization = "up" | step[1].polarization | up             | sigma+, sigma-, pi
+          polarization = "sigma+"  | polarization = "pi" | step[1].polarization | pi             | perpendicular
+          polarization = "sigma+"  | polarization = [0, 0, 1] | step[1].polarization | (1.0, 0.0) | perpendicular
+          polarization = "sigma+"  | polarization = [0, 0, 0] | step[1].polarization | 0.0       | not zero
+          polarization = "sigma+"  | polarization = [1, 0] | step[1].polarization | [1,0]        | [[re, im]
+          polarization = "sigma+"  | polarization = [1, "i", 0] | step[1].polarization[2] | "i"  | [re, im]
+          polarization = "sigma+"  | polarization = [1, [0, nan], 0] | step[1].polarization[2][2] | NaN | finite
+          direction = [0, 0, 1]    | direction = [0, 0, 0] | step[1].direction | 0.0             | not zero
+          direction = [0, 0, 1]    | direction = [0, 1]  | step[1].direction | [0,1]             | three numbers
+          direction = [0, 0, 1]    | direction = [0, 0, inf] | step[1].direction[3] | Infinity   | finite
+          kind = "pi"              | kind = "half"       | pulse.kind        | half              | "pi"
+          temperature = "10 uK"    | temperature = "0 K" | bench.temperature | 0 K               | above zero
+          temperature = "10 uK"    | temperature = "-9 uK" | bench.temperature | "-9 uK"         | not be below 0
+          ["80 kHz", "80 kHz", "15 kHz"] | ["80 kHz"]    | bench.trap_frequency | ["80 kHz"]     | 3 texts
+          "15 kHz"                 | "0 kHz"             | bench.trap_frequency | "0 kHz"        | above zero
+          "300 K"                  | "300 C"             | bench.environment_temperature | C     | mK
+          "2 mG"                   | "-2 mG"             | bench.magnetic_noise | -2 mG          | at least zero
+          "5 mV/cm"                | "-5 mV/cm"          | bench.electric_field | -5 mV/cm       | at least zero
+          linewidth = ["500 Hz",   | linewidth = [       | bench.linewidth   | ["500 Hz"]        | 2 texts
+          linewidth = ["500 Hz",   | linewidth = [500,   | bench.linewidth[1] | 500              | "500 Hz"
+          drift = ["2 kHz",        | drift = ["-2 kHz",  | bench.drift       | "-2 kHz"          | at least zero
+          [0.005, 0.005]           | [0.005]             | bench.intensity_noise | [0.005]       | 2 numbers
+          [0.005, 0.005]           | [0.005, 0.7]        | bench.intensity_noise | 0.7           | between 0 and 0.5
+          [0.005, 0.005]           | [0.005, "1 %"]      | bench.intensity_noise[2] | 1 %        | 0 to 0.5
+          """)
+  void refusesImpossibleValues(String old, String instead, String key, String given, String allowed)
+      throws IOException {
+    refuses(ReferenceScenario.with(old, instead), key, given, allowed);
+  }
+
+  @ParameterizedTest(name = "without {0}")
+  @CsvSource(
+      delimiter = '|',
+      quoteCharacter = '`',
+      textBlock =
+          """
+          species = "Rb-87"        | atom.species
+          magnetic = "4 G"         | field.magnetic
+          level = "5S1/2"          | start.level
+          F = 2                    | start.F
+          mF = 2                   | start.mF
+          to = "6P3/2"             | step[1].to
+          detuning = "1.2 GHz"     | step[1].detuning
+          power = "2 mW"           | step[1].power
+          waist = "20 um"          | step[1].waist
+          polarization = "sigma+"  | step[1].polarization
+          direction = [0, 0, 1]    | step[1].direction
+          mJ = 0.5                 | step[2].mJ
+          kind = "pi"              | pulse.kind
+          """)
+  void refusesMissingValues(String line, String key) throws IOException {
+    refuses(ReferenceScenario.with(line, ""), key, "is missing", "allowed: ");
+  }
+
+  @ParameterizedTest
+  @ValueSource(strings = {"[atom]", "[field]", "[start]", "[pulse]"})
+  void refusesMissingTables(String header) throws IOException {
+    String text = ReferenceScenario.text();
+    int from = text.indexOf(header);
+    int to = text.indexOf("\n[", from);
+    String name = header.substring(1, header.length() - 1);
+    refuses(text.substring(0, from) + text.substring(to + 1), name, "is missing", "allowed: ");
+  }
+
+  @ParameterizedTest
+  @CsvSource(
+      delimiter = '|',
+      quoteCharacter = '`',
+      textBlock =
+          """
+          title = "Rub | tittle = "Rub           | tittle              | title, atom, field
+          species =    | isotope =               | atom.isotope        | species
+          waist = "20  | radius = "20            | step[1].radius      | to, detuning, power, waist
+          mJ = 0.5     | detuning = "1 GHz"      | step[2].detuning    | to, mJ, power, waist
+          kind =       | shape =                 | pulse.shape         | kind, offset
+          drift =      | drifts =                | bench.drifts        | linewidth, drift, intensity_noise
+          [bench]      | [lab]                   | lab                 | pulse, bench
+          """)
+  void refusesUnknownKeys(String old, String instead, String key, String allowed)
+      throws IOException {
+    refuses(ReferenceScenario.with(old, instead), key, "unknown key", "allowed: ", allowed);
+  }
+
+  @Test
+  void refusesAnotherNumberOfSteps() throws IOException {
+    refuses(
+        ReferenceScenario.with("[pulse]", "[[step]]\nto = \"7S1/2\"\n[pulse]"),
+        "step",
+        "given 3",
+        "allowed: 2");
+  }
+
+  @Test
+  void refusesStepsThatBreakASelectionRule() throws IOException {
+    refuses(ReferenceScenario.with("6P3/2", "6D3/2"), "step", "5S1/2", "6D3/2", "parity");
+    refuses(ReferenceScenario.with("68S1/2", "68P1/2"), "step", "6P3/2", "68P1/2", "parity");
+    String toF = ReferenceScenario.with("68S1/2", "68D5/2").replace("6P3/2", "6P1/2");
+    refuses(toF, "step", "6P1/2", "68D5/2", "triangle");
+  }
+
+  @Test
+  void refusesPolarizationsThatCannotReachTheTarget() throws IOException {
+    refuses(
+        ReferenceScenario.with("\"sigma-\"\n", "\"sigma+\"\n"),
+        "step",
+        "5S1/2 F=2 mF=2",
+        "68S1/2 mJ=1/2",
+        "rule");
+  }
+
+  @ParameterizedTest
+  @CsvSource(
+      delimiter = '|',
+      quoteCharacter = '`',
+      textBlock =
+          """
+          kind = "pi" | kind = "pi"\\nkind = "pi" | Duplicate
+          [bench]     | [atom]                    | redefined
+          [atom]      | [atom                     | line 2
+          F = 2       | F =                       | line 8
+          """)
+  void refusesOverlappingOrUnreadableToml(String old, String instead, String complaint)
+      throws IOException {
+    refuses(
+        ReferenceScenario.with(old, instead.replace("\\n", "\n")), "line ", complaint, "allowed: ");
+  }
+
+  @Test
+  void refusesTextThatWouldBreakTheLine() throws IOException {
+    refuses(
+        ReferenceScenario.with("\"Rubidium reference drive\"", "\"\"\"two\nlines\"\"\""),
+        "title",
+        "two\\nlines",
+        "one line of text");
+    refuses(ReferenceScenario.with("Rb-87", "Rb\\u001b[31m"), "atom.species", "Cs-133");
+    refuses(ReferenceScenario.with("Rb-87", "Rb\\n87"), "atom.species", "Cs-133");
+  }
+
+  @Test
+  void refusesFilesThatCannotBeRead() throws IOException {
+    refusesFile(folder.resolve("missing.toml"), "no such file");
+    refusesFile(Files.createDirectory(folder.resolve("folder.toml")), "directory");
+    byte[] noise = {'t', '=', '"', (byte) 0xC3, (byte) 0x28, '"'};
+    refusesFile(Files.write(folder.resolve("noise.toml"), noise), "UTF-8");
+    refusesFile(Files.write(folder.resolve("large.toml"), new byte[2_000_000]), "too large");
+    refusesFile(Files.createFile(folder.resolve("empty.toml")), "atom", "missing");
+  }
+
+  @Test
+  void refusesOutputsThatCannotBeWrittenBeforeAnythingRuns() throws IOException {
+    Path scenario = Files.writeString(folder.resolve("lab.toml"), ReferenceScenario.text());
+    Path noFolder = folder.resolve("nowhere").resolve("out.json");
+    Path inFile = scenario.resolve("out.json");
+    for (Path output : List.of(noFolder, folder, inFile, scenario)) {
+      CommandLineRun run =
+          CommandLineRun.of("budget", scenario.toString(), "--json", output.toString());
+      assertEquals(2, run.status());
+      assertEquals("", run.out());
+      assertEquals(1, run.errLines().size(), run.err());
+      assertTrue(run.err().contains("--json: given " + output), run.err());
+      assertTrue(run.err().contains("allowed: "), run.err());
+    }
+    assertEquals(List.of("lab.toml"), namesIn(folder));
+    assertEquals(ReferenceScenario.text(), Files.readString(scenario));
+  }
+
+  @Test
+  void refusesTheSameFileForBothOutputs() throws IOException {
+    Path scenario = Files.writeString(folder.resolve("lab.toml"), ReferenceScenario.text());
+    String output = folder.resolve("out.svg").toString();
+    CommandLineRun run =
+        CommandLineRun.of("budget", scenario.toString(), "--json", output, "--chart", output);
+    assertEquals(2, run.status());
+    assertEquals(1, run.errLines().size(), run.err());
+    assertFalse(Files.exists(Path.of(output)));
+  }
+
+  @ParameterizedTest
+  @CsvSource({
+    "--shots 1, --shots, 2 to",
+    "--shots few, --shots, few",
+    "--seed 1.5, --seed, 1.5",
+    "--chart a.png, a.png, .svg",
+    "--json, --json, FILE",
+    "--colour, --colour, --help",
+  })
+  void refusesOptionsItDoesNotUnderstand(String options, String named, String help) {
+    String[] args = ("budget lab.toml " + options).split(" ");
+    CommandLineRun run = CommandLineRun.of(args);
+    assertEquals(2, run.status());
+    assertEquals(1, run.errLines().size(), run.err());
+    assertTrue(run.err().contains(named) && run.err().contains(help), run.err());
+  }
+
+  @Test
+  void refusesToRunWithoutACommandOrScenario() {
+    assertEquals(2, CommandLineRun.of().status());
+    assertEquals(1, CommandLineRun.of().errLines().size());
+    assertEquals(2, CommandLineRun.of("budget").status());
+    assertEquals(1, CommandLineRun.of("budget").errLines().size());
+  }
+}

@@ -1,0 +1,92 @@
+package org.toprung.budget.app;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertNotEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import org.junit.jupiter.api.BeforeEach;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.toprung.budget.ReferenceScenario;
+
+class MainTest {
+  @TempDir private Path folder;
+  private String scenario;
+
+  @BeforeEach
+  void writeScenario() throws IOException {
+    scenario = Files.writeString(folder.resolve("lab.toml"), ReferenceScenario.text()).toString();
+  }
+
+  private CommandLineRun budget(String... options) {
+    String[] args = new String[options.length + 4];
+    args[0] = "budget";
+    args[1] = scenario;
+    args[2] = "--shots";
+    args[3] = "40";
+    System.arraycopy(options, 0, args, 4, options.length);
+    return CommandLineRun.of(args);
+  }
+
+  @Test
+  void printsTheReportAndNothingElse() {
+    CommandLineRun run = budget();
+    assertEquals(0, run.status(), run.err());
+    assertEquals("", run.err());
+    assertTrue(run.out().startsWith("Rubidium reference drive\n"), run.out());
+    assertTrue(run.out().contains("40 shots, seed 1"), run.out());
+  }
+
+  @Test
+  void writesFilesAndSaysWhere() throws IOException {
+    Path json = folder.resolve("out.json");
+    Path chart = folder.resolve("out.svg");
+    CommandLineRun run = budget("--json", json.toString(), "--chart", chart.toString());
+    assertEquals(0, run.status(), run.err());
+    assertTrue(run.out().contains("JSON written to " + json.toRealPath()), run.out());
+    assertTrue(run.out().contains("Chart written to " + chart.toRealPath()), run.out());
+    assertTrue(Files.readString(json).startsWith("{"));
+    assertTrue(Files.readString(chart).contains("<svg"));
+    try (var files = Files.list(folder)) {
+      assertEquals(3, files.count(), "temporary files left behind");
+    }
+  }
+
+  @Test
+  void replacesAnOlderFile() throws IOException {
+    Path json = Files.writeString(folder.resolve("out.json"), "x".repeat(100_000));
+    assertEquals(0, budget("--json", json.toString()).status());
+    assertTrue(Files.readString(json).endsWith("}\n"));
+  }
+
+  @Test
+  void repeatsItselfForTheSameSeedOnly() {
+    String first = budget("--seed", "7").out();
+    assertEquals(first, budget("--seed", "7").out());
+    assertNotEquals(
+        first.replace("seed 7", "seed"), budget("--seed", "8").out().replace("seed 8", "seed"));
+  }
+
+  @Test
+  void explainsItself() {
+    CommandLineRun help = CommandLineRun.of("budget", "--help");
+    assertEquals(0, help.status());
+    for (String word :
+        new String[] {"SCENARIO", "--json", "--chart", "--shots", "--seed", "2000"}) {
+      assertTrue(help.out().contains(word), word);
+    }
+    assertEquals(0, CommandLineRun.of("--help").status());
+    assertTrue(CommandLineRun.of("--help").out().contains("budget"));
+  }
+
+  @Test
+  void knowsItsVersionFromTheBuild() {
+    CommandLineRun version = CommandLineRun.of("--version");
+    assertEquals(0, version.status());
+    assertTrue(version.out().strip().matches("Toprung \\d+\\.\\d+\\.\\d+.*"), version.out());
+    assertEquals(version.out(), CommandLineRun.of("budget", "--version").out());
+  }
+}

@@ -1,0 +1,30 @@
+package org.toprung.budget.report;
+
+import org.toprung.budget.Budget;
+import org.toprung.budget.ReferenceScenario;
+import org.toprung.budget.scenario.Scenario;
+
+/** Contents for the tests of the reports. */
+final class SampleReport {
+  private SampleReport() {}
+
+  static ReportContent of(String scenarioText) {
+    Scenario s = Scenario.parse(scenarioText, "sample.toml");
+    Budget budget = Budget.of(s.drive(), s.pulse()).on(s.bench()).compose();
+    return new ReportContent(s.title(), budget, budget.check(40, 1));
+  }
+
+  static ReportContent reference() {
+    return of(ReferenceScenario.text());
+  }
+
+  /** A drive with several targets, vectors as polarizations, a long title and no bench. */
+  static ReportContent wide() {
+    String text =
+        ReferenceScenario.text()
+            .replace("Rubidium reference drive", "A title that never seems to end, ".repeat(8))
+            .replace("\"sigma+\" ", "[[0.6, 0.1], [0.2, 0.3], [0, 0]] ")
+            .replace("\"sigma-\"\n", "[0.123456789, 0.987654321, 0]\n");
+    return of(text.substring(0, text.indexOf("[bench]")));
+  }
+}

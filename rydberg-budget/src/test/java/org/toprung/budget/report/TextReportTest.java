@@ -1,0 +1,67 @@
+package org.toprung.budget.report;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.List;
+import org.junit.jupiter.api.Test;
+import org.toprung.budget.CauseEntry;
+import org.toprung.budget.Check;
+import org.toprung.budget.ReferenceScenario;
+
+class TextReportTest {
+
+  @Test
+  void fitsAHundredColumnsWhateverTheScenario() {
+    for (ReportContent content : List.of(SampleReport.reference(), SampleReport.wide())) {
+      for (String line : TextReport.render(content).lines().toList()) {
+        assertTrue(line.codePointCount(0, line.length()) <= 100, line);
+        assertEquals(line.stripTrailing(), line);
+      }
+    }
+  }
+
+  @Test
+  void tellsEveryCauseAndEveryWarning() {
+    ReportContent content = SampleReport.of(ReferenceScenario.with("1.2 GHz", "80 MHz"));
+    String text = TextReport.render(content);
+    for (CauseEntry cause : content.budget().causes()) {
+      assertTrue(text.contains(cause.cause()), cause.cause());
+    }
+    assertFalse(content.budget().drive().warnings().isEmpty());
+    assertTrue(text.contains("nearly resonant"), text);
+  }
+
+  @Test
+  void listsWhatIsNotAssessed() {
+    ReportContent content = SampleReport.wide();
+    assertTrue(content.budget().notAssessed().size() > 5);
+    String joined = TextReport.render(content).replaceAll("\\s+", " ");
+    for (String cause : content.budget().notAssessed()) {
+      assertTrue(joined.contains(cause), cause);
+    }
+  }
+
+  @Test
+  void neverHidesADisagreement() {
+    ReportContent sample = SampleReport.reference();
+    Check bad = new Check(0.5, 0.001, false, 40, 1);
+    String text = TextReport.render(new ReportContent("title", sample.budget(), bad));
+    assertTrue(text.contains("DISAGREES"), text);
+    assertTrue(text.contains("the simulation disagrees"), text);
+  }
+
+  @Test
+  void sharesAddUpToOne() {
+    ReportContent content = SampleReport.reference();
+    double sum =
+        content.budget().causes().stream().mapToDouble(c -> content.share(c.error())).sum();
+    assertEquals(1, sum, 1e-12);
+  }
+
+  @Test
+  void cautionsThatFiguresAreEstimates() {
+    assertTrue(TextReport.render(SampleReport.reference()).contains("confirmed on the apparatus"));
+  }
+}

@@ -1,0 +1,229 @@
+package org.toprung.budget.scenario;
+
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import net.jqwik.api.ForAll;
+import net.jqwik.api.Property;
+import net.jqwik.api.constraints.DoubleRange;
+import net.jqwik.api.constraints.IntRange;
+import net.jqwik.api.constraints.Scale;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
+import org.toprung.angular.Polarization;
+import org.toprung.budget.ReferenceScenario;
+import org.toprung.core.atom.Level;
+import org.toprung.core.atom.Species;
+import org.toprung.core.atom.Sublevel;
+import org.toprung.core.drive.Beam;
+import org.toprung.core.drive.Drive;
+import org.toprung.core.quantity.ElectricField;
+import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Length;
+import org.toprung.core.quantity.MagneticField;
+import org.toprung.core.quantity.Power;
+import org.toprung.core.quantity.Temperature;
+
+class ScenarioTest {
+  private static Scenario parse(String text) {
+    return Scenario.parse(text, "some.toml");
+  }
+
+  @Test
+  void readsEveryValueOfTheReference() {
+    Scenario s = parse(ReferenceScenario.text());
+    Drive drive = s.drive();
+    assertEquals("Rubidium reference drive", s.title());
+    assertEquals(Species.RUBIDIUM_87, drive.species());
+    assertEquals(MagneticField.gauss(4), drive.field());
+    assertEquals(Sublevel.hyperfine("5S1/2", 2, 2), drive.start());
+    assertEquals(Level.parse("6P3/2"), drive.intermediate());
+    assertEquals(Sublevel.fine("68S1/2", 0.5), drive.target());
+    assertEquals(Frequency.gigahertz(1.2), drive.detuning());
+    Beam first = drive.steps().get(0).beam();
+    assertEquals(Power.milliwatts(2), first.power());
+    assertEquals(Length.micrometres(20), first.waist());
+    assertEquals(Polarization.SIGMA_PLUS, first.polarization());
+    assertArrayEquals(new double[] {0, 0, 1}, first.direction());
+    Beam second = drive.steps().get(1).beam();
+    assertEquals(Power.milliwatts(150), second.power());
+    assertEquals(Length.micrometres(25), second.waist());
+    assertEquals(Polarization.SIGMA_MINUS, second.polarization());
+    assertArrayEquals(new double[] {0, 0, -1}, second.direction());
+    assertEquals(Math.PI, s.pulse().areaRadians());
+    assertEquals(Frequency.hertz(0), s.pulse().offset());
+    assertEquals(Temperature.microkelvin(10), s.bench().temperature().orElseThrow());
+    assertEquals(
+        List.of(Frequency.kilohertz(80), Frequency.kilohertz(80), Frequency.kilohertz(15)),
+        s.bench().trapFrequencies().orElseThrow());
+    assertEquals(Temperature.kelvin(300), s.bench().environment().orElseThrow());
+    assertEquals(MagneticField.milligauss(2), s.bench().magneticNoise().orElseThrow());
+    assertEquals(ElectricField.millivoltsPerCentimetre(5), s.bench().electricField().orElseThrow());
+    assertEquals(
+        List.of(Frequency.hertz(500), Frequency.hertz(500)), s.bench().linewidths().orElseThrow());
+    assertEquals(
+        List.of(Frequency.kilohertz(2), Frequency.kilohertz(2)), s.bench().drifts().orElseThrow());
+    assertEquals(List.of(0.005, 0.005), s.bench().intensityNoise().orElseThrow());
+  }
+
+  /** What is described in text gives the same drive as what is described in Java. */
+  @Test
+  void agreesWithTheSameDriveBuiltInJava() {
+    Drive built =
+        Drive.of(Species.RUBIDIUM_87)
+            .from(Sublevel.hyperfine("5S1/2", 2, 2))
+            .step(
+                Level.parse("6P3/2"),
+                Beam.gaussian(Power.milliwatts(2), Length.micrometres(20))
+                    .polarized(Polarization.SIGMA_PLUS)
+                    .along(0, 0, 1))
+            .step(
+                Sublevel.fine("68S1/2", 0.5),
+                Beam.gaussian(Power.milliwatts(150), Length.micrometres(25))
+                    .polarized(Polarization.SIGMA_MINUS)
+                    .along(0, 0, -1))
+            .detuned(Frequency.gigahertz(1.2))
+            .in(MagneticField.gauss(4))
+            .resolve();
+    assertEquals(built.rabi(), parse(ReferenceScenario.text()).drive().rabi());
+  }
+
+  @Property(seed = "11", tries = 12)
+  void readsBackWhatQuantitiesPrint(
+      @ForAll @DoubleRange(min = 1e-6, max = 2) @Scale(9) double watts,
+      @ForAll @DoubleRange(min = 1e-6, max = 1e-3) @Scale(12) double metres,
+      @ForAll @DoubleRange(min = 1e8, max = 9e9) double detuning,
+      @ForAll @DoubleRange(min = 0, max = 0.01) @Scale(9) double tesla,
+      @ForAll @IntRange(min = 10, max = 120) int n) {
+    String text =
+        ReferenceScenario.text()
+            .replace("\"2 mW\"", quoted(Power.ofWatts(watts)))
+            .replace("\"20 um\"", quoted(Length.ofMetres(metres)))
+            .replace("\"1.2 GHz\"", quoted(Frequency.ofHertz(detuning)))
+            .replace("\"4 G\"", quoted(MagneticField.ofTesla(tesla)))
+            .replace("\"68S1/2\"", "\"" + n + "S1/2\"");
+    Drive drive = parse(text).drive();
+    assertEquals(watts, drive.steps().get(0).beam().power().watts());
+    assertEquals(metres, drive.steps().get(0).beam().waist().metres());
+    assertEquals(detuning, drive.detuning().hertz());
+    assertEquals(tesla, drive.field().tesla());
+    assertEquals(n, drive.target().level().n());
+  }
+
+  private static String quoted(Object quantity) {
+    return "\"" + quantity + "\"";
+  }
+
+  /** σ+ about z is the vector (x + iy)/√2, whichever length it is given with. */
+  @ParameterizedTest
+  @ValueSource(strings = {"[[1, 0], [0, 1], [0, 0]]", "[[0, 3], [-3, 0], 0]"})
+  void takesPolarizationVectorsOfAnyLengthAndPhase(String vector) {
+    Drive named = parse(ReferenceScenario.text()).drive();
+    Drive given = parse(ReferenceScenario.with("\"sigma+\" ", vector + " ")).drive();
+    assertEquals(named.rabi().hertz(), given.rabi().hertz(), 1e-9 * named.rabi().hertz());
+  }
+
+  @Test
+  void takesRealPolarizationVectors() {
+    Drive vector = parse(ReferenceScenario.with("\"sigma+\" ", "[2, 0, 0] ")).drive();
+    Drive angle = parse(ReferenceScenario.with("\"sigma+\" ", "\"linear 0 deg\" ")).drive();
+    assertEquals(angle.rabi().hertz(), vector.rabi().hertz(), 1e-9 * angle.rabi().hertz());
+  }
+
+  @Test
+  void takesDirectionsOfAnyLength() {
+    Scenario s = parse(ReferenceScenario.with("direction = [0, 0, 1]", "direction = [0, 0, 7.5]"));
+    assertArrayEquals(new double[] {0, 0, 1}, s.drive().steps().get(0).beam().direction());
+  }
+
+  @Test
+  void readsTheOffsetOfThePulse() {
+    Scenario s =
+        parse(ReferenceScenario.with("kind = \"pi\"", "kind = \"pi\"\noffset = \"-10 kHz\""));
+    assertEquals(Frequency.kilohertz(-10), s.pulse().offset());
+  }
+
+  @Test
+  void knowsNothingOfABenchThatIsNotDescribed() {
+    String text = ReferenceScenario.text();
+    Scenario s = parse(text.substring(0, text.indexOf("[bench]")));
+    assertTrue(s.bench().temperature().isEmpty());
+    assertTrue(s.bench().trapFrequencies().isEmpty());
+    assertTrue(s.bench().environment().isEmpty());
+    assertTrue(s.bench().magneticNoise().isEmpty());
+    assertTrue(s.bench().electricField().isEmpty());
+    assertTrue(s.bench().linewidths().isEmpty());
+    assertTrue(s.bench().drifts().isEmpty());
+    assertTrue(s.bench().intensityNoise().isEmpty());
+  }
+
+  @ParameterizedTest
+  @ValueSource(
+      strings = {
+        "temperature",
+        "trap_frequency",
+        "environment_temperature",
+        "magnetic_noise",
+        "electric_field",
+        "linewidth",
+        "drift",
+        "intensity_noise"
+      })
+  void needsNoSingleValueOfTheBench(String key) {
+    String text =
+        ReferenceScenario.text()
+            .lines()
+            .filter(line -> !line.startsWith(key + " "))
+            .reduce("", (a, b) -> a + b + "\n");
+    assertTrue(text.length() < ReferenceScenario.text().length());
+    assertEquals("Rubidium reference drive", parse(text).title());
+  }
+
+  @Test
+  void isCalledLikeItsFileWithoutATitle() {
+    String text = ReferenceScenario.with("title = \"Rubidium reference drive\"", "");
+    assertEquals("monday", Scenario.parse(text, "/bench/monday.toml").title());
+  }
+
+  @Test
+  void saysInTheExceptionWhichFileAndKeyAreToBlame() {
+    ScenarioException e =
+        assertThrows(
+            ScenarioException.class,
+            () -> parse(ReferenceScenario.with("waist = \"25 um\"", "waist = \"25 ly\"")));
+    assertEquals("some.toml", e.file());
+    assertEquals(Optional.of("step[2].waist"), e.key());
+  }
+
+  @Test
+  void blamesNoKeyWhereTheFileIsNotToml() {
+    ScenarioException e =
+        assertThrows(ScenarioException.class, () -> parse("title = \"a\"\nnot toml\n"));
+    assertEquals(Optional.empty(), e.key());
+    assertTrue(e.getMessage().startsWith("some.toml: line 2: "), e.getMessage());
+  }
+
+  @Test
+  void takesFilesThatBeginWithAByteOrderMark(@TempDir Path folder) throws Exception {
+    Path file = Files.writeString(folder.resolve("s.toml"), "\uFEFF" + ReferenceScenario.text());
+    assertEquals("Rubidium reference drive", Scenario.read(file).title());
+  }
+
+  @ParameterizedTest
+  @ValueSource(strings = {"rubidium-two-photon.toml", "caesium-two-photon.toml"})
+  void readsTheShippedExamples(String name) {
+    Scenario s = Scenario.read(Path.of("examples", name));
+    assertTrue(s.drive().rabi().hertz() > 1e5, String.format(Locale.ROOT, "%s", s.drive().rabi()));
+    assertEquals(List.of(), s.drive().warnings());
+    assertTrue(s.bench().temperature().isPresent());
+  }
+}
