@@ -60,7 +60,8 @@ final class RacahSum {
         p2,
         p3,
         0,
-        phase * root(square, squareExponent) / divisor,
+        phase * root(square, squareExponent),
+        divisor,
         (squareExponent >> 1) - divisorExponent);
   }
 
@@ -83,10 +84,10 @@ final class RacahSum {
     int[] e = Factorials.EXPONENT;
     // The twelve lengths of the Δ are the differences of the q and the p.
     double square =
-        (m[q1 - p1] * m[q2 - p1] * m[q3 - p1] / m[p1 + 1])
-            * (m[q1 - p2] * m[q2 - p2] * m[q3 - p2] / m[p2 + 1])
-            * ((m[q1 - p3] * m[q2 - p3] * m[q3 - p3] / m[p3 + 1])
-                * (m[q1 - p4] * m[q2 - p4] * m[q3 - p4] / m[p4 + 1]));
+        (m[q1 - p1] * m[q2 - p1] * m[q3 - p1])
+            * (m[q1 - p2] * m[q2 - p2] * m[q3 - p2])
+            * ((m[q1 - p3] * m[q2 - p3] * m[q3 - p3]) * (m[q1 - p4] * m[q2 - p4] * m[q3 - p4]))
+            / ((m[p1 + 1] * m[p2 + 1]) * (m[p3 + 1] * m[p4 + 1]));
     int squareExponent =
         e[q1 - p1]
             + e[q2 - p1]
@@ -128,7 +129,8 @@ final class RacahSum {
         p2,
         p3,
         p4,
-        top * root(square, squareExponent) / divisor,
+        top * root(square, squareExponent),
+        divisor,
         (squareExponent >> 1) + e[first + 1] - divisorExponent);
   }
 
@@ -138,7 +140,7 @@ final class RacahSum {
   }
 
   /**
-   * factor·2^exponent·N/D for terms of ratio n/d = (t+2)(q1−t)(q2−t)(q3−t) /
+   * factor/divisor·2^exponent·N/D for terms of ratio n/d = (t+2)(q1−t)(q2−t)(q3−t) /
    * ((t+1−p1)(t+1−p2)(t+1−p3) (t+1−p4)); without the factors t+2 and t+1−p4 for a 3j symbol.
    */
   private static double sum(
@@ -153,6 +155,7 @@ final class RacahSum {
       int p3,
       int p4,
       double factor,
+      double divisor,
       int exponent) {
     long numerator = 1;
     long denominator = 1;
@@ -167,12 +170,26 @@ final class RacahSum {
       if (Long.numberOfLeadingZeros(d) + Long.numberOfLeadingZeros(denominator) < 66
           || Long.numberOfLeadingZeros(n) + Long.numberOfLeadingZeros(Math.abs(numerator)) < 66) {
         return longSum(
-            six, first, t, q1, q2, q3, p1, p2, p3, p4, numerator, denominator, factor, exponent);
+            six,
+            first,
+            t,
+            q1,
+            q2,
+            q3,
+            p1,
+            p2,
+            p3,
+            p4,
+            numerator,
+            denominator,
+            factor,
+            divisor,
+            exponent);
       }
       denominator *= d;
       numerator = denominator - n * numerator;
     }
-    return scaled(factor * ((double) numerator / (double) denominator), exponent);
+    return scaled(factor * numerator / (divisor * denominator), exponent);
   }
 
   /** Goes on from t downwards in as many limbs as needed. */
@@ -190,6 +207,7 @@ final class RacahSum {
       long numerator,
       long denominator,
       double factor,
+      double divisor,
       int exponent) {
     int largest = Math.max(Math.max(q1, q2), q3) - first + (six ? from + 2 : 0);
     int bitsPerStep = (six ? 4 : 3) * (33 - Integer.numberOfLeadingZeros(largest));
@@ -218,7 +236,7 @@ final class RacahSum {
     }
     int topN = top(limbs, 0, size);
     int topD = top(limbs, half, size);
-    double ratio = leading(limbs, 0, topN) / leading(limbs, half, topD);
+    double ratio = leading(limbs, 0, topN) / (divisor * leading(limbs, half, topD));
     int shift =
         64 * (topN - topD)
             + Long.numberOfLeadingZeros(limbs[half + topD])
