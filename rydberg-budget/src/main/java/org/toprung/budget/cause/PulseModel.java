@@ -17,11 +17,12 @@ import org.toprung.core.structure.Lifetimes;
 import org.toprung.core.structure.StarkShift;
 
 /**
- * A pulse on a drive, reduced to what causes need: the effective two-level system, how each beam moves
- * it, and the rates of loss.
+ * A pulse on a drive, reduced to what causes need: the effective two-level system, how each beam
+ * moves it, and the rates of loss.
  *
- * <p>{@link #variations()} are the same pulse with one atomic input moved by its standard uncertainty;
- * each is planned anew, because length and frequency of a real pulse are calibrated on the atom.
+ * <p>{@link #variations()} are the same pulse with one atomic input moved by its standard
+ * uncertainty; each is planned anew, because length and frequency of a real pulse are calibrated on
+ * the atom.
  *
  * <p>Immutable.
  */
@@ -61,8 +62,7 @@ public final class PulseModel {
     this.plan = PulsePlanner.plan(ladder, pulse.areaRadians());
     this.elimination = Elimination.of(ladder);
     this.stark = StarkShift.of(drive.species(), drive.target());
-    this.noiseFree =
-        NoiseFreePulse.of(ladder, setting(plan.frequencyOffset().hertz()), seconds());
+    this.noiseFree = NoiseFreePulse.of(ladder, setting(plan.frequencyOffset().hertz()), seconds());
   }
 
   /**
@@ -85,8 +85,7 @@ public final class PulseModel {
     Lifetimes lifetimes = Lifetimes.of(drive.species());
     double first = 1 + drive.steps().get(0).relativeUncertainty();
     double second = 1 + drive.steps().get(1).relativeUncertainty();
-    double decay =
-        1 + lifetimes.spontaneousRatePerSecond(drive.intermediate()).relative();
+    double decay = 1 + lifetimes.spontaneousRatePerSecond(drive.intermediate()).relative();
     double spontaneous = 1 + lifetimes.spontaneousRatePerSecond(target()).relative();
     double blackbody =
         1 + lifetimes.blackbodyRatePerSecond(target(), Temperature.ofKelvin(300)).relative();
@@ -139,8 +138,8 @@ public final class PulseModel {
   }
 
   /**
-   * Setting of the ladder during the pulse, with the laser moved to the shifted resonance and by the
-   * pulse's own offset.
+   * Setting of the ladder during the pulse, with the laser moved to the shifted resonance and by
+   * the pulse's own offset.
    *
    * @return the setting
    */

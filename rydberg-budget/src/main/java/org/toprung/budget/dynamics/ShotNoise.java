@@ -12,8 +12,8 @@ import org.toprung.core.quantity.Frequency;
 import org.toprung.core.structure.StarkShift;
 
 /**
- * Draws what is different in one shot: velocity and position of the atom, intensities, fields, laser
- * frequencies.
+ * Draws what is different in one shot: velocity and position of the atom, intensities, fields,
+ * laser frequencies.
  *
  * <p>Immutable; safe for use by several threads, each with its own generator.
  */
@@ -34,10 +34,10 @@ final class ShotNoise {
     this.motion =
         bench
             .temperature()
-            .map(t -> ThermalMotion.of(drive.species().massKilograms(), t, bench.trapFrequencies()));
+            .map(
+                t -> ThermalMotion.of(drive.species().massKilograms(), t, bench.trapFrequencies()));
     this.magnetic = bench.magneticNoise().map(b -> b.tesla()).orElse(0.0);
-    this.electric =
-        bench.electricField().map(e -> e.voltsPerMetre()).orElse(0.0) / Math.sqrt(3);
+    this.electric = bench.electricField().map(e -> e.voltsPerMetre()).orElse(0.0) / Math.sqrt(3);
     this.stark = StarkShift.of(drive.species(), drive.target());
     int steps = drive.steps().size();
     this.drift = hertz(bench.drifts(), steps);
@@ -82,15 +82,18 @@ final class ShotNoise {
         doppler -= wave[a] * velocity[a] / (2 * Math.PI);
       }
       double relative = Math.max(0, 1 + intensity[k] * random.nextGaussian());
-      double offset =
-          nominal.laserOffsetHertz(k) + drift[k] * random.nextGaussian() + doppler;
+      double offset = nominal.laserOffsetHertz(k) + drift[k] * random.nextGaussian() + doppler;
       setting =
           setting
               .withLaserOffset(k, offset)
               .withFieldFactor(
                   k,
                   Math.sqrt(relative)
-                      * drive.steps().get(k).beam().fieldFactorAt(position[0], position[1], position[2]));
+                      * drive
+                          .steps()
+                          .get(k)
+                          .beam()
+                          .fieldFactorAt(position[0], position[1], position[2]));
     }
     return setting.withTargetShift(
         stark.hertz(

@@ -9,9 +9,10 @@ import org.toprung.core.quantity.Estimate;
  * Quadratic Stark shift of a sublevel |J, m⟩ in a static electric field of any direction.
  *
  * <p>ΔE/h = −½ [α₀E² + α₂ (3m² − J(J+1))/(J(2J−1)) · (3E<sub>z</sub>² − E²)/2], with z the
- * quantization axis and no tensor part for J = ½. Diagonal in m, which holds while the shift is small
- * against the Zeeman splitting; quadratic, which holds while it is small against the distance to the
- * next level of other parity. Reference: Khadjavi, Lurio and Happer, Phys. Rev. 167, 128 (1968).
+ * quantization axis and no tensor part for J = ½. Diagonal in m, which holds while the shift is
+ * small against the Zeeman splitting; quadratic, which holds while it is small against the distance
+ * to the next level of other parity. Reference: Khadjavi, Lurio and Happer, Phys. Rev. 167, 128
+ * (1968).
  *
  * <p>Immutable and thread-safe.
  */
