@@ -8,27 +8,28 @@ import org.toprung.core.atom.Species;
 import org.toprung.core.cache.BoundedCache;
 
 /**
- * Radial integrals by Numerov integration at measured energies: in the Coulomb potential for hydrogen,
- * and for an alkali atom in the l-dependent model potential of Marinescu, Sadeghpour and Dalgarno,
- * Phys. Rev. A 49, 982 (1994), with spin-orbit energy.
+ * Radial integrals by Numerov integration at measured energies: in the Coulomb potential for
+ * hydrogen, and for an alkali atom in the l-dependent model potential of Marinescu, Sadeghpour and
+ * Dalgarno, Phys. Rev. A 49, 982 (1994), with spin-orbit energy.
  *
- * <p><b>Core polarization.</b> The valence electron induces a dipole in the core, so the operator is r −
- * α_c r/(r² + r_c²)^{3/2} (Hameed, Herzenberg and James, J. Phys. B 1, 822 (1968); Hameed, J. Phys. B
- * 5, 746 (1972)). Without it the elements from the ground level to the second resonance come out 25 to
- * 45 % high. The cutoff radius r_c of P_j is calibrated so that the highest measured element from the
- * ground level to nP_j is met: near threshold the inner part of a wave no longer changes with n, so this
- * member says most about higher n. Pairs of S and P_j take that radius, other pairs the larger of both
- * levels, since the core is polarized as a dipole where both waves are outside it; for l ≠ 1 the radius
- * is that of the potential.
+ * <p><b>Core polarization.</b> The valence electron induces a dipole in the core, so the operator
+ * is r − α_c r/(r² + r_c²)^{3/2} (Hameed, Herzenberg and James, J. Phys. B 1, 822 (1968); Hameed,
+ * J. Phys. B 5, 746 (1972)). Without it the elements from the ground level to the second resonance
+ * come out 25 to 45 % high. The cutoff radius r_c of P_j is calibrated so that the highest measured
+ * element from the ground level to nP_j is met: near threshold the inner part of a wave no longer
+ * changes with n, so this member says most about higher n. Pairs of S and P_j take that radius,
+ * other pairs the larger of both levels, since the core is polarized as a dipole where both waves
+ * are outside it; for l ≠ 1 the radius is that of the potential.
  *
- * <p><b>Accuracy.</b> Hydrogen: two grids and Richardson extrapolation, relative error below 1e-10 to n
- * = 100. Alkali atoms: the grid error of 1e-5 is far below that of the model.
+ * <p><b>Accuracy.</b> Hydrogen: two grids and Richardson extrapolation, relative error below 1e-10
+ * to n = 100. Alkali atoms: halving the step changes elements by 1e-6, and by 1e-4 where they
+ * nearly vanish, far below the error of the model.
  *
  * <p>Immutable to the outside; waves are kept in a bounded cache.
  */
 public final class NumerovMethod implements RadialMethod {
-  private static final double STEP = 0.01;
-  private static final int WAVES = 256;
+  private static final double STEP = 0.02;
+  private static final int WAVES = 400;
   private static final int SOLVERS = 48;
 
   /** Beyond this radius, in a0, a cutoff would switch the correction off where it matters. */
@@ -46,6 +47,7 @@ public final class NumerovMethod implements RadialMethod {
   private final BoundedCache<Level, RadialWave> waves;
   private final NumerovMethod refined;
   private final Species species;
+  private final BoundedCache<Integer, Double> potentialCutoffs;
   private final BoundedCache<Integer, Double> calibrations;
 
   private NumerovMethod(
@@ -76,8 +78,12 @@ public final class NumerovMethod implements RadialMethod {
                 solvers
                     .get(new SolverKey(level.l(), level.doubledJ()))
                     .solve(level.n(), effectiveN.applyAsDouble(level)));
+    this.potentialCutoffs =
+        new BoundedCache<>(
+            ModelPotential.HIGHEST_L + 1, l -> ModelPotential.cutoffRadius(species, l));
     // one entry for j = 1/2 and one for 3/2; NaN where nothing is measured
-    this.calibrations = new BoundedCache<>(2, doubledJ -> calibrate ? calibrated(doubledJ) : Double.NaN);
+    this.calibrations =
+        new BoundedCache<>(2, doubledJ -> calibrate ? calibrated(doubledJ) : Double.NaN);
   }
 
   /**
@@ -99,12 +105,7 @@ public final class NumerovMethod implements RadialMethod {
    */
   public static NumerovMethod uncalibrated(Species species) {
     return new NumerovMethod(
-        "model potential, Numerov, uncalibrated",
-        species::effectiveN,
-        species,
-        false,
-        STEP,
-        null);
+        "model potential, Numerov, uncalibrated", species::effectiveN, species, false, STEP, null);
   }
 
   /**
@@ -114,8 +115,8 @@ public final class NumerovMethod implements RadialMethod {
    */
   public static NumerovMethod hydrogen() {
     NumerovMethod fine =
-        new NumerovMethod("hydrogen, Numerov", Level::n, null, false, STEP, null);
-    return new NumerovMethod(fine.description, Level::n, null, false, 2 * STEP, fine);
+        new NumerovMethod("hydrogen, Numerov", Level::n, null, false, STEP / 2, null);
+    return new NumerovMethod(fine.description, Level::n, null, false, STEP, fine);
   }
 
   @Override
@@ -128,8 +129,7 @@ public final class NumerovMethod implements RadialMethod {
     double bare = waves.get(a).dipole(waves.get(b));
     if (species == null) {
       // the error of the Numerov recursion is h⁴ + O(h⁶)
-      double fine =
-          refined == null ? bare : refined.waves.get(a).dipole(refined.waves.get(b));
+      double fine = refined == null ? bare : refined.waves.get(a).dipole(refined.waves.get(b));
       return new RadialIntegral(fine + (fine - bare) / 15, 0, false);
     }
     boolean calibrated = a.l() + b.l() == 1 && calibration(a.l() == 1 ? a : b) > 0;
@@ -159,13 +159,12 @@ public final class NumerovMethod implements RadialMethod {
   }
 
   private double potentialCutoff(int l) {
-    String letter = Level.of(l + 1, l, 2 * l + 1).series().substring(0, 1);
-    return species.datum(Datum.Kind.POTENTIAL_RC, l > 3 ? "F" : letter).orElseThrow().value();
+    return potentialCutoffs.get(Math.min(l, ModelPotential.HIGHEST_L));
   }
 
   /**
-   * The cutoff radius at which the highest measured element from the ground level to nP_j is met, the
-   * largest there is; NaN where no element is measured or none can meet it.
+   * The cutoff radius at which the highest measured element from the ground level to nP_j is met,
+   * the largest there is; NaN where no element is measured or none can meet it.
    */
   private double calibrated(int doubledJ) {
     Level ground = species.groundLevel();

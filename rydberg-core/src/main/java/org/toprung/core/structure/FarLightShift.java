@@ -5,9 +5,11 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Set;
 import java.util.concurrent.ConcurrentHashMap;
+import java.util.stream.IntStream;
 import org.toprung.angular.SphericalComponents;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
+import org.toprung.core.cache.BoundedCache;
 import org.toprung.core.quantity.Estimate;
 import org.toprung.core.quantity.PhysicalConstants;
 
@@ -18,20 +20,22 @@ import org.toprung.core.quantity.PhysicalConstants;
  *
  * <p>ΔE = −(E0²/4) Σ_k [A_k/(E_k − E_a − ħω) + B_k/(E_k − E_a + ħω)],
  *
- * <p>A_k = Σ_q |a_q|² |⟨k m+q|d_q|a m⟩|² (absorbing first), B_k = Σ_q |a_q|² |⟨k m−q|d_−q|a m⟩|² (emitting
- * first); the nuclear spin is a spectator. The polarizability of the core adds −α_c E0²/4, taken static.
- * Terms that would mix different m are left out: this is the diagonal shift.
+ * <p>A_k = Σ_q |a_q|² |⟨k m+q|d_q|a m⟩|² (absorbing first), B_k = Σ_q |a_q|² |⟨k m−q|d_−q|a m⟩|²
+ * (emitting first); the nuclear spin is a spectator. The polarizability of the core adds −α_c
+ * E0²/4, taken static. Terms that would mix different m are left out: this is the diagonal shift.
  *
- * <p><b>Above the ionization threshold of the level</b>, where a laser photon could free the electron, the
- * sum over the continuum is done by closure: with Σ(A_k − B_k) = 0 and the Thomas-Reiche-Kuhn sum
- * rule the same expression is
+ * <p><b>Above the ionization threshold of the level</b>, where a laser photon could free the
+ * electron, the sum over the continuum is done by closure: with Σ(A_k − B_k) = 0 and the
+ * Thomas-Reiche-Kuhn sum rule the same expression is
  *
- * <p>ΔE = e²E0²/(4mω²) + (E0²/4) Σ_k (ω_k/ω)² [A_k/(ħω − ħω_k) − B_k/(ħω + ħω_k)], ħω_k = E_k − E_a:
+ * <p>ΔE = e²E0²/(4mω²) + (E0²/4) Σ_k (ω_k/ω)² [A_k/(ħω − ħω_k) − B_k/(ħω + ħω_k)], ħω_k = E_k −
+ * E_a:
  *
  * <p>the energy of a free electron in the field, and a sum that low-lying levels dominate.
  *
- * <p><b>Near levels</b> are those the caller treats without perturbation theory: of them the resonant
- * term (the first of an upper level, the second of a lower one) is left out, the other is kept.
+ * <p><b>Near levels</b> are those the caller treats without perturbation theory: of them the
+ * resonant term (the first of an upper level, the second of a lower one) is left out, the other is
+ * kept.
  *
  * <p>Uncertainty: that of the elements; 5 % of the core part; without closure 1 atomic unit for the
  * continuum.
@@ -45,12 +49,21 @@ public final class FarLightShift {
   private static final double CORE_TRUST = 0.05;
   private static final double CONTINUUM_AU = 1;
 
+  private static final int SUBLEVELS = 500;
+
+  private record Sublevel(Level level, int doubledMj) {}
+
+  /** A level of the sum; shares are those of r_−1, r_0, r_+1 acting on the sublevel. */
+  private record Term(Level other, double distanceHertz, Estimate strength, double[] shares) {}
+
   private final Species species;
   private final DipoleElements elements;
+  private final BoundedCache<Sublevel, List<Term>> terms;
 
   private FarLightShift(Species species) {
     this.species = species;
     this.elements = DipoleElements.of(species);
+    this.terms = new BoundedCache<>(SUBLEVELS, this::terms);
   }
 
   /**
@@ -72,8 +85,8 @@ public final class FarLightShift {
    * @param polarization components of the unit polarization vector about the axis of mJ
    * @param nearLevels levels whose resonant term is left out
    * @return shift/h in Hz/(V/m)², to be multiplied by E0²; positive where the level moves up
-   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue, the
-   *     projection is none of the level, or the frequency is not positive and finite
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
+   *     the projection is none of the level, or the frequency is not positive and finite
    */
   public Estimate hertzPerFieldSquared(
       Level level,
@@ -92,39 +105,48 @@ public final class FarLightShift {
     }
     double energy = species.energyHertz(level).value();
     boolean closure = laserFrequencyHertz > -energy;
-    List<Level> partners = Partners.of(species, level, LARGEST_N);
     double coreAu = species.corePolarizabilityAu().value();
     double unit = PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ / 4;
     double shift = -unit * coreAu;
-    double uncertainty =
-        unit * (CORE_TRUST * coreAu + (closure ? 0 : CONTINUUM_AU));
+    double uncertainty = unit * (CORE_TRUST * coreAu + (closure ? 0 : CONTINUUM_AU));
     if (closure) {
       double photonAu = laserFrequencyHertz / PhysicalConstants.HARTREE_HERTZ;
       shift += unit / (photonAu * photonAu);
     }
-    for (Level other : partners) {
+    for (Term term : terms.get(new Sublevel(level, doubledMj))) {
       double absorbing = 0;
       double emitting = 0;
       for (int q = -1; q <= 1; q++) {
         double power = polarization.power(q);
-        absorbing += power * SecondOrder.share(level, doubledMj, other, q);
-        emitting += power * SecondOrder.share(level, doubledMj, other, -q);
+        absorbing += power * term.shares()[q + 1];
+        emitting += power * term.shares()[1 - q];
       }
-      if (absorbing == 0 && emitting == 0) {
-        continue;
-      }
-      Estimate strength = elements.reduced(other, level).strength();
-      double distance = species.energyHertz(other).value() - energy;
-      boolean near = nearLevels.contains(other);
+      boolean near = nearLevels.contains(term.other());
       double sum =
           closure
-              ? remainder(absorbing, emitting, distance, laserFrequencyHertz, near)
-              : direct(absorbing, emitting, distance, laserFrequencyHertz, near);
+              ? remainder(absorbing, emitting, term.distanceHertz(), laserFrequencyHertz, near)
+              : direct(absorbing, emitting, term.distanceHertz(), laserFrequencyHertz, near);
       double factor = SecondOrder.COUPLING_SQUARED / 4 * sum;
-      shift += factor * strength.value();
-      uncertainty += Math.abs(factor) * strength.uncertainty();
+      shift += factor * term.strength().value();
+      uncertainty += Math.abs(factor) * term.strength().uncertainty();
     }
     return new Estimate(shift, uncertainty);
+  }
+
+  private List<Term> terms(Sublevel sublevel) {
+    Level level = sublevel.level();
+    double energy = species.energyHertz(level).value();
+    return Partners.of(species, level, LARGEST_N).stream()
+        .map(
+            other ->
+                new Term(
+                    other,
+                    species.energyHertz(other).value() - energy,
+                    elements.reduced(other, level).strength(),
+                    IntStream.rangeClosed(-1, 1)
+                        .mapToDouble(q -> SecondOrder.share(level, sublevel.doubledMj(), other, q))
+                        .toArray()))
+        .toList();
   }
 
   /** The two terms of a level, with the sign of a shift, in 1/Hz. */
