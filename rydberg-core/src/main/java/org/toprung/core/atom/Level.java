@@ -121,8 +121,12 @@ public final class Level implements Comparable<Level> {
    * @return the level without n, for example "P3/2"
    */
   public String series() {
-    String letter = l < LETTERS.length() ? LETTERS.substring(l, l + 1) : "[" + l + "]";
-    return letter + doubledJ + "/2";
+    return letter(l) + doubledJ + "/2";
+  }
+
+  /** The letter of an orbital quantum number, or the number in brackets. */
+  static String letter(int l) {
+    return l < LETTERS.length() ? LETTERS.substring(l, l + 1) : "[" + l + "]";
   }
 
   /** Orders by n, then l, then j. */

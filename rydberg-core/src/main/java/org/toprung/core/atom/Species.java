@@ -8,6 +8,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.function.Function;
 import java.util.stream.Collectors;
+import org.toprung.core.cache.BoundedCache;
 import org.toprung.core.quantity.Estimate;
 import org.toprung.core.quantity.PhysicalConstants;
 
@@ -46,6 +47,8 @@ public final class Species {
   /** Relative trust in the polarization formula: at l = 4 it meets measured defects to 5 %. */
   private static final double POLARIZATION_TRUST = 0.1;
 
+  private static final int ENERGIES = 5000;
+
   private final String name;
   private final Catalogue catalogue;
   private final double massKilograms;
@@ -53,6 +56,9 @@ public final class Species {
   private final double gI;
   private final Level groundLevel;
   private final double rydbergHertz;
+  private final int[] lowestN;
+  private final Estimate corePolarizabilityAu;
+  private final BoundedCache<Level, Estimate> energies;
   private final Estimate ionizationHertz;
   private final Map<Level, Estimate> measuredEnergies;
   private final Map<String, List<Datum>> series;
@@ -69,6 +75,9 @@ public final class Species {
     double electron = PhysicalConstants.ELECTRON_MASS;
     this.rydbergHertz =
         PhysicalConstants.RYDBERG_HERTZ / (1 + electron / (massKilograms - electron));
+    this.lowestN = lowestN();
+    this.corePolarizabilityAu = require(Datum.Kind.CORE_POLARIZABILITY, "").estimate();
+    this.energies = new BoundedCache<>(ENERGIES, this::energy);
     this.series = new HashMap<>();
     this.hyperfineMembers = new HashMap<>();
     List<Datum> levelEnergies = new ArrayList<>();
@@ -204,11 +213,20 @@ public final class Species {
   }
 
   private int lowestN(Level level) {
-    String letter = level.series().substring(0, level.series().indexOf(level.doubledJ() + "/2"));
-    return catalogue
-        .best(name, Datum.Kind.LOWEST_N, letter)
-        .map(datum -> (int) datum.value())
-        .orElse(level.l() + 1);
+    return level.l() < lowestN.length ? lowestN[level.l()] : level.l() + 1;
+  }
+
+  private int[] lowestN() {
+    int[] lowest = new int[POLARIZATION_L];
+    for (int l = 0; l < lowest.length; l++) {
+      int least = l + 1;
+      lowest[l] =
+          catalogue
+              .best(name, Datum.Kind.LOWEST_N, Level.letter(l))
+              .map(datum -> (int) datum.value())
+              .orElse(least);
+    }
+    return lowest;
   }
 
   /**
@@ -267,6 +285,10 @@ public final class Species {
    *     is in the catalogue
    */
   public Estimate energyHertz(Level level) {
+    return energies.get(level);
+  }
+
+  private Estimate energy(Level level) {
     Estimate measured = measuredEnergies.get(level);
     if (measured != null) {
       return measured;
@@ -423,7 +445,7 @@ public final class Species {
    * @return polarizability in atomic units (a0³)
    */
   public Estimate corePolarizabilityAu() {
-    return require(Datum.Kind.CORE_POLARIZABILITY, "").estimate();
+    return corePolarizabilityAu;
   }
 
   /**

@@ -17,6 +17,9 @@ import org.toprung.core.quantity.PhysicalConstants;
  * section 5⁵; Greene and Aymar, Phys. Rev. A 44, 1773 (1991)).
  */
 final class ModelPotential implements ValencePotential {
+  /** The last l with parameters of its own; higher ones share them. */
+  static final int HIGHEST_L = 3;
+
   private static final String LETTERS = "SPDF";
 
   /** The slowest screening exponent in use is above 1, so that r² e^{-a r} is below 1e-14 here. */
@@ -35,18 +38,28 @@ final class ModelPotential implements ValencePotential {
   private final double spinOrbit;
 
   ModelPotential(Species species, int l, int doubledJ) {
-    String letter = LETTERS.substring(Math.min(l, 3), Math.min(l, 3) + 1);
+    String letter = letter(l);
     this.charge = parameter(species, Datum.Kind.NUCLEAR_CHARGE, "");
     this.a1 = parameter(species, Datum.Kind.POTENTIAL_A1, letter);
     this.a2 = parameter(species, Datum.Kind.POTENTIAL_A2, letter);
     this.a3 = parameter(species, Datum.Kind.POTENTIAL_A3, letter);
     this.a4 = parameter(species, Datum.Kind.POTENTIAL_A4, letter);
-    this.rc = parameter(species, Datum.Kind.POTENTIAL_RC, letter);
+    this.rc = cutoffRadius(species, l);
     this.alpha = species.corePolarizabilityAu().value();
     double j = doubledJ / 2.0;
     double product = (j * (j + 1) - l * (l + 1.0) - 0.75) / 2;
     this.spinOrbit =
         PhysicalConstants.FINE_STRUCTURE * PhysicalConstants.FINE_STRUCTURE / 2 * product;
+  }
+
+  private static String letter(int l) {
+    int row = Math.min(l, HIGHEST_L);
+    return LETTERS.substring(row, row + 1);
+  }
+
+  /** The cutoff radius of the core polarization for an l, in a0. */
+  static double cutoffRadius(Species species, int l) {
+    return parameter(species, Datum.Kind.POTENTIAL_RC, letter(l));
   }
 
   private static double parameter(Species species, Datum.Kind kind, String letter) {

@@ -1,5 +1,6 @@
 package org.toprung.core.radial;
 
+import java.util.Arrays;
 import java.util.Locale;
 
 /**
@@ -33,8 +34,8 @@ final class NumerovSolver {
   private final double centrifugal;
   private final int l;
 
-  /** 8x²V + centrifugal/x² inside the core, by grid index from 1. */
-  private final double[] core;
+  /** Replaced by a longer table when a higher level asks for it; the numbers never change. */
+  private volatile double[] strengths;
 
   NumerovSolver(ValencePotential potential, int l, double step) {
     this.spinOrbit = 8 * potential.spinOrbit();
@@ -43,11 +44,12 @@ final class NumerovSolver {
     this.l = l;
     this.centrifugal = (2 * l + 0.5) * (2 * l + 1.5);
     int size = (int) Math.ceil(Math.sqrt(potential.coreRadius()) / step) + 1;
-    this.core = new double[size];
+    double[] core = new double[size];
     for (int i = 1; i < size; i++) {
       double x2 = i * step * i * step;
       core[i] = 8 * x2 * potential.energy(x2) + centrifugal / x2;
     }
+    this.strengths = core;
   }
 
   /**
@@ -68,24 +70,27 @@ final class NumerovSolver {
     // out of the chain of dependent operations
     double wOuter = 0;
     double w = (n - l - 1) % 2 == 0 ? SEED : -SEED;
-    double inverse = 1 / (1 - twelfth * strength(last - 1, energy));
+    double inverse = 1;
     y[last - 1] = w * inverse;
     double sum = 0;
     int nodes = 0;
     int first = 1;
     boolean allowedSeen = false;
+    double energyScale = 8 * energy * step * step;
+    double[] g = strengths(last);
     for (int i = last - 1; i > 1; i--) {
       double here = y[i];
       sum += (double) i * i * here * here;
       double wInner = (12 * inverse - 10) * w - wOuter;
-      double g = strength(i - 1, energy);
-      inverse = 1 / (1 - twelfth * g);
+      double strength = g[i - 1] - energyScale * (i - 1) * (i - 1);
+      inverse = 1 / (1 - twelfth * strength);
       double inner = wInner * inverse;
-      boolean changedSign = inner < 0 != here < 0;
-      if (g < 0) {
+      if (strength < 0) {
         allowedSeen = true;
-        nodes += changedSign ? 1 : 0;
-      } else if (allowedSeen && (changedSign || Math.abs(inner) >= Math.abs(here))) {
+        if (inner * here < 0) {
+          nodes++;
+        }
+      } else if (allowedSeen && (inner * here < 0 || Math.abs(inner) >= Math.abs(here))) {
         first = i;
         break;
       }
@@ -104,16 +109,19 @@ final class NumerovSolver {
     return new RadialWave(step, first, y, nodes);
   }
 
-  /** The bracket of y″ = […] y at a grid index. */
-  private double strength(int i, double energy) {
-    double x = i * step;
-    double x2 = x * x;
-    if (i < core.length) {
-      return core[i] - 8 * x2 * energy;
+  /** 8x²V + centrifugal/x² by grid index, at least up to a last one. */
+  private double[] strengths(int last) {
+    double[] known = strengths;
+    if (known.length > last) {
+      return known;
     }
-    double inverse = 1 / x2;
-    return -8
-        - 8 * x2 * energy
-        + inverse * (centrifugal + inverse * (spinOrbit - polarization * inverse));
+    double[] grown = Arrays.copyOf(known, last + 1 + last / 4);
+    for (int i = known.length; i < grown.length; i++) {
+      double inverse = 1 / (i * step * i * step);
+      grown[i] = -8 + inverse * (centrifugal + inverse * (spinOrbit - polarization * inverse));
+    }
+    // two threads that grow the table at once compute the same numbers
+    strengths = grown;
+    return grown;
   }
 }

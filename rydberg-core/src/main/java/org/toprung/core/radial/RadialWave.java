@@ -2,7 +2,7 @@ package org.toprung.core.radial;
 
 /** A normalized wave on the grid x = ih, see {@link NumerovSolver}. */
 final class RadialWave {
-  private static final double CORE_REACH = 400;
+  private static final double CORE_REACH = 100;
 
   private final double step;
   private final int first;
@@ -40,8 +40,8 @@ final class RadialWave {
   }
 
   /**
-   * ∫ P_a r (r² + r_c²)^−3/2 P_b dr = 2∫ x⁴ (x⁴ + r_c²)^−3/2 y_a y_b dx, up to {@value #CORE_REACH}
-   * a0: further out the operator is below 1e-5 of r even next to the first node of a wave.
+   * ∫ P_a r (r² + r_c²)^−3/2 P_b dr = 2∫ x⁴ (x⁴ + r_c²)^−3/2 y_a y_b dx, up to 100 a0: further out
+   * the operator is below 2e-5 of r.
    */
   double corePolarization(RadialWave other, double rc) {
     int from = Math.max(first, other.first);

@@ -38,4 +38,9 @@ public record DipoleElement(double valueA0, double uncertaintyA0, Origin origin,
   public Estimate strength() {
     return new Estimate(valueA0 * valueA0, 2 * Math.abs(valueA0) * uncertaintyA0);
   }
+
+  /** The element of opposite sign. */
+  DipoleElement negate() {
+    return new DipoleElement(-valueA0, uncertaintyA0, origin, source);
+  }
 }

@@ -37,6 +37,9 @@ public final class DipoleElements {
   private static final double CALIBRATED_PART = 0.05;
   private static final double COMPUTED_PART = 0.5;
 
+  /**
+   * The lower level in the order of levels stands first: the mirrored element follows by symmetry.
+   */
   private record Pair(Level a, Level b) {}
 
   private final Species species;
@@ -91,7 +94,11 @@ public final class DipoleElements {
    *     if the element is forbidden; the message names the rule
    */
   public DipoleElement reduced(Level a, Level b) {
-    return elements.get(new Pair(a, b));
+    if (a.compareTo(b) <= 0) {
+      return elements.get(new Pair(a, b));
+    }
+    DipoleElement mirrored = elements.get(new Pair(b, a));
+    return (a.doubledJ() - b.doubledJ()) % 4 == 0 ? mirrored : mirrored.negate();
   }
 
   private DipoleElement evaluate(Pair pair) {

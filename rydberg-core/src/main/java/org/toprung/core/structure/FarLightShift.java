@@ -5,9 +5,11 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Set;
 import java.util.concurrent.ConcurrentHashMap;
+import java.util.stream.IntStream;
 import org.toprung.angular.SphericalComponents;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
+import org.toprung.core.cache.BoundedCache;
 import org.toprung.core.quantity.Estimate;
 import org.toprung.core.quantity.PhysicalConstants;
 
@@ -47,12 +49,21 @@ public final class FarLightShift {
   private static final double CORE_TRUST = 0.05;
   private static final double CONTINUUM_AU = 1;
 
+  private static final int SUBLEVELS = 500;
+
+  private record Sublevel(Level level, int doubledMj) {}
+
+  /** A level of the sum; shares are those of r_−1, r_0, r_+1 acting on the sublevel. */
+  private record Term(Level other, double distanceHertz, Estimate strength, double[] shares) {}
+
   private final Species species;
   private final DipoleElements elements;
+  private final BoundedCache<Sublevel, List<Term>> terms;
 
   private FarLightShift(Species species) {
     this.species = species;
     this.elements = DipoleElements.of(species);
+    this.terms = new BoundedCache<>(SUBLEVELS, this::terms);
   }
 
   /**
@@ -94,7 +105,6 @@ public final class FarLightShift {
     }
     double energy = species.energyHertz(level).value();
     boolean closure = laserFrequencyHertz > -energy;
-    List<Level> partners = Partners.of(species, level, LARGEST_N);
     double coreAu = species.corePolarizabilityAu().value();
     double unit = PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ / 4;
     double shift = -unit * coreAu;
@@ -103,29 +113,40 @@ public final class FarLightShift {
       double photonAu = laserFrequencyHertz / PhysicalConstants.HARTREE_HERTZ;
       shift += unit / (photonAu * photonAu);
     }
-    for (Level other : partners) {
+    for (Term term : terms.get(new Sublevel(level, doubledMj))) {
       double absorbing = 0;
       double emitting = 0;
       for (int q = -1; q <= 1; q++) {
         double power = polarization.power(q);
-        absorbing += power * SecondOrder.share(level, doubledMj, other, q);
-        emitting += power * SecondOrder.share(level, doubledMj, other, -q);
+        absorbing += power * term.shares()[q + 1];
+        emitting += power * term.shares()[1 - q];
       }
-      if (absorbing == 0 && emitting == 0) {
-        continue;
-      }
-      Estimate strength = elements.reduced(other, level).strength();
-      double distance = species.energyHertz(other).value() - energy;
-      boolean near = nearLevels.contains(other);
+      boolean near = nearLevels.contains(term.other());
       double sum =
           closure
-              ? remainder(absorbing, emitting, distance, laserFrequencyHertz, near)
-              : direct(absorbing, emitting, distance, laserFrequencyHertz, near);
+              ? remainder(absorbing, emitting, term.distanceHertz(), laserFrequencyHertz, near)
+              : direct(absorbing, emitting, term.distanceHertz(), laserFrequencyHertz, near);
       double factor = SecondOrder.COUPLING_SQUARED / 4 * sum;
-      shift += factor * strength.value();
-      uncertainty += Math.abs(factor) * strength.uncertainty();
+      shift += factor * term.strength().value();
+      uncertainty += Math.abs(factor) * term.strength().uncertainty();
     }
     return new Estimate(shift, uncertainty);
+  }
+
+  private List<Term> terms(Sublevel sublevel) {
+    Level level = sublevel.level();
+    double energy = species.energyHertz(level).value();
+    return Partners.of(species, level, LARGEST_N).stream()
+        .map(
+            other ->
+                new Term(
+                    other,
+                    species.energyHertz(other).value() - energy,
+                    elements.reduced(other, level).strength(),
+                    IntStream.rangeClosed(-1, 1)
+                        .mapToDouble(q -> SecondOrder.share(level, sublevel.doubledMj(), other, q))
+                        .toArray()))
+        .toList();
   }
 
   /** The two terms of a level, with the sign of a shift, in 1/Hz. */

@@ -12,8 +12,8 @@ import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.quantity.Temperature;
 
 /**
- * Decay rates of levels: spontaneous, and driven by blackbody radiation to all other levels and
- * into the continuum.
+ * Decay rates of levels: spontaneous, driven by blackbody radiation to other bound levels, and by
+ * blackbody radiation into the continuum.
  *
  * <p>A = ω³ |⟨‖d‖⟩|² / (3π ε0 ħ c³ (2J+1)) summed over lower levels; blackbody: the same expression
  * times the photon number 1/(e^{ħω/kT} − 1), over levels below and above (Gallagher and Cooke,
@@ -54,10 +54,12 @@ public final class Lifetimes {
 
   private record Warm(Level level, Temperature temperature) {}
 
+  private record Blackbody(Estimate depopulation, Estimate ionization) {}
+
   private final Species species;
   private final DipoleElements elements;
   private final BoundedCache<Level, Estimate> spontaneous;
-  private final BoundedCache<Warm, Estimate> blackbody;
+  private final BoundedCache<Warm, Blackbody> blackbody;
 
   private Lifetimes(Species species) {
     this.species = species;
@@ -89,8 +91,8 @@ public final class Lifetimes {
   }
 
   /**
-   * The rate at which blackbody radiation takes the atom out of a level, to other levels or into
-   * the continuum.
+   * The rate at which blackbody radiation takes the atom from a level to other bound levels, the
+   * quantity that is published as the blackbody depopulation rate.
    *
    * @param level the level, n up to 140
    * @param temperature temperature of the surroundings
@@ -99,7 +101,20 @@ public final class Lifetimes {
    *     or if n is above 140
    */
   public Estimate blackbodyRatePerSecond(Level level, Temperature temperature) {
-    return blackbody.get(new Warm(level, temperature));
+    return blackbody.get(new Warm(level, temperature)).depopulation();
+  }
+
+  /**
+   * The rate at which blackbody radiation ionizes the atom.
+   *
+   * @param level the level, n up to 140
+   * @param temperature temperature of the surroundings
+   * @return rate in s⁻¹; 0 at 0 K
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
+   *     or if n is above 140
+   */
+  public Estimate blackbodyIonizationRatePerSecond(Level level, Temperature temperature) {
+    return blackbody.get(new Warm(level, temperature)).ionization();
   }
 
   private Estimate spontaneous(Level level) {
@@ -130,12 +145,12 @@ public final class Lifetimes {
     return new Estimate(rate, uncertainty);
   }
 
-  private Estimate blackbody(Warm warm) {
+  private Blackbody blackbody(Warm warm) {
     Level level = species.requireValid(warm.level());
     double thermalHertz =
         PhysicalConstants.BOLTZMANN / PhysicalConstants.PLANCK * warm.temperature().kelvin();
     if (thermalHertz == 0) {
-      return new Estimate(0, 0);
+      return new Blackbody(new Estimate(0, 0), new Estimate(0, 0));
     }
     int last = Math.min(level.n() + REACH, Level.MAXIMUM_N);
     if (last < level.n() + LEAST_REACH) {
@@ -148,6 +163,7 @@ public final class Lifetimes {
     double energy = species.energyHertz(level).value();
     double rate = 0;
     double uncertainty = 0;
+    double ionization = 0;
     for (Level other : Partners.of(species, level, last)) {
       double frequency = Math.abs(energy - species.energyHertz(other).value());
       Estimate part = rate(level, other, frequency);
@@ -155,41 +171,48 @@ public final class Lifetimes {
       rate += part.value() * photons;
       uncertainty += part.uncertainty() * photons;
       if (other.n() == last) {
-        double beyond = continuation(level, other, thermalHertz);
-        rate += beyond;
-        uncertainty += CONTINUATION_TRUST * beyond;
+        StrengthDensity beyond = density(level, other);
+        // the levels end half a level beyond the last one
+        double n = species.effectiveN(other) + 0.5;
+        double end = -species.rydbergHertz() / (n * n) - energy;
+        double bound = beyond.rate(end, -energy, thermalHertz);
+        rate += bound;
+        uncertainty += CONTINUATION_TRUST * bound;
+        double hardest = Math.max(-2 * energy, HARDEST_PHOTON * thermalHertz);
+        ionization += beyond.rate(-energy, hardest, thermalHertz);
       }
     }
-    return new Estimate(rate, uncertainty);
+    return new Blackbody(
+        new Estimate(rate, uncertainty), new Estimate(ionization, CONTINUATION_TRUST * ionization));
   }
 
-  /** The rate into the levels beyond the last one of its series and into the continuum. */
-  private double continuation(Level level, Level last, double thermalHertz) {
+  /**
+   * The line strength per Hz from a level into one of its series, s(ν) = s0 (ν/ν0)^p near and
+   * beyond the ionization limit.
+   */
+  private record StrengthDensity(double s0, double nu0, double power, double degeneracy) {
+    /** The blackbody rate into all photon energies between two, in s⁻¹. */
+    double rate(double from, double to, double thermalHertz) {
+      double step = Math.log(to / from) / INTEGRATION_STEPS;
+      double sum = 0;
+      for (int i = 0; i < INTEGRATION_STEPS; i++) {
+        double nu = from * Math.exp((i + 0.5) * step);
+        sum += Math.pow(nu / nu0, power) * Math.pow(nu, 4) / Math.expm1(nu / thermalHertz);
+      }
+      return COEFFICIENT / degeneracy * s0 * sum * step;
+    }
+  }
+
+  private StrengthDensity density(Level level, Level last) {
     double energy = species.energyHertz(level).value();
     Level middle = Level.of((level.n() + last.n()) / 2, last.l(), last.doubledJ());
-    double frequency = species.energyHertz(last).value() - energy;
-    double density = strengthDensity(level, last);
-    double middleFrequency = species.energyHertz(middle).value() - energy;
+    double nu0 = species.energyHertz(last).value() - energy;
+    double s0 = strengthDensity(level, last);
     double power =
-        Math.log(density / strengthDensity(level, middle)) / Math.log(frequency / middleFrequency);
-    power = Math.max(STEEPEST, Math.min(FLATTEST, power));
-    // the levels end half a level beyond the last one
-    double n = species.effectiveN(last) + 0.5;
-    double from = -species.rydbergHertz() / (n * n) - energy;
-    double step = Math.log(Math.max(2, HARDEST_PHOTON * thermalHertz / from)) / INTEGRATION_STEPS;
-    double sum = 0;
-    for (int i = 0; i < INTEGRATION_STEPS; i++) {
-      double nu = from * Math.exp((i + 0.5) * step);
-      sum +=
-          density
-              * Math.pow(nu / frequency, power)
-              * nu
-              * nu
-              * nu
-              * nu
-              / Math.expm1(nu / thermalHertz);
-    }
-    return COEFFICIENT / (level.doubledJ() + 1) * sum * step;
+        Math.log(s0 / strengthDensity(level, middle))
+            / Math.log(nu0 / (species.energyHertz(middle).value() - energy));
+    return new StrengthDensity(
+        s0, nu0, Math.max(STEEPEST, Math.min(FLATTEST, power)), level.doubledJ() + 1);
   }
 
   /** Line strength per Hz of the series of a level, at that level. */
