@@ -13,7 +13,9 @@ import org.openjdk.jmh.annotations.State;
 import org.openjdk.jmh.annotations.Warmup;
 import org.toprung.core.drive.Drive;
 
-/** The first drive of a fresh virtual machine: class loading, catalogue and wavefunctions included. */
+/**
+ * The first drive of a fresh virtual machine: class loading, catalogue and wavefunctions included.
+ */
 @State(Scope.Benchmark)
 @BenchmarkMode(Mode.SingleShotTime)
 @OutputTimeUnit(TimeUnit.MILLISECONDS)

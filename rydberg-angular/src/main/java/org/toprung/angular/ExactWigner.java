@@ -154,10 +154,6 @@ final class ExactWigner {
   }
 
   private static BigInteger factorial(int n) {
-    BigInteger f = BigInteger.ONE;
-    for (int i = 2; i <= n; i++) {
-      f = f.multiply(BigInteger.valueOf(i));
-    }
-    return f;
+    return Factorials.exact(n);
   }
 }

@@ -20,8 +20,8 @@ import org.toprung.core.drive.PulsePlan;
  * Check check = budget.check(2000, 1L);
  * }</pre>
  *
- * <p>The causes are independent disturbances, so that to lowest order their errors add; the sum is the
- * total. Good while the total is small (below about 5 %); {@link #check} tells.
+ * <p>The causes are independent disturbances, so that to lowest order their errors add; the sum is
+ * the total. Good while the total is small (below about 5 %); {@link #check} tells.
  *
  * <p>Immutable and thread-safe.
  */

@@ -63,8 +63,7 @@ class BudgetTest {
     Budget budget = budget(RUBIDIUM, Bench.unknown().withTemperature(microkelvin(20)));
     double k = RUBIDIUM.waveVectorPerMetre()[2];
     double velocity =
-        Math.sqrt(
-            PhysicalConstants.BOLTZMANN * 20e-6 / RUBIDIUM.species().massKilograms());
+        Math.sqrt(PhysicalConstants.BOLTZMANN * 20e-6 / RUBIDIUM.species().massKilograms());
     double spread = k * velocity / (2 * Math.PI);
     double ratio = spread / budget.plan().rabi().hertz();
     assertEquals(ratio * ratio, error(budget, "Doppler shift"), 2e-3 * ratio * ratio);
@@ -74,8 +73,7 @@ class BudgetTest {
   @Test
   void countsANarrowLaserLineByTheLorentzianFormula() {
     Budget budget = budget(RUBIDIUM, Bench.unknown().withLinewidths(hertz(300), hertz(0)));
-    double expected =
-        Math.PI * Math.PI * 300 / (4 * budget.plan().rabi().radiansPerSecond());
+    double expected = Math.PI * Math.PI * 300 / (4 * budget.plan().rabi().radiansPerSecond());
     assertEquals(expected, error(budget, "Laser linewidth, step 1"), 1e-3 * expected);
   }
 
@@ -87,8 +85,7 @@ class BudgetTest {
   void countsIntensityNoiseOnRabiFrequencyAndLightShiftTogether() {
     double sigma = 0.004;
     Budget budget = budget(RUBIDIUM, Bench.unknown().withIntensityNoise(sigma, 0));
-    double shift =
-        RUBIDIUM.targetLightShift(0).hertz() - RUBIDIUM.startLightShift(0).hertz();
+    double shift = RUBIDIUM.targetLightShift(0).hertz() - RUBIDIUM.startLightShift(0).hertz();
     double detuning = sigma * shift / budget.plan().rabi().hertz();
     double amplitude = Math.PI * sigma / 4;
     double expected = detuning * detuning + amplitude * amplitude;
@@ -98,8 +95,7 @@ class BudgetTest {
   /** Closed form: q = Ω2/Ω1, (πγ/4|Δ|)(q+1/q) (Saffman and Walker 2005). */
   @Test
   void countsIntermediateScatteringByTheTextbookFormula() {
-    double q =
-        RUBIDIUM.steps().get(1).rabi().hertz() / RUBIDIUM.steps().get(0).rabi().hertz();
+    double q = RUBIDIUM.steps().get(1).rabi().hertz() / RUBIDIUM.steps().get(0).rabi().hertz();
     double gamma = 1 / 118e-9 / (2 * Math.PI);
     double detuning =
         RUBIDIUM.steps().get(0).rabi().hertz()
@@ -123,10 +119,7 @@ class BudgetTest {
                 .withTrapFrequencies(trap, trap, trap));
     double velocity =
         Math.sqrt(
-            0.5
-                * PhysicalConstants.PLANCK
-                * trap.hertz()
-                / RUBIDIUM.species().massKilograms());
+            0.5 * PhysicalConstants.PLANCK * trap.hertz() / RUBIDIUM.species().massKilograms());
     double spread = RUBIDIUM.waveVectorPerMetre()[2] * velocity / (2 * Math.PI);
     double ratio = spread / cold.plan().rabi().hertz();
     assertEquals(ratio * ratio, error(cold, "Doppler shift"), 2e-3 * ratio * ratio);
@@ -140,7 +133,13 @@ class BudgetTest {
       assertTrue(budget.total() > 1e-3 && budget.total() < 0.05, "total " + budget.total());
       assertTrue(
           check.agrees(),
-          drive + ": " + budget.total() + " against " + check.total() + " ± " + check.standardError());
+          drive
+              + ": "
+              + budget.total()
+              + " against "
+              + check.total()
+              + " ± "
+              + check.standardError());
       // both bounds of the target at once: the sum itself lies within 10 %
       assertEquals(check.total(), budget.total(), 0.1 * check.total());
     }
@@ -190,8 +189,7 @@ class BudgetTest {
   /** The electron flips against the field: 2.1 MHz/G from F = 1, mF = 1 to mJ = 1/2. */
   @Test
   void agreesWithTheSimulationForMagneticNoise() {
-    Drive drive =
-        TestDrives.rubidium().from(Sublevel.hyperfine("5S1/2", 1, 1)).resolve();
+    Drive drive = TestDrives.rubidium().from(Sublevel.hyperfine("5S1/2", 1, 1)).resolve();
     assertEquals(2.1e10, drive.magneticSensitivityHertzPerTesla(), 0.02e10);
     Bench bench = Bench.unknown().withMagneticNoise(milligauss(100));
     Budget budget = budget(drive, bench);
@@ -200,8 +198,7 @@ class BudgetTest {
     assertEquals(spread * spread, composed, 0.05 * composed);
     double quiet = budget(drive, Bench.unknown()).check(2, 1).total();
     Check check = budget.check(3000, 12);
-    assertEquals(
-        check.total() - quiet, composed, 4 * check.standardError() + 0.03 * composed);
+    assertEquals(check.total() - quiet, composed, 4 * check.standardError() + 0.03 * composed);
   }
 
   @Test
@@ -249,8 +246,7 @@ class BudgetTest {
     Budget full = budget(RUBIDIUM, Bench.unknown().withDrifts(kilohertz(100), hertz(0)));
     Budget half = budget(RUBIDIUM, Bench.unknown().withDrifts(kilohertz(50), hertz(0)));
     String promised =
-        String.format(
-            Locale.ROOT, "%.2g remains", error(half, "Laser drift, step 1"));
+        String.format(Locale.ROOT, "%.2g remains", error(half, "Laser drift, step 1"));
     assertTrue(
         entry(full, "Laser drift, step 1").lever().contains(promised),
         entry(full, "Laser drift, step 1").lever() + " / " + promised);
@@ -269,8 +265,7 @@ class BudgetTest {
   @Test
   void countsAnIntendedOffset() {
     Frequency offset = megahertz(0.3);
-    Budget budget =
-        Budget.of(RUBIDIUM, Pulse.pi().offsetBy(offset)).on(Bench.unknown()).compose();
+    Budget budget = Budget.of(RUBIDIUM, Pulse.pi().offsetBy(offset)).on(Bench.unknown()).compose();
     double ratio = offset.hertz() / budget.plan().rabi().hertz();
     double error = error(budget, "Offset from resonance");
     assertEquals(ratio * ratio, error, 0.05 * error);

@@ -64,9 +64,7 @@ final class TestDrives {
         .from(Sublevel.hyperfine("5S1/2", 2, 0))
         .step(
             Level.parse("6P3/2"),
-            Beam.gaussian(milliwatts(4), micrometres(20))
-                .polarized(Polarization.PI)
-                .along(1, 0, 0))
+            Beam.gaussian(milliwatts(4), micrometres(20)).polarized(Polarization.PI).along(1, 0, 0))
         .step(
             Sublevel.fine("65S1/2", 0.5),
             Beam.gaussian(milliwatts(200), micrometres(20))

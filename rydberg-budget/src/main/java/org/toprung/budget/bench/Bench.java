@@ -19,8 +19,7 @@ import org.toprung.core.quantity.Temperature;
  * <p>Immutable: each {@code with…} method gives a copy.
  */
 public final class Bench {
-  private static final Bench EMPTY =
-      new Bench(null, null, null, null, null, null, null, null);
+  private static final Bench EMPTY = new Bench(null, null, null, null, null, null, null, null);
 
   private final Temperature temperature;
   private final List<Frequency> trapFrequencies;
@@ -80,8 +79,8 @@ public final class Bench {
   }
 
   /**
-   * Sets the frequencies of the trap that holds the atom, which is switched off or left on during the
-   * pulse: they set where the atom is and the zero-point motion.
+   * Sets the frequencies of the trap that holds the atom, which is switched off or left on during
+   * the pulse: they set where the atom is and the zero-point motion.
    *
    * @param x along lab x, positive
    * @param y along lab y, positive
@@ -208,7 +207,8 @@ public final class Bench {
   /**
    * Sets the spread of the beam intensities.
    *
-   * @param rms relative root mean square from shot to shot of each beam, one per step, from 0 to 0.5
+   * @param rms relative root mean square from shot to shot of each beam, one per step, from 0 to
+   *     0.5
    * @return a copy
    * @throws IllegalArgumentException if a value is out of range
    */

@@ -10,10 +10,10 @@ import org.toprung.core.quantity.Temperature;
  * Spread of velocity and position of a trapped atom along the three lab axes.
  *
  * <p>A harmonic oscillator of frequency f at temperature T has Gaussian velocity and position with
- * m σ<sub>v</sub>² = k T<sub>eff</sub> and σ<sub>x</sub> = σ<sub>v</sub>/2πf, where k T<sub>eff</sub>
- * = (hf/2) coth(hf/2kT) tends to kT when hot and to half a quantum in the ground state. Without trap
- * frequencies T<sub>eff</sub> = T and the position is unknown. Reference: Cohen-Tannoudji, Diu and
- * Laloë, Quantum Mechanics, complement L<sub>III</sub> (coth form).
+ * m σ<sub>v</sub>² = k T<sub>eff</sub> and σ<sub>x</sub> = σ<sub>v</sub>/2πf, where k
+ * T<sub>eff</sub> = (hf/2) coth(hf/2kT) tends to kT when hot and to half a quantum in the ground
+ * state. Without trap frequencies T<sub>eff</sub> = T and the position is unknown. Reference:
+ * Cohen-Tannoudji, Diu and Laloë, Quantum Mechanics, complement L<sub>III</sub> (coth form).
  *
  * <p>Immutable.
  */

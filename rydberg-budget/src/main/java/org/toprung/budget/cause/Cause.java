@@ -20,8 +20,8 @@ public interface Cause {
    * What the cause adds to the error of the pulse.
    *
    * @param model the pulse
-   * @return the error, a probability; it may be slightly negative where a disturbance happens to undo
-   *     an intended offset
+   * @return the error, a probability; it may be slightly negative where a disturbance happens to
+   *     undo an intended offset
    */
   double error(PulseModel model);
 

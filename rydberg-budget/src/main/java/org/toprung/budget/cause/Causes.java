@@ -9,7 +9,8 @@ import org.toprung.core.drive.Drive;
 import org.toprung.core.quantity.Temperature;
 
 /**
- * The causes that apply to a drive on a bench, and those that cannot be assessed for want of a value.
+ * The causes that apply to a drive on a bench, and those that cannot be assessed for want of a
+ * value.
  *
  * <p>Immutable.
  */
@@ -84,10 +85,7 @@ public final class Causes {
 
   private static String shorter(double error, String alternative) {
     return String.format(
-        Locale.ROOT,
-        "double the Rabi frequency: %.2g remains; %s",
-        0.5 * error,
-        alternative);
+        Locale.ROOT, "double the Rabi frequency: %.2g remains; %s", 0.5 * error, alternative);
   }
 
   private void addMotion(Drive drive, Bench bench) {
@@ -187,7 +185,8 @@ public final class Causes {
             "Rotation error",
             "what noise-free propagation of the whole ladder leaves untransferred on resonance",
             m -> m.noiseFree().missed(),
-            m -> "more detuning of the intermediate level, or a start that reaches one target only"));
+            m ->
+                "more detuning of the intermediate level, or a start that reaches one target only"));
     assessed.add(
         new FixedCause(
             "Offset from resonance",

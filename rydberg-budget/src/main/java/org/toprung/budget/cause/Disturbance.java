@@ -5,7 +5,8 @@ import java.util.Locale;
 /**
  * A cause with a strength that can be halved.
  *
- * <p>The lever is always the same question, what remains at half the strength, so it is answered here.
+ * <p>The lever is always the same question, what remains at half the strength, so it is answered
+ * here.
  */
 abstract class Disturbance implements Cause {
   private final String name;
@@ -38,7 +39,6 @@ abstract class Disturbance implements Cause {
 
   @Override
   public final String lever(PulseModel model) {
-    return String.format(
-        Locale.ROOT, "halve %s: %.2g remains", strength, error(model, 0.5));
+    return String.format(Locale.ROOT, "halve %s: %.2g remains", strength, error(model, 0.5));
   }
 }

@@ -4,8 +4,8 @@ package org.toprung.budget.cause;
  * White frequency noise of one laser, of Lorentzian full width Δν.
  *
  * <p>The optical coherence decays at the rate Γ = πΔν; on resonance the inversion of the driven
- * two-level system obeys z″ + Γz′ + Ω²z = 0, so that after a time τ, with Ω′ = √(Ω² − Γ²/4), 1 − P =
- * ½(1 + z) with z = e<sup>−Γτ/2</sup>(cos Ω′τ + (Γ/2Ω′) sin Ω′τ). For a π pulse and a narrow line
+ * two-level system obeys z″ + Γz′ + Ω²z = 0, so that after a time τ, with Ω′ = √(Ω² − Γ²/4), 1 − P
+ * = ½(1 + z) with z = e<sup>−Γτ/2</sup>(cos Ω′τ + (Γ/2Ω′) sin Ω′τ). For a π pulse and a narrow line
  * this is π²Δν/(4Ω).
  */
 final class LaserLinewidth extends Disturbance {

@@ -4,9 +4,9 @@ import org.toprung.budget.bench.ThermalMotion;
 import org.toprung.core.drive.Drive;
 
 /**
- * Thermal position of the atom, which changes the field of all beams, and with it Rabi frequency and
- * light shifts, in the same shot. The pulse is planned for an atom in the middle of the beams, so that
- * the mean loss of field counts too.
+ * Thermal position of the atom, which changes the field of all beams, and with it Rabi frequency
+ * and light shifts, in the same shot. The pulse is planned for an atom in the middle of the beams,
+ * so that the mean loss of field counts too.
  */
 final class PositionInBeams extends Disturbance {
   private final ThermalMotion motion;

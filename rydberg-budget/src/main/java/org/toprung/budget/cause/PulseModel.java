@@ -14,14 +14,15 @@ import org.toprung.core.drive.PulsePlanner;
 import org.toprung.core.quantity.Estimate;
 import org.toprung.core.quantity.Temperature;
 import org.toprung.core.structure.Lifetimes;
-import org.toprung.core.structure.StaticPolarizability;
+import org.toprung.core.structure.StarkShift;
 
 /**
- * A pulse on a drive, reduced to what causes need: the effective two-level system, how each beam moves
- * it, and the rates of loss.
+ * A pulse on a drive, reduced to what causes need: the effective two-level system, how each beam
+ * moves it, and the rates of loss.
  *
- * <p>{@link #variations()} are the same pulse with one atomic input moved by its standard uncertainty;
- * each is planned anew, because length and frequency of a real pulse are calibrated on the atom.
+ * <p>{@link #variations()} are the same pulse with one atomic input moved by its standard
+ * uncertainty; each is planned anew, because length and frequency of a real pulse are calibrated on
+ * the atom.
  *
  * <p>Immutable.
  */
@@ -45,6 +46,7 @@ public final class PulseModel {
   private final PulsePlan plan;
   private final Elimination elimination;
   private final NoiseFreePulse noiseFree;
+  private final StarkShift stark;
 
   private PulseModel(Drive drive, Pulse pulse, Inputs inputs) {
     this.drive = drive;
@@ -59,8 +61,8 @@ public final class PulseModel {
             .withFarShiftsScaled(inputs.farShift());
     this.plan = PulsePlanner.plan(ladder, pulse.areaRadians());
     this.elimination = Elimination.of(ladder);
-    this.noiseFree =
-        NoiseFreePulse.of(ladder, setting(plan.frequencyOffset().hertz()), seconds());
+    this.stark = StarkShift.of(drive.species(), drive.target());
+    this.noiseFree = NoiseFreePulse.of(ladder, setting(plan.frequencyOffset().hertz()), seconds());
   }
 
   /**
@@ -83,12 +85,11 @@ public final class PulseModel {
     Lifetimes lifetimes = Lifetimes.of(drive.species());
     double first = 1 + drive.steps().get(0).relativeUncertainty();
     double second = 1 + drive.steps().get(1).relativeUncertainty();
-    double decay =
-        1 + lifetimes.spontaneousRatePerSecond(drive.intermediate()).relative();
+    double decay = 1 + lifetimes.spontaneousRatePerSecond(drive.intermediate()).relative();
     double spontaneous = 1 + lifetimes.spontaneousRatePerSecond(target()).relative();
     double blackbody =
         1 + lifetimes.blackbodyRatePerSecond(target(), Temperature.ofKelvin(300)).relative();
-    double polarizability = 1 + polarizability().scalarHertzPerFieldSquared().relative();
+    double polarizability = 1 + stark.relativeUncertainty();
     double far = 1 + drive.farShiftRelativeUncertainty();
     List<PulseModel> models = new ArrayList<>();
     for (Inputs varied :
@@ -137,8 +138,8 @@ public final class PulseModel {
   }
 
   /**
-   * Setting of the ladder during the pulse, with the laser moved to the shifted resonance and by the
-   * pulse's own offset.
+   * Setting of the ladder during the pulse, with the laser moved to the shifted resonance and by
+   * the pulse's own offset.
    *
    * @return the setting
    */
@@ -215,20 +216,9 @@ public final class PulseModel {
     return inputs.blackbody() * rate.value();
   }
 
-  private StaticPolarizability polarizability() {
-    return StaticPolarizability.of(drive.species(), target());
-  }
-
   /** Stark shift of the target in a field with these components, Hz. */
   double starkShiftHertz(double ex, double ey, double ez) {
-    double square = ex * ex + ey * ey + ez * ez;
-    double scalar = polarizability().scalarHertzPerFieldSquared().value();
-    double tensor =
-        polarizability().tensorHertzPerFieldSquared().value()
-            * polarizability().tensorFactor(drive.target().doubledM());
-    return -0.5
-        * inputs.polarizability()
-        * (scalar * square + tensor * 0.5 * (3 * ez * ez - square));
+    return inputs.polarizability() * stark.hertz(ex, ey, ez);
   }
 
   NoiseFreePulse noiseFree() {

@@ -29,7 +29,8 @@ public record NoiseFreePulse(double missed, double otherRydberg, double otherGro
     double[] re = new double[n * n];
     double[] im = new double[n * n];
     ladder.hamiltonianHertz(setting, re, im);
-    ComplexMatrix propagator = Evolution.propagator(MatrixExponential.ofSize(n), n, re, im, seconds);
+    ComplexMatrix propagator =
+        Evolution.propagator(MatrixExponential.ofSize(n), n, re, im, seconds);
     double[] beginRe = new double[n];
     double[] beginIm = new double[n];
     frame.begin(beginRe, beginIm);

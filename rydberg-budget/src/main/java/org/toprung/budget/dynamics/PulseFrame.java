@@ -9,9 +9,9 @@ import org.toprung.core.drive.LadderSetting;
 /**
  * The state a pulse begins with and the states its outcome is measured in.
  *
- * <p>Where the intermediate level is far enough, these are the dressed states at the pulse's nominal
- * setting, since edges that are slow against the intermediate detuning follow them; otherwise the
- * bare ones.
+ * <p>Where the intermediate level is far enough, these are the dressed states at the pulse's
+ * nominal setting, since edges that are slow against the intermediate detuning follow them;
+ * otherwise the bare ones.
  *
  * <p>Immutable and thread-safe.
  */

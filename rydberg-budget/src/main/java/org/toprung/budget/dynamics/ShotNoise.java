@@ -1,6 +1,7 @@
 package org.toprung.budget.dynamics;
 
 import java.util.Arrays;
+import java.util.List;
 import java.util.Optional;
 import java.util.random.RandomGenerator;
 import org.toprung.budget.bench.Bench;
@@ -8,11 +9,11 @@ import org.toprung.budget.bench.ThermalMotion;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.LadderSetting;
 import org.toprung.core.quantity.Frequency;
-import org.toprung.core.structure.StaticPolarizability;
+import org.toprung.core.structure.StarkShift;
 
 /**
- * Draws what is different in one shot: velocity and position of the atom, intensities, fields, laser
- * frequencies.
+ * Draws what is different in one shot: velocity and position of the atom, intensities, fields,
+ * laser frequencies.
  *
  * <p>Immutable; safe for use by several threads, each with its own generator.
  */
@@ -22,8 +23,7 @@ final class ShotNoise {
   private final Optional<ThermalMotion> motion;
   private final double magnetic; // T
   private final double electric; // V/m per component
-  private final double scalar; // Hz/(V/m)²
-  private final double tensor; // Hz/(V/m)², with the mJ factor
+  private final StarkShift stark;
   private final double[] drift; // Hz
   private final double[] intensity; // relative
   private final double[] linewidth; // Hz
@@ -34,16 +34,11 @@ final class ShotNoise {
     this.motion =
         bench
             .temperature()
-            .map(t -> ThermalMotion.of(drive.species().massKilograms(), t, bench.trapFrequencies()));
+            .map(
+                t -> ThermalMotion.of(drive.species().massKilograms(), t, bench.trapFrequencies()));
     this.magnetic = bench.magneticNoise().map(b -> b.tesla()).orElse(0.0);
-    this.electric =
-        bench.electricField().map(e -> e.voltsPerMetre()).orElse(0.0) / Math.sqrt(3);
-    StaticPolarizability polarizability =
-        StaticPolarizability.of(drive.species(), drive.target().level());
-    this.scalar = polarizability.scalarHertzPerFieldSquared().value();
-    this.tensor =
-        polarizability.tensorHertzPerFieldSquared().value()
-            * polarizability.tensorFactor(drive.target().doubledM());
+    this.electric = bench.electricField().map(e -> e.voltsPerMetre()).orElse(0.0) / Math.sqrt(3);
+    this.stark = StarkShift.of(drive.species(), drive.target());
     int steps = drive.steps().size();
     this.drift = hertz(bench.drifts(), steps);
     this.linewidth = hertz(bench.linewidths(), steps);
@@ -54,7 +49,7 @@ final class ShotNoise {
             .orElse(new double[steps]);
   }
 
-  private static double[] hertz(Optional<java.util.List<Frequency>> values, int steps) {
+  private static double[] hertz(Optional<List<Frequency>> values, int steps) {
     return values
         .map(list -> list.stream().mapToDouble(Frequency::hertz).toArray())
         .orElse(new double[steps]);
@@ -87,21 +82,23 @@ final class ShotNoise {
         doppler -= wave[a] * velocity[a] / (2 * Math.PI);
       }
       double relative = Math.max(0, 1 + intensity[k] * random.nextGaussian());
-      double offset =
-          nominal.laserOffsetHertz(k) + drift[k] * random.nextGaussian() + doppler;
+      double offset = nominal.laserOffsetHertz(k) + drift[k] * random.nextGaussian() + doppler;
       setting =
           setting
               .withLaserOffset(k, offset)
               .withFieldFactor(
                   k,
                   Math.sqrt(relative)
-                      * drive.steps().get(k).beam().fieldFactorAt(position[0], position[1], position[2]));
+                      * drive
+                          .steps()
+                          .get(k)
+                          .beam()
+                          .fieldFactorAt(position[0], position[1], position[2]));
     }
-    double ex = electric * random.nextGaussian();
-    double ey = electric * random.nextGaussian();
-    double ez = electric * random.nextGaussian();
-    double square = ex * ex + ey * ey + ez * ez;
-    double stark = -0.5 * (scalar * square + tensor * 0.5 * (3 * ez * ez - square));
-    return setting.withTargetShift(stark);
+    return setting.withTargetShift(
+        stark.hertz(
+            electric * random.nextGaussian(),
+            electric * random.nextGaussian(),
+            electric * random.nextGaussian()));
   }
 }

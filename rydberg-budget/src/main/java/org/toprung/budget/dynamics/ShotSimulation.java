@@ -2,8 +2,8 @@ package org.toprung.budget.dynamics;
 
 import java.util.List;
 import java.util.SplittableRandom;
-import java.util.function.IntConsumer;
 import java.util.concurrent.atomic.AtomicInteger;
+import java.util.function.IntConsumer;
 import java.util.stream.IntStream;
 import org.toprung.budget.bench.Bench;
 import org.toprung.core.drive.Drive;
@@ -13,17 +13,17 @@ import org.toprung.core.linear.ComplexMatrix;
 import org.toprung.core.linear.MatrixExponential;
 
 /**
- * Error of a pulse found by brute force: shots drawn from the disturbances of a bench, each propagated
- * on the full ladder.
+ * Error of a pulse found by brute force: shots drawn from the disturbances of a bench, each
+ * propagated on the full ladder.
  *
- * <p>Loss is non-Hermitian, −iΓ/4π on the diagonal (natural decay of the intermediate sublevels, total
- * decay of the Rydberg level): an atom that scattered or decayed counts as an error, even if it comes
- * back. White frequency noise of a Lorentzian line of full width Δν is a random walk of the laser's
- * phase with variance 2πΔν per second, applied as kicks between {@value #SEGMENTS} equal segments
- * whose propagator is computed once a shot.
+ * <p>Loss is non-Hermitian, −iΓ/4π on the diagonal (natural decay of the intermediate sublevels,
+ * total decay of the Rydberg level): an atom that scattered or decayed counts as an error, even if
+ * it comes back. White frequency noise of a Lorentzian line of full width Δν is a random walk of
+ * the laser's phase with variance 2πΔν per second, applied as kicks between {@value #SEGMENTS}
+ * equal segments whose propagator is computed once a shot.
  *
- * <p>Shot i of seed s uses its own generator, and partial sums are added in a fixed order, so that the
- * result does not depend on the number of threads.
+ * <p>Shot i of seed s uses its own generator, and partial sums are added in a fixed order, so that
+ * the result does not depend on the number of threads.
  */
 public final class ShotSimulation {
   private static final int SEGMENTS = 64;

@@ -5,8 +5,8 @@ import org.toprung.core.quantity.Frequency;
 /**
  * A square pulse of the whole ladder, both beams together.
  *
- * <p>Its edges are taken to be slow against the intermediate detuning and fast against the effective
- * Rabi period, so that they dress the atom without turning it.
+ * <p>Its edges are taken to be slow against the intermediate detuning and fast against the
+ * effective Rabi period, so that they dress the atom without turning it.
  *
  * <p>Immutable.
  */

@@ -10,12 +10,12 @@ import org.toprung.core.quantity.Power;
 /**
  * A Gaussian laser beam with the atom in its focus.
  *
- * <p>Conventions: waist w is the radius at which the intensity has fallen to 1/e²; the peak intensity
- * is I0 = 2P/(πw²); the field is E(t) = E0 cos ωt with E0 = √(2I0/(cε0)). The beam is described in
- * the lab frame, in which the magnetic field points along z.
+ * <p>Conventions: waist w is the radius at which the intensity has fallen to 1/e²; the peak
+ * intensity is I0 = 2P/(πw²); the field is E(t) = E0 cos ωt with E0 = √(2I0/(cε0)). The beam is
+ * described in the lab frame, in which the magnetic field points along z.
  *
- * <p>Immutable: {@link #polarized} and {@link #along} give copies. A step of a {@link Drive} accepts a
- * beam once it has both a polarization and a direction.
+ * <p>Immutable: {@link #polarized} and {@link #along} give copies. A step of a {@link Drive}
+ * accepts a beam once it has both a polarization and a direction.
  */
 public final class Beam {
   private final Power power;
@@ -82,8 +82,7 @@ public final class Beam {
               z));
     }
     double length = scale * Math.sqrt(square(x / scale) + square(y / scale) + square(z / scale));
-    return new Beam(
-        power, waist, polarization, new double[] {x / length, y / length, z / length});
+    return new Beam(power, waist, polarization, new double[] {x / length, y / length, z / length});
   }
 
   private static double square(double x) {
@@ -154,15 +153,13 @@ public final class Beam {
   public double peakFieldVoltsPerMetre() {
     double intensity = 2 * power.watts() / (Math.PI * waist.metres() * waist.metres());
     return Math.sqrt(
-        2
-            * intensity
-            / (PhysicalConstants.SPEED_OF_LIGHT * PhysicalConstants.VACUUM_PERMITTIVITY));
+        2 * intensity / (PhysicalConstants.SPEED_OF_LIGHT * PhysicalConstants.VACUUM_PERMITTIVITY));
   }
 
   /**
-   * Field of an atom away from the focus over the field in it, in the plane of the waist: exp(−ρ²/w²)
-   * at the distance ρ from the beam's axis. The distance along the beam does not count, which holds
-   * while it is short against the Rayleigh length πw²/λ.
+   * Field of an atom away from the focus over the field in it, in the plane of the waist:
+   * exp(−ρ²/w²) at the distance ρ from the beam's axis. The distance along the beam does not count,
+   * which holds while it is short against the Rayleigh length πw²/λ.
    *
    * @param x position along lab x, m
    * @param y position along lab y, m

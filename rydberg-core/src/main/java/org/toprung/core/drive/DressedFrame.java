@@ -6,11 +6,11 @@ import org.toprung.core.linear.ComplexMatrix;
  * Sublevels as the light dresses them: the part of the ladder that is meant to be populated,
  * decoupled exactly from the intermediate level.
  *
- * <p>For a Hamiltonian H split into the populated states P and the rest Q, the wave operator ω
- * (Q × P) solves Bloch's equation H<sub>QP</sub> + H<sub>QQ</sub>ω − ω(H<sub>PP</sub> +
- * H<sub>PQ</sub>ω) = 0; the columns of X = (1; ω)(1 + ω†ω)<sup>−½</sup> are orthonormal, span an
- * invariant subspace of H, and X†HX is the Hermitian effective Hamiltonian of des Cloizeaux, to all
- * orders in the couplings. To second order it is the one of {@link Elimination}.
+ * <p>For a Hamiltonian H split into the populated states P and the rest Q, the wave operator ω (Q ×
+ * P) solves Bloch's equation H<sub>QP</sub> + H<sub>QQ</sub>ω − ω(H<sub>PP</sub> + H<sub>PQ</sub>ω)
+ * = 0; the columns of X = (1; ω)(1 + ω†ω)<sup>−½</sup> are orthonormal, span an invariant subspace
+ * of H, and X†HX is the Hermitian effective Hamiltonian of des Cloizeaux, to all orders in the
+ * couplings. To second order it is the one of {@link Elimination}.
  *
  * <p>A pulse whose edges are slow against the intermediate detuning and fast against the effective
  * Rabi period takes the bare start into its dressed form and the dressed target back to the bare
@@ -158,8 +158,7 @@ public final class DressedFrame {
     return z;
   }
 
-  private static ComplexMatrix embed(
-      int n, int[] rows, ComplexMatrix values) {
+  private static ComplexMatrix embed(int n, int[] rows, ComplexMatrix values) {
     ComplexMatrix m = ComplexMatrix.zeros(n, rows.length);
     for (int i = 0; i < rows.length; i++) {
       for (int j = 0; j < rows.length; j++) {
@@ -173,8 +172,7 @@ public final class DressedFrame {
     return m;
   }
 
-  private static ComplexMatrix block(
-      double[] re, double[] im, int n, int[] rows, int[] columns) {
+  private static ComplexMatrix block(double[] re, double[] im, int n, int[] rows, int[] columns) {
     ComplexMatrix m = ComplexMatrix.zeros(rows.length, columns.length);
     for (int i = 0; i < rows.length; i++) {
       for (int j = 0; j < columns.length; j++) {

@@ -28,7 +28,8 @@ import org.toprung.core.structure.DipoleElement;
  *
  * <p>The effective Rabi frequency and the light shifts are the second-order ones of {@link
  * Elimination}, summed coherently over all sublevels of the intermediate level at the given field;
- * they are good to about the square of {@link #admixture()}. {@link #plan} goes beyond second order.
+ * they are good to about the square of {@link #admixture()}. {@link #plan} goes beyond second
+ * order.
  *
  * <p>Immutable and thread-safe.
  */
@@ -40,8 +41,8 @@ public final class Drive {
    *
    * @param to name of the level or sublevel the step leads to
    * @param wavelength vacuum wavelength of the laser, light shifts not compensated
-   * @param rabi root of the summed squares of the couplings over 2π from the start (first step) or to
-   *     the target (last step) over the sublevels of the intermediate level
+   * @param rabi root of the summed squares of the couplings over 2π from the start (first step) or
+   *     to the target (last step) over the sublevels of the intermediate level
    * @param element reduced dipole element between the two levels
    * @param beam the beam that drives it
    */
@@ -425,8 +426,8 @@ public final class Drive {
   }
 
   /**
-   * The plan of a square pulse at nominal powers, beyond second order where the dressed states of the
-   * ladder can be told apart.
+   * The plan of a square pulse at nominal powers, beyond second order where the dressed states of
+   * the ladder can be told apart.
    *
    * @param areaRadians Ωt, positive; π for full transfer
    * @return duration and frequency offset

@@ -31,11 +31,7 @@ public final class DriveSetup {
   private final MagneticField field;
 
   private DriveSetup(
-      Species species,
-      Sublevel start,
-      List<Step> steps,
-      Frequency detuning,
-      MagneticField field) {
+      Species species, Sublevel start, List<Step> steps, Frequency detuning, MagneticField field) {
     this.species = species;
     this.start = start;
     this.steps = steps;
@@ -91,8 +87,8 @@ public final class DriveSetup {
    * @param target a Rydberg sublevel with its m<sub>J</sub>; the nuclear spin is a spectator
    * @param beam the beam that drives the step, with polarization and direction
    * @return a copy with this step
-   * @throws IllegalArgumentException if the species has no such sublevel, it is labelled by F, or the
-   *     beam cannot have its polarization
+   * @throws IllegalArgumentException if the species has no such sublevel, it is labelled by F, or
+   *     the beam cannot have its polarization
    * @throws IllegalStateException if the beam lacks polarization or direction
    */
   public DriveSetup step(Sublevel target, Beam beam) {
@@ -117,8 +113,8 @@ public final class DriveSetup {
    * Sets the detuning of the first laser from the intermediate level.
    *
    * @param newDetuning laser frequency minus the frequency from the start (its own energy at the
-   *     field) to the centre of gravity of the intermediate level's hyperfine manifold; positive when
-   *     the laser lies above
+   *     field) to the centre of gravity of the intermediate level's hyperfine manifold; positive
+   *     when the laser lies above
    * @return a copy with this detuning
    */
   public DriveSetup detuned(Frequency newDetuning) {
@@ -138,7 +134,9 @@ public final class DriveSetup {
   public DriveSetup in(MagneticField newField) {
     if (!(newField.tesla() >= 0)) {
       throw new IllegalArgumentException(
-          "magnetic field " + newField + " must be at least 0: it points along lab z by convention");
+          "magnetic field "
+              + newField
+              + " must be at least 0: it points along lab z by convention");
     }
     return new DriveSetup(species, start, steps, detuning, newField);
   }

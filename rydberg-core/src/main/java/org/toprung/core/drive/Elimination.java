@@ -6,22 +6,22 @@ import java.util.Arrays;
  * The effective two-level system that is left when the intermediate sublevels of a ladder are
  * eliminated to second order in the couplings.
  *
- * <p>With Ω<sub>is</sub>, Ω<sub>ti</sub> the couplings of intermediate sublevel i, Δ<sub>i</sub> the
- * detuning of the first laser from it and γ its natural width,
+ * <p>With Ω<sub>is</sub>, Ω<sub>ti</sub> the couplings of intermediate sublevel i, Δ<sub>i</sub>
+ * the detuning of the first laser from it and γ its natural width,
  *
  * <ul>
  *   <li>effective Rabi frequency of target t: Σ<sub>i</sub> Ω<sub>ti</sub>Ω<sub>is</sub> /
  *       2(Δ<sub>i</sub> + iγ/2) + coupling through the fine-structure partner;
- *   <li>light shift of the start: Σ<sub>i</sub> |Ω<sub>is</sub>|² Δ<sub>i</sub> /
- *       4(Δ<sub>i</sub>² + γ²/4) + far-off-resonant part, of the target likewise with Ω<sub>ti</sub>;
+ *   <li>light shift of the start: Σ<sub>i</sub> |Ω<sub>is</sub>|² Δ<sub>i</sub> / 4(Δ<sub>i</sub>²
+ *       + γ²/4) + far-off-resonant part, of the target likewise with Ω<sub>ti</sub>;
  *   <li>scattering rate of the start: Σ<sub>i</sub> γ |Ω<sub>is</sub>|² / 4(Δ<sub>i</sub>² + γ²/4),
  *       of the target likewise.
  * </ul>
  *
  * <p>The width keeps every result finite when a sublevel is resonant; elimination itself is then
- * void, which {@link #admixture()} tells. A target that can carry several nuclear projections is the
- * superposition that the light couples to. References: Saffman and Walker, Phys. Rev. A 72, 022347
- * (2005); Brion, Pedersen and Mølmer, J. Phys. A 40, 1033 (2007).
+ * void, which {@link #admixture()} tells. A target that can carry several nuclear projections is
+ * the superposition that the light couples to. References: Saffman and Walker, Phys. Rev. A 72,
+ * 022347 (2005); Brion, Pedersen and Mølmer, J. Phys. A 40, 1033 (2007).
  *
  * <p>Immutable.
  */
@@ -111,15 +111,13 @@ public final class Elimination {
     for (int k = 0; k < 2; k++) {
       startShift[k] = ladder.farShiftHertz(ladder.start(), k);
       for (int t = 0; t < target.length; t++) {
-        double weight =
-            rabi > 0 ? (re[t] * re[t] + im[t] * im[t]) / norm : t == 0 ? 1 : 0;
+        double weight = rabi > 0 ? (re[t] * re[t] + im[t] * im[t]) / norm : t == 0 ? 1 : 0;
         targetShift[k] += weight * ladder.farShiftHertz(target[t], k);
       }
     }
     startShift[0] += shift[0];
     targetShift[1] += shift[1];
-    return new Elimination(
-        rabi, startShift, targetShift, scattering[0], scattering[1], admixture);
+    return new Elimination(rabi, startShift, targetShift, scattering[0], scattering[1], admixture);
   }
 
   private static void effectiveCoupling(Ladder ladder, int[] target, double[] re, double[] im) {

@@ -11,17 +11,18 @@ import org.toprung.core.atom.Level;
  *
  * <p>Every sublevel sits on a rung: 0 for the ground manifold, 1 for the intermediate level, 2 for
  * the Rydberg level. Its energy here is its energy over h minus the photon energies that lead up to
- * its rung, with the start at zero and the lasers on bare N-photon resonance with the wanted target,
- * so that an intermediate sublevel lies at minus its detuning. In a {@link LadderSetting} with field
- * factors a<sub>k</sub> and laser offsets ν<sub>k</sub> the Hamiltonian over h (Hz) is
+ * its rung, with the start at zero and the lasers on bare N-photon resonance with the wanted
+ * target, so that an intermediate sublevel lies at minus its detuning. In a {@link LadderSetting}
+ * with field factors a<sub>k</sub> and laser offsets ν<sub>k</sub> the Hamiltonian over h (Hz) is
  *
  * <ul>
  *   <li>on the diagonal: energy + Σ<sub>k</sub> a<sub>k</sub>² · (light shift by far-off-resonant
- *       levels) + dν/dB · δB − Σ<sub>k below the rung</sub> ν<sub>k</sub> (+ the target shift on the
- *       last rung), with −iΓ/4π for decay when loss is asked for;
+ *       levels) + dν/dB · δB − Σ<sub>k below the rung</sub> ν<sub>k</sub> (+ the target shift on
+ *       the last rung), with −iΓ/4π for decay when loss is asked for;
  *   <li>between neighbouring rungs: a<sub>k</sub> Ω/4π, Ω = E0⟨d·ε⟩/ħ;
  *   <li>between first and last rung: a<sub>1</sub>a<sub>2</sub> times the coupling through the
- *       fine-structure partner of the intermediate level, which is far off resonance and eliminated.
+ *       fine-structure partner of the intermediate level, which is far off resonance and
+ *       eliminated.
  * </ul>
  *
  * <p>Immutable and thread-safe.
@@ -70,11 +71,7 @@ public final class Ladder {
   private final int[] wanted;
 
   Ladder(
-      List<State> states,
-      List<Coupling> couplings,
-      double[][] farShift,
-      int start,
-      int[] wanted) {
+      List<State> states, List<Coupling> couplings, double[][] farShift, int start, int[] wanted) {
     this.states = List.copyOf(states);
     this.couplings = List.copyOf(couplings);
     this.farShift = new double[farShift.length][];
@@ -213,8 +210,7 @@ public final class Ladder {
     for (Coupling c : couplings) {
       double f = c.step() == step || c.step() == DIRECT ? factor : 1;
       scaled.add(
-          new Coupling(
-              c.lower(), c.upper(), c.step(), f * c.rabiReHertz(), f * c.rabiImHertz()));
+          new Coupling(c.lower(), c.upper(), c.step(), f * c.rabiReHertz(), f * c.rabiImHertz()));
     }
     return new Ladder(states, scaled, farShift, start, wanted);
   }

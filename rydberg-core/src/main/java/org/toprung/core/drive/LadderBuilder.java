@@ -26,9 +26,9 @@ import org.toprung.core.structure.Lifetimes;
  * Turns the description of a drive into its {@link Ladder}: every sublevel that the light can reach
  * from the start, its energy in the rotating frame and its couplings.
  *
- * <p>The fine-structure partner of the named intermediate level (P½ for P3/2 and the reverse) is kept
- * sublevel by sublevel where the first laser is less than {@value #NEAR_FACTOR} times farther from it
- * than from the named level, and eliminated otherwise.
+ * <p>The fine-structure partner of the named intermediate level (P½ for P3/2 and the reverse) is
+ * kept sublevel by sublevel where the first laser is less than {@value #NEAR_FACTOR} times farther
+ * from it than from the named level, and eliminated otherwise.
  */
 final class LadderBuilder {
   private static final double NEAR_FACTOR = 30;
@@ -98,8 +98,7 @@ final class LadderBuilder {
     }
     for (Level level : fineStructure(targetLevel)) {
       if (canReach(level)) {
-        double offset =
-            transition(targetLevel, level) - zeeman(setup.target().doubledM());
+        double offset = transition(targetLevel, level) - zeeman(setup.target().doubledM());
         ProductState.uncoupled(species, level, setup.field())
             .forEach(s -> add(s, 2, offset + s.energyHertz()));
       }
@@ -253,9 +252,7 @@ final class LadderBuilder {
       return angular;
     }
     double scale =
-        field[step]
-            * DIPOLE_UNIT
-            * dipoles.reduced(upper.level(), lower.level()).valueA0();
+        field[step] * DIPOLE_UNIT * dipoles.reduced(upper.level(), lower.level()).valueA0();
     return new double[] {scale * angular[0], scale * angular[1]};
   }
 
@@ -264,8 +261,7 @@ final class LadderBuilder {
     if (eliminated.isEmpty()) {
       return couplings;
     }
-    List<ProductState> middle =
-        ProductState.uncoupled(species, eliminated.get(), setup.field());
+    List<ProductState> middle = ProductState.uncoupled(species, eliminated.get(), setup.field());
     double fromStart = detuningFrom(eliminated.get());
     for (int l = 0; l < states.size(); l++) {
       for (int u = 0; u < states.size(); u++) {

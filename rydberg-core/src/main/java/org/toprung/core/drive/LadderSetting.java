@@ -79,10 +79,7 @@ public final class LadderSetting {
    */
   public LadderSetting withMagneticOffset(double tesla) {
     return new LadderSetting(
-        fieldFactor,
-        laserOffset,
-        requireFinite(tesla, "magnetic field change", "T"),
-        targetShift);
+        fieldFactor, laserOffset, requireFinite(tesla, "magnetic field change", "T"), targetShift);
   }
 
   /**

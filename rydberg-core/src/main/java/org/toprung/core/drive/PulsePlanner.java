@@ -80,9 +80,7 @@ public final class PulsePlanner {
         energy += vRe * frame.effectiveReHertz(a, b) - vIm * frame.effectiveImHertz(a, b);
       }
     }
-    return new double[] {
-      2 * Math.sqrt(square), energy / square - frame.effectiveReHertz(0, 0)
-    };
+    return new double[] {2 * Math.sqrt(square), energy / square - frame.effectiveReHertz(0, 0)};
   }
 
   private static double abs2(DressedFrame frame, int row, int column) {

@@ -5,8 +5,8 @@ import java.util.Arrays;
 /**
  * A dense complex matrix with separate, row-major real and imaginary parts.
  *
- * <p>Mutable and meant to be reused: operations that produce a matrix write into {@code this}, which
- * must not be one of the operands. Not thread-safe.
+ * <p>Mutable and meant to be reused: operations that produce a matrix write into {@code this},
+ * which must not be one of the operands. Not thread-safe.
  */
 public final class ComplexMatrix {
   private final int rows;

@@ -9,8 +9,8 @@ import org.toprung.core.quantity.PhysicalConstants;
  * Parametric potential of Marinescu, Sadeghpour and Dalgarno, Phys. Rev. A 49, 982 (1994),
  * doi:10.1103/PhysRevA.49.982:
  *
- * <p>V_l(r) = −Z_l(r)/r − α_c/(2r⁴) (1 − e^{−(r/r_c)⁶}), Z_l(r) = 1 + (z−1) e^{−a1 r} − r (a3 + a4 r)
- * e^{−a2 r},
+ * <p>V_l(r) = −Z_l(r)/r − α_c/(2r⁴) (1 − e^{−(r/r_c)⁶}), Z_l(r) = 1 + (z−1) e^{−a1 r} − r (a3 + a4
+ * r) e^{−a2 r},
  *
  * <p>plus the spin-orbit energy (α²/2)(1/r)(dV/dr) L·S (1 − α²V/2)^{−2}, whose last factor keeps it
  * below the centrifugal energy at the nucleus (Condon and Shortley, The Theory of Atomic Spectra,
@@ -84,10 +84,7 @@ final class ModelPotential implements ValencePotential {
     double r4 = r2 * r2;
     double v = -z / r - alpha / (2 * r4) * outside;
     double slope =
-        -zSlope / r
-            + z / r2
-            + 2 * alpha / (r4 * r) * outside
-            - 3 * alpha / (r4 * r) * cut * inside;
+        -zSlope / r + z / r2 + 2 * alpha / (r4 * r) * outside - 3 * alpha / (r4 * r) * cut * inside;
     double damping =
         1 - PhysicalConstants.FINE_STRUCTURE * PhysicalConstants.FINE_STRUCTURE / 2 * v;
     return v + spinOrbit * slope / (r * damping * damping);

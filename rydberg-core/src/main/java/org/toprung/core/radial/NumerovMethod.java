@@ -8,21 +8,21 @@ import org.toprung.core.atom.Species;
 import org.toprung.core.cache.BoundedCache;
 
 /**
- * Radial integrals by Numerov integration at measured energies: in the Coulomb potential for hydrogen,
- * and for an alkali atom in the l-dependent model potential of Marinescu, Sadeghpour and Dalgarno,
- * Phys. Rev. A 49, 982 (1994), with spin-orbit energy.
+ * Radial integrals by Numerov integration at measured energies: in the Coulomb potential for
+ * hydrogen, and for an alkali atom in the l-dependent model potential of Marinescu, Sadeghpour and
+ * Dalgarno, Phys. Rev. A 49, 982 (1994), with spin-orbit energy.
  *
- * <p><b>Core polarization.</b> The valence electron induces a dipole in the core, so the operator is r −
- * α_c r/(r² + r_c²)^{3/2} (Hameed, Herzenberg and James, J. Phys. B 1, 822 (1968); Hameed, J. Phys. B
- * 5, 746 (1972)). Without it the elements from the ground level to the second resonance come out 25 to
- * 45 % high. The cutoff radius r_c of P_j is calibrated so that the highest measured element from the
- * ground level to nP_j is met: near threshold the inner part of a wave no longer changes with n, so this
- * member says most about higher n. Pairs of S and P_j take that radius, other pairs the larger of both
- * levels, since the core is polarized as a dipole where both waves are outside it; for l ≠ 1 the radius
- * is that of the potential.
+ * <p><b>Core polarization.</b> The valence electron induces a dipole in the core, so the operator
+ * is r − α_c r/(r² + r_c²)^{3/2} (Hameed, Herzenberg and James, J. Phys. B 1, 822 (1968); Hameed,
+ * J. Phys. B 5, 746 (1972)). Without it the elements from the ground level to the second resonance
+ * come out 25 to 45 % high. The cutoff radius r_c of P_j is calibrated so that the highest measured
+ * element from the ground level to nP_j is met: near threshold the inner part of a wave no longer
+ * changes with n, so this member says most about higher n. Pairs of S and P_j take that radius,
+ * other pairs the larger of both levels, since the core is polarized as a dipole where both waves
+ * are outside it; for l ≠ 1 the radius is that of the potential.
  *
- * <p><b>Accuracy.</b> Hydrogen: two grids and Richardson extrapolation, relative error below 1e-10 to n
- * = 100. Alkali atoms: the grid error of 1e-5 is far below that of the model.
+ * <p><b>Accuracy.</b> Hydrogen: two grids and Richardson extrapolation, relative error below 1e-10
+ * to n = 100. Alkali atoms: the grid error of 1e-5 is far below that of the model.
  *
  * <p>Immutable to the outside; waves are kept in a bounded cache.
  */
@@ -77,7 +77,8 @@ public final class NumerovMethod implements RadialMethod {
                     .get(new SolverKey(level.l(), level.doubledJ()))
                     .solve(level.n(), effectiveN.applyAsDouble(level)));
     // one entry for j = 1/2 and one for 3/2; NaN where nothing is measured
-    this.calibrations = new BoundedCache<>(2, doubledJ -> calibrate ? calibrated(doubledJ) : Double.NaN);
+    this.calibrations =
+        new BoundedCache<>(2, doubledJ -> calibrate ? calibrated(doubledJ) : Double.NaN);
   }
 
   /**
@@ -99,12 +100,7 @@ public final class NumerovMethod implements RadialMethod {
    */
   public static NumerovMethod uncalibrated(Species species) {
     return new NumerovMethod(
-        "model potential, Numerov, uncalibrated",
-        species::effectiveN,
-        species,
-        false,
-        STEP,
-        null);
+        "model potential, Numerov, uncalibrated", species::effectiveN, species, false, STEP, null);
   }
 
   /**
@@ -113,8 +109,7 @@ public final class NumerovMethod implements RadialMethod {
    * @return the method
    */
   public static NumerovMethod hydrogen() {
-    NumerovMethod fine =
-        new NumerovMethod("hydrogen, Numerov", Level::n, null, false, STEP, null);
+    NumerovMethod fine = new NumerovMethod("hydrogen, Numerov", Level::n, null, false, STEP, null);
     return new NumerovMethod(fine.description, Level::n, null, false, 2 * STEP, fine);
   }
 
@@ -128,8 +123,7 @@ public final class NumerovMethod implements RadialMethod {
     double bare = waves.get(a).dipole(waves.get(b));
     if (species == null) {
       // the error of the Numerov recursion is h⁴ + O(h⁶)
-      double fine =
-          refined == null ? bare : refined.waves.get(a).dipole(refined.waves.get(b));
+      double fine = refined == null ? bare : refined.waves.get(a).dipole(refined.waves.get(b));
       return new RadialIntegral(fine + (fine - bare) / 15, 0, false);
     }
     boolean calibrated = a.l() + b.l() == 1 && calibration(a.l() == 1 ? a : b) > 0;
@@ -164,8 +158,8 @@ public final class NumerovMethod implements RadialMethod {
   }
 
   /**
-   * The cutoff radius at which the highest measured element from the ground level to nP_j is met, the
-   * largest there is; NaN where no element is measured or none can meet it.
+   * The cutoff radius at which the highest measured element from the ground level to nP_j is met,
+   * the largest there is; NaN where no element is measured or none can meet it.
    */
   private double calibrated(int doubledJ) {
     Level ground = species.groundLevel();

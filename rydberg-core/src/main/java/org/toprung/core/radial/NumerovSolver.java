@@ -3,20 +3,21 @@ package org.toprung.core.radial;
 import java.util.Locale;
 
 /**
- * Numerov integration, from outside inward, of the radial equation of one potential and l on the grid
- * r = x², x = ih.
+ * Numerov integration, from outside inward, of the radial equation of one potential and l on the
+ * grid r = x², x = ih.
  *
  * <p>With P(r) = r^{1/4} y(√r) the radial equation P″ = [2(V − E) + l(l+1)/r²] P becomes
  *
  * <p>y″ = [8x²(V − E) + (2l + ½)(2l + 3/2)/x²] y,
  *
- * <p>in which the wavelength of a Coulomb wave hardly changes along x. Normalization ∫P² dr = 2∫x²y² dx
- * (Bhatti, Cromer and Cooke, Phys. Rev. A 24, 161 (1981) use the same square-root grid). The local
- * error of a step is h⁶.
+ * <p>in which the wavelength of a Coulomb wave hardly changes along x. Normalization ∫P² dr =
+ * 2∫x²y² dx (Bhatti, Cromer and Cooke, Phys. Rev. A 24, 161 (1981) use the same square-root grid).
+ * The local error of a step is h⁶.
  *
- * <p>The energy is given, so at small r the irregular solution comes in with the size of the mismatch
- * between energy and potential. It is cut off where, inside the inner turning point, the solution changes
- * sign or starts to grow inward. The nodes outside, all in the allowed region, must be n−l−1.
+ * <p>The energy is given, so at small r the irregular solution comes in with the size of the
+ * mismatch between energy and potential. It is cut off where, inside the inner turning point, the
+ * solution changes sign or starts to grow inward. The nodes outside, all in the allowed region,
+ * must be n−l−1.
  */
 final class NumerovSolver {
   /** The grid ends at 2n² + 14 n^(4/3) + 40, where the wave has decayed to e^−20 or less. */
@@ -62,7 +63,8 @@ final class NumerovSolver {
     int last = (int) Math.ceil(Math.sqrt(outer) / step);
     double[] y = new double[last + 1];
     double twelfth = step * step / 12;
-    // Numerov in w = (1 - h²g/12) y: w(i-1) = (12/f(i) - 10) w(i) - w(i+1), which keeps the division
+    // Numerov in w = (1 - h²g/12) y: w(i-1) = (12/f(i) - 10) w(i) - w(i+1), which keeps the
+    // division
     // out of the chain of dependent operations
     double wOuter = 0;
     double w = (n - l - 1) % 2 == 0 ? SEED : -SEED;

@@ -40,8 +40,8 @@ final class RadialWave {
   }
 
   /**
-   * ∫ P_a r (r² + r_c²)^−3/2 P_b dr = 2∫ x⁴ (x⁴ + r_c²)^−3/2 y_a y_b dx, up to {@value #CORE_REACH} a0: further
-   * out the operator is below 1e-5 of r even next to the first node of a wave.
+   * ∫ P_a r (r² + r_c²)^−3/2 P_b dr = 2∫ x⁴ (x⁴ + r_c²)^−3/2 y_a y_b dx, up to {@value #CORE_REACH}
+   * a0: further out the operator is below 1e-5 of r even next to the first node of a wave.
    */
   double corePolarization(RadialWave other, double rc) {
     int from = Math.max(first, other.first);

@@ -14,8 +14,8 @@ import org.toprung.core.radial.RadialIntegral;
 import org.toprung.core.radial.RadialMethod;
 
 /**
- * Reduced dipole elements between the levels of an atom. Immutable to the outside, thread-safe; known
- * elements are kept in a bounded cache.
+ * Reduced dipole elements between the levels of an atom. Immutable to the outside, thread-safe;
+ * known elements are kept in a bounded cache.
  *
  * <p>⟨l‖r‖l′⟩ = (−1)^l √((2l+1)(2l′+1)) (l 1 l′; 0 0 0) R, and
  *
@@ -25,9 +25,9 @@ import org.toprung.core.radial.RadialMethod;
  * element; the modulus is the measured one where the catalogue has one.
  *
  * <p>Uncertainty of a computed element: 1 % of its value, plus in quadrature a part of the core
- * correction. The part is 5 % where that correction is calibrated on a member of the same series (from
- * the second resonance the D lines of Rb and Cs are then met to 0.4 %, where the correction is 7 %), and
- * one half where it is not.
+ * correction. The part is 5 % where that correction is calibrated on a member of the same series
+ * (from the second resonance the D lines of Rb and Cs are then met to 0.4 %, where the correction
+ * is 7 %), and one half where it is not.
  */
 public final class DipoleElements {
   private static final Map<Species, DipoleElements> SHARED = new ConcurrentHashMap<>();
@@ -58,8 +58,7 @@ public final class DipoleElements {
    * @return the elements; one shared instance for each species
    */
   public static DipoleElements of(Species species) {
-    return SHARED.computeIfAbsent(
-        species, s -> new DipoleElements(s, NumerovMethod.of(s), true));
+    return SHARED.computeIfAbsent(species, s -> new DipoleElements(s, NumerovMethod.of(s), true));
   }
 
   /**
@@ -88,8 +87,8 @@ public final class DipoleElements {
    * @param a the level on the left
    * @param b the level on the right
    * @return ⟨a‖r‖b⟩ in a0
-   * @throws IllegalArgumentException if a level belongs to the core or is not in the catalogue, or if
-   *     the element is forbidden; the message names the rule
+   * @throws IllegalArgumentException if a level belongs to the core or is not in the catalogue, or
+   *     if the element is forbidden; the message names the rule
    */
   public DipoleElement reduced(Level a, Level b) {
     return elements.get(new Pair(a, b));
@@ -128,7 +127,9 @@ public final class DipoleElements {
   private static void requireAllowed(Level a, Level b) {
     if (Math.abs(a.l() - b.l()) != 1) {
       throw forbidden(
-          a, b, String.format(Locale.ROOT, "l must change by 1 (parity), given %d and %d", a.l(), b.l()));
+          a,
+          b,
+          String.format(Locale.ROOT, "l must change by 1 (parity), given %d and %d", a.l(), b.l()));
     }
     if (Math.abs(a.doubledJ() - b.doubledJ()) > 2) {
       throw forbidden(

@@ -18,20 +18,22 @@ import org.toprung.core.quantity.PhysicalConstants;
  *
  * <p>ΔE = −(E0²/4) Σ_k [A_k/(E_k − E_a − ħω) + B_k/(E_k − E_a + ħω)],
  *
- * <p>A_k = Σ_q |a_q|² |⟨k m+q|d_q|a m⟩|² (absorbing first), B_k = Σ_q |a_q|² |⟨k m−q|d_−q|a m⟩|² (emitting
- * first); the nuclear spin is a spectator. The polarizability of the core adds −α_c E0²/4, taken static.
- * Terms that would mix different m are left out: this is the diagonal shift.
+ * <p>A_k = Σ_q |a_q|² |⟨k m+q|d_q|a m⟩|² (absorbing first), B_k = Σ_q |a_q|² |⟨k m−q|d_−q|a m⟩|²
+ * (emitting first); the nuclear spin is a spectator. The polarizability of the core adds −α_c
+ * E0²/4, taken static. Terms that would mix different m are left out: this is the diagonal shift.
  *
- * <p><b>Above the ionization threshold of the level</b>, where a laser photon could free the electron, the
- * sum over the continuum is done by closure: with Σ(A_k − B_k) = 0 and the Thomas-Reiche-Kuhn sum
- * rule the same expression is
+ * <p><b>Above the ionization threshold of the level</b>, where a laser photon could free the
+ * electron, the sum over the continuum is done by closure: with Σ(A_k − B_k) = 0 and the
+ * Thomas-Reiche-Kuhn sum rule the same expression is
  *
- * <p>ΔE = e²E0²/(4mω²) + (E0²/4) Σ_k (ω_k/ω)² [A_k/(ħω − ħω_k) − B_k/(ħω + ħω_k)], ħω_k = E_k − E_a:
+ * <p>ΔE = e²E0²/(4mω²) + (E0²/4) Σ_k (ω_k/ω)² [A_k/(ħω − ħω_k) − B_k/(ħω + ħω_k)], ħω_k = E_k −
+ * E_a:
  *
  * <p>the energy of a free electron in the field, and a sum that low-lying levels dominate.
  *
- * <p><b>Near levels</b> are those the caller treats without perturbation theory: of them the resonant
- * term (the first of an upper level, the second of a lower one) is left out, the other is kept.
+ * <p><b>Near levels</b> are those the caller treats without perturbation theory: of them the
+ * resonant term (the first of an upper level, the second of a lower one) is left out, the other is
+ * kept.
  *
  * <p>Uncertainty: that of the elements; 5 % of the core part; without closure 1 atomic unit for the
  * continuum.
@@ -72,8 +74,8 @@ public final class FarLightShift {
    * @param polarization components of the unit polarization vector about the axis of mJ
    * @param nearLevels levels whose resonant term is left out
    * @return shift/h in Hz/(V/m)², to be multiplied by E0²; positive where the level moves up
-   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue, the
-   *     projection is none of the level, or the frequency is not positive and finite
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
+   *     the projection is none of the level, or the frequency is not positive and finite
    */
   public Estimate hertzPerFieldSquared(
       Level level,
@@ -96,8 +98,7 @@ public final class FarLightShift {
     double coreAu = species.corePolarizabilityAu().value();
     double unit = PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ / 4;
     double shift = -unit * coreAu;
-    double uncertainty =
-        unit * (CORE_TRUST * coreAu + (closure ? 0 : CONTINUUM_AU));
+    double uncertainty = unit * (CORE_TRUST * coreAu + (closure ? 0 : CONTINUUM_AU));
     if (closure) {
       double photonAu = laserFrequencyHertz / PhysicalConstants.HARTREE_HERTZ;
       shift += unit / (photonAu * photonAu);

@@ -23,10 +23,10 @@ import org.toprung.core.quantity.PhysicalConstants;
  * g<sub>I</sub> as written. M = m<sub>J</sub> + m<sub>I</sub> is conserved, so that every M is
  * diagonalized alone.
  *
- * <p>A sublevel is labelled by M and by the F it goes to when the field is turned off slowly: within
- * one M levels do not cross, so the order of the energies is that of zero field. Energies are counted
- * from the centre of gravity of the manifold at zero field. Eigenvectors are real, with the largest
- * component positive.
+ * <p>A sublevel is labelled by M and by the F it goes to when the field is turned off slowly:
+ * within one M levels do not cross, so the order of the energies is that of zero field. Energies
+ * are counted from the centre of gravity of the manifold at zero field. Eigenvectors are real, with
+ * the largest component positive.
  *
  * <p>Valid while the field does not mix levels of different J: μ<sub>B</sub>B ≪ fine-structure
  * splitting. References: Arimondo, Inguscio and Violino, Rev. Mod. Phys. 49, 31 (1977); Breit and
@@ -160,8 +160,7 @@ public final class HyperfineManifold {
     HyperfineConstants constants = species.hyperfine(level);
     int tI = species.doubledNuclearSpin();
     int tJ = level.doubledJ();
-    double bohrTimesField =
-        PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA * field.tesla();
+    double bohrTimesField = PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA * field.tesla();
     double gJ = species.gJ(level);
     double gI = species.gI();
     List<Eigenstate> states = new ArrayList<>();

@@ -12,14 +12,14 @@ import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.quantity.Temperature;
 
 /**
- * Decay rates of levels: spontaneous, and driven by blackbody radiation to all other levels and into
- * the continuum.
+ * Decay rates of levels: spontaneous, and driven by blackbody radiation to all other levels and
+ * into the continuum.
  *
  * <p>A = ω³ |⟨‖d‖⟩|² / (3π ε0 ħ c³ (2J+1)) summed over lower levels; blackbody: the same expression
- * times the photon number 1/(e^{ħω/kT} − 1), over levels below and above (Gallagher and Cooke, Phys.
- * Rev. Lett. 42, 835 (1979)). Beyond the levels summed one by one, the line strength per unit of energy,
- * which is continuous across the ionization limit, is continued with the power of ω that it follows at
- * the end of the sum, and integrated; this part is trusted to 20 %.
+ * times the photon number 1/(e^{ħω/kT} − 1), over levels below and above (Gallagher and Cooke,
+ * Phys. Rev. Lett. 42, 835 (1979)). Beyond the levels summed one by one, the line strength per unit
+ * of energy, which is continuous across the ionization limit, is continued with the power of ω that
+ * it follows at the end of the sum, and integrated; this part is trusted to 20 %.
  */
 public final class Lifetimes {
   private static final Map<Species, Lifetimes> SHARED = new ConcurrentHashMap<>();
@@ -77,8 +77,8 @@ public final class Lifetimes {
   }
 
   /**
-   * The rate of spontaneous decay to all lower levels: the inverse of the measured lifetime where there
-   * is one.
+   * The rate of spontaneous decay to all lower levels: the inverse of the measured lifetime where
+   * there is one.
    *
    * @param level the level
    * @return rate in s⁻¹; 0 for the ground level
@@ -89,14 +89,14 @@ public final class Lifetimes {
   }
 
   /**
-   * The rate at which blackbody radiation takes the atom out of a level, to other levels or into the
-   * continuum.
+   * The rate at which blackbody radiation takes the atom out of a level, to other levels or into
+   * the continuum.
    *
    * @param level the level, n up to 140
    * @param temperature temperature of the surroundings
    * @return rate in s⁻¹; 0 at 0 K
-   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue, or
-   *     if n is above 140
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
+   *     or if n is above 140
    */
   public Estimate blackbodyRatePerSecond(Level level, Temperature temperature) {
     return blackbody.get(new Warm(level, temperature));
@@ -171,8 +171,7 @@ public final class Lifetimes {
     double density = strengthDensity(level, last);
     double middleFrequency = species.energyHertz(middle).value() - energy;
     double power =
-        Math.log(density / strengthDensity(level, middle))
-            / Math.log(frequency / middleFrequency);
+        Math.log(density / strengthDensity(level, middle)) / Math.log(frequency / middleFrequency);
     power = Math.max(STEEPEST, Math.min(FLATTEST, power));
     // the levels end half a level beyond the last one
     double n = species.effectiveN(last) + 0.5;
@@ -182,7 +181,12 @@ public final class Lifetimes {
     for (int i = 0; i < INTEGRATION_STEPS; i++) {
       double nu = from * Math.exp((i + 0.5) * step);
       sum +=
-          density * Math.pow(nu / frequency, power) * nu * nu * nu * nu
+          density
+              * Math.pow(nu / frequency, power)
+              * nu
+              * nu
+              * nu
+              * nu
               / Math.expm1(nu / thermalHertz);
     }
     return COEFFICIENT / (level.doubledJ() + 1) * sum * step;

@@ -15,10 +15,7 @@ final class Partners {
     for (int n = 1; n <= Math.min(largestN, Level.MAXIMUM_N); n++) {
       for (int l = level.l() - 1; l <= level.l() + 1; l += 2) {
         for (int doubledJ = 2 * l - 1; doubledJ <= 2 * l + 1; doubledJ += 2) {
-          if (l >= 0
-              && l < n
-              && doubledJ > 0
-              && Math.abs(doubledJ - level.doubledJ()) <= 2) {
+          if (l >= 0 && l < n && doubledJ > 0 && Math.abs(doubledJ - level.doubledJ()) <= 2) {
             Level partner = Level.of(n, l, doubledJ);
             if (species.isValid(partner)) {
               partners.add(partner);

@@ -18,8 +18,7 @@ final class SecondOrder {
     if (Math.abs(upper) > b.doubledJ()) {
       return 0;
     }
-    double symbol =
-        Wigner.threeJDoubled(b.doubledJ(), 2, a.doubledJ(), -upper, 2 * q, doubledM);
+    double symbol = Wigner.threeJDoubled(b.doubledJ(), 2, a.doubledJ(), -upper, 2 * q, doubledM);
     return symbol * symbol;
   }
 

@@ -12,14 +12,14 @@ import org.toprung.core.quantity.PhysicalConstants;
 /**
  * Static electric polarizabilities of fine-structure levels by sums over states.
  *
- * <p>Convention: shift/h = −½ α(m) E², α(m) = α_0 + α_2 (3m² − J(J+1))/(J(2J−1)), for a static field
- * along the axis of m (for example Mitroy, Safronova and Clark, J. Phys. B 43, 202001 (2010)). α(m) =
- * 2 Σ |⟨k m|ez|a m⟩|²/(E_k − E_a), plus the polarizability of the core. The fine structure is
- * resolved, hyperfine structure is not. The field must be so weak that the shift is small against the
- * distance to the next level.
+ * <p>Convention: shift/h = −½ α(m) E², α(m) = α_0 + α_2 (3m² − J(J+1))/(J(2J−1)), for a static
+ * field along the axis of m (for example Mitroy, Safronova and Clark, J. Phys. B 43, 202001
+ * (2010)). α(m) = 2 Σ |⟨k m|ez|a m⟩|²/(E_k − E_a), plus the polarizability of the core. The fine
+ * structure is resolved, hyperfine structure is not. The field must be so weak that the shift is
+ * small against the distance to the next level.
  *
- * <p>The continuum is left out: an uncertainty of 1 atomic unit stands for it, by which it changes the
- * ground levels at most; it is nothing against the polarizability of higher levels.
+ * <p>The continuum is left out: an uncertainty of 1 atomic unit stands for it, by which it changes
+ * the ground levels at most; it is nothing against the polarizability of higher levels.
  */
 public final class StaticPolarizability {
   private static final Map<Species, StaticPolarizability> SHARED = new ConcurrentHashMap<>();
@@ -74,8 +74,7 @@ public final class StaticPolarizability {
 
   private Pair evaluate(Level level) {
     species.requireValid(level);
-    List<Level> partners =
-        Partners.of(species, level, Math.max(level.n() + REACH, LEAST_N));
+    List<Level> partners = Partners.of(species, level, Math.max(level.n() + REACH, LEAST_N));
     int doubledJ = level.doubledJ();
     double core = species.corePolarizabilityAu().value();
     double unit = PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ;
@@ -96,8 +95,7 @@ public final class StaticPolarizability {
       mean += factor * strength.value() * meanShare;
       stretched += factor * strength.value() * stretchedShare;
       meanError += Math.abs(factor) * strength.uncertainty() * meanShare;
-      differenceError +=
-          Math.abs(factor * (stretchedShare - meanShare)) * strength.uncertainty();
+      differenceError += Math.abs(factor * (stretchedShare - meanShare)) * strength.uncertainty();
     }
     // the tensor factor is 1 at m = J
     return new Pair(

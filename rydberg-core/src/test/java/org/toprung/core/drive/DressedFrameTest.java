@@ -96,12 +96,9 @@ class DressedFrameTest {
     Ladder ladder = threeLevels(1e9, 1.2e8, 6e7);
     PulsePlan plan = PulsePlanner.plan(ladder, Math.PI);
     DressedFrame frame =
-        DressedFrame.of(
-            ladder, NOMINAL.withLaserOffset(1, plan.frequencyOffset().hertz()), 0, 2);
+        DressedFrame.of(ladder, NOMINAL.withLaserOffset(1, plan.frequencyOffset().hertz()), 0, 2);
     assertEquals(
-        frame.effectiveReHertz(0, 0),
-        frame.effectiveReHertz(1, 1),
-        1e-6 * plan.rabi().hertz());
+        frame.effectiveReHertz(0, 0), frame.effectiveReHertz(1, 1), 1e-6 * plan.rabi().hertz());
     assertEquals(0.5, plan.duration().seconds() * plan.rabi().hertz(), 1e-12);
   }
 }

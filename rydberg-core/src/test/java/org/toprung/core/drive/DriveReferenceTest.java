@@ -4,9 +4,9 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.toprung.angular.Polarization.SIGMA_MINUS;
 import static org.toprung.angular.Polarization.SIGMA_PLUS;
-import static org.toprung.core.quantity.MagneticField.gauss;
 import static org.toprung.core.quantity.Frequency.gigahertz;
 import static org.toprung.core.quantity.Length.micrometres;
+import static org.toprung.core.quantity.MagneticField.gauss;
 import static org.toprung.core.quantity.Power.milliwatts;
 
 import java.io.BufferedReader;
@@ -60,10 +60,8 @@ class DriveReferenceTest {
   @Test
   void hasTheRabiFrequenciesOfTheWorkedExample() throws IOException {
     Map<String, Double> reference = reference();
-    within2Percent(
-        reference.get("step1_rabi"), DRIVE.steps().get(0).rabi().hertz() * 1e-6);
-    within2Percent(
-        reference.get("step2_rabi"), DRIVE.steps().get(1).rabi().hertz() * 1e-6);
+    within2Percent(reference.get("step1_rabi"), DRIVE.steps().get(0).rabi().hertz() * 1e-6);
+    within2Percent(reference.get("step2_rabi"), DRIVE.steps().get(1).rabi().hertz() * 1e-6);
     within2Percent(reference.get("effective_rabi"), DRIVE.rabi().hertz() * 1e-6);
   }
 
@@ -77,19 +75,16 @@ class DriveReferenceTest {
     int wanted = ladder.wanted()[0];
     double farTarget = ladder.farShiftHertz(wanted, 0) + ladder.farShiftHertz(wanted, 1);
     within2Percent(
-        reference.get("start_light_shift"),
-        (DRIVE.startLightShift().hertz() - farStart) * 1e-6);
+        reference.get("start_light_shift"), (DRIVE.startLightShift().hertz() - farStart) * 1e-6);
     within2Percent(
-        reference.get("target_light_shift"),
-        (DRIVE.targetLightShift().hertz() - farTarget) * 1e-6);
+        reference.get("target_light_shift"), (DRIVE.targetLightShift().hertz() - farTarget) * 1e-6);
   }
 
   @Test
   void hasTheScatteringOfTheWorkedExample() throws IOException {
     double tau = 1 / (2 * DRIVE.rabi().hertz());
     within2Percent(
-        reference().get("scattering_probability_pi_pulse"),
-        DRIVE.meanScatteringPerSecond() * tau);
+        reference().get("scattering_probability_pi_pulse"), DRIVE.meanScatteringPerSecond() * tau);
   }
 
   private static void within2Percent(double expected, double actual) {
@@ -97,9 +92,9 @@ class DriveReferenceTest {
   }
 
   /**
-   * Exact: on the light-shifted resonance the two eigenvalues that belong to start and target are one
-   * Rabi frequency apart. Commons Math diagonalizes the real symmetric Hamiltonian; 1 % is the target
-   * for second order, 10⁻⁶ for the plan.
+   * Exact: on the light-shifted resonance the two eigenvalues that belong to start and target are
+   * one Rabi frequency apart. Commons Math diagonalizes the real symmetric Hamiltonian; 1 % is the
+   * target for second order, 10⁻⁶ for the plan.
    */
   @Test
   void agreesWithFullDiagonalization() {
@@ -107,7 +102,8 @@ class DriveReferenceTest {
     double splitting = splitting(plan.frequencyOffset().hertz());
     assertEquals(splitting, plan.rabi().hertz(), 1e-6 * splitting);
     assertEquals(splitting, DRIVE.rabi().hertz(), 0.01 * splitting);
-    // the splitting √(δ² + Ω(δ)²) is smallest at δ = −ΩΩ′, and Ω ∝ (1/Δ + 1/(Δ+δ))/2 puts that at Ω²/2Δ
+    // the splitting √(δ² + Ω(δ)²) is smallest at δ = −ΩΩ′, and Ω ∝ (1/Δ + 1/(Δ+δ))/2 puts that at
+    // Ω²/2Δ
     double step = 1e5;
     double before = splitting(plan.frequencyOffset().hertz() - step);
     double after = splitting(plan.frequencyOffset().hertz() + step);
@@ -121,8 +117,7 @@ class DriveReferenceTest {
     int n = ladder.size();
     double[] re = new double[n * n];
     double[] im = new double[n * n];
-    ladder.hamiltonianHertz(
-        LadderSetting.nominal(2).withLaserOffset(1, offset), re, im);
+    ladder.hamiltonianHertz(LadderSetting.nominal(2).withLaserOffset(1, offset), re, im);
     Array2DRowRealMatrix h = new Array2DRowRealMatrix(n, n);
     for (int i = 0; i < n; i++) {
       for (int j = 0; j < n; j++) {
@@ -168,7 +163,6 @@ class DriveReferenceTest {
     assertEquals(0, DRIVE.otherTargets().size());
     assertEquals(1, DRIVE.ladder().wanted().length);
     assertEquals(
-        "68S1/2 mJ=1/2 mI=3/2",
-        DRIVE.ladder().states().get(DRIVE.ladder().wanted()[0]).label());
+        "68S1/2 mJ=1/2 mI=3/2", DRIVE.ladder().states().get(DRIVE.ladder().wanted()[0]).label());
   }
 }

@@ -7,10 +7,10 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.toprung.angular.Polarization.PI;
 import static org.toprung.angular.Polarization.SIGMA_MINUS;
 import static org.toprung.angular.Polarization.SIGMA_PLUS;
-import static org.toprung.core.quantity.MagneticField.gauss;
 import static org.toprung.core.quantity.Frequency.gigahertz;
 import static org.toprung.core.quantity.Frequency.megahertz;
 import static org.toprung.core.quantity.Length.micrometres;
+import static org.toprung.core.quantity.MagneticField.gauss;
 import static org.toprung.core.quantity.Power.milliwatts;
 
 import net.jqwik.api.ForAll;
@@ -71,8 +71,7 @@ class DriveTest {
   /** Common practice: 10 cm/s against co-propagating 780 and 480 nm is a third of a megahertz. */
   @Test
   void shiftsAMovingAtomByTheSumOfTheWaveVectors() {
-    Drive together =
-        rubidium(LOWER, UPPER.along(0, 0, 1), "60S1/2", 0.5).resolve();
+    Drive together = rubidium(LOWER, UPPER.along(0, 0, 1), "60S1/2", 0.5).resolve();
     assertEquals(-0.336e6, together.dopplerShift(0, 0, 0.1).hertz(), 0.003e6);
     assertEquals(0, together.dopplerShift(0.1, 0.1, 0).hertz(), 1e-6);
     Drive against = rubidium(LOWER, UPPER, "60S1/2", 0.5).resolve();
@@ -115,10 +114,7 @@ class DriveTest {
     double y = Math.sin(angle);
     Drive turned =
         rubidium(
-                linear(LOWER, tilt).along(x, y, 0),
-                linear(UPPER, 30).along(x, y, 0),
-                "60S1/2",
-                0.5)
+                linear(LOWER, tilt).along(x, y, 0), linear(UPPER, 30).along(x, y, 0), "60S1/2", 0.5)
             .resolve();
     assertEquals(one.rabi().hertz(), turned.rabi().hertz(), 1e-7 * one.rabi().hertz());
     assertEquals(
@@ -217,8 +213,7 @@ class DriveTest {
     refused(() -> empty.from(Sublevel.hyperfine("6S1/2", 2, 0)));
     refused(() -> empty.step(Sublevel.hyperfine("60S1/2", 2, 0), UPPER));
     refused(() -> empty.step(Level.parse("4S1/2"), LOWER));
-    assertTrue(
-        refused(() -> empty.step(Level.parse("5P3/2"), LOWER.polarized(PI))).contains("pi"));
+    assertTrue(refused(() -> empty.step(Level.parse("5P3/2"), LOWER.polarized(PI))).contains("pi"));
     refused(() -> Beam.gaussian(milliwatts(0), micrometres(20)));
     refused(() -> Beam.gaussian(milliwatts(1), micrometres(-20)));
     refused(() -> LOWER.along(0, 0, 0));
@@ -228,10 +223,7 @@ class DriveTest {
     refused(() -> rubidium(LOWER, UPPER, "60S1/2", 0.5).resolve().plan(0));
     refused(() -> rubidium(LOWER, UPPER, "60S1/2", 0.5).resolve().plan(Double.NaN));
     refused(
-        () ->
-            rubidium(LOWER, UPPER, "60S1/2", 0.5)
-                .detuned(Frequency.ofHertz(-1e15))
-                .resolve());
+        () -> rubidium(LOWER, UPPER, "60S1/2", 0.5).detuned(Frequency.ofHertz(-1e15)).resolve());
   }
 
   @Test
@@ -240,8 +232,7 @@ class DriveTest {
     assertTrue(
         assertThrows(IllegalStateException.class, setup::resolve).getMessage().contains("from"));
     Beam bare = Beam.gaussian(milliwatts(1), micrometres(10));
-    assertThrows(
-        IllegalStateException.class, () -> setup.step(Level.parse("5P3/2"), bare));
+    assertThrows(IllegalStateException.class, () -> setup.step(Level.parse("5P3/2"), bare));
     assertThrows(
         IllegalStateException.class,
         () -> setup.step(Level.parse("5P3/2"), bare.polarized(SIGMA_PLUS)));

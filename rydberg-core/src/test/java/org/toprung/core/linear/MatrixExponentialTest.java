@@ -92,8 +92,7 @@ class MatrixExponentialTest {
     for (double bad : new double[] {Double.NaN, Double.POSITIVE_INFINITY}) {
       ComplexMatrix a = ComplexMatrix.zeros(2, 2);
       a.set(1, 0, bad, 0);
-      assertThrows(
-          ArithmeticException.class, () -> MatrixExponential.ofSize(2).compute(a, a));
+      assertThrows(ArithmeticException.class, () -> MatrixExponential.ofSize(2).compute(a, a));
     }
   }
 
@@ -102,7 +101,6 @@ class MatrixExponentialTest {
     ComplexMatrix a = ComplexMatrix.zeros(2, 3);
     assertThrows(IllegalArgumentException.class, () -> a.times(a));
     assertThrows(IllegalArgumentException.class, () -> ComplexMatrix.zeros(0, 1));
-    assertThrows(
-        IllegalArgumentException.class, () -> a.copyFrom(ComplexMatrix.identity(2)));
+    assertThrows(IllegalArgumentException.class, () -> a.copyFrom(ComplexMatrix.identity(2)));
   }
 }

@@ -84,8 +84,7 @@ class HyperfineManifoldTest {
       for (int k = 0; k < s.components(); k++) {
         int tMj = s.doubledMj(k);
         double exact =
-            Wigner.clebschGordanDoubled(
-                3, tMj, 7, s.doubledM() - tMj, s.doubledF(), s.doubledM());
+            Wigner.clebschGordanDoubled(3, tMj, 7, s.doubledM() - tMj, s.doubledF(), s.doubledM());
         assertEquals(Math.abs(exact), Math.abs(s.amplitude(k)), 1e-6);
       }
     }
@@ -94,8 +93,7 @@ class HyperfineManifoldTest {
   /** Validation: g_F = 1/2 for F = 2, 0.70 MHz/G per mF (Rb-87 ground level, common practice). */
   @Test
   void hasTheWeakFieldSlopeOfTheGroundLevel() {
-    HyperfineManifold m =
-        HyperfineManifold.of(Species.RUBIDIUM_87, RUBIDIUM_GROUND, gauss(0.01));
+    HyperfineManifold m = HyperfineManifold.of(Species.RUBIDIUM_87, RUBIDIUM_GROUND, gauss(0.01));
     assertEquals(0.70e6, m.state(4, 2).hertzPerTesla() * 1e-4, 0.005e6);
     assertEquals(1.40e6, m.state(4, 4).hertzPerTesla() * 1e-4, 0.005e6);
     assertEquals(-0.70e6, m.state(2, 2).hertzPerTesla() * 1e-4, 0.005e6);
@@ -105,11 +103,9 @@ class HyperfineManifoldTest {
   void givesTheDerivativeOfTheEnergy() {
     Level level = Level.parse("6P3/2");
     double step = 1e-6;
-    HyperfineManifold low =
-        HyperfineManifold.of(Species.RUBIDIUM_87, level, tesla(0.003 - step));
+    HyperfineManifold low = HyperfineManifold.of(Species.RUBIDIUM_87, level, tesla(0.003 - step));
     HyperfineManifold mid = HyperfineManifold.of(Species.RUBIDIUM_87, level, tesla(0.003));
-    HyperfineManifold high =
-        HyperfineManifold.of(Species.RUBIDIUM_87, level, tesla(0.003 + step));
+    HyperfineManifold high = HyperfineManifold.of(Species.RUBIDIUM_87, level, tesla(0.003 + step));
     for (HyperfineManifold.Eigenstate s : mid.states()) {
       double numeric =
           (high.state(s.doubledF(), s.doubledM()).energyHertz()
@@ -131,10 +127,8 @@ class HyperfineManifoldTest {
 
   @Test
   void refusesASublevelThatDoesNotExist() {
-    HyperfineManifold m =
-        HyperfineManifold.of(Species.RUBIDIUM_87, RUBIDIUM_GROUND, gauss(1));
-    IllegalArgumentException e =
-        assertThrows(IllegalArgumentException.class, () -> m.state(6, 0));
+    HyperfineManifold m = HyperfineManifold.of(Species.RUBIDIUM_87, RUBIDIUM_GROUND, gauss(1));
+    IllegalArgumentException e = assertThrows(IllegalArgumentException.class, () -> m.state(6, 0));
     assertTrue(e.getMessage().contains("F=3"), e.getMessage());
   }
 }
