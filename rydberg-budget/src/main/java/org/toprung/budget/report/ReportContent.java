@@ -18,6 +18,9 @@ public record ReportContent(String title, Budget budget, Check check) {
   /**
    * Checks the parts.
    *
+   * @param title one line that names the scenario
+   * @param budget the budget
+   * @param check its check by simulation
    * @throws IllegalArgumentException if a part is missing
    */
   public ReportContent {
