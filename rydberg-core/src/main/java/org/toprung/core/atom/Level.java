@@ -42,7 +42,8 @@ public final class Level implements Comparable<Level> {
    * @throws IllegalArgumentException if a quantum number is out of its range
    */
   public static Level of(int n, int l, int doubledJ) {
-    return checked(n, l, doubledJ, "n=" + n + " l=" + l + " j=" + doubledJ + "/2");
+    requirePossible(n, l, doubledJ, null);
+    return new Level(n, l, doubledJ);
   }
 
   /**
@@ -68,24 +69,33 @@ public final class Level implements Comparable<Level> {
           "level \"%s\": \"%s\" stands for no l; the letters are %s",
           text, matcher.group(2), LETTERS);
     }
-    return checked(Integer.parseInt(matcher.group(1)), l, Integer.parseInt(matcher.group(4)), text);
+    int n = Integer.parseInt(matcher.group(1));
+    int doubledJ = Integer.parseInt(matcher.group(4));
+    requirePossible(n, l, doubledJ, text);
+    return new Level(n, l, doubledJ);
   }
 
-  private static Level checked(int n, int l, int doubledJ, String given) {
+  /**
+   * The text is what was given, null where it was numbers: this is called often and seldom refuses.
+   */
+  private static void requirePossible(int n, int l, int doubledJ, String text) {
     if (!(n >= 1 && n <= MAXIMUM_N)) {
-      throw Refusal.of("level \"%s\": n must be 1 to %d, given %d", given, MAXIMUM_N, n);
+      throw impossible(n, l, doubledJ, text, "n must be 1 to " + MAXIMUM_N + ", given " + n);
     }
     if (!(l >= 0 && l < n)) {
-      throw Refusal.of("level \"%s\": l must be 0 to n-1=%d, given %d", given, n - 1, l);
+      throw impossible(n, l, doubledJ, text, "l must be 0 to n-1=" + (n - 1) + ", given " + l);
     }
     if (doubledJ != 2 * l + 1 && (l == 0 || doubledJ != 2 * l - 1)) {
-      throw Refusal.of(
-          "level \"%s\": j must be %s, given %s",
-          given,
-          l == 0 ? "1/2" : (2 * l - 1) + "/2 or " + (2 * l + 1) + "/2",
-          Halves.text(doubledJ));
+      String allowed = l == 0 ? "1/2" : (2 * l - 1) + "/2 or " + (2 * l + 1) + "/2";
+      throw impossible(
+          n, l, doubledJ, text, "j must be " + allowed + ", given " + Halves.text(doubledJ));
     }
-    return new Level(n, l, doubledJ);
+  }
+
+  private static IllegalArgumentException impossible(
+      int n, int l, int doubledJ, String text, String rule) {
+    String given = text != null ? text : "n=" + n + " l=" + l + " 2j=" + doubledJ;
+    return Refusal.of("level \"%s\": %s", given, rule);
   }
 
   /**
