@@ -28,7 +28,7 @@ public final class ChartReport {
   private static final int WIDTH = 960; // px
   private static final int ROW = 32; // px
   private static final int FRAME = 130; // px for title and axis
-  private static final int LONGEST_TITLE = 90; // characters
+  private static final int LONGEST_TITLE = 60; // characters
   private static final float BAR = 16; // px
   private static final float MARK = 3; // px
   private static final double DECADES = 5; // that bars may span
@@ -48,7 +48,7 @@ public final class ChartReport {
     double smallest =
         all.stream().mapToDouble(CauseEntry::error).filter(e -> e > NOTHING).min().orElse(total);
     this.left =
-        Math.min(right / 10, Math.max(decadeBelow(smallest), right * Math.pow(10, -DECADES)));
+        Math.min(right / 1000, Math.max(decadeBelow(smallest), right * Math.pow(10, -DECADES)));
     List<CauseEntry> shown = all.stream().filter(c -> c.error() > left).toList();
     int rows = shown.size() + 1;
     this.chart = new XYChart(WIDTH, FRAME + ROW * rows, ChartTheme.Matlab);

@@ -3,6 +3,7 @@ package org.toprung.budget.report;
 import java.math.BigDecimal;
 import java.math.MathContext;
 import java.util.Locale;
+import java.util.regex.Pattern;
 import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.Power;
@@ -11,6 +12,7 @@ import org.toprung.core.quantity.Time;
 /** Numbers as people read them: a few significant digits and a unit. */
 final class Figures {
   private static final int DIGITS = 4;
+  private static final Pattern DECIMAL = Pattern.compile("\\d+\\.\\d+(?:E-?\\d+)?");
   private static final double SMALLEST = 1e-10; // probability told from zero
 
   private Figures() {}
@@ -56,6 +58,11 @@ final class Figures {
   static String number(double value, int digits) {
     BigDecimal rounded = new BigDecimal(value).round(new MathContext(digits));
     return rounded.signum() == 0 ? "0" : rounded.stripTrailingZeros().toPlainString();
+  }
+
+  /** A text with its decimal numbers rounded. */
+  static String shortened(String text) {
+    return DECIMAL.matcher(text).replaceAll(m -> number(Double.parseDouble(m.group()), DIGITS));
   }
 
   private static double rounded(double value) {

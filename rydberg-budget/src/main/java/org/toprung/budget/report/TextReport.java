@@ -18,6 +18,7 @@ import org.toprung.core.quantity.Frequency;
 public final class TextReport {
   private static final double WORTH_A_LEVER = 0.01; // share of the total
   private static final int MOST_TARGETS = 5;
+  private static final double FAINTEST_HERTZ = 1; // Rabi frequency of a target worth a line
   private static final double TESLA_PER_GAUSS = 1e-4;
   private static final int CAUSE_COLUMNS = 28;
   private static final int ERROR_COLUMNS = 8;
@@ -83,7 +84,7 @@ public final class TextReport {
             "%s, waist %s, %s, along (%s, %s, %s)",
             Figures.of(step.beam().power()),
             Figures.of(step.beam().waist()),
-            step.beam().polarization(),
+            Figures.shortened(step.beam().polarization().toString()),
             Figures.number(direction[0], 3),
             Figures.number(direction[1], 3),
             Figures.number(direction[2], 3)));
@@ -147,7 +148,8 @@ public final class TextReport {
   }
 
   private void otherTargets() {
-    List<Drive.OtherTarget> others = drive.otherTargets();
+    List<Drive.OtherTarget> others =
+        drive.otherTargets().stream().filter(t -> t.rabi().hertz() > FAINTEST_HERTZ).toList();
     String label = "also coupled";
     for (Drive.OtherTarget other : others.subList(0, Math.min(MOST_TARGETS, others.size()))) {
       page.value(
