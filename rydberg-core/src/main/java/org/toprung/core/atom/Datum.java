@@ -84,6 +84,14 @@ public record Datum(
   /**
    * Checks the parts.
    *
+   * @param species isotope or element
+   * @param kind what is measured
+   * @param level level, series or pair of levels, or empty
+   * @param value the value in {@code unit}
+   * @param uncertainty one standard deviation in {@code unit}
+   * @param unit the unit
+   * @param source the publication
+   * @param fromMemory whether it was written down from memory
    * @throws IllegalArgumentException if the value or uncertainty is no possible one, or the unit is
    *     unknown
    */

@@ -12,6 +12,8 @@ public record Estimate(double value, double uncertainty) {
   /**
    * Checks the parts.
    *
+   * @param value the best value
+   * @param uncertainty one standard deviation
    * @throws IllegalArgumentException if the value is not finite, or the uncertainty is not finite
    *     or is negative
    */

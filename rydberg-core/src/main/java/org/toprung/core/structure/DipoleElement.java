@@ -24,6 +24,10 @@ public record DipoleElement(double valueA0, double uncertaintyA0, Origin origin,
   /**
    * Checks value and uncertainty.
    *
+   * @param valueA0 the element in a0
+   * @param uncertaintyA0 one standard deviation in a0
+   * @param origin where the modulus comes from
+   * @param source publication or method
    * @throws IllegalArgumentException if one of them is not finite or the uncertainty is negative
    */
   public DipoleElement {

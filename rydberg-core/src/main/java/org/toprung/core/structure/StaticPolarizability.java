@@ -25,7 +25,7 @@ public final class StaticPolarizability {
   private static final Map<Species, StaticPolarizability> SHARED = new ConcurrentHashMap<>();
   private static final int LEVELS = 2000;
   private static final int REACH = 12;
-  private static final int LEAST_N = 20;
+  private static final int LEAST_N = 25;
   private static final double CONTINUUM_AU = 1;
 
   private record Pair(Estimate scalar, Estimate tensor) {}
