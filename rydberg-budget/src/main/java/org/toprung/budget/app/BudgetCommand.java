@@ -73,7 +73,7 @@ final class BudgetCommand implements Callable<Integer> {
     if (chartFile.isPresent()) {
       requireDistinct(jsonFile, chartFile.get());
     }
-    Budget budget = Budget.of(scenario.drive(), scenario.pulse()).on(scenario.bench()).compose();
+    Budget budget = scenario.budget();
     ReportContent content = new ReportContent(scenario.title(), budget, check(budget));
     PrintWriter out = spec.commandLine().getOut();
     out.println(TextReport.render(content));

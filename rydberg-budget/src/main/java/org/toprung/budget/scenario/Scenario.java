@@ -3,6 +3,7 @@ package org.toprung.budget.scenario;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.stream.Stream;
+import org.toprung.budget.Budget;
 import org.toprung.budget.bench.Bench;
 import org.toprung.budget.pulse.Pulse;
 import org.toprung.core.atom.Level;
@@ -18,8 +19,7 @@ import org.toprung.core.quantity.MagneticField;
  *
  * <pre>{@code
  * Scenario scenario = Scenario.read(Path.of("rubidium-two-photon.toml"));
- * Budget budget =
- *     Budget.of(scenario.drive(), scenario.pulse()).on(scenario.bench()).compose();
+ * Budget budget = scenario.budget();
  * }</pre>
  *
  * <p>Tables: {@code atom}, {@code field}, {@code start}, two of {@code step}, {@code pulse} and,
@@ -36,6 +36,7 @@ public final class Scenario {
   private static final List<String> STEP_KEYS = joined(List.of("to", "detuning"), Beams.KEYS);
   private static final List<String> LAST_STEP_KEYS = joined(List.of("to", "mJ"), Beams.KEYS);
 
+  private final Path file;
   private final String title;
   private final DriveSetup setup;
   private final Drive drive;
@@ -43,6 +44,7 @@ public final class Scenario {
   private final Bench bench;
 
   private Scenario(Path file, String text) {
+    this.file = file;
     Table root = Table.root(file, TomlFile.tree(file, text), KEYS);
     this.title = root.optional("title").map(Scenario::title).orElseGet(() -> nameOf(file));
     Species species =
@@ -147,6 +149,21 @@ public final class Scenario {
         .optional("offset")
         .map(v -> Pulse.pi().offsetBy(v.parsed(Frequency::parse, "10 kHz")))
         .orElse(Pulse.pi());
+  }
+
+  /**
+   * Composes the budget of the pulse on the bench.
+   *
+   * @return the budget
+   * @throws ScenarioException if the budget cannot be had for this drive, for want of atomic data
+   *     for example; the message gives the file and says why
+   */
+  public Budget budget() {
+    try {
+      return Budget.of(drive, pulse).on(bench).compose();
+    } catch (IllegalArgumentException e) {
+      throw ScenarioException.ofFile(file, "no budget: " + e.getMessage(), e);
+    }
   }
 
   /**

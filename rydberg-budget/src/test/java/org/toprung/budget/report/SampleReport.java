@@ -10,7 +10,7 @@ final class SampleReport {
 
   static ReportContent of(String scenarioText) {
     Scenario s = Scenario.parse(scenarioText, "sample.toml");
-    Budget budget = Budget.of(s.drive(), s.pulse()).on(s.bench()).compose();
+    Budget budget = s.budget();
     return new ReportContent(s.title(), budget, budget.check(40, 1));
   }
 
