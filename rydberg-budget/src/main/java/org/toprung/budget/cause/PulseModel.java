@@ -1,6 +1,7 @@
 package org.toprung.budget.cause;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import org.toprung.budget.dynamics.NoiseFreePulse;
 import org.toprung.budget.pulse.Pulse;
@@ -30,14 +31,24 @@ public final class PulseModel {
 
   /** Factors on the atomic inputs; 1 is the catalogue's value. */
   private record Inputs(
-      double first,
-      double second,
+      double[] elements,
       double intermediateDecay,
       double spontaneous,
       double blackbody,
       double polarizability,
       double farShift) {
-    static final Inputs NOMINAL = new Inputs(1, 1, 1, 1, 1, 1, 1);
+
+    static Inputs nominal(int steps) {
+      double[] ones = new double[steps];
+      Arrays.fill(ones, 1);
+      return new Inputs(ones, 1, 1, 1, 1, 1);
+    }
+
+    Inputs withElement(int step, double factor) {
+      double[] varied = elements.clone();
+      varied[step] = factor;
+      return new Inputs(varied, 1, 1, 1, 1, 1);
+    }
   }
 
   private final Drive drive;
@@ -55,10 +66,11 @@ public final class PulseModel {
     Ladder ladder =
         drive
             .ladder()
-            .withElementScaled(0, inputs.first())
-            .withElementScaled(1, inputs.second())
             .withIntermediateDecayScaled(inputs.intermediateDecay())
             .withFarShiftsScaled(inputs.farShift());
+    for (int k = 0; k < inputs.elements().length; k++) {
+      ladder = ladder.withElementScaled(k, inputs.elements()[k]);
+    }
     this.plan = PulsePlanner.plan(ladder, pulse.areaRadians());
     this.elimination = Elimination.of(ladder);
     this.stark = StarkShift.of(drive.species(), drive.target());
@@ -73,7 +85,7 @@ public final class PulseModel {
    * @return the model
    */
   public static PulseModel of(Drive drive, Pulse pulse) {
-    return new PulseModel(drive, pulse, Inputs.NOMINAL);
+    return new PulseModel(drive, pulse, Inputs.nominal(drive.steps().size()));
   }
 
   /**
@@ -82,28 +94,26 @@ public final class PulseModel {
    * @return one model per input
    */
   public List<PulseModel> variations() {
+    Inputs nominal = Inputs.nominal(drive.steps().size());
+    double[] ones = nominal.elements();
     Lifetimes lifetimes = Lifetimes.of(drive.species());
-    double first = 1 + drive.steps().get(0).relativeUncertainty();
-    double second = 1 + drive.steps().get(1).relativeUncertainty();
-    double decay = 1 + lifetimes.spontaneousRatePerSecond(drive.intermediate()).relative();
-    double spontaneous = 1 + lifetimes.spontaneousRatePerSecond(target()).relative();
-    double blackbody =
-        1 + lifetimes.blackbodyRatePerSecond(target(), Temperature.ofKelvin(300)).relative();
-    double polarizability = 1 + stark.relativeUncertainty();
-    double far = 1 + drive.farShiftRelativeUncertainty();
-    List<PulseModel> models = new ArrayList<>();
-    for (Inputs varied :
-        List.of(
-            new Inputs(first, 1, 1, 1, 1, 1, 1),
-            new Inputs(1, second, 1, 1, 1, 1, 1),
-            new Inputs(1, 1, decay, 1, 1, 1, 1),
-            new Inputs(1, 1, 1, spontaneous, 1, 1, 1),
-            new Inputs(1, 1, 1, 1, blackbody, 1, 1),
-            new Inputs(1, 1, 1, 1, 1, polarizability, 1),
-            new Inputs(1, 1, 1, 1, 1, 1, far))) {
-      models.add(new PulseModel(drive, pulse, varied));
+    double decay = 0;
+    for (Level level : drive.intermediates()) {
+      decay = Math.max(decay, lifetimes.spontaneousRatePerSecond(level).relative());
     }
-    return models;
+    double spontaneous = lifetimes.spontaneousRatePerSecond(target()).relative();
+    double blackbody =
+        lifetimes.blackbodyRatePerSecond(target(), Temperature.ofKelvin(300)).relative();
+    List<Inputs> varied = new ArrayList<>();
+    for (int k = 0; k < ones.length; k++) {
+      varied.add(nominal.withElement(k, 1 + drive.steps().get(k).relativeUncertainty()));
+    }
+    varied.add(new Inputs(ones, 1 + decay, 1, 1, 1, 1));
+    varied.add(new Inputs(ones, 1, 1 + spontaneous, 1, 1, 1));
+    varied.add(new Inputs(ones, 1, 1, 1 + blackbody, 1, 1));
+    varied.add(new Inputs(ones, 1, 1, 1, 1 + stark.relativeUncertainty(), 1));
+    varied.add(new Inputs(ones, 1, 1, 1, 1, 1 + drive.farShiftRelativeUncertainty()));
+    return varied.stream().map(v -> new PulseModel(drive, pulse, v)).toList();
   }
 
   private Level target() {

@@ -12,6 +12,7 @@ import java.util.List;
 import org.toprung.budget.Budget;
 import org.toprung.budget.CauseEntry;
 import org.toprung.budget.Check;
+import org.toprung.core.atom.Level;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.PulsePlan;
 import org.toprung.core.structure.DipoleElement;
@@ -58,7 +59,7 @@ public final class JsonReport {
     json.writeStringField("title", content.title());
     json.writeStringField("species", budget.drive().species().name());
     json.writeStringField("start", budget.drive().start().toString());
-    json.writeStringField("intermediate", budget.drive().intermediate().toString());
+    strings("intermediates", budget.drive().intermediates().stream().map(Level::toString).toList());
     json.writeStringField("target", budget.drive().target().toString());
     drive(budget);
     pulse(budget);
@@ -73,7 +74,6 @@ public final class JsonReport {
     Drive drive = budget.drive();
     json.writeObjectFieldStart("drive");
     number("magnetic_field_T", drive.field().tesla());
-    number("detuning_Hz", drive.detuning().hertz());
     number("rabi_Hz", drive.rabi().hertz());
     number("relative_uncertainty", drive.relativeUncertainty());
     json.writeArrayFieldStart("steps");
@@ -106,6 +106,9 @@ public final class JsonReport {
     json.writeStartObject();
     json.writeStringField("to", step.to());
     number("wavelength_m", step.wavelength().metres());
+    if (k < drive.intermediates().size()) {
+      number("detuning_Hz", drive.detuning(k).hertz());
+    }
     number("power_W", step.beam().power().watts());
     number("waist_m", step.beam().waist().metres());
     json.writeStringField("polarization", step.beam().polarization().toString());

@@ -2,6 +2,8 @@ package org.toprung.budget.report;
 
 import java.util.List;
 import java.util.Locale;
+import java.util.StringJoiner;
+import java.util.function.IntFunction;
 import org.toprung.budget.Budget;
 import org.toprung.budget.CauseEntry;
 import org.toprung.budget.Check;
@@ -64,12 +66,11 @@ public final class TextReport {
   private void drive() {
     page.heading("Drive");
     page.value("atom", drive.species().name() + " in " + drive.field() + " along z");
-    page.value("ladder", drive.start() + " -> " + drive.intermediate() + " -> " + drive.target());
-    page.value(
-        "detuning",
-        Figures.signed(drive.detuning())
-            + " of the first laser from the centre of gravity of "
-            + drive.intermediate());
+    StringBuilder ladder = new StringBuilder(drive.start().toString());
+    for (Drive.Step step : drive.steps()) {
+      ladder.append(" -> ").append(step.to());
+    }
+    page.value("ladder", ladder.toString());
   }
 
   private void step(int k) {
@@ -77,6 +78,11 @@ public final class TextReport {
     double[] direction = step.beam().direction();
     page.heading("Step " + (k + 1) + " to " + step.to());
     page.value("laser", Figures.nanometres(step.wavelength()) + " (vacuum)");
+    if (k < drive.intermediates().size()) {
+      page.value(
+          "detuning",
+          Figures.signed(drive.detuning(k)) + " from the centre of gravity of " + step.to());
+    }
     page.value(
         "beam",
         String.format(
@@ -111,16 +117,10 @@ public final class TextReport {
         Figures.of(drive.rabi()) + " ± " + Figures.percent(drive.relativeUncertainty()));
     page.value(
         "light shift of start",
-        Figures.signed(drive.startLightShift())
-            + byStep(
-                Figures.signed(drive.startLightShift(0)),
-                Figures.signed(drive.startLightShift(1))));
+        Figures.signed(drive.startLightShift()) + byBeam(drive::startLightShift));
     page.value(
         "light shift of target",
-        Figures.signed(drive.targetLightShift())
-            + byStep(
-                Figures.signed(drive.targetLightShift(0)),
-                Figures.signed(drive.targetLightShift(1))));
+        Figures.signed(drive.targetLightShift()) + byBeam(drive::targetLightShift));
     page.value(
         "intermediate scattering",
         Figures.probability(budget.scatteringPerPulse()) + " photons per pulse");
@@ -143,8 +143,16 @@ public final class TextReport {
     otherTargets();
   }
 
-  private static String byStep(String first, String second) {
-    return " (" + first + " by beam 1, " + second + " by beam 2)";
+  /** What each beam adds, where there is more than one. */
+  private String byBeam(IntFunction<Frequency> shift) {
+    if (drive.steps().size() == 1) {
+      return "";
+    }
+    StringJoiner parts = new StringJoiner(", ", " (", ")");
+    for (int k = 0; k < drive.steps().size(); k++) {
+      parts.add(Figures.signed(shift.apply(k)) + " by beam " + (k + 1));
+    }
+    return parts.toString();
   }
 
   private void otherTargets() {

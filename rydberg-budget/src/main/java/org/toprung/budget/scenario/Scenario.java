@@ -1,6 +1,7 @@
 package org.toprung.budget.scenario;
 
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.stream.Stream;
 import org.toprung.budget.Budget;
@@ -22,15 +23,15 @@ import org.toprung.core.quantity.MagneticField;
  * Budget budget = scenario.budget();
  * }</pre>
  *
- * <p>Tables: {@code atom}, {@code field}, {@code start}, two of {@code step}, {@code pulse} and,
- * where something is known of the apparatus, {@code bench}. The last step has no detuning of its
- * own: the lasers sit on two-photon resonance, light shifts compensated, unless {@code
- * pulse.offset} says otherwise. Without a {@code title} the file's name stands in.
+ * <p>Tables: {@code atom}, {@code field}, {@code start}, one to three of {@code step}, {@code
+ * pulse} and, where something is known of the apparatus, {@code bench}. The last step has no
+ * detuning of its own: the lasers sit on resonance with the target, light shifts compensated,
+ * unless {@code pulse.offset} says otherwise. Without a {@code title} the file's name stands in.
  *
  * <p>Immutable and thread-safe.
  */
 public final class Scenario {
-  private static final int STEPS = 2;
+  private static final int MOST_STEPS = 3;
   private static final List<String> KEYS =
       List.of("title", "atom", "field", "start", "step", "pulse", "bench");
   private static final List<String> STEP_KEYS = joined(List.of("to", "detuning"), Beams.KEYS);
@@ -56,11 +57,10 @@ public final class Scenario {
     MagneticField field = magnetic.parsed(MagneticField::parse, "4 G");
     DriveSetup inField = magnetic.guarded(() -> Drive.of(species).in(field));
     DriveSetup started = start(root.table("start", List.of("level", "F", "mF")), species, inField);
-    List<Table> steps = root.tables("step", STEPS, STEP_KEYS, LAST_STEP_KEYS);
-    DriveSetup first = firstStep(steps.get(0), species, started);
-    this.setup = lastStep(steps.get(1), species, first);
+    List<Table> steps = root.tables("step", MOST_STEPS, STEP_KEYS, LAST_STEP_KEYS);
+    this.setup = steps(steps, species, started);
     this.pulse = pulse(root.table("pulse", List.of("kind", "offset")));
-    this.bench = Benches.read(root.optionalTable("bench", Benches.KEYS), STEPS);
+    this.bench = Benches.read(root.optionalTable("bench", Benches.KEYS), steps.size());
     this.drive = root.guarded("step", setup::resolve);
   }
 
@@ -125,11 +125,20 @@ public final class Scenario {
     return at.guarded(() -> setup.from(start));
   }
 
-  private static DriveSetup firstStep(Table table, Species species, DriveSetup setup) {
-    Level to = level(table.required("to", "text such as \"6P3/2\""), species);
-    Frequency detuning =
-        table.required("detuning", "text such as \"1.2 GHz\"").parsed(Frequency::parse, "1.2 GHz");
-    return table.guarded(() -> setup.step(to, Beams.read(table)).detuned(detuning));
+  private static DriveSetup steps(List<Table> tables, Species species, DriveSetup started) {
+    DriveSetup setup = started;
+    List<Frequency> detunings = new ArrayList<>();
+    for (Table table : tables.subList(0, tables.size() - 1)) {
+      Level to = level(table.required("to", "text such as \"6P3/2\""), species);
+      detunings.add(
+          table
+              .required("detuning", "text such as \"1.2 GHz\"")
+              .parsed(Frequency::parse, "1.2 GHz"));
+      DriveSetup below = setup;
+      setup = table.guarded(() -> below.step(to, Beams.read(table)));
+    }
+    return lastStep(tables.get(tables.size() - 1), species, setup)
+        .detuned(detunings.toArray(Frequency[]::new));
   }
 
   private static DriveSetup lastStep(Table table, Species species, DriveSetup setup) {

@@ -64,8 +64,8 @@ final class Table {
   }
 
   /** The tables of an array of tables; the last one has keys of its own. */
-  List<Table> tables(String name, int count, List<String> allowed, List<String> allowedInLast) {
-    String rule = count + " tables [[" + name + "]]";
+  List<Table> tables(String name, int most, List<String> allowed, List<String> allowedInLast) {
+    String rule = "1 to " + most + " tables [[" + name + "]]";
     JsonNode found = node.get(name);
     if (found == null) {
       throw missing(name, rule);
@@ -73,9 +73,10 @@ final class Table {
     if (!found.isArray()) {
       throw new Value(file, keyOf(name), found).refused(rule);
     }
-    if (found.size() != count) {
+    int count = found.size();
+    if (count < 1 || count > most) {
       throw ScenarioException.ofKey(
-          file, keyOf(name), "given " + found.size() + " of them; allowed: " + rule);
+          file, keyOf(name), "given " + count + " of them; allowed: " + rule);
     }
     List<Table> tables = new ArrayList<>();
     for (int i = 0; i < count; i++) {

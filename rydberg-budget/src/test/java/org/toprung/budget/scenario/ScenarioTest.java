@@ -46,9 +46,9 @@ class ScenarioTest {
     assertEquals(Species.RUBIDIUM_87, drive.species());
     assertEquals(MagneticField.gauss(4), drive.field());
     assertEquals(Sublevel.hyperfine("5S1/2", 2, 2), drive.start());
-    assertEquals(Level.parse("6P3/2"), drive.intermediate());
+    assertEquals(List.of(Level.parse("6P3/2")), drive.intermediates());
     assertEquals(Sublevel.fine("68S1/2", 0.5), drive.target());
-    assertEquals(Frequency.gigahertz(1.2), drive.detuning());
+    assertEquals(Frequency.gigahertz(1.2), drive.detuning(0));
     Beam first = drive.steps().get(0).beam();
     assertEquals(Power.milliwatts(2), first.power());
     assertEquals(Length.micrometres(20), first.waist());
@@ -114,7 +114,7 @@ class ScenarioTest {
     Drive drive = parse(text).drive();
     assertEquals(watts, drive.steps().get(0).beam().power().watts());
     assertEquals(metres, drive.steps().get(0).beam().waist().metres());
-    assertEquals(detuning, drive.detuning().hertz());
+    assertEquals(detuning, drive.detuning(0).hertz());
     assertEquals(tesla, drive.field().tesla());
     assertEquals(n, drive.target().level().n());
   }

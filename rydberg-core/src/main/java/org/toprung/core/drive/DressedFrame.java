@@ -1,10 +1,11 @@
 package org.toprung.core.drive;
 
 import org.toprung.core.linear.ComplexMatrix;
+import org.toprung.core.linear.LinearSystem;
 
 /**
  * Sublevels as the light dresses them: the part of the ladder that is meant to be populated,
- * decoupled exactly from the intermediate level.
+ * decoupled exactly from the intermediate levels.
  *
  * <p>For a Hamiltonian H split into the populated states P and the rest Q, the wave operator ω (Q ×
  * P) solves Bloch's equation H<sub>QP</sub> + H<sub>QQ</sub>ω − ω(H<sub>PP</sub> + H<sub>PQ</sub>ω)
@@ -16,8 +17,9 @@ import org.toprung.core.linear.ComplexMatrix;
  * Rabi period takes the bare start into its dressed form and the dressed target back to the bare
  * one; that is what "square" means for a ladder driven through a far-detuned level.
  *
- * <p>ω is found by fixed-point iteration, which converges when every state of P is closer to the
- * others of P than to Q and the couplings are small against that gap.
+ * <p>ω is found by iteration with the exact resolvent of Q at the energy of each state of P, which
+ * converges when the couplings between P and Q are small against the distance of P from the
+ * eigenvalues of Q; what happens inside Q may be as strong as it likes.
  *
  * <p>References: Bloch, Nucl. Phys. 6, 329 (1958); des Cloizeaux, Nucl. Phys. 20, 321 (1960);
  * Bravyi, DiVincenzo and Loss, Ann. Phys. 326, 2793 (2011).
@@ -97,7 +99,18 @@ public final class DressedFrame {
       ComplexMatrix hPp, ComplexMatrix hPq, ComplexMatrix hQp, ComplexMatrix hQq) {
     int p = hPp.rows();
     int q = hQq.rows();
+    LinearSystem[] gap = new LinearSystem[p];
+    for (int j = 0; j < p; j++) {
+      ComplexMatrix shifted = ComplexMatrix.zeros(q, q);
+      shifted.copyFrom(hQq);
+      for (int i = 0; i < q; i++) {
+        shifted.add(i, i, -hPp.re(j, j), -hPp.im(j, j));
+      }
+      gap[j] = LinearSystem.of(shifted);
+    }
     ComplexMatrix omega = ComplexMatrix.zeros(q, p);
+    double[] stepRe = new double[q];
+    double[] stepIm = new double[q];
     for (int iteration = 0; iteration < MAX_ITERATIONS; iteration++) {
       ComplexMatrix w = hPq.times(omega);
       w.addScaled(1, hPp);
@@ -105,15 +118,15 @@ public final class DressedFrame {
       residual.addScaled(1, hQp);
       residual.addScaled(-1, omega.times(w));
       double change = 0;
-      for (int i = 0; i < q; i++) {
-        for (int j = 0; j < p; j++) {
-          double gapRe = hQq.re(i, i) - w.re(j, j);
-          double gapIm = hQq.im(i, i) - w.im(j, j);
-          double square = gapRe * gapRe + gapIm * gapIm;
-          double dRe = -(residual.re(i, j) * gapRe + residual.im(i, j) * gapIm) / square;
-          double dIm = -(residual.im(i, j) * gapRe - residual.re(i, j) * gapIm) / square;
-          omega.add(i, j, dRe, dIm);
-          change = Math.max(change, Math.hypot(dRe, dIm));
+      for (int j = 0; j < p; j++) {
+        for (int i = 0; i < q; i++) {
+          stepRe[i] = -residual.re(i, j);
+          stepIm[i] = -residual.im(i, j);
+        }
+        gap[j].solve(stepRe, stepIm);
+        for (int i = 0; i < q; i++) {
+          omega.add(i, j, stepRe[i], stepIm[i]);
+          change = Math.max(change, Math.hypot(stepRe[i], stepIm[i]));
         }
       }
       if (!(omega.norm() < LARGEST_ADMIXTURE * Math.sqrt(p))) {

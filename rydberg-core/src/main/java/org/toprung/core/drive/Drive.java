@@ -13,8 +13,8 @@ import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.structure.DipoleElement;
 
 /**
- * A resolved two-photon drive from a ground sublevel to a Rydberg sublevel: couplings, light shifts
- * and what else follows from atom, beams and field before any noise.
+ * A resolved drive from a ground sublevel to a Rydberg sublevel by one, two or three photons:
+ * couplings, light shifts and what else follows from atom, beams and field before any noise.
  *
  * <pre>{@code
  * Drive drive = Drive.of(Species.RUBIDIUM_87)
@@ -86,19 +86,21 @@ public final class Drive {
     this.ladder = builder.build();
     this.elimination = Elimination.of(ladder);
     int reference = strongest();
-    this.steps = List.of(step(builder, 0, reference), step(builder, 1, reference));
-    this.otherTargets = others();
-    this.warnings = nearResonances();
-    this.stepWaveVectors = new double[2][];
+    List<Step> resolved = new ArrayList<>();
+    this.stepWaveVectors = new double[setup.steps()][];
     this.waveVector = new double[3];
-    for (int k = 0; k < 2; k++) {
-      double number = 2 * Math.PI / steps.get(k).wavelength().metres();
+    for (int k = 0; k < setup.steps(); k++) {
+      resolved.add(step(builder, k, reference));
+      double number = 2 * Math.PI / resolved.get(k).wavelength().metres();
       stepWaveVectors[k] = setup.beam(k).direction();
       for (int a = 0; a < 3; a++) {
         stepWaveVectors[k][a] *= number;
         waveVector[a] += stepWaveVectors[k][a];
       }
     }
+    this.steps = List.copyOf(resolved);
+    this.otherTargets = others();
+    this.warnings = nearResonances();
     this.magneticSensitivity =
         ladder.states().get(reference).hertzPerTesla()
             - ladder.states().get(ladder.start()).hertzPerTesla();
@@ -122,11 +124,8 @@ public final class Drive {
   /** The wanted sublevel that takes the largest part of the coupling. */
   private int strongest() {
     int best = ladder.wanted()[0];
-    double largest = 0;
     for (int w : ladder.wanted()) {
-      double rabi = Elimination.of(ladder, new int[] {w}).rabiHertz();
-      if (rabi > largest) {
-        largest = rabi;
+      if (elimination.rabiHertz(w) > elimination.rabiHertz(best)) {
         best = w;
       }
     }
@@ -134,17 +133,29 @@ public final class Drive {
   }
 
   private Step step(LadderBuilder builder, int k, int reference) {
-    double sum = 0;
+    boolean last = k == setup.steps() - 1;
+    double[] squares = new double[ladder.size()];
     for (Ladder.Coupling c : ladder.couplings()) {
-      boolean ofStep =
-          c.step() == k && (k == 0 ? c.lower() == ladder.start() : c.upper() == reference);
-      int middle = k == 0 ? c.upper() : c.lower();
-      if (ofStep && builder.isNamed(ladder.states().get(middle))) {
-        sum += c.rabiReHertz() * c.rabiReHertz() + c.rabiImHertz() * c.rabiImHertz();
+      Ladder.State lower = ladder.states().get(c.lower());
+      Ladder.State upper = ladder.states().get(c.upper());
+      boolean named = builder.isNamed(lower) && builder.isNamed(upper);
+      if (lower.rung() == k && upper.rung() == k + 1 && named) {
+        // summed over the far side, at the end that the ladder fixes
+        squares[last ? c.upper() : c.lower()] += c.rabiHertz() * c.rabiHertz();
+      }
+    }
+    double sum = 0;
+    if (last) {
+      sum = squares[reference];
+    } else if (k == 0) {
+      sum = squares[ladder.start()];
+    } else {
+      for (double square : squares) {
+        sum = Math.max(sum, square);
       }
     }
     return new Step(
-        k == 0 ? setup.intermediate().toString() : setup.target().toString(),
+        last ? setup.target().toString() : setup.level(k).toString(),
         Length.ofMetres(PhysicalConstants.SPEED_OF_LIGHT / builder.laserHertz(k)),
         Frequency.ofHertz(Math.sqrt(sum)),
         builder.element(k),
@@ -155,55 +166,33 @@ public final class Drive {
     List<OtherTarget> others = new ArrayList<>();
     for (int i = 0; i < ladder.size(); i++) {
       Ladder.State s = ladder.states().get(i);
-      if (s.rung() == 2 && !isWanted(i)) {
-        double rabi = Elimination.of(ladder, new int[] {i}).rabiHertz();
+      if (s.rung() == ladder.steps() && !ladder.isWanted(i)) {
         others.add(
             new OtherTarget(
-                s.label(), Frequency.ofHertz(rabi), Frequency.ofHertz(-s.energyHertz())));
+                s.label(),
+                Frequency.ofHertz(elimination.rabiHertz(i)),
+                Frequency.ofHertz(-s.energyHertz())));
       }
     }
     others.sort((a, b) -> Double.compare(b.rabi().hertz(), a.rabi().hertz()));
     return List.copyOf(others);
   }
 
-  private boolean isWanted(int index) {
-    for (int w : ladder.wanted()) {
-      if (w == index) {
-        return true;
-      }
-    }
-    return false;
-  }
-
   private List<String> nearResonances() {
     List<String> found = new ArrayList<>();
     for (int i = 0; i < ladder.size(); i++) {
-      Ladder.State s = ladder.states().get(i);
-      if (s.rung() != 1) {
-        continue;
-      }
-      double coupling = 0;
-      for (Ladder.Coupling c : ladder.couplings()) {
-        boolean touches =
-            c.step() == 0
-                ? c.lower() == ladder.start() && c.upper() == i
-                : c.step() == 1 && c.lower() == i && isWanted(c.upper());
-        if (touches) {
-          coupling = Math.max(coupling, Math.hypot(c.rabiReHertz(), c.rabiImHertz()));
-        }
-      }
-      double gap = Math.hypot(s.energyHertz(), s.decayPerSecond() / (4 * Math.PI));
-      if (coupling > 2 * LARGE_ADMIXTURE * gap) {
+      double amplitude =
+          Math.sqrt(Math.max(elimination.startAdmixture(i), elimination.targetAdmixture(i)));
+      if (amplitude > LARGE_ADMIXTURE) {
+        Ladder.State s = ladder.states().get(i);
         found.add(
             String.format(
                 Locale.ROOT,
-                "%s is nearly resonant: the first laser is %.4g MHz from it and the coupling is"
-                    + " %.4g MHz, so second-order values are poor (admixture %.2g, should be below"
-                    + " %.1g)",
+                "%s is nearly resonant: the light is %.4g MHz from it and mixes %.2g of its amplitude"
+                    + " into start or target (should be below %.1g), so eliminating it is poor",
                 s.label(),
                 -s.energyHertz() * 1e-6,
-                coupling * 1e-6,
-                coupling / (2 * gap),
+                amplitude,
                 LARGE_ADMIXTURE));
       }
     }
@@ -229,12 +218,16 @@ public final class Drive {
   }
 
   /**
-   * The intermediate level.
+   * The named intermediate levels.
    *
-   * @return the level the first step leads to
+   * @return an immutable list of the levels that the steps before the last lead to
    */
-  public Level intermediate() {
-    return setup.intermediate();
+  public List<Level> intermediates() {
+    List<Level> levels = new ArrayList<>();
+    for (int k = 0; k < setup.steps() - 1; k++) {
+      levels.add(setup.level(k));
+    }
+    return List.copyOf(levels);
   }
 
   /**
@@ -256,18 +249,19 @@ public final class Drive {
   }
 
   /**
-   * Detuning of the first laser from the intermediate level's centre of gravity.
+   * Detuning of a step's laser from its transition.
    *
+   * @param step index of the step, from 0; the last step has none of its own
    * @return the detuning, positive when the laser lies above
    */
-  public Frequency detuning() {
-    return setup.detuning();
+  public Frequency detuning(int step) {
+    return setup.detuning(step);
   }
 
   /**
    * The steps in order.
    *
-   * @return an immutable list of two steps
+   * @return an immutable list of one to three steps
    */
   public List<Step> steps() {
     return steps;
@@ -288,7 +282,11 @@ public final class Drive {
    * @return the relative uncertainty
    */
   public double relativeUncertainty() {
-    return Math.hypot(steps.get(0).relativeUncertainty(), steps.get(1).relativeUncertainty());
+    double square = 0;
+    for (Step s : steps) {
+      square += s.relativeUncertainty() * s.relativeUncertainty();
+    }
+    return Math.sqrt(square);
   }
 
   /**
@@ -312,7 +310,7 @@ public final class Drive {
   /**
    * Light shift of the start by one beam.
    *
-   * @param step index of the step, 0 or 1
+   * @param step index of the step, from 0
    * @return the move of its energy over h, positive upwards
    */
   public Frequency startLightShift(int step) {
@@ -322,7 +320,7 @@ public final class Drive {
   /**
    * Light shift of the wanted target by one beam.
    *
-   * @param step index of the step, 0 or 1
+   * @param step index of the step, from 0
    * @return the move of its energy over h, positive upwards
    */
   public Frequency targetLightShift(int step) {
@@ -339,7 +337,7 @@ public final class Drive {
   }
 
   /**
-   * Rates at which start and target scatter photons through the intermediate level, averaged: the
+   * Rates at which start and target scatter photons through the intermediate levels, averaged: the
    * scattering rate of an atom that spends equal times in both, as during a π pulse.
    *
    * @return the rate, 1/s
@@ -369,7 +367,7 @@ public final class Drive {
   /**
    * Wave vector of one beam.
    *
-   * @param step index of the step, 0 or 1
+   * @param step index of the step, from 0
    * @return a fresh array of three components, 1/m (2π over the wavelength)
    */
   public double[] waveVectorPerMetre(int step) {
@@ -439,6 +437,10 @@ public final class Drive {
 
   @Override
   public String toString() {
-    return species().name() + " " + start() + " to " + target() + " through " + intermediate();
+    StringBuilder text = new StringBuilder(species().name()).append(' ').append(start());
+    for (Step s : steps) {
+      text.append(" -> ").append(s.to());
+    }
+    return text.toString();
   }
 }

@@ -15,6 +15,7 @@ import org.toprung.core.quantity.MagneticField;
  * is computed before {@link #resolve()}.
  */
 public final class DriveSetup {
+  private static final int MAX_STEPS = 3;
 
   /** One step as described: where it leads and the beam that drives it. */
   record Step(Level to, Sublevel target, Beam beam) {
@@ -27,15 +28,19 @@ public final class DriveSetup {
   private final Species species;
   private final Sublevel start;
   private final List<Step> steps;
-  private final Frequency detuning;
+  private final List<Frequency> detunings; // one for each step but the last; null until given
   private final MagneticField field;
 
   private DriveSetup(
-      Species species, Sublevel start, List<Step> steps, Frequency detuning, MagneticField field) {
+      Species species,
+      Sublevel start,
+      List<Step> steps,
+      List<Frequency> detunings,
+      MagneticField field) {
     this.species = species;
     this.start = start;
     this.steps = steps;
-    this.detuning = detuning;
+    this.detunings = detunings;
     this.field = field;
   }
 
@@ -63,7 +68,7 @@ public final class DriveSetup {
               + " must be a hyperfine sublevel of the ground level "
               + species.groundLevel());
     }
-    return new DriveSetup(species, sublevel, steps, detuning, field);
+    return new DriveSetup(species, sublevel, steps, detunings, field);
   }
 
   /**
@@ -106,22 +111,22 @@ public final class DriveSetup {
     step.beam().polarizationVector();
     List<Step> longer = new ArrayList<>(steps);
     longer.add(step);
-    return new DriveSetup(species, start, List.copyOf(longer), detuning, field);
+    return new DriveSetup(species, start, List.copyOf(longer), detunings, field);
   }
 
   /**
-   * Sets the detuning of the first laser from the intermediate level.
+   * Sets the detunings of the lasers from the intermediate levels, one for each step but the last,
+   * whose laser closes the ladder. Not needed for a single step.
    *
-   * @param newDetuning laser frequency minus the frequency from the start (its own energy at the
-   *     field) to the centre of gravity of the intermediate level's hyperfine manifold; positive
-   *     when the laser lies above
-   * @return a copy with this detuning
+   * <p>The detuning of a step is the laser's frequency minus the transition frequency of the step,
+   * between centres of gravity of hyperfine manifolds; the first step is counted from the start at
+   * its own energy in the field. Positive when the laser lies above.
+   *
+   * @param newDetunings detuning of the first step, and of the second if there are three
+   * @return a copy with these detunings
    */
-  public DriveSetup detuned(Frequency newDetuning) {
-    if (newDetuning == null) {
-      throw new IllegalArgumentException("a drive needs a detuning, not null");
-    }
-    return new DriveSetup(species, start, steps, newDetuning, field);
+  public DriveSetup detuned(Frequency... newDetunings) {
+    return new DriveSetup(species, start, steps, List.of(newDetunings), field);
   }
 
   /**
@@ -138,7 +143,7 @@ public final class DriveSetup {
               + newField
               + " must be at least 0: it points along lab z by convention");
     }
-    return new DriveSetup(species, start, steps, detuning, newField);
+    return new DriveSetup(species, start, steps, detunings, newField);
   }
 
   /**
@@ -151,11 +156,25 @@ public final class DriveSetup {
    */
   public Drive resolve() {
     requireGiven(start, "a start: call from(...)");
-    requireGiven(detuning, "a detuning: call detuned(...)");
     requireGiven(field, "a magnetic field: call in(...)");
-    if (steps.size() != 2 || steps.get(0).target() != null || steps.get(1).target() == null) {
+    boolean climbs = !steps.isEmpty() && steps.size() <= MAX_STEPS;
+    for (int k = 0; climbs && k < steps.size(); k++) {
+      climbs = steps.get(k).target() == null ^ k == steps.size() - 1;
+    }
+    if (!climbs) {
       throw new IllegalStateException(
-          "a drive has two steps, the first to a level, the second to a sublevel, not " + steps);
+          "a drive has one to three steps, the last to a sublevel, those before to levels, not "
+              + steps);
+    }
+    int given = detunings == null ? 0 : detunings.size();
+    if (given != steps.size() - 1) {
+      throw new IllegalStateException(
+          "a drive of "
+              + steps.size()
+              + " steps needs a detuning for each step but the last: call detuned(...) with "
+              + (steps.size() - 1)
+              + " values, not "
+              + given);
     }
     return Drive.resolved(this);
   }
@@ -174,20 +193,25 @@ public final class DriveSetup {
     return start;
   }
 
-  Level intermediate() {
-    return steps.get(0).to();
+  int steps() {
+    return steps.size();
+  }
+
+  /** The level a step leads to. */
+  Level level(int step) {
+    return steps.get(step).to();
   }
 
   Sublevel target() {
-    return steps.get(1).target();
+    return steps.get(steps.size() - 1).target();
   }
 
   Beam beam(int step) {
     return steps.get(step).beam();
   }
 
-  Frequency detuning() {
-    return detuning;
+  Frequency detuning(int step) {
+    return detunings.get(step);
   }
 
   MagneticField field() {

@@ -1,167 +1,212 @@
 package org.toprung.core.drive;
 
-import java.util.Arrays;
+import java.util.ArrayList;
+import java.util.List;
+import org.toprung.core.linear.ComplexMatrix;
+import org.toprung.core.linear.LinearSystem;
 
 /**
  * The effective two-level system that is left when the intermediate sublevels of a ladder are
- * eliminated to second order in the couplings.
+ * eliminated.
  *
- * <p>With Ω<sub>is</sub>, Ω<sub>ti</sub> the couplings of intermediate sublevel i, Δ<sub>i</sub>
- * the detuning of the first laser from it and γ its natural width,
+ * <p>With start s, targets t and the intermediate sublevels Q, whose block of the Hamiltonian over
+ * h is H<sub>QQ</sub> − iγ/4π, the amplitudes that follow start and target are x<sub>s</sub> =
+ * −H<sub>QQ</sub>⁻¹H<sub>Qs</sub> and x<sub>t</sub> likewise, and
  *
  * <ul>
- *   <li>effective Rabi frequency of target t: Σ<sub>i</sub> Ω<sub>ti</sub>Ω<sub>is</sub> /
- *       2(Δ<sub>i</sub> + iγ/2) + coupling through the fine-structure partner;
- *   <li>light shift of the start: Σ<sub>i</sub> |Ω<sub>is</sub>|² Δ<sub>i</sub> / 4(Δ<sub>i</sub>²
- *       + γ²/4) + far-off-resonant part, of the target likewise with Ω<sub>ti</sub>;
- *   <li>scattering rate of the start: Σ<sub>i</sub> γ |Ω<sub>is</sub>|² / 4(Δ<sub>i</sub>² + γ²/4),
- *       of the target likewise.
+ *   <li>effective Rabi frequency of target t: 2(H<sub>ts</sub> + H<sub>tQ</sub>x<sub>s</sub>);
+ *   <li>light shift of the start: Re H<sub>sQ</sub>x<sub>s</sub> + shift by levels outside the
+ *       ladder, of the target likewise with x<sub>t</sub>;
+ *   <li>scattering rate of the start: Σ<sub>i</sub> γ<sub>i</sub>|x<sub>s,i</sub>|², of the target
+ *       likewise.
  * </ul>
  *
- * <p>The width keeps every result finite when a sublevel is resonant; elimination itself is then
- * void, which {@link #admixture()} tells. A target that can carry several nuclear projections is
- * the superposition that the light couples to. References: Saffman and Walker, Phys. Rev. A 72,
- * 022347 (2005); Brion, Pedersen and Mølmer, J. Phys. A 40, 1033 (2007).
+ * <p>This is second order in the first and the last step and exact in the steps between. For two
+ * steps it is the textbook sum Σ Ω<sub>ti</sub>Ω<sub>is</sub>/2(Δ<sub>i</sub> + iγ/2), Σ
+ * |Ω<sub>is</sub>|²Δ<sub>i</sub>/4(Δ<sub>i</sub>² + γ²/4); for three steps with a resonant, strong
+ * middle one it is Ω1Ω3/Ω2. The width keeps every result finite when a sublevel is resonant;
+ * elimination itself is then void, which {@link #admixture()} tells. A target that can carry
+ * several nuclear projections is the superposition that the light couples to.
+ *
+ * <p>References: Cohen-Tannoudji, Dupont-Roc and Grynberg, Atom-Photon Interactions (1992),
+ * complement BI; Saffman and Walker, Phys. Rev. A 72, 022347 (2005); Brion, Pedersen and Mølmer, J.
+ * Phys. A 40, 1033 (2007).
  *
  * <p>Immutable.
  */
 public final class Elimination {
+  private final double[] targetRabi; // Hz by state, on the last rung
   private final double rabi; // Hz
   private final double[] startShift; // Hz by step
   private final double[] targetShift; // Hz by step
   private final double startScattering; // 1/s
   private final double targetScattering; // 1/s
   private final double admixture;
+  private final double[] startAdmixture; // squared amplitude by state
+  private final double[] targetAdmixture;
 
-  private Elimination(
-      double rabi,
-      double[] startShift,
-      double[] targetShift,
-      double startScattering,
-      double targetScattering,
-      double admixture) {
-    this.rabi = rabi;
-    this.startShift = startShift;
-    this.targetShift = targetShift;
-    this.startScattering = startScattering;
-    this.targetScattering = targetScattering;
-    this.admixture = admixture;
+  private Elimination(Ladder ladder) {
+    int n = ladder.size();
+    int last = ladder.steps() - 1;
+    double[] re = new double[n * n];
+    double[] im = new double[n * n];
+    ladder.hamiltonianHertz(LadderSetting.nominal(ladder.steps()), re, im);
+    ladder.addLossHertz(0, im);
+    Following following = new Following(ladder, re, im);
+    double[][] s = following.of(ladder.start());
+    int[] wanted = ladder.wanted();
+    this.targetRabi = new double[n];
+    double[] weightRe = new double[n];
+    double[] weightIm = new double[n];
+    double norm = 0;
+    for (int t = 0; t < n; t++) {
+      if (ladder.states().get(t).rung() != ladder.steps()) {
+        continue;
+      }
+      double[] coupling = following.effective(t, s, ladder.start());
+      targetRabi[t] = 2 * Math.hypot(coupling[0], coupling[1]);
+      if (ladder.isWanted(t)) {
+        weightRe[t] = coupling[0];
+        weightIm[t] = coupling[1];
+        norm += coupling[0] * coupling[0] + coupling[1] * coupling[1];
+      }
+    }
+    this.rabi = 2 * Math.sqrt(norm);
+    double[][] x = new double[2][n];
+    this.startShift = new double[ladder.steps()];
+    this.targetShift = new double[ladder.steps()];
+    for (int w : wanted) {
+      // the bright superposition; any member will do when nothing couples
+      double aRe = norm > 0 ? weightRe[w] / Math.sqrt(norm) : w == wanted[0] ? 1 : 0;
+      double aIm = norm > 0 ? weightIm[w] / Math.sqrt(norm) : 0;
+      double[][] t = following.of(w);
+      for (int i = 0; i < n; i++) {
+        x[0][i] += aRe * t[0][i] - aIm * t[1][i];
+        x[1][i] += aRe * t[1][i] + aIm * t[0][i];
+      }
+      for (int k = 0; k < ladder.steps(); k++) {
+        targetShift[k] += (aRe * aRe + aIm * aIm) * ladder.farShiftHertz(w, k);
+      }
+    }
+    for (int k = 0; k < ladder.steps(); k++) {
+      startShift[k] = ladder.farShiftHertz(ladder.start(), k);
+    }
+    startShift[0] += following.shift(s);
+    targetShift[last] += following.shift(x);
+    this.startAdmixture = following.populations(s);
+    this.targetAdmixture = following.populations(x);
+    double largest = 0;
+    double fromStart = 0;
+    double fromTarget = 0;
+    for (int i = 0; i < n; i++) {
+      largest = Math.max(largest, Math.max(startAdmixture[i], targetAdmixture[i]));
+      fromStart += ladder.states().get(i).decayPerSecond() * startAdmixture[i];
+      fromTarget += ladder.states().get(i).decayPerSecond() * targetAdmixture[i];
+    }
+    this.startScattering = fromStart;
+    this.targetScattering = fromTarget;
+    this.admixture = Math.sqrt(largest);
   }
 
   /**
    * Eliminates the intermediate sublevels of a ladder at nominal powers.
    *
-   * @param ladder ladder of two steps
+   * @param ladder the ladder
    * @return the effective system of its start and its wanted target
    */
   public static Elimination of(Ladder ladder) {
-    return of(ladder, ladder.wanted());
+    return new Elimination(ladder);
   }
 
-  static Elimination of(Ladder ladder, int[] target) {
-    int n = ladder.size();
-    double[][] upRe = new double[2][n];
-    double[][] upIm = new double[2][n];
-    double[] re = new double[target.length];
-    double[] im = new double[target.length];
-    effectiveCoupling(ladder, target, re, im);
-    double norm = 0;
-    for (int t = 0; t < target.length; t++) {
-      norm += re[t] * re[t] + im[t] * im[t];
-    }
-    double rabi = Math.sqrt(norm);
-    // couplings of the start (step 0) and of the driven superposition of targets (step 1)
-    for (Ladder.Coupling c : ladder.couplings()) {
-      if (c.step() == 0 && c.lower() == ladder.start()) {
-        upRe[0][c.upper()] += c.rabiReHertz();
-        upIm[0][c.upper()] += c.rabiImHertz();
-      } else if (c.step() == 1) {
-        int t = indexOf(target, c.upper());
-        if (t >= 0) {
-          double wRe = rabi > 0 ? re[t] / rabi : t == 0 ? 1 : 0;
-          double wIm = rabi > 0 ? im[t] / rabi : 0;
-          // conj(weight) times coupling
-          upRe[1][c.lower()] += wRe * c.rabiReHertz() + wIm * c.rabiImHertz();
-          upIm[1][c.lower()] += wRe * c.rabiImHertz() - wIm * c.rabiReHertz();
-        }
-      }
-    }
-    double[] shift = new double[2];
-    double[] scattering = new double[2];
-    double admixture = 0;
-    for (int i = 0; i < n; i++) {
-      Ladder.State s = ladder.states().get(i);
-      if (s.rung() != 1) {
-        continue;
-      }
-      double detuning = -s.energyHertz();
-      double width = s.decayPerSecond() / (2 * Math.PI);
-      double denominator = 4 * (detuning * detuning + 0.25 * width * width);
-      for (int k = 0; k < 2; k++) {
-        double square = upRe[k][i] * upRe[k][i] + upIm[k][i] * upIm[k][i];
-        shift[k] += square * detuning / denominator;
-        scattering[k] += s.decayPerSecond() * square / denominator;
-        if (square > 0) {
-          admixture = Math.max(admixture, Math.sqrt(square / denominator));
-        }
-      }
-    }
-    double[] startShift = new double[2];
-    double[] targetShift = new double[2];
-    for (int k = 0; k < 2; k++) {
-      startShift[k] = ladder.farShiftHertz(ladder.start(), k);
-      for (int t = 0; t < target.length; t++) {
-        double weight = rabi > 0 ? (re[t] * re[t] + im[t] * im[t]) / norm : t == 0 ? 1 : 0;
-        targetShift[k] += weight * ladder.farShiftHertz(target[t], k);
-      }
-    }
-    startShift[0] += shift[0];
-    targetShift[1] += shift[1];
-    return new Elimination(rabi, startShift, targetShift, scattering[0], scattering[1], admixture);
-  }
+  /** The amplitudes of the intermediate sublevels that follow a state of the first or last rung. */
+  private static final class Following {
+    private final int n;
+    private final double[] re;
+    private final double[] im;
+    private final int[] q;
+    private final LinearSystem block; // null without intermediate sublevels
 
-  private static void effectiveCoupling(Ladder ladder, int[] target, double[] re, double[] im) {
-    for (Ladder.Coupling up : ladder.couplings()) {
-      int t = indexOf(target, up.upper());
-      if (t < 0) {
-        continue;
-      }
-      if (up.step() == Ladder.DIRECT && up.lower() == ladder.start()) {
-        re[t] += up.rabiReHertz();
-        im[t] += up.rabiImHertz();
-      }
-      if (up.step() != 1) {
-        continue;
-      }
-      for (Ladder.Coupling low : ladder.couplings()) {
-        if (low.step() != 0 || low.lower() != ladder.start() || low.upper() != up.lower()) {
-          continue;
+    Following(Ladder ladder, double[] re, double[] im) {
+      this.n = ladder.size();
+      this.re = re;
+      this.im = im;
+      List<Integer> middle = new ArrayList<>();
+      for (int i = 0; i < n; i++) {
+        if (ladder.isIntermediate(i)) {
+          middle.add(i);
         }
-        Ladder.State s = ladder.states().get(low.upper());
-        double detuning = -s.energyHertz();
-        double halfWidth = s.decayPerSecond() / (4 * Math.PI);
-        double productRe =
-            up.rabiReHertz() * low.rabiReHertz() - up.rabiImHertz() * low.rabiImHertz();
-        double productIm =
-            up.rabiReHertz() * low.rabiImHertz() + up.rabiImHertz() * low.rabiReHertz();
-        double denominator = 2 * (detuning * detuning + halfWidth * halfWidth);
-        re[t] += (productRe * detuning + productIm * halfWidth) / denominator;
-        im[t] += (productIm * detuning - productRe * halfWidth) / denominator;
       }
+      this.q = middle.stream().mapToInt(Integer::intValue).toArray();
+      if (q.length == 0) {
+        block = null;
+        return;
+      }
+      ComplexMatrix h = ComplexMatrix.zeros(q.length, q.length);
+      for (int i = 0; i < q.length; i++) {
+        for (int j = 0; j < q.length; j++) {
+          h.set(i, j, re[q[i] * n + q[j]], im[q[i] * n + q[j]]);
+        }
+      }
+      this.block = LinearSystem.of(h);
     }
-  }
 
-  private static int indexOf(int[] array, int value) {
-    for (int i = 0; i < array.length; i++) {
-      if (array[i] == value) {
-        return i;
+    /** −H_QQ⁻¹ H_Qs, zero outside Q: real and imaginary parts. */
+    double[][] of(int state) {
+      double[][] x = new double[2][n];
+      if (q.length == 0) {
+        return x;
       }
+      double[] vRe = new double[q.length];
+      double[] vIm = new double[q.length];
+      for (int i = 0; i < q.length; i++) {
+        vRe[i] = -re[q[i] * n + state];
+        vIm[i] = -im[q[i] * n + state];
+      }
+      block.solve(vRe, vIm);
+      for (int i = 0; i < q.length; i++) {
+        x[0][q[i]] = vRe[i];
+        x[1][q[i]] = vIm[i];
+      }
+      return x;
     }
-    return -1;
+
+    /** H_ts + H_tQ x, Hz. */
+    double[] effective(int t, double[][] x, int s) {
+      double sumRe = re[t * n + s];
+      double sumIm = im[t * n + s];
+      for (int i : q) {
+        sumRe += re[t * n + i] * x[0][i] - im[t * n + i] * x[1][i];
+        sumIm += re[t * n + i] * x[1][i] + im[t * n + i] * x[0][i];
+      }
+      return new double[] {sumRe, sumIm};
+    }
+
+    /** Re of H_sQ x_s = −x† H_QQ x, the shift of the followed state, Hz. */
+    double shift(double[][] x) {
+      double sum = 0;
+      for (int i : q) {
+        for (int j : q) {
+          double hRe = re[i * n + j];
+          double hIm = im[i * n + j];
+          double vRe = hRe * x[0][j] - hIm * x[1][j];
+          double vIm = hRe * x[1][j] + hIm * x[0][j];
+          sum -= x[0][i] * vRe + x[1][i] * vIm;
+        }
+      }
+      return sum;
+    }
+
+    double[] populations(double[][] x) {
+      double[] p = new double[n];
+      for (int i : q) {
+        p[i] = x[0][i] * x[0][i] + x[1][i] * x[1][i];
+      }
+      return p;
+    }
   }
 
   /**
-   * Effective Rabi frequency over 2π.
+   * Effective Rabi frequency over 2π of the wanted target.
    *
    * @return the modulus, Hz
    */
@@ -170,7 +215,17 @@ public final class Elimination {
   }
 
   /**
-   * Light shift of the start by one beam.
+   * Effective Rabi frequency over 2π between the start and one state of the last rung.
+   *
+   * @param state index of the state
+   * @return the modulus, Hz; zero for states of other rungs
+   */
+  public double rabiHertz(int state) {
+    return targetRabi[state];
+  }
+
+  /**
+   * Light shift of the start by one beam. The near-resonant part counts with the first beam.
    *
    * @param step index of the step
    * @return the shift over h, positive upwards, Hz
@@ -180,7 +235,7 @@ public final class Elimination {
   }
 
   /**
-   * Light shift of the target by one beam.
+   * Light shift of the target by one beam. The near-resonant part counts with the last beam.
    *
    * @param step index of the step
    * @return the shift over h, positive upwards, Hz
@@ -195,7 +250,7 @@ public final class Elimination {
    * @return the shift over h, positive upwards, Hz
    */
   public double startShiftHertz() {
-    return Arrays.stream(startShift).sum();
+    return sum(startShift);
   }
 
   /**
@@ -204,11 +259,19 @@ public final class Elimination {
    * @return the shift over h, positive upwards, Hz
    */
   public double targetShiftHertz() {
-    return Arrays.stream(targetShift).sum();
+    return sum(targetShift);
+  }
+
+  private static double sum(double[] values) {
+    double sum = 0;
+    for (double v : values) {
+      sum += v;
+    }
+    return sum;
   }
 
   /**
-   * Rate at which the start sublevel scatters photons through the intermediate level.
+   * Rate at which the start sublevel scatters photons through the intermediate levels.
    *
    * @return the rate, 1/s
    */
@@ -217,7 +280,7 @@ public final class Elimination {
   }
 
   /**
-   * Rate at which the target scatters photons through the intermediate level.
+   * Rate at which the target scatters photons through the intermediate levels.
    *
    * @return the rate, 1/s
    */
@@ -226,12 +289,32 @@ public final class Elimination {
   }
 
   /**
-   * The largest amplitude that the light mixes of one intermediate sublevel into start or target,
-   * Ω/2|Δ|. Elimination is good to about the square of it.
+   * The largest amplitude of one intermediate sublevel in the dressed start or target, Ω/2|Δ| for
+   * two steps. Elimination is good to about the square of it.
    *
    * @return the amplitude, ≥ 0
    */
   public double admixture() {
     return admixture;
+  }
+
+  /**
+   * Population of an intermediate sublevel in the dressed start.
+   *
+   * @param state index of the state
+   * @return the population
+   */
+  public double startAdmixture(int state) {
+    return startAdmixture[state];
+  }
+
+  /**
+   * Population of an intermediate sublevel in the dressed target.
+   *
+   * @param state index of the state
+   * @return the population
+   */
+  public double targetAdmixture(int state) {
+    return targetAdmixture[state];
   }
 }

@@ -9,20 +9,20 @@ import org.toprung.core.atom.Level;
  * The driven sublevels and their couplings in the frame that rotates with the lasers: the numbers
  * behind a resolved {@link Drive}, from which everything else is computed.
  *
- * <p>Every sublevel sits on a rung: 0 for the ground manifold, 1 for the intermediate level, 2 for
- * the Rydberg level. Its energy here is its energy over h minus the photon energies that lead up to
- * its rung, with the start at zero and the lasers on bare N-photon resonance with the wanted
- * target, so that an intermediate sublevel lies at minus its detuning. In a {@link LadderSetting}
- * with field factors a<sub>k</sub> and laser offsets ν<sub>k</sub> the Hamiltonian over h (Hz) is
+ * <p>Every sublevel sits on a rung: 0 for the ground manifold, then one rung for each step, the
+ * last for the Rydberg level. Its energy here is its energy over h minus the photon energies that
+ * lead up to its rung, with the start at zero and the lasers on bare N-photon resonance with the
+ * wanted target, so that an intermediate sublevel lies at minus its detuning. In a {@link
+ * LadderSetting} with field factors a<sub>k</sub> and laser offsets ν<sub>k</sub> the Hamiltonian
+ * over h (Hz) is
  *
  * <ul>
- *   <li>on the diagonal: energy + Σ<sub>k</sub> a<sub>k</sub>² · (light shift by far-off-resonant
- *       levels) + dν/dB · δB − Σ<sub>k below the rung</sub> ν<sub>k</sub> (+ the target shift on
+ *   <li>on the diagonal: energy + Σ<sub>k</sub> a<sub>k</sub>² · (light shift by levels outside the
+ *       ladder) + dν/dB · δB − Σ<sub>k below the rung</sub> ν<sub>k</sub> (+ the target shift on
  *       the last rung), with −iΓ/4π for decay when loss is asked for;
- *   <li>between neighbouring rungs: a<sub>k</sub> Ω/4π, Ω = E0⟨d·ε⟩/ħ;
- *   <li>between first and last rung: a<sub>1</sub>a<sub>2</sub> times the coupling through the
- *       fine-structure partner of the intermediate level, which is far off resonance and
- *       eliminated.
+ *   <li>between rungs: Ω/4π, Ω = E0⟨d·ε⟩/ħ, times a<sub>k</sub> for every step between them. A
+ *       coupling that spans two rungs leads through a level that is far off resonance and
+ *       eliminated, the fine-structure partner of an intermediate level.
  * </ul>
  *
  * <p>Immutable and thread-safe.
@@ -34,7 +34,7 @@ public final class Ladder {
    *
    * @param label name for people, such as {@code 6P3/2 F=3 mF=3}
    * @param level the level it belongs to
-   * @param rung 0 ground, 1 intermediate, 2 Rydberg
+   * @param rung number of photons that lead to it: 0 ground, {@link #steps()} Rydberg
    * @param energyHertz energy in the rotating frame over h, Hz
    * @param decayPerSecond natural decay rate of an intermediate sublevel, 1/s; 0 on other rungs
    * @param hertzPerTesla derivative of the energy over h with the magnetic field, Hz/T
@@ -48,22 +48,25 @@ public final class Ladder {
       double hertzPerTesla) {}
 
   /**
-   * A coupling of two sublevels on neighbouring rungs, or of the first and the last rung through
-   * eliminated levels.
+   * A coupling of two sublevels, of neighbouring rungs or across eliminated levels.
    *
    * @param lower index of the state on the lower rung
    * @param upper index of the state on the upper rung
-   * @param step the step whose beam drives it, or {@link #DIRECT}
    * @param rabiReHertz real part of the Rabi frequency over 2π at nominal power, Hz
    * @param rabiImHertz imaginary part of the Rabi frequency over 2π at nominal power, Hz
    */
-  public record Coupling(int lower, int upper, int step, double rabiReHertz, double rabiImHertz) {}
+  public record Coupling(int lower, int upper, double rabiReHertz, double rabiImHertz) {
+    /**
+     * Size of the coupling.
+     *
+     * @return modulus of the Rabi frequency over 2π, Hz
+     */
+    public double rabiHertz() {
+      return Math.hypot(rabiReHertz, rabiImHertz);
+    }
+  }
 
-  /** Step index of a coupling that needs one photon of every step. */
-  public static final int DIRECT = -1;
-
-  private static final int LAST_RUNG = 2;
-
+  private final int steps;
   private final List<State> states;
   private final List<Coupling> couplings;
   private final double[][] farShift; // Hz at nominal power, [state][step]
@@ -71,7 +74,13 @@ public final class Ladder {
   private final int[] wanted;
 
   Ladder(
-      List<State> states, List<Coupling> couplings, double[][] farShift, int start, int[] wanted) {
+      int steps,
+      List<State> states,
+      List<Coupling> couplings,
+      double[][] farShift,
+      int start,
+      int[] wanted) {
+    this.steps = steps;
     this.states = List.copyOf(states);
     this.couplings = List.copyOf(couplings);
     this.farShift = new double[farShift.length][];
@@ -97,7 +106,7 @@ public final class Ladder {
    * @return number of steps
    */
   public int steps() {
-    return LAST_RUNG;
+    return steps;
   }
 
   /**
@@ -161,14 +170,14 @@ public final class Ladder {
     for (int i = 0; i < n; i++) {
       State s = states.get(i);
       double energy = s.energyHertz() + s.hertzPerTesla() * setting.magneticOffsetTesla();
-      for (int k = 0; k < steps(); k++) {
+      for (int k = 0; k < steps; k++) {
         double a = setting.fieldFactor(k);
         energy += a * a * farShift[i][k];
         if (k < s.rung()) {
           energy -= setting.laserOffsetHertz(k);
         }
       }
-      if (s.rung() == LAST_RUNG) {
+      if (s.rung() == steps) {
         energy += setting.targetShiftHertz();
       }
       re[i * n + i] = energy;
@@ -193,7 +202,7 @@ public final class Ladder {
     int n = size();
     for (int i = 0; i < n; i++) {
       State s = states.get(i);
-      double rate = s.rung() == LAST_RUNG ? rydbergDecayPerSecond : s.decayPerSecond();
+      double rate = s.rung() == steps ? rydbergDecayPerSecond : s.decayPerSecond();
       im[i * n + i] -= rate / (4 * Math.PI);
     }
   }
@@ -208,11 +217,10 @@ public final class Ladder {
   public Ladder withElementScaled(int step, double factor) {
     List<Coupling> scaled = new ArrayList<>();
     for (Coupling c : couplings) {
-      double f = c.step() == step || c.step() == DIRECT ? factor : 1;
-      scaled.add(
-          new Coupling(c.lower(), c.upper(), c.step(), f * c.rabiReHertz(), f * c.rabiImHertz()));
+      double f = takesPhotonOf(c, step) ? factor : 1;
+      scaled.add(new Coupling(c.lower(), c.upper(), f * c.rabiReHertz(), f * c.rabiImHertz()));
     }
-    return new Ladder(states, scaled, farShift, start, wanted);
+    return new Ladder(steps, states, scaled, farShift, start, wanted);
   }
 
   /**
@@ -233,7 +241,7 @@ public final class Ladder {
               factor * s.decayPerSecond(),
               s.hertzPerTesla()));
     }
-    return new Ladder(scaled, couplings, farShift, start, wanted);
+    return new Ladder(steps, scaled, couplings, farShift, start, wanted);
   }
 
   /**
@@ -247,17 +255,45 @@ public final class Ladder {
     for (int i = 0; i < scaled.length; i++) {
       scaled[i] = Arrays.stream(farShift[i]).map(x -> factor * x).toArray();
     }
-    return new Ladder(states, couplings, scaled, start, wanted);
+    return new Ladder(steps, states, couplings, scaled, start, wanted);
   }
 
-  private static double strength(Coupling c, LadderSetting setting) {
-    if (c.step() != DIRECT) {
-      return setting.fieldFactor(c.step());
-    }
+  private double strength(Coupling c, LadderSetting setting) {
     double product = 1;
-    for (int k = 0; k < setting.steps(); k++) {
+    for (int k = states.get(c.lower()).rung(); k < states.get(c.upper()).rung(); k++) {
       product *= setting.fieldFactor(k);
     }
     return product;
+  }
+
+  /** Whether a coupling needs the light of a step. */
+  private boolean takesPhotonOf(Coupling c, int step) {
+    return states.get(c.lower()).rung() <= step && step < states.get(c.upper()).rung();
+  }
+
+  /**
+   * Whether a state sits between start and target.
+   *
+   * @param state index of the state
+   * @return true on every rung but the first and the last
+   */
+  public boolean isIntermediate(int state) {
+    int rung = states.get(state).rung();
+    return rung > 0 && rung < steps;
+  }
+
+  /**
+   * Whether a state belongs to the wanted target.
+   *
+   * @param state index of the state
+   * @return true if it is one of {@link #wanted()}
+   */
+  public boolean isWanted(int state) {
+    for (int w : wanted) {
+      if (w == state) {
+        return true;
+      }
+    }
+    return false;
   }
 }

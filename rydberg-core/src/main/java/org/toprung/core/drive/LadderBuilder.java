@@ -2,12 +2,13 @@ package org.toprung.core.drive;
 
 import java.util.ArrayDeque;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.Deque;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
-import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
@@ -26,9 +27,9 @@ import org.toprung.core.structure.Lifetimes;
  * Turns the description of a drive into its {@link Ladder}: every sublevel that the light can reach
  * from the start, its energy in the rotating frame and its couplings.
  *
- * <p>The fine-structure partner of the named intermediate level (P½ for P3/2 and the reverse) is
- * kept sublevel by sublevel where the first laser is less than {@value #NEAR_FACTOR} times farther
- * from it than from the named level, and eliminated otherwise.
+ * <p>The fine-structure partner of a named intermediate level (P½ for P3/2 and the reverse) is kept
+ * sublevel by sublevel where the lasers are less than {@value #NEAR_FACTOR} times farther from it
+ * than from the named level, and eliminated otherwise.
  */
 final class LadderBuilder {
   private static final double NEAR_FACTOR = 30;
@@ -38,86 +39,107 @@ final class LadderBuilder {
 
   private final DriveSetup setup;
   private final Species species;
-  private final Level ground;
-  private final Level named;
-  private final Level targetLevel;
+  private final int steps;
   private final DipoleElements dipoles;
-  private final double[] field = new double[2]; // V/m
-  private final SphericalComponents[] light = new SphericalComponents[2];
-  private final double[] laser = new double[2]; // Hz
+  private final double[] field; // V/m by step
+  private final SphericalComponents[] light;
+  private final double[] laser; // Hz by step
+  private final double[] detuning; // Hz by rung, of the lasers up to it from the named level
   private final double startEnergy; // Hz from the centre of gravity of the ground level
   private final List<ProductState> states = new ArrayList<>();
   private final List<Integer> rungs = new ArrayList<>();
   private final List<Double> energies = new ArrayList<>(); // Hz, rotating frame
-  private final Set<Level> near; // levels of the intermediate rung
-  private final Optional<Level> eliminated; // the partner, if far
+  private final List<Set<Level>> levels = new ArrayList<>(); // by rung
   private double farShiftRelativeUncertainty;
 
   LadderBuilder(DriveSetup setup) {
     this.setup = setup;
     this.species = setup.species();
-    this.ground = species.groundLevel();
-    this.named = setup.intermediate();
-    this.targetLevel = setup.target().level();
+    this.steps = setup.steps();
     this.dipoles = DipoleElements.of(species);
-    for (int k = 0; k < 2; k++) {
+    this.field = new double[steps];
+    this.light = new SphericalComponents[steps];
+    for (int k = 0; k < steps; k++) {
       field[k] = setup.beam(k).peakFieldVoltsPerMetre();
       light[k] = setup.beam(k).polarizationVector().componentsAbout(0, 0, 1);
+      element(k); // refuses a forbidden step by name before any sum is attempted
     }
-    List<ProductState> groundStates = ProductState.hyperfine(species, ground, setup.field());
+    List<ProductState> ground = ProductState.hyperfine(species, named(0), setup.field());
     this.startEnergy =
-        groundStates.stream().filter(this::isStart).findFirst().orElseThrow().energyHertz();
-    double detuning = setup.detuning().hertz();
-    laser[0] = transition(ground, named) - startEnergy + detuning;
-    double startToTarget =
-        transition(ground, targetLevel) - startEnergy + zeeman(setup.target().doubledM());
-    laser[1] = startToTarget - laser[0];
-    if (!(laser[0] > 0 && laser[1] > 0)) {
-      throw new IllegalArgumentException(
-          "the steps "
-              + ground
-              + " to "
-              + named
-              + " to "
-              + targetLevel
-              + " at a detuning of "
-              + setup.detuning()
-              + " do not climb: both lasers need a positive frequency");
+        ground.stream().filter(this::isStart).findFirst().orElseThrow().energyHertz();
+    this.detuning = new double[steps + 1];
+    for (int r = 1; r < steps; r++) {
+      detuning[r] = detuning[r - 1] + setup.detuning(r - 1).hertz();
     }
-    Optional<Level> partner = finePartner();
-    boolean partnerNear =
-        partner.isPresent()
-            && Math.abs(detuningFrom(partner.get())) < NEAR_FACTOR * Math.abs(detuning);
-    this.near = partnerNear ? Set.of(named, partner.get()) : Set.of(named);
-    this.eliminated = partnerNear ? Optional.empty() : partner;
-    groundStates.forEach(s -> add(s, 0, s.energyHertz() - startEnergy));
-    for (Level level : near) {
-      double offset = transition(named, level) - detuning;
-      ProductState.hyperfine(species, level, setup.field())
-          .forEach(s -> add(s, 1, offset + s.energyHertz()));
+    this.laser = lasers();
+    addRung(0, Set.of(named(0)), -startEnergy);
+    for (int r = 1; r < steps; r++) {
+      int rung = r;
+      Set<Level> kept = new TreeSet<>(Comparator.comparing(Level::toString));
+      fineStructure(named(r)).stream().filter(l -> isNear(l, rung)).forEach(kept::add);
+      addRung(r, kept, -detuning[r]);
     }
-    for (Level level : fineStructure(targetLevel)) {
-      if (canReach(level)) {
-        double offset = transition(targetLevel, level) - zeeman(setup.target().doubledM());
-        ProductState.uncoupled(species, level, setup.field())
-            .forEach(s -> add(s, 2, offset + s.energyHertz()));
+    Set<Level> target = new TreeSet<>(Comparator.comparing(Level::toString));
+    fineStructure(named(steps)).stream().filter(this::canBeReached).forEach(target::add);
+    addRung(steps, target, -zeeman(setup.target().doubledM()));
+  }
+
+  private double[] lasers() {
+    double[] frequencies = new double[steps];
+    double left =
+        transition(named(0), named(steps)) - startEnergy + zeeman(setup.target().doubledM());
+    for (int k = 0; k < steps - 1; k++) {
+      frequencies[k] = transition(named(k), named(k + 1)) + setup.detuning(k).hertz();
+      if (k == 0) {
+        frequencies[0] -= startEnergy;
+      }
+      left -= frequencies[k];
+    }
+    frequencies[steps - 1] = left;
+    for (int k = 0; k < steps; k++) {
+      if (!(frequencies[k] > 0)) {
+        throw new IllegalArgumentException(
+            String.format(
+                Locale.ROOT,
+                "step %d from %s to %s does not climb: its laser would have a frequency of %.6g THz",
+                k + 1,
+                named(k),
+                named(k + 1),
+                frequencies[k] * 1e-12));
+      }
+    }
+    return frequencies;
+  }
+
+  private void addRung(int rung, Set<Level> rungLevels, double offset) {
+    levels.add(rungLevels);
+    for (Level level : rungLevels) {
+      double base = transition(named(rung), level) + offset;
+      List<ProductState> sublevels =
+          rung < steps
+              ? ProductState.hyperfine(species, level, setup.field())
+              : ProductState.uncoupled(species, level, setup.field());
+      for (ProductState s : sublevels) {
+        states.add(s);
+        rungs.add(rung);
+        energies.add(base + s.energyHertz());
       }
     }
   }
 
-  private void add(ProductState state, int rung, double energy) {
-    states.add(state);
-    rungs.add(rung);
-    energies.add(energy);
+  /** The level named for a rung. */
+  private Level named(int rung) {
+    return rung == 0 ? species.groundLevel() : setup.level(rung - 1);
   }
 
   private boolean isStart(ProductState s) {
     return s.doubledF() == setup.start().doubledF() && s.doubledM() == setup.start().doubledM();
   }
 
-  private boolean isWanted(ProductState s) {
-    return s.level().equals(targetLevel)
-        && s.doubledMj().length == 1
+  private boolean isWanted(int state) {
+    ProductState s = states.get(state);
+    return rungs.get(state) == steps
+        && s.level().equals(named(steps))
         && s.doubledMj()[0] == setup.target().doubledM();
   }
 
@@ -129,17 +151,15 @@ final class LadderBuilder {
   private double zeeman(int doubledMj) {
     return 0.5
         * doubledMj
-        * species.gJ(targetLevel)
+        * species.gJ(named(steps))
         * PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA
         * setup.field().tesla();
   }
 
-  private double detuningFrom(Level level) {
-    return laser[0] - (transition(ground, level) - startEnergy);
-  }
-
-  private Optional<Level> finePartner() {
-    return fineStructure(named).stream().filter(l -> !l.equals(named)).findFirst();
+  /** The named level itself, or a partner that the lasers are not much farther from. */
+  private boolean isNear(Level level, int rung) {
+    double away = detuning[rung] - transition(named(rung), level);
+    return level.equals(named(rung)) || Math.abs(away) < NEAR_FACTOR * Math.abs(detuning[rung]);
   }
 
   private static List<Level> fineStructure(Level level) {
@@ -151,14 +171,15 @@ final class LadderBuilder {
         Level.of(level.n(), level.l(), 2 * level.l() + 1));
   }
 
-  private boolean canReach(Level upper) {
-    return upper.equals(targetLevel)
-        || near.stream().anyMatch(l -> Math.abs(l.doubledJ() - upper.doubledJ()) <= 2);
+  private boolean canBeReached(Level upper) {
+    return upper.equals(named(steps))
+        || levels.get(steps - 1).stream()
+            .anyMatch(l -> Math.abs(l.doubledJ() - upper.doubledJ()) <= 2);
   }
 
   /** The reduced element of a step between named levels. */
   DipoleElement element(int step) {
-    return step == 0 ? dipoles.reduced(named, ground) : dipoles.reduced(targetLevel, named);
+    return dipoles.reduced(named(step + 1), named(step));
   }
 
   double laserHertz(int step) {
@@ -170,47 +191,46 @@ final class LadderBuilder {
   }
 
   boolean isNamed(Ladder.State state) {
-    return state.level().equals(named);
+    return state.level().equals(named(state.rung()));
   }
 
   Ladder build() {
-    // refuse forbidden steps by name before any sum is attempted
-    element(0);
-    element(1);
     List<Ladder.Coupling> all = new ArrayList<>();
-    all.addAll(stepCouplings(0));
-    all.addAll(stepCouplings(1));
+    for (int k = 0; k < steps; k++) {
+      all.addAll(stepCouplings(k));
+    }
     int start = indexOfStart();
     Map<Integer, Integer> kept = reachable(all, start);
-    for (Ladder.Coupling c : directCouplings()) {
-      if (kept.containsKey(c.lower()) && kept.containsKey(c.upper())) {
-        all.add(c);
-      }
+    for (int r = 1; r < steps; r++) {
+      all.addAll(couplingsAcross(r, kept));
     }
-    List<Integer> wanted =
-        kept.keySet().stream().filter(i -> rungs.get(i) == 2 && isWanted(states.get(i))).toList();
+    List<Integer> wanted = kept.keySet().stream().filter(this::isWanted).toList();
     if (wanted.isEmpty()) {
       throw new IllegalArgumentException(whyUnreachable());
     }
     double[][] far = farShifts(kept, start, wanted.get(0));
-    Ladder unreferenced = assemble(all, kept, far, start, wanted, 0);
+    Ladder ladder = assemble(all, kept, far, start, wanted, 0);
+    Elimination elimination = Elimination.of(ladder);
     double reference = 0;
     double strongest = 0;
-    for (int w : unreferenced.wanted()) {
-      double rabi = Elimination.of(unreferenced, new int[] {w}).rabiHertz();
-      if (rabi > strongest) {
-        strongest = rabi;
-        reference = unreferenced.states().get(w).energyHertz();
+    for (int w : ladder.wanted()) {
+      if (elimination.rabiHertz(w) > strongest) {
+        strongest = elimination.rabiHertz(w);
+        reference = ladder.states().get(w).energyHertz();
       }
     }
-    if (!(strongest > 0)) {
+    double scale = 1;
+    for (Ladder.Coupling c : all) {
+      scale = Math.max(scale, c.rabiHertz());
+    }
+    if (!(strongest > NEGLIGIBLE * scale)) {
       throw new IllegalArgumentException(
           "the paths from "
               + setup.start()
               + " to "
               + setup.target()
               + " through the sublevels of "
-              + named
+              + through()
               + " cancel");
     }
     return assemble(all, kept, far, start, wanted, reference);
@@ -232,13 +252,14 @@ final class LadderBuilder {
       for (int u = 0; u < states.size(); u++) {
         if (rungs.get(l) == step && rungs.get(u) == step + 1) {
           double[] rabi = rabi(states.get(l), states.get(u), step);
-          largest = Math.max(largest, Math.hypot(rabi[0], rabi[1]));
-          couplings.add(new Ladder.Coupling(l, u, step, rabi[0], rabi[1]));
+          Ladder.Coupling c = new Ladder.Coupling(l, u, rabi[0], rabi[1]);
+          largest = Math.max(largest, c.rabiHertz());
+          couplings.add(c);
         }
       }
     }
     double floor = NEGLIGIBLE * largest;
-    couplings.removeIf(c -> !(Math.hypot(c.rabiReHertz(), c.rabiImHertz()) > floor));
+    couplings.removeIf(c -> !(c.rabiHertz() > floor));
     return couplings;
   }
 
@@ -256,33 +277,41 @@ final class LadderBuilder {
     return new double[] {scale * angular[0], scale * angular[1]};
   }
 
-  private List<Ladder.Coupling> directCouplings() {
+  /** Couplings across one rung, through the partner level that is not kept there. */
+  private List<Ladder.Coupling> couplingsAcross(int rung, Map<Integer, Integer> kept) {
     List<Ladder.Coupling> couplings = new ArrayList<>();
-    if (eliminated.isEmpty()) {
-      return couplings;
-    }
-    List<ProductState> middle = ProductState.uncoupled(species, eliminated.get(), setup.field());
-    double fromStart = detuningFrom(eliminated.get());
-    for (int l = 0; l < states.size(); l++) {
-      for (int u = 0; u < states.size(); u++) {
-        if (rungs.get(l) != 0 || rungs.get(u) != 2) {
-          continue;
-        }
-        double re = 0;
-        double im = 0;
-        for (ProductState m : middle) {
-          double[] low = rabi(states.get(l), m, 0);
-          double[] up = rabi(m, states.get(u), 1);
-          double detuning = fromStart + energies.get(l) - m.energyHertz();
-          re += (up[0] * low[0] - up[1] * low[1]) / (2 * detuning);
-          im += (up[0] * low[1] + up[1] * low[0]) / (2 * detuning);
-        }
-        if (re != 0 || im != 0) {
-          couplings.add(new Ladder.Coupling(l, u, Ladder.DIRECT, re, im));
+    for (Level level : fineStructure(named(rung))) {
+      if (levels.get(rung).contains(level)) {
+        continue;
+      }
+      double base = transition(named(rung), level) - detuning[rung];
+      List<ProductState> middle = ProductState.uncoupled(species, level, setup.field());
+      for (int l : kept.keySet()) {
+        for (int u : kept.keySet()) {
+          if (rungs.get(l) == rung - 1 && rungs.get(u) == rung + 1) {
+            Ladder.Coupling c = across(l, u, rung, middle, base);
+            if (c.rabiHertz() > 0) {
+              couplings.add(c);
+            }
+          }
         }
       }
     }
     return couplings;
+  }
+
+  private Ladder.Coupling across(
+      int lower, int upper, int rung, List<ProductState> middle, double base) {
+    double re = 0;
+    double im = 0;
+    for (ProductState m : middle) {
+      double[] low = rabi(states.get(lower), m, rung - 1);
+      double[] up = rabi(m, states.get(upper), rung);
+      double away = energies.get(lower) - base - m.energyHertz();
+      re += (up[0] * low[0] - up[1] * low[1]) / (2 * away);
+      im += (up[0] * low[1] + up[1] * low[0]) / (2 * away);
+    }
+    return new Ladder.Coupling(lower, upper, re, im);
   }
 
   /** Old index to new index of every state the light connects with the start. */
@@ -309,27 +338,26 @@ final class LadderBuilder {
   private double[][] farShifts(Map<Integer, Integer> kept, int start, int wanted) {
     FarLightShift shifts = FarLightShift.of(species);
     Map<String, Estimate> known = new HashMap<>();
-    double[][] far = new double[kept.size()][2];
+    double[][] far = new double[kept.size()][steps];
     double size = 0;
     double uncertainty = 0;
     for (Map.Entry<Integer, Integer> entry : kept.entrySet()) {
       ProductState s = states.get(entry.getKey());
       int rung = rungs.get(entry.getKey());
-      if (rung == 1) {
+      if (rung > 0 && rung < steps) {
         continue;
       }
-      for (int k = 0; k < 2; k++) {
-        boolean drives = rung == (k == 0 ? 0 : 2);
+      for (int k = 0; k < steps; k++) {
+        int step = k;
         double squared = field[k] * field[k];
         for (int c = 0; c < s.amplitude().length; c++) {
-          int step = k;
           int tMj = s.doubledMj()[c];
           Estimate e =
               known.computeIfAbsent(
                   s.level() + " " + tMj + " " + k,
                   key ->
                       shifts.hertzPerFieldSquared(
-                          s.level(), tMj, laser[step], light[step], drives ? near : Set.of()));
+                          s.level(), tMj, laser[step], light[step], inLadder(rung, step)));
           double weight = s.amplitude()[c] * s.amplitude()[c];
           far[entry.getValue()][k] += weight * e.value() * squared;
           if (entry.getKey() == start || entry.getKey() == wanted) {
@@ -341,6 +369,17 @@ final class LadderBuilder {
     }
     farShiftRelativeUncertainty = size > 0 ? uncertainty / size : 0;
     return far;
+  }
+
+  /** The levels whose resonant coupling to a rung by a beam the ladder itself holds. */
+  private Set<Level> inLadder(int rung, int step) {
+    if (rung == 0 && step == 0) {
+      return levels.get(1);
+    }
+    if (rung == steps && step == steps - 1) {
+      return levels.get(steps - 1);
+    }
+    return Set.of();
   }
 
   private Ladder assemble(
@@ -355,13 +394,14 @@ final class LadderBuilder {
     for (int i : kept.keySet()) {
       ProductState s = states.get(i);
       int rung = rungs.get(i);
+      boolean middle = rung > 0 && rung < steps;
       list.add(
           new Ladder.State(
               s.label(),
               s.level(),
               rung,
-              energies.get(i) - (rung == 2 ? targetReference : 0),
-              rung == 1 ? lifetimes.spontaneousRatePerSecond(s.level()).value() : 0,
+              energies.get(i) - (rung == steps ? targetReference : 0),
+              middle ? lifetimes.spontaneousRatePerSecond(s.level()).value() : 0,
               s.hertzPerTesla()));
     }
     List<Ladder.Coupling> renumbered =
@@ -370,37 +410,42 @@ final class LadderBuilder {
             .map(
                 c ->
                     new Ladder.Coupling(
-                        kept.get(c.lower()),
-                        kept.get(c.upper()),
-                        c.step(),
-                        c.rabiReHertz(),
-                        c.rabiImHertz()))
+                        kept.get(c.lower()), kept.get(c.upper()), c.rabiReHertz(), c.rabiImHertz()))
             .toList();
     int[] wantedIndex = wanted.stream().mapToInt(kept::get).toArray();
-    return new Ladder(list, renumbered, far, kept.get(start), wantedIndex);
+    return new Ladder(steps, list, renumbered, far, kept.get(start), wantedIndex);
+  }
+
+  /** The named intermediate levels, for messages. */
+  private String through() {
+    List<String> names = new ArrayList<>();
+    for (int r = 1; r < steps; r++) {
+      names.add(named(r).toString());
+    }
+    return names.isEmpty() ? "no level" : String.join(" and ", names);
   }
 
   private String whyUnreachable() {
-    List<Integer> first = photons(0);
-    List<Integer> second = photons(1);
-    int tM = setup.start().doubledM();
+    StringBuilder given =
+        new StringBuilder("no light path from ")
+            .append(setup.start())
+            .append(" to ")
+            .append(setup.target())
+            .append(" through ")
+            .append(through());
+    Set<Integer> changes = new TreeSet<>(Set.of(0));
+    for (int k = 0; k < steps; k++) {
+      List<Integer> photons = photons(k);
+      given.append(k == 0 ? ": beam " : ", beam ").append(k + 1).append(" changes m by ");
+      given.append(
+          photons.stream().map(q -> q > 0 ? "+" + q : "" + q).collect(Collectors.joining(" or ")));
+      Set<Integer> sums = new TreeSet<>();
+      changes.forEach(sum -> photons.forEach(q -> sums.add(sum + q)));
+      changes = sums;
+    }
     int tI = species.doubledNuclearSpin();
-    int tMj = setup.target().doubledM();
-    String given =
-        "no light path from "
-            + setup.start()
-            + " to "
-            + setup.target()
-            + " through "
-            + named
-            + ": the first beam changes m by "
-            + signed(first)
-            + ", the second by "
-            + signed(second);
-    boolean nuclear =
-        first.stream()
-            .anyMatch(q -> second.stream().anyMatch(p -> Math.abs(tM + 2 * (q + p) - tMj) <= tI));
-    if (!nuclear) {
+    int missing = setup.start().doubledM() - setup.target().doubledM();
+    if (changes.stream().noneMatch(sum -> Math.abs(missing + 2 * sum) <= tI)) {
       return given
           + ", and the nuclear spin cannot make up the rest (projection sum rule: mF + changes = mJ"
           + " + mI with |mI| at most "
@@ -408,16 +453,11 @@ final class LadderBuilder {
           + ")";
     }
     return given
-        + ", and no sublevel of "
-        + named
-        + " links these two (projection rule: |m| may not exceed J on any rung)";
+        + ", and no sublevel in between links these two (projection rule: |m| may not exceed J on any"
+        + " rung)";
   }
 
   private List<Integer> photons(int step) {
     return List.of(-1, 0, 1).stream().filter(q -> light[step].power(q) > NEGLIGIBLE).toList();
-  }
-
-  private static String signed(List<Integer> changes) {
-    return changes.stream().map(q -> q > 0 ? "+" + q : "" + q).collect(Collectors.joining(" or "));
   }
 }

@@ -16,11 +16,12 @@ class DressedFrameTest {
 
   private static Ladder threeLevels(double detuning, double one, double two) {
     return new Ladder(
+        2,
         List.of(
             new Ladder.State("start", Level.parse("5S1/2"), 0, 0, 0, 0),
             new Ladder.State("middle", Level.parse("5P3/2"), 1, -detuning, 1e7, 0),
             new Ladder.State("target", Level.parse("50S1/2"), 2, 0, 0, 0)),
-        List.of(new Ladder.Coupling(0, 1, 0, one, 0), new Ladder.Coupling(1, 2, 1, 0, two)),
+        List.of(new Ladder.Coupling(0, 1, one, 0), new Ladder.Coupling(1, 2, 0, two)),
         new double[3][2],
         0,
         new int[] {2});

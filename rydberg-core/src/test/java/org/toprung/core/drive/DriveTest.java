@@ -242,8 +242,8 @@ class DriveTest {
   void keepsDescriptionsApart() {
     DriveSetup first = rubidium(LOWER, UPPER, "60S1/2", 0.5);
     DriveSetup second = first.detuned(gigahertz(6));
-    assertEquals(3e9, first.resolve().detuning().hertz(), 0);
-    assertEquals(6e9, second.resolve().detuning().hertz(), 0);
+    assertEquals(3e9, first.resolve().detuning(0).hertz(), 0);
+    assertEquals(6e9, second.resolve().detuning(0).hertz(), 0);
   }
 
   private static String refused(Executable action) {
