@@ -179,10 +179,11 @@ class BadInputTest {
   @Test
   void refusesAnotherNumberOfSteps() throws IOException {
     refuses(
-        ReferenceScenario.with("[pulse]", "[[step]]\nto = \"7S1/2\"\n[pulse]"),
+        ReferenceScenario.with(
+            "[pulse]", "[[step]]\nto = \"7S1/2\"\n[[step]]\nto = \"8P1/2\"\n[pulse]"),
         "step",
-        "given 3",
-        "allowed: 2");
+        "given 4",
+        "allowed: 1 to 3");
   }
 
   @Test

@@ -101,14 +101,24 @@ final class LadderBuilder {
         throw new IllegalArgumentException(
             String.format(
                 Locale.ROOT,
-                "step %d from %s to %s does not climb: its laser would have a frequency of %.6g THz",
+                "step %d from %s to %s does not climb: at %s its laser would need %.6g THz, not a"
+                    + " positive frequency",
                 k + 1,
                 named(k),
                 named(k + 1),
+                detunings(),
                 frequencies[k] * 1e-12));
       }
     }
     return frequencies;
+  }
+
+  private String detunings() {
+    List<String> given = new ArrayList<>();
+    for (int k = 0; k < steps - 1; k++) {
+      given.add(setup.detuning(k).toString());
+    }
+    return given.isEmpty() ? "no detuning" : "a detuning of " + String.join(" and ", given);
   }
 
   private void addRung(int rung, Set<Level> rungLevels, double offset) {
