@@ -200,7 +200,7 @@ class NumerovMethodTest {
 
   // Saffman, Walker and Molmer, Rev. Mod. Phys. 82, 2313 (2010), from memory: 0.014 (50/n)^1.5 a0
   // for 5P3/2 to nS, target 2 %. For 5P3/2 to nD5/2 a one-channel calculation with the same
-  // potential gives 0.0249 at n = 50 (reference data), target 2 %; the 0.024 of the review lies 5 %
+  // potential gives 0.0249 at n = 50, target 2 %; the 0.024 of the review lies 5 %
   // below
   @ParameterizedTest
   @CsvSource({"40", "50", "60", "80", "100"})
