@@ -148,6 +148,79 @@ public final class PolarizationVector {
         sinTheta * (cosPhi * xIm + sinPhi * yIm) + cosTheta * zIm);
   }
 
+  /**
+   * Returns the unit vector with the given spherical components about an axis: the inverse of
+   * {@link #componentsAbout}, apart from the norm.
+   *
+   * @param components the components a<sub>q</sub>
+   * @param ax x component of the axis
+   * @param ay y component of the axis
+   * @param az z component of the axis; the length of (ax, ay, az) does not matter
+   * @return Σ a<sub>q</sub> e<sub>q</sub>′, normalized
+   * @throws IllegalArgumentException if the axis is not finite or zero, or if all components are
+   *     zero
+   */
+  public static PolarizationVector ofComponentsAbout(
+      SphericalComponents components, double ax, double ay, double az) {
+    Direction axis = Direction.of("axis", ax, ay, az);
+    double r = Math.sqrt(0.5);
+    double xRe = r * (components.re(-1) - components.re(1));
+    double xIm = r * (components.im(-1) - components.im(1));
+    // y′ component: −i (a₊₁ + a₋₁)/√2
+    double yRe = r * (components.im(1) + components.im(-1));
+    double yIm = -r * (components.re(1) + components.re(-1));
+    double zRe = components.re(0);
+    double zIm = components.im(0);
+    double sinTheta = axis.transverse();
+    double cosTheta = axis.z();
+    double cosPhi = sinTheta == 0 ? 1 : axis.x() / sinTheta;
+    double sinPhi = sinTheta == 0 ? 0 : axis.y() / sinTheta;
+    double outRe = cosTheta * xRe + sinTheta * zRe;
+    double outIm = cosTheta * xIm + sinTheta * zIm;
+    return of(
+        cosPhi * outRe - sinPhi * yRe,
+        cosPhi * outIm - sinPhi * yIm,
+        sinPhi * outRe + cosPhi * yRe,
+        sinPhi * outIm + cosPhi * yIm,
+        cosTheta * zRe - sinTheta * xRe,
+        cosTheta * zIm - sinTheta * xIm);
+  }
+
+  /**
+   * Returns the rotated vector.
+   *
+   * @param rotation active rotation in the lab frame
+   * @return Rε
+   */
+  public PolarizationVector rotatedBy(Rotation rotation) {
+    return ofComponentsAbout(componentsAbout(0, 0, 1).rotatedBy(rotation), 0, 0, 1);
+  }
+
+  /**
+   * Returns the purity with respect to a wanted polarization: the part of the intensity that a
+   * perfect polarizer for the wanted one would pass.
+   *
+   * @param wanted the wanted polarization
+   * @return |ε<sub>wanted</sub>*·ε|², from 0 to 1
+   */
+  public double purity(PolarizationVector wanted) {
+    double re =
+        wanted.xRe * xRe
+            + wanted.xIm * xIm
+            + wanted.yRe * yRe
+            + wanted.yIm * yIm
+            + wanted.zRe * zRe
+            + wanted.zIm * zIm;
+    double im =
+        wanted.xRe * xIm
+            - wanted.xIm * xRe
+            + wanted.yRe * yIm
+            - wanted.yIm * yRe
+            + wanted.zRe * zIm
+            - wanted.zIm * zRe;
+    return Math.min(1, re * re + im * im);
+  }
+
   private static String text(
       double xRe, double xIm, double yRe, double yIm, double zRe, double zIm) {
     return String.format(Locale.ROOT, "(%s, %s) (%s, %s) (%s, %s)", xRe, xIm, yRe, yIm, zRe, zIm);

@@ -684,11 +684,11 @@ public final class Wigner {
         && isTriangle(tj3, tj6, tj9);
   }
 
-  private static boolean isTriangle(int ta, int tb, int tc) {
+  static boolean isTriangle(int ta, int tb, int tc) {
     return ((ta + tb + tc) & 1) == 0 && tc <= ta + tb && ta <= tb + tc && tb <= ta + tc;
   }
 
-  private static boolean isProjection(int tj, int tm) {
+  static boolean isProjection(int tj, int tm) {
     return ((tj ^ tm) & 1) == 0 && -tj <= tm && tm <= tj;
   }
 
