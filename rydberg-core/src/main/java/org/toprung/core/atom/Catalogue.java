@@ -24,7 +24,6 @@ final class Catalogue {
   private static final String HEADER =
       "species,quantity,level,value,uncertainty,unit,source,memory";
   private static final String BIBLIOGRAPHY_HEADER = "key,citation";
-  private static final String OUTSIDE_QUOTES = ",(?=(?:[^\"]*\"[^\"]*\")*[^\"]*$)";
 
   private record Key(String species, Datum.Kind kind, String level) {}
 
@@ -90,12 +89,9 @@ final class Catalogue {
           headerSeen = true;
           continue;
         }
-        String[] cells = line.split(OUTSIDE_QUOTES, -1);
+        String[] cells = cells(line);
         if (cells.length != columns) {
           throw Refusal.of("row must have %d columns, given %d", columns, cells.length);
-        }
-        for (int c = 0; c < columns; c++) {
-          cells[c] = unquoted(cells[c]);
         }
         reader.read(cells);
       } catch (IllegalArgumentException e) {
@@ -107,10 +103,27 @@ final class Catalogue {
     }
   }
 
-  private static String unquoted(String cell) {
-    return cell.length() > 1 && cell.startsWith("\"") && cell.endsWith("\"")
-        ? cell.substring(1, cell.length() - 1)
-        : cell;
+  /** The cells of a row; a cell in double quotes may hold commas. */
+  private static String[] cells(String line) {
+    List<String> cells = new ArrayList<>();
+    StringBuilder cell = new StringBuilder();
+    boolean quoted = false;
+    for (int i = 0; i < line.length(); i++) {
+      char c = line.charAt(i);
+      if (c == '"') {
+        quoted = !quoted;
+      } else if (c == ',' && !quoted) {
+        cells.add(cell.toString());
+        cell.setLength(0);
+      } else {
+        cell.append(c);
+      }
+    }
+    if (quoted) {
+      throw Refusal.of("a quotation mark is not closed");
+    }
+    cells.add(cell.toString());
+    return cells.toArray(new String[0]);
   }
 
   private static Datum datum(String[] cells, Map<String, String> sources) {

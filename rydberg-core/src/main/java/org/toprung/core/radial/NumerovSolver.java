@@ -16,9 +16,8 @@ import java.util.Locale;
  * The local error of a step is h⁶.
  *
  * <p>The energy is given, so at small r the irregular solution comes in with the size of the
- * mismatch between energy and potential. It is cut off where, inside the inner turning point, the
- * solution changes sign or starts to grow inward. The nodes outside, all in the allowed region,
- * must be n−l−1.
+ * mismatch between energy and potential. It is cut off where the wave starts to grow inward inside
+ * the inner turning point, or would get a node more than n−l−1; fewer nodes than that are an error.
  */
 final class NumerovSolver {
   /** The grid ends at 2n² + 14 n^(4/3) + 40, where the wave has decayed to e^−20 or less. */
@@ -69,7 +68,8 @@ final class NumerovSolver {
     // division
     // out of the chain of dependent operations
     double wOuter = 0;
-    double w = (n - l - 1) % 2 == 0 ? SEED : -SEED;
+    int expected = n - l - 1;
+    double w = expected % 2 == 0 ? SEED : -SEED;
     double inverse = 1;
     y[last - 1] = w * inverse;
     double sum = 0;
@@ -85,18 +85,29 @@ final class NumerovSolver {
       double strength = g[i - 1] - energyScale * (i - 1) * (i - 1);
       inverse = 1 / (1 - twelfth * strength);
       double inner = wInner * inverse;
-      if (strength < 0) {
-        allowedSeen = true;
-        if (inner * here < 0) {
-          nodes++;
-        }
-      } else if (allowedSeen && (inner * here < 0 || Math.abs(inner) >= Math.abs(here))) {
+      boolean node = inner * here < 0;
+      boolean allowed = strength < 0;
+      boolean growsInBarrier = allowedSeen && !allowed && Math.abs(inner) >= Math.abs(here);
+      if (growsInBarrier || node && nodes == expected) {
         first = i;
         break;
       }
+      nodes += node ? 1 : 0;
+      allowedSeen |= allowed;
       y[i - 1] = inner;
       wOuter = w;
       w = wInner;
+    }
+    if (nodes != expected) {
+      throw new ArithmeticException(
+          String.format(
+              Locale.ROOT,
+              "wave of n=%d l=%d at n*=%s has %d nodes instead of %d",
+              n,
+              l,
+              effectiveN,
+              nodes,
+              expected));
     }
     double norm = 1 / Math.sqrt(2 * step * step * step * sum);
     if (!(norm > 0 && norm < Double.POSITIVE_INFINITY)) {

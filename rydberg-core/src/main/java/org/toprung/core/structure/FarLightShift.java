@@ -37,8 +37,8 @@ import org.toprung.core.quantity.PhysicalConstants;
  * resonant term (the first of an upper level, the second of a lower one) is left out, the other is
  * kept.
  *
- * <p>Uncertainty: that of the elements; 5 % of the core part; without closure 1 atomic unit for the
- * continuum.
+ * <p>Uncertainty: that of the elements; 5 % of the core part; without closure a part for the
+ * continuum, as for {@link StaticPolarizability}.
  */
 public final class FarLightShift {
   private static final Map<Species, FarLightShift> SHARED = new ConcurrentHashMap<>();
@@ -47,7 +47,6 @@ public final class FarLightShift {
   private static final int LARGEST_N = 25;
 
   private static final double CORE_TRUST = 0.05;
-  private static final double CONTINUUM_AU = 1;
 
   private static final int SUBLEVELS = 500;
 
@@ -108,10 +107,12 @@ public final class FarLightShift {
     double coreAu = species.corePolarizabilityAu().value();
     double unit = PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ / 4;
     double shift = -unit * coreAu;
-    double uncertainty = unit * (CORE_TRUST * coreAu + (closure ? 0 : CONTINUUM_AU));
+    double freeElectronAu = Math.pow(PhysicalConstants.HARTREE_HERTZ / laserFrequencyHertz, 2);
+    double uncertainty = unit * CORE_TRUST * coreAu;
     if (closure) {
-      double photonAu = laserFrequencyHertz / PhysicalConstants.HARTREE_HERTZ;
-      shift += unit / (photonAu * photonAu);
+      shift += unit * freeElectronAu;
+    } else {
+      uncertainty += unit * SecondOrder.continuumAu(species, level);
     }
     for (Term term : terms.get(new Sublevel(level, doubledMj))) {
       double absorbing = 0;

