@@ -57,6 +57,8 @@ class ArchitectureTest {
         .mayNotAccessAnyLayer()
         .whereLayer("quantity")
         .mayNotAccessAnyLayer()
+        .whereLayer("cache")
+        .mayNotAccessAnyLayer()
         .whereLayer("linear")
         .mayNotAccessAnyLayer()
         .whereLayer("cache")
