@@ -35,6 +35,7 @@ import org.toprung.core.structure.DipoleElement;
  */
 public final class Drive {
   private static final double LARGE_ADMIXTURE = 0.1;
+  private static final double NEGLIGIBLE = 1e-9; // of the wanted Rabi frequency
 
   /**
    * One resolved step.
@@ -162,11 +163,14 @@ public final class Drive {
         setup.beam(k));
   }
 
+  /** Sublevels that only another ground sublevel leads to have no coupling from the start. */
   private List<OtherTarget> others() {
     List<OtherTarget> others = new ArrayList<>();
+    double faintest = NEGLIGIBLE * elimination.rabiHertz();
     for (int i = 0; i < ladder.size(); i++) {
       Ladder.State s = ladder.states().get(i);
-      if (s.rung() == ladder.steps() && !ladder.isWanted(i)) {
+      boolean other = s.rung() == ladder.steps() && !ladder.isWanted(i);
+      if (other && elimination.rabiHertz(i) > faintest) {
         others.add(
             new OtherTarget(
                 s.label(),
