@@ -282,4 +282,20 @@ class RotationTest {
     assertThrows(IllegalArgumentException.class, () -> Rotation.smallDDoubled(-2, 0, 0, 1));
     assertThrows(IllegalArgumentException.class, () -> Rotation.IDENTITY.element(h(2), h(1), h(0)));
   }
+
+  /** A real vector is a polarization of real components, and turns like one. */
+  @Property(seed = "408", tries = 100)
+  void realVectorsTurnLikePolarizations(
+      @ForAll @DoubleRange(min = -3, max = 3) double alpha,
+      @ForAll @DoubleRange(min = 0, max = 3) double beta,
+      @ForAll @DoubleRange(min = -3, max = 3) double gamma,
+      @ForAll @DoubleRange(min = -1, max = 1) double x) {
+    Rotation r = Rotation.ofEulerRadians(alpha, beta, gamma);
+    double norm = Math.sqrt(x * x + 0.41);
+    PolarizationVector e = PolarizationVector.of(x, 0, 0.4, 0, 0.5, 0).rotatedBy(r);
+    double[] v = r.appliedTo(x, 0.4, 0.5);
+    assertEquals(e.xRe() * norm, v[0], 1e-14);
+    assertEquals(e.yRe() * norm, v[1], 1e-14);
+    assertEquals(e.zRe() * norm, v[2], 1e-14);
+  }
 }

@@ -58,6 +58,28 @@ public final class Drive {
     public double relativeUncertainty() {
       return element.uncertaintyA0() / Math.abs(element.valueA0());
     }
+
+    /**
+     * Electric field of the beam at the nominal position of the atom.
+     *
+     * @return the amplitude E0 of E0 cos ωt, V/m
+     */
+    public double fieldVoltsPerMetre() {
+      return beam.fieldVoltsPerMetre(wavelength);
+    }
+
+    /**
+     * Field of a displaced atom over that at the nominal position.
+     *
+     * @param x displacement along lab x, m
+     * @param y displacement along lab y, m
+     * @param z displacement along lab z, m
+     * @return the factor on the field; its square is that on the intensity
+     * @throws IllegalArgumentException if the displacement is not finite
+     */
+    public double fieldFactorAt(double x, double y, double z) {
+      return beam.fieldFactorAt(x, y, z, wavelength);
+    }
   }
 
   /**
@@ -101,7 +123,9 @@ public final class Drive {
     }
     this.steps = List.copyOf(resolved);
     this.otherTargets = others();
-    this.warnings = nearResonances();
+    List<String> doubts = new ArrayList<>(nearResonances());
+    doubts.addAll(setup.electric().warnings(setup.species(), setup.target(), setup.field()));
+    this.warnings = List.copyOf(doubts);
     this.magneticSensitivity =
         ladder.states().get(reference).hertzPerTesla()
             - ladder.states().get(ladder.start()).hertzPerTesla();
@@ -253,6 +277,29 @@ public final class Drive {
   }
 
   /**
+   * The static electric field.
+   *
+   * @return a fresh array of three components in the lab frame, V/m
+   */
+  public double[] electricFieldVoltsPerMetre() {
+    StaticField e = setup.electric();
+    return new double[] {e.x(), e.y(), e.z()};
+  }
+
+  /**
+   * Quadratic Stark shift of the wanted target in the static electric field. The wavelength of the
+   * last laser has it in already.
+   *
+   * @return the move of its energy over h, positive upwards
+   */
+  public Frequency starkShift() {
+    return Frequency.ofHertz(
+        setup
+            .electric()
+            .shiftHertz(setup.species(), setup.target().level(), setup.target().doubledM()));
+  }
+
+  /**
    * Detuning of a step's laser from its transition.
    *
    * @param step index of the step, from 0; the last step has none of its own
@@ -389,6 +436,22 @@ public final class Drive {
   public Frequency dopplerShift(double x, double y, double z) {
     return Frequency.ofHertz(
         -(waveVector[0] * x + waveVector[1] * y + waveVector[2] * z) / (2 * Math.PI));
+  }
+
+  /**
+   * Recoil shift of the ladder: the kinetic energy ħ²|Σk|²/2m that an atom at rest gains, which the
+   * lasers have to deliver on top of the energies of the sublevels. Not part of the wavelengths,
+   * the detunings and the plan; absent in a trap that is deep in the Lamb-Dicke regime.
+   *
+   * @return the move of the resonance over h, never negative
+   */
+  public Frequency recoilShift() {
+    double square = 0;
+    for (double component : waveVector) {
+      square += component * component;
+    }
+    return Frequency.ofRadiansPerSecond(
+        PhysicalConstants.REDUCED_PLANCK * square / (2 * species().massKilograms()));
   }
 
   /**

@@ -5,7 +5,9 @@ import java.util.List;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
+import org.toprung.core.quantity.ElectricField;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.MagneticField;
 
 /**
@@ -29,26 +31,22 @@ public final class DriveSetup {
   private final Sublevel start;
   private final List<Step> steps;
   private final List<Frequency> detunings; // one for each step but the last; null until given
-  private final MagneticField field;
+  private final Site site;
 
   private DriveSetup(
-      Species species,
-      Sublevel start,
-      List<Step> steps,
-      List<Frequency> detunings,
-      MagneticField field) {
+      Species species, Sublevel start, List<Step> steps, List<Frequency> detunings, Site site) {
     this.species = species;
     this.start = start;
     this.steps = steps;
     this.detunings = detunings;
-    this.field = field;
+    this.site = site;
   }
 
   static DriveSetup of(Species species) {
     if (species == null) {
       throw new IllegalArgumentException("a drive needs a species, not null");
     }
-    return new DriveSetup(species, null, List.of(), null, null);
+    return new DriveSetup(species, null, List.of(), null, Site.ORIGIN);
   }
 
   /**
@@ -68,7 +66,7 @@ public final class DriveSetup {
               + " must be a hyperfine sublevel of the ground level "
               + species.groundLevel());
     }
-    return new DriveSetup(species, sublevel, steps, detunings, field);
+    return new DriveSetup(species, sublevel, steps, detunings, site);
   }
 
   /**
@@ -111,7 +109,7 @@ public final class DriveSetup {
     step.beam().polarizationVector();
     List<Step> longer = new ArrayList<>(steps);
     longer.add(step);
-    return new DriveSetup(species, start, List.copyOf(longer), detunings, field);
+    return new DriveSetup(species, start, List.copyOf(longer), detunings, site);
   }
 
   /**
@@ -126,7 +124,7 @@ public final class DriveSetup {
    * @return a copy with these detunings
    */
   public DriveSetup detuned(Frequency... newDetunings) {
-    return new DriveSetup(species, start, steps, List.of(newDetunings), field);
+    return new DriveSetup(species, start, steps, List.of(newDetunings), site);
   }
 
   /**
@@ -143,7 +141,34 @@ public final class DriveSetup {
               + newField
               + " must be at least 0: it points along lab z by convention");
     }
-    return new DriveSetup(species, start, steps, detunings, newField);
+    return new DriveSetup(species, start, steps, detunings, site.with(newField));
+  }
+
+  /**
+   * Sets a static electric field, which shifts the Rydberg sublevels: {@link Drive#starkShift()}.
+   *
+   * @param ex component along lab x
+   * @param ey component along lab y
+   * @param ez component along lab z, the magnetic field
+   * @return a copy in this electric field
+   */
+  public DriveSetup inElectricField(ElectricField ex, ElectricField ey, ElectricField ez) {
+    StaticField newField =
+        new StaticField(ex.voltsPerMetre(), ey.voltsPerMetre(), ez.voltsPerMetre());
+    return new DriveSetup(species, start, steps, detunings, site.with(newField));
+  }
+
+  /**
+   * Moves the atom from the lab origin, where the beams are focused unless they say otherwise.
+   *
+   * @param x position along lab x
+   * @param y position along lab y
+   * @param z position along lab z
+   * @return a copy with the atom there; the beams of the resolved drive count their focus from it
+   */
+  public DriveSetup atomAt(Length x, Length y, Length z) {
+    return new DriveSetup(
+        species, start, steps, detunings, site.at(x.metres(), y.metres(), z.metres()));
   }
 
   /**
@@ -156,7 +181,7 @@ public final class DriveSetup {
    */
   public Drive resolve() {
     requireGiven(start, "a start: call from(...)");
-    requireGiven(field, "a magnetic field: call in(...)");
+    requireGiven(field(), "a magnetic field: call in(...)");
     boolean climbs = !steps.isEmpty() && steps.size() <= MAX_STEPS;
     for (int k = 0; climbs && k < steps.size(); k++) {
       climbs = steps.get(k).target() == null ^ k == steps.size() - 1;
@@ -206,8 +231,9 @@ public final class DriveSetup {
     return steps.get(steps.size() - 1).target();
   }
 
+  /** The beam of a step as the atom sees it: its focus counted from the atom. */
   Beam beam(int step) {
-    return steps.get(step).beam();
+    return site.sees(steps.get(step).beam());
   }
 
   Frequency detuning(int step) {
@@ -215,6 +241,10 @@ public final class DriveSetup {
   }
 
   MagneticField field() {
-    return field;
+    return site.magnetic();
+  }
+
+  StaticField electric() {
+    return site.electric();
   }
 }

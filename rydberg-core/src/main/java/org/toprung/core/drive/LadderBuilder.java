@@ -17,6 +17,7 @@ import org.toprung.angular.SphericalComponents;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.quantity.Estimate;
+import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.structure.DipoleElement;
 import org.toprung.core.structure.DipoleElements;
@@ -60,7 +61,6 @@ final class LadderBuilder {
     this.field = new double[steps];
     this.light = new SphericalComponents[steps];
     for (int k = 0; k < steps; k++) {
-      field[k] = setup.beam(k).peakFieldVoltsPerMetre();
       light[k] = setup.beam(k).polarizationVector().componentsAbout(0, 0, 1);
       element(k); // refuses a forbidden step by name before any sum is attempted
     }
@@ -72,6 +72,9 @@ final class LadderBuilder {
       detuning[r] = detuning[r - 1] + setup.detuning(r - 1).hertz();
     }
     this.laser = lasers();
+    for (int k = 0; k < steps; k++) {
+      field[k] = fieldAtAtom(k);
+    }
     addRung(0, Set.of(named(0)), -startEnergy);
     for (int r = 1; r < steps; r++) {
       int rung = r;
@@ -81,13 +84,12 @@ final class LadderBuilder {
     }
     Set<Level> target = new TreeSet<>(Comparator.comparing(Level::toString));
     fineStructure(named(steps)).stream().filter(this::canBeReached).forEach(target::add);
-    addRung(steps, target, -zeeman(setup.target().doubledM()));
+    addRung(steps, target, -fieldShift());
   }
 
   private double[] lasers() {
     double[] frequencies = new double[steps];
-    double left =
-        transition(named(0), named(steps)) - startEnergy + zeeman(setup.target().doubledM());
+    double left = transition(named(0), named(steps)) - startEnergy + fieldShift();
     for (int k = 0; k < steps - 1; k++) {
       frequencies[k] = transition(named(k), named(k + 1)) + setup.detuning(k).hertz();
       if (k == 0) {
@@ -113,6 +115,27 @@ final class LadderBuilder {
     return frequencies;
   }
 
+  private double fieldAtAtom(int step) {
+    Beam beam = setup.beam(step);
+    Length wavelength = Length.ofMetres(PhysicalConstants.SPEED_OF_LIGHT / laser[step]);
+    double atAtom = beam.fieldVoltsPerMetre(wavelength);
+    if (!(atAtom > NEGLIGIBLE * beam.peakFieldVoltsPerMetre())) {
+      double[] f = beam.focusMetres();
+      throw new IllegalArgumentException(
+          String.format(
+              Locale.ROOT,
+              "beam %d misses the atom: focused at (%.6g, %.6g, %.6g) um from it, it has %.2g of its"
+                  + " peak field there (allowed: more than %.0e)",
+              step + 1,
+              f[0] * 1e6,
+              f[1] * 1e6,
+              f[2] * 1e6,
+              atAtom / beam.peakFieldVoltsPerMetre(),
+              NEGLIGIBLE));
+    }
+    return atAtom;
+  }
+
   private String detunings() {
     List<String> given = new ArrayList<>();
     for (int k = 0; k < steps - 1; k++) {
@@ -132,7 +155,7 @@ final class LadderBuilder {
       for (ProductState s : sublevels) {
         states.add(s);
         rungs.add(rung);
-        energies.add(base + s.energyHertz());
+        energies.add(base + s.energyHertz() + (rung < steps ? 0 : stark(level, s.doubledMj()[0])));
       }
     }
   }
@@ -157,13 +180,19 @@ final class LadderBuilder {
     return species.energyHertz(to).value() - species.energyHertz(from).value();
   }
 
-  /** Electronic Zeeman shift of a target sublevel, Hz. */
-  private double zeeman(int doubledMj) {
-    return 0.5
-        * doubledMj
-        * species.gJ(named(steps))
-        * PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA
-        * setup.field().tesla();
+  /** Electronic Zeeman shift and Stark shift of the wanted target, Hz. */
+  private double fieldShift() {
+    double zeeman =
+        0.5
+            * setup.target().doubledM()
+            * species.gJ(named(steps))
+            * PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA
+            * setup.field().tesla();
+    return zeeman + stark(named(steps), setup.target().doubledM());
+  }
+
+  private double stark(Level level, int doubledMj) {
+    return setup.electric().shiftHertz(species, level, doubledMj);
   }
 
   /** The named level itself, or a partner that the lasers are not much farther from. */
