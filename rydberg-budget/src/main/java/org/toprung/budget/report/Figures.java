@@ -2,9 +2,12 @@ package org.toprung.budget.report;
 
 import java.math.BigDecimal;
 import java.math.MathContext;
+import java.util.Arrays;
 import java.util.Locale;
 import java.util.regex.Pattern;
+import java.util.stream.Collectors;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Intensity;
 import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.Power;
 import org.toprung.core.quantity.Time;
@@ -12,6 +15,7 @@ import org.toprung.core.quantity.Time;
 /** Numbers as people read them: a few significant digits and a unit. */
 final class Figures {
   private static final int DIGITS = 4;
+  private static final int VECTOR_DIGITS = 3;
   private static final Pattern DECIMAL = Pattern.compile("\\d+\\.\\d+(?:E-?\\d+)?");
   private static final double SMALLEST = 1e-10; // probability told from zero
 
@@ -31,6 +35,17 @@ final class Figures {
 
   static String of(Length value) {
     return Length.ofMetres(rounded(value.metres())).toString();
+  }
+
+  static String of(Intensity value) {
+    return Intensity.ofWattsPerSquareMetre(rounded(value.wattsPerSquareMetre())).toString();
+  }
+
+  /** The components of a vector, in parentheses. */
+  static String vector(double... components) {
+    return Arrays.stream(components)
+        .mapToObj(c -> number(c, VECTOR_DIGITS))
+        .collect(Collectors.joining(", ", "(", ")"));
   }
 
   /** A wavelength: always in nanometres, to a picometre. */

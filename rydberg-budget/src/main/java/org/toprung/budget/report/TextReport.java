@@ -66,6 +66,15 @@ public final class TextReport {
   private void drive() {
     page.heading("Drive");
     page.value("atom", drive.species().name() + " in " + drive.field() + " along z");
+    double[] e = drive.electricFieldVoltsPerMetre();
+    if (e[0] != 0 || e[1] != 0 || e[2] != 0) {
+      page.value(
+          "electric field",
+          Figures.vector(e)
+              + " V/m, shifts the target by "
+              + Figures.signed(drive.starkShift())
+              + " (in its wavelength already)");
+    }
     StringBuilder ladder = new StringBuilder(drive.start().toString());
     for (Drive.Step step : drive.steps()) {
       ladder.append(" -> ").append(step.to());
@@ -75,7 +84,6 @@ public final class TextReport {
 
   private void step(int k) {
     Drive.Step step = drive.steps().get(k);
-    double[] direction = step.beam().direction();
     page.heading("Step " + (k + 1) + " to " + step.to());
     page.value("laser", Figures.nanometres(step.wavelength()) + " (vacuum)");
     if (k < drive.intermediates().size()) {
@@ -83,17 +91,7 @@ public final class TextReport {
           "detuning",
           Figures.signed(drive.detuning(k)) + " from the centre of gravity of " + step.to());
     }
-    page.value(
-        "beam",
-        String.format(
-            Locale.ROOT,
-            "%s, waist %s, %s, along (%s, %s, %s)",
-            Figures.of(step.beam().power()),
-            Figures.of(step.beam().waist()),
-            Figures.shortened(step.beam().polarization().toString()),
-            Figures.number(direction[0], 3),
-            Figures.number(direction[1], 3),
-            Figures.number(direction[2], 3)));
+    page.value("beam", BeamText.of(step));
     page.value("Rabi frequency", Figures.of(step.rabi()));
     page.value(
         "reduced dipole element",
@@ -135,6 +133,9 @@ public final class TextReport {
             Figures.number(k[1] * 1e-6, 4),
             Figures.number(k[2] * 1e-6, 4),
             Figures.of(Frequency.ofHertz(length / (2 * Math.PI)))));
+    page.value(
+        "recoil shift",
+        Figures.signed(drive.recoilShift()) + ", not in the wavelengths or the frequency offset");
     page.value(
         "magnetic sensitivity",
         Figures.signed(

@@ -14,7 +14,8 @@ class TextReportTest {
 
   @Test
   void fitsAHundredColumnsWhateverTheScenario() {
-    for (ReportContent content : List.of(SampleReport.reference(), SampleReport.wide())) {
+    for (ReportContent content :
+        List.of(SampleReport.reference(), SampleReport.wide(), SampleReport.shaped())) {
       for (String line : TextReport.render(content).lines().toList()) {
         assertTrue(line.codePointCount(0, line.length()) <= 100, line);
         assertEquals(line.stripTrailing(), line);
@@ -63,5 +64,23 @@ class TextReportTest {
   @Test
   void cautionsThatFiguresAreEstimates() {
     assertTrue(TextReport.render(SampleReport.reference()).contains("confirmed on the apparatus"));
+  }
+
+  /** exp(−(5/20)²) = 0.939 of the field is left at a quarter of the waist. */
+  @Test
+  void tellsShapeAndPlaceOfBeamsAndTheElectricField() {
+    String joined = TextReport.render(SampleReport.shaped()).replaceAll("\\s+", " ");
+    for (String part :
+        List.of(
+            "2 mW, waists 20 um along (0, 1, 0) and 30 um, sigma+ with 0.2 % orthogonal to it",
+            "focus at (0, 5, 0) um from the atom, 93.9 % of the peak field there",
+            "flat top of 15 kW/cm2, sigma-, along (0, 0, -1)",
+            "electric field (0, 0, 5) V/m, shifts the target by -",
+            "recoil shift +",
+            "15 kW/cm2 of unknown power")) {
+      assertTrue(joined.contains(part), part + " in " + joined);
+    }
+    String plain = TextReport.render(SampleReport.reference());
+    assertFalse(plain.contains("focus at") || plain.contains("orthogonal"), plain);
   }
 }
