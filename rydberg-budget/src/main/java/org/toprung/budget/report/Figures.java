@@ -2,6 +2,7 @@ package org.toprung.budget.report;
 
 import java.math.BigDecimal;
 import java.math.MathContext;
+import java.math.RoundingMode;
 import java.util.Arrays;
 import java.util.Locale;
 import java.util.regex.Pattern;
@@ -64,6 +65,21 @@ final class Figures {
       return value == 0 ? "0" : "< 1e-10";
     }
     return String.format(Locale.ROOT, "%.2e", value);
+  }
+
+  /** A standard uncertainty of a probability: two digits say all it knows. */
+  static String uncertainty(double value) {
+    return value < SMALLEST ? probability(value) : String.format(Locale.ROOT, "%.1e", value);
+  }
+
+  /** A value to the second digit of its uncertainty. */
+  static String measured(double value, double uncertainty) {
+    if (!(uncertainty > 0)) {
+      return number(value, DIGITS) + " ± 0";
+    }
+    BigDecimal known = new BigDecimal(uncertainty).round(new MathContext(2));
+    BigDecimal rounded = new BigDecimal(value).setScale(known.scale(), RoundingMode.HALF_EVEN);
+    return rounded.toPlainString() + " ± " + known.toPlainString();
   }
 
   static String percent(double fraction) {

@@ -26,7 +26,7 @@ class TextReportTest {
   @Test
   void tellsEveryCauseAndEveryWarning() {
     ReportContent content = SampleReport.of(ReferenceScenario.with("1.2 GHz", "80 MHz"));
-    String text = TextReport.render(content);
+    String text = TextReport.render(content).replaceAll("\\s+", " ");
     for (CauseEntry cause : content.budget().causes()) {
       assertTrue(text.contains(cause.cause()), cause.cause());
     }
@@ -51,6 +51,19 @@ class TextReportTest {
     String text = TextReport.render(new ReportContent("title", sample.budget(), bad));
     assertTrue(text.contains("DISAGREES"), text);
     assertTrue(text.contains("the simulation disagrees"), text);
+  }
+
+  @Test
+  void saysFirstHowLargeTheErrorIsAndWhatCausesIt() {
+    ReportContent content = SampleReport.reference();
+    List<String> lines = TextReport.render(content).lines().toList();
+    double percent = 100 * content.budget().total();
+    String error = lines.stream().filter(l -> l.contains("error of one pulse")).findFirst().get();
+    double shown = Double.parseDouble(error.substring(error.indexOf('(') + 1, error.indexOf('±')));
+    assertEquals(percent, shown, 100 * content.budget().uncertainty());
+    assertTrue(lines.indexOf(error) < 5, error);
+    String cause = lines.stream().filter(l -> l.contains("largest cause")).findFirst().get();
+    assertTrue(cause.contains(content.budget().causes().get(0).cause()), cause);
   }
 
   @Test

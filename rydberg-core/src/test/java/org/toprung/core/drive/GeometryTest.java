@@ -64,14 +64,21 @@ class GeometryTest {
     Drive centred = rubidium().resolve();
     Beam off = LOWER.focusedAt(ZERO, micrometres(30), ZERO);
     Drive shifted = rubidium(off, UPPER, "60S1/2", 0.5).resolve();
-    close(centred.rabi().hertz() / Math.E, shifted.rabi().hertz(), 1e-9);
-    double e2 = Math.exp(-2);
-    close(e2 * centred.startLightShift(0).hertz(), shifted.startLightShift(0).hertz(), 1e-9);
-    close(centred.startLightShift(1).hertz(), shifted.startLightShift(1).hertz(), 1e-9);
     Drive.Step step = shifted.steps().get(0);
+    close(centred.steps().get(0).rabi().hertz() / Math.E, step.rabi().hertz(), 1e-9);
+    close(centred.steps().get(1).rabi().hertz(), shifted.steps().get(1).rabi().hertz(), 1e-9);
+    // the shift of the start by far levels moves the intermediate detuning by a few parts in 1e8
+    close(centred.rabi().hertz() / Math.E, shifted.rabi().hertz(), 1e-6);
+    double e2 = Math.exp(-2);
+    close(e2 * farShift(centred, 0), farShift(shifted, 0), 1e-9);
+    close(farShift(centred, 1), farShift(shifted, 1), 1e-9);
     close(LOWER.peakFieldVoltsPerMetre() / Math.E, step.fieldVoltsPerMetre(), 1e-12);
     assertEquals(1, step.fieldFactorAt(0, 0, 0));
     close(Math.E, step.fieldFactorAt(0, 30e-6, 0), 1e-12);
+  }
+
+  private static double farShift(Drive drive, int step) {
+    return drive.ladder().farShiftHertz(drive.ladder().start(), step);
   }
 
   /** Definition of the Rayleigh range, at the wavelength of the step. */
@@ -81,7 +88,8 @@ class GeometryTest {
     double range = Math.PI * 9e-10 / centred.steps().get(1).wavelength().metres();
     Beam ahead = UPPER.focusedAt(ZERO, ZERO, Length.ofMetres(range));
     Drive shifted = rubidium(LOWER, ahead, "60S1/2", 0.5).resolve();
-    close(centred.rabi().hertz() * Math.sqrt(0.5), shifted.rabi().hertz(), 1e-9);
+    double rabi = shifted.steps().get(1).rabi().hertz();
+    close(centred.steps().get(1).rabi().hertz() * Math.sqrt(0.5), rabi, 1e-9);
   }
 
   /** Moving the atom one way is moving every beam the other way. */
@@ -138,7 +146,7 @@ class GeometryTest {
             .get(0)
             .rabi()
             .hertz();
-    close(2 * other, stronger, 1e-9);
+    close(2 * other, stronger, 1e-5); // the clean light is weaker, and so is its shift
   }
 
   /**
