@@ -15,6 +15,9 @@ final class BeamText {
     text.append(", ").append(Figures.shortened(beam.polarization().toString()));
     if (beam.impurity() > 0) {
       text.append(" with ").append(Figures.percent(beam.impurity())).append(" orthogonal to it");
+      if (beam.impurityPhaseDegrees() != 0) {
+        text.append(" at ").append(Figures.number(beam.impurityPhaseDegrees(), 3)).append(" deg");
+      }
     }
     text.append(", along ").append(Figures.vector(beam.direction()));
     double[] focus = beam.focusMetres();

@@ -29,6 +29,11 @@ import org.toprung.core.quantity.MagneticField;
  * detuning of its own: the lasers sit on resonance with the target, light shifts compensated,
  * unless {@code pulse.offset} says otherwise. Without a {@code title} the file's name stands in.
  *
+ * <p>Optional: in {@code field} a static {@code electric} field; in a {@code step} two waists with
+ * a {@code waist_axis}, an {@code intensity} in place of power and waist, the {@code offset} of the
+ * focus from the atom, and an {@code impurity} of the polarization with its {@code
+ * impurity_phase_deg}.
+ *
  * <p>Immutable and thread-safe.
  */
 public final class Scenario {

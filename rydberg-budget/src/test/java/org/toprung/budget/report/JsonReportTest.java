@@ -135,7 +135,7 @@ class JsonReportTest {
     assertTrue(first.at("/waist_m").isMissingNode());
     assertEquals(5e-6, first.at("/focus_m/1").doubleValue());
     assertEquals(0.002, first.at("/impurity").doubleValue());
-    assertEquals(0, first.at("/impurity_phase_deg").doubleValue());
+    assertEquals(45, first.at("/impurity_phase_deg").doubleValue());
     JsonNode second = json.at("/steps/1");
     assertTrue(second.at("/power_W").isMissingNode());
     assertEquals(1.5e8, second.at("/peak_intensity_W_per_m2").doubleValue());

@@ -38,7 +38,7 @@ final class SampleReport {
             .replace(
                 "waist = \"20 um\"",
                 "waist = [\"20 um\", \"30 um\"]\nwaist_axis = [0, 1, 0]\n"
-                    + "offset = [\"0 um\", \"5 um\", \"0 um\"]\nimpurity = 0.002")
+                    + "offset = [\"0 um\", \"5 um\", \"0 um\"]\nimpurity = 0.002\nimpurity_phase_deg = 45")
             .replace("power = \"150 mW\"", "intensity = \"15 kW/cm2\"")
             .replace("waist = \"25 um\"\n", ""));
   }

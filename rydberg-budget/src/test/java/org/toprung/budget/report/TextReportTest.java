@@ -85,7 +85,7 @@ class TextReportTest {
     String joined = TextReport.render(SampleReport.shaped()).replaceAll("\\s+", " ");
     for (String part :
         List.of(
-            "2 mW, waists 20 um along (0, 1, 0) and 30 um, sigma+ with 0.2 % orthogonal to it",
+            "2 mW, waists 20 um along (0, 1, 0) and 30 um, sigma+ with 0.2 % orthogonal to it at 45 deg",
             "focus at (0, 5, 0) um from the atom, 93.9 % of the peak field there",
             "flat top of 15 kW/cm2, sigma-, along (0, 0, -1)",
             "electric field (0, 0, 5) V/m, shifts the target by -",

@@ -18,8 +18,7 @@ import org.toprung.core.quantity.Power;
  * magnetic field points along z and the nominal position of the atom is the origin. The focus sits
  * on the atom unless {@link #focusedAt} moves it.
  *
- * <p>A travelling wave: light that comes back from a mirror is not covered, for a coherent drive
- * then depends on where the atom sits in the standing wave, to a fraction of a wavelength.
+ * <p>A travelling wave: light that comes back from a mirror is not covered (package description).
  *
  * <p>Immutable: {@link #polarized}, {@link #along} and the like give copies. A step of a {@link
  * Drive} accepts a beam once it has both a polarization and a direction.

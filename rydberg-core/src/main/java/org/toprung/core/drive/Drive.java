@@ -35,6 +35,7 @@ import org.toprung.core.structure.DipoleElement;
  */
 public final class Drive {
   private static final double LARGE_ADMIXTURE = 0.1;
+  private static final double LARGE_DIVERGENCE = 0.3; // rad; the next order is its square over 4
   private static final double NEGLIGIBLE = 1e-9; // of the wanted Rabi frequency
 
   /**
@@ -136,6 +137,9 @@ public final class Drive {
     this.steps = List.copyOf(resolved);
     this.otherTargets = others();
     List<String> doubts = new ArrayList<>(nearResonances());
+    for (int k = 0; k < setup.steps(); k++) {
+      doubts.addAll(tightFoci(k));
+    }
     doubts.addAll(setup.electric().warnings(setup.species(), setup.target(), setup.field()));
     this.warnings = List.copyOf(doubts);
     this.magneticSensitivity =
@@ -219,6 +223,28 @@ public final class Drive {
     }
     others.sort((a, b) -> Double.compare(b.rabi().hertz(), a.rabi().hertz()));
     return List.copyOf(others);
+  }
+
+  private List<String> tightFoci(int step) {
+    List<String> found = new ArrayList<>();
+    Length wavelength = steps.get(step).wavelength();
+    for (Length waist : setup.beam(step).profile().waists()) {
+      double divergence = wavelength.metres() / (Math.PI * waist.metres());
+      if (!(divergence <= LARGE_DIVERGENCE)) {
+        found.add(
+            String.format(
+                Locale.ROOT,
+                "beam %d is focused so tightly, to a waist of %s at %.4g nm, that it diverges by %.2g"
+                    + " rad (should be below %.1g): a Gaussian beam with one polarization is a poor"
+                    + " picture of it",
+                step + 1,
+                waist,
+                wavelength.metres() * 1e9,
+                divergence,
+                LARGE_DIVERGENCE));
+      }
+    }
+    return found;
   }
 
   private List<String> nearResonances() {

@@ -129,6 +129,34 @@ class GeometryTest {
     assertTrue(message.contains("200"), message);
   }
 
+  /** Definition of the divergence λ/πw: 780 nm reach 0.3 rad at 0.83 um. */
+  @Test
+  void warnsOfTightFoci() {
+    Beam tight =
+        Beam.elliptical(milliwatts(1e-4), micrometres(0.8), micrometres(0.9), 1, 0, 0)
+            .polarized(Polarization.SIGMA_PLUS)
+            .along(0, 0, 1);
+    List<String> warnings = rubidium(tight, UPPER, "60S1/2", 0.5).resolve().warnings();
+    assertEquals(1, warnings.size(), warnings.toString());
+    assertTrue(warnings.get(0).contains("beam 1"), warnings.get(0));
+    assertTrue(warnings.get(0).contains("800 nm"), warnings.get(0));
+  }
+
+  /** The trap light, too, is that at the atom: 1/e² of the intensity at its waist. */
+  @Test
+  void shiftsByTheTrapLightAtTheAtom() {
+    Beam trap =
+        Beam.gaussian(milliwatts(5), micrometres(20))
+            .polarized(Polarization.linearDegrees(0))
+            .along(0, 1, 0);
+    Length wavelength = Length.nanometres(850);
+    Drive centred = rubidium().trappedBy(trap, wavelength).resolve();
+    Drive off =
+        rubidium().trappedBy(trap, wavelength).atomAt(micrometres(20), ZERO, ZERO).resolve();
+    double expected = Math.exp(-2) * centred.startTrapShift().hertz();
+    close(expected, off.startTrapShift().hertz(), 1e-9);
+  }
+
   /** σ− light in a fraction f of the lower beam takes √(1−f) of the field from the σ+ path. */
   @Test
   void takesTheImpurityFromTheWantedPath() {
