@@ -35,6 +35,20 @@ class HandbookValuesTest {
     }
   }
 
+  /** The same where the sum needs many limbs, all of which must cancel. */
+  @ParameterizedTest
+  @CsvSource({
+    "100, 100, 102",
+    "400, 400, 402",
+    "1000, 1000, 1002",
+    "4000, 4000, 4000",
+    "4000, 3000, 2002"
+  })
+  void largeSumsCancelToAnExactZero(int a, int b, int c) {
+    boolean odd = ((a + b + c) / 2 & 1) != 0;
+    assertEquals(odd, Wigner.threeJDoubled(a, b, c, 0, 0, 0) == 0);
+  }
+
   /** (1 1 2; 0 0 0) = √(2/15), (2 2 2; 0 0 0) = −√(2/35), (3 2 3; ...): Edmonds table 2. */
   @ParameterizedTest
   @CsvSource({

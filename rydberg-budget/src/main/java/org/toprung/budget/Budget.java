@@ -28,6 +28,7 @@ import org.toprung.core.drive.PulsePlan;
 public final class Budget {
   private static final double ALLOWED_DIFFERENCE = 0.1; // of the simulated total
   private static final double ALLOWED_STANDARD_ERRORS = 3;
+  private static final int MOST_SHOTS = 100_000_000;
 
   private final Drive drive;
   private final Pulse pulse;
@@ -87,11 +88,11 @@ public final class Budget {
   /**
    * Re-derives the total by simulation.
    *
-   * @param shots number of shots, at least 2
+   * @param shots number of shots, 2 to 100 million
    * @param seed seed of the drawn disturbances; the same seed gives the same result on any machine
    *     with the same arithmetic, whatever its number of processors
    * @return the simulated total and whether this budget agrees with it
-   * @throws IllegalArgumentException if there are fewer than two shots
+   * @throws IllegalArgumentException if the number of shots is out of range
    */
   public Check check(int shots, long seed) {
     return check(shots, seed, done -> {});
@@ -100,15 +101,16 @@ public final class Budget {
   /**
    * Re-derives the total by simulation and reports progress.
    *
-   * @param shots number of shots, at least 2
+   * @param shots number of shots, 2 to 100 million
    * @param seed seed of the drawn disturbances
    * @param progress told the number of shots done so far, from any thread
    * @return the simulated total and whether this budget agrees with it
-   * @throws IllegalArgumentException if there are fewer than two shots
+   * @throws IllegalArgumentException if the number of shots is out of range
    */
   public Check check(int shots, long seed, IntConsumer progress) {
-    if (shots < 2) {
-      throw new IllegalArgumentException("a check needs at least 2 shots, not " + shots);
+    if (shots < 2 || shots > MOST_SHOTS) {
+      throw new IllegalArgumentException(
+          "a check takes 2 to " + MOST_SHOTS + " shots, not " + shots);
     }
     double decay =
         model.spontaneousPerSecond()

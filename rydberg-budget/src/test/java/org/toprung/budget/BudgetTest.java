@@ -321,6 +321,7 @@ class BudgetTest {
     refused(() -> budget(RUBIDIUM, bench.withDrifts(hertz(1))));
     refused(() -> budget(RUBIDIUM, bench.withIntensityNoise(0.1, 0.1, 0.1)));
     refused(() -> budget(RUBIDIUM, bench).check(1, 1));
+    refused(() -> budget(RUBIDIUM, bench).check(Integer.MAX_VALUE, 1));
     refused(() -> Budget.of(RUBIDIUM, Pulse.pi()).on(null));
   }
 

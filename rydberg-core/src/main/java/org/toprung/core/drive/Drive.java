@@ -35,6 +35,7 @@ import org.toprung.core.structure.DipoleElement;
  */
 public final class Drive {
   private static final double LARGE_ADMIXTURE = 0.1;
+  private static final double NEGLIGIBLE = 1e-9; // of the wanted Rabi frequency
 
   /**
    * One resolved step.
@@ -69,6 +70,15 @@ public final class Drive {
    */
   public record OtherTarget(String sublevel, Frequency rabi, Frequency detuning) {}
 
+  /**
+   * A line that a weak first laser sees.
+   *
+   * @param position what to add to the first laser's nominal frequency to be resonant
+   * @param rabi coupling to the start over 2π; its square is the strength of the line
+   * @param rydbergFraction population of the Rydberg level in the dressed state, 0 to 1
+   */
+  public record Line(Frequency position, Frequency rabi, double rydbergFraction) {}
+
   private final DriveSetup setup;
   private final Ladder ladder;
   private final Elimination elimination;
@@ -79,6 +89,9 @@ public final class Drive {
   private final double[][] stepWaveVectors; // 1/m
   private final double magneticSensitivity; // Hz/T
   private final double farShiftUncertainty; // relative
+  private final double firstLaser; // Hz
+  private final Frequency startTrapShift;
+  private final Frequency targetTrapShift;
 
   private Drive(DriveSetup setup) {
     this.setup = setup;
@@ -105,6 +118,9 @@ public final class Drive {
         ladder.states().get(reference).hertzPerTesla()
             - ladder.states().get(ladder.start()).hertzPerTesla();
     this.farShiftUncertainty = builder.farShiftRelativeUncertainty();
+    this.firstLaser = builder.laserHertz(0);
+    this.startTrapShift = Frequency.ofHertz(builder.startTrapShiftHertz());
+    this.targetTrapShift = Frequency.ofHertz(builder.targetTrapShiftHertz());
   }
 
   /**
@@ -162,11 +178,14 @@ public final class Drive {
         setup.beam(k));
   }
 
+  /** Sublevels that only another ground sublevel leads to have no coupling from the start. */
   private List<OtherTarget> others() {
     List<OtherTarget> others = new ArrayList<>();
+    double faintest = NEGLIGIBLE * elimination.rabiHertz();
     for (int i = 0; i < ladder.size(); i++) {
       Ladder.State s = ladder.states().get(i);
-      if (s.rung() == ladder.steps() && !ladder.isWanted(i)) {
+      boolean other = s.rung() == ladder.steps() && !ladder.isWanted(i);
+      if (other && elimination.rabiHertz(i) > faintest) {
         others.add(
             new OtherTarget(
                 s.label(),
@@ -347,6 +366,55 @@ public final class Drive {
   }
 
   /**
+   * Light shift of the start by the trap, if one shines during the pulse. It is not part of {@link
+   * #startLightShift()}, but of the pulse plan.
+   *
+   * @return the move of its energy over h, positive upwards; zero without a trap
+   */
+  public Frequency startTrapShift() {
+    return startTrapShift;
+  }
+
+  /**
+   * Light shift of the wanted target by the trap, if one shines during the pulse.
+   *
+   * @return the move of its energy over h, positive upwards; zero without a trap
+   */
+  public Frequency targetTrapShift() {
+    return targetTrapShift;
+  }
+
+  /**
+   * Photon scattering of the dressed start, and where it leaves the atom.
+   *
+   * @return rates while the atom is in the start
+   */
+  public Scattering startScattering() {
+    return Scattering.of(setup, ladder, elimination.startFollowing(), firstLaser);
+  }
+
+  /**
+   * Photon scattering of the dressed target, and where it leaves the atom.
+   *
+   * @return rates while the atom is in the target
+   */
+  public Scattering targetScattering() {
+    return Scattering.of(setup, ladder, elimination.targetFollowing(), firstLaser);
+  }
+
+  /**
+   * What the light does to a ground sublevel, such as the idle state of a qubit.
+   *
+   * @param sublevel a hyperfine sublevel of the ground level
+   * @return its light shift and scattering rate; those of the start for the start
+   * @throws IllegalArgumentException if the species has no such ground sublevel
+   */
+  public GroundLight groundLight(Sublevel sublevel) {
+    setup.from(sublevel); // refuses what is no ground sublevel
+    return new LadderBuilder(setup).groundLight(sublevel);
+  }
+
+  /**
    * The largest amplitude Ω/2|Δ| of an intermediate sublevel in the dressed start or target.
    *
    * @return the admixture; second-order results are good to about its square
@@ -403,6 +471,16 @@ public final class Drive {
    */
   public List<OtherTarget> otherTargets() {
     return otherTargets;
+  }
+
+  /**
+   * The lines that the first laser sees when it is weak, with the other steps as strong and as near
+   * resonance as they are: exact in everything but the first step (Autler-Townes splitting).
+   *
+   * @return an immutable list by rising position
+   */
+  public List<Line> dressedLines() {
+    return DressedLines.of(ladder);
   }
 
   /**

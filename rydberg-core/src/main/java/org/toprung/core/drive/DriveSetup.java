@@ -2,11 +2,14 @@ package org.toprung.core.drive;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.MagneticField;
+import org.toprung.core.quantity.PhysicalConstants;
 
 /**
  * The description of a drive before it is resolved: start, steps, detuning and field.
@@ -25,30 +28,36 @@ public final class DriveSetup {
     }
   }
 
+  /** Light that shines on the atom without driving it. */
+  record Trap(Beam beam, Frequency laser) {}
+
   private final Species species;
   private final Sublevel start;
   private final List<Step> steps;
   private final List<Frequency> detunings; // one for each step but the last; null until given
   private final MagneticField field;
+  private final Trap trap; // null when off during the pulse
 
   private DriveSetup(
       Species species,
       Sublevel start,
       List<Step> steps,
       List<Frequency> detunings,
-      MagneticField field) {
+      MagneticField field,
+      Trap trap) {
     this.species = species;
     this.start = start;
     this.steps = steps;
     this.detunings = detunings;
     this.field = field;
+    this.trap = trap;
   }
 
   static DriveSetup of(Species species) {
     if (species == null) {
       throw new IllegalArgumentException("a drive needs a species, not null");
     }
-    return new DriveSetup(species, null, List.of(), null, null);
+    return new DriveSetup(species, null, List.of(), null, null, null);
   }
 
   /**
@@ -68,7 +77,7 @@ public final class DriveSetup {
               + " must be a hyperfine sublevel of the ground level "
               + species.groundLevel());
     }
-    return new DriveSetup(species, sublevel, steps, detunings, field);
+    return new DriveSetup(species, sublevel, steps, detunings, field, trap);
   }
 
   /**
@@ -111,7 +120,7 @@ public final class DriveSetup {
     step.beam().polarizationVector();
     List<Step> longer = new ArrayList<>(steps);
     longer.add(step);
-    return new DriveSetup(species, start, List.copyOf(longer), detunings, field);
+    return new DriveSetup(species, start, List.copyOf(longer), detunings, field, trap);
   }
 
   /**
@@ -126,7 +135,7 @@ public final class DriveSetup {
    * @return a copy with these detunings
    */
   public DriveSetup detuned(Frequency... newDetunings) {
-    return new DriveSetup(species, start, steps, List.of(newDetunings), field);
+    return new DriveSetup(species, start, steps, List.of(newDetunings), field, trap);
   }
 
   /**
@@ -143,7 +152,27 @@ public final class DriveSetup {
               + newField
               + " must be at least 0: it points along lab z by convention");
     }
-    return new DriveSetup(species, start, steps, detunings, newField);
+    return new DriveSetup(species, start, steps, detunings, newField, trap);
+  }
+
+  /**
+   * Leaves a trap on during the pulse: its light moves the levels, but drives nothing. The lasers
+   * keep their frequencies; the pulse plan follows the moved levels.
+   *
+   * @param beam the trap beam at the atom, with polarization and direction
+   * @param wavelength its vacuum wavelength, far from every transition of the ladder
+   * @return a copy with this trap
+   * @throws IllegalArgumentException if the wavelength is not positive or the beam cannot have its
+   *     polarization
+   * @throws IllegalStateException if the beam lacks polarization or direction
+   */
+  public DriveSetup trappedBy(Beam beam, Length wavelength) {
+    if (!(wavelength.metres() > 0)) {
+      throw new IllegalArgumentException("trap wavelength " + wavelength + " must be positive");
+    }
+    beam.polarizationVector();
+    Frequency laser = Frequency.ofHertz(PhysicalConstants.SPEED_OF_LIGHT / wavelength.metres());
+    return new DriveSetup(species, start, steps, detunings, field, new Trap(beam, laser));
   }
 
   /**
@@ -216,5 +245,9 @@ public final class DriveSetup {
 
   MagneticField field() {
     return field;
+  }
+
+  Optional<Trap> trap() {
+    return Optional.ofNullable(trap);
   }
 }

@@ -24,18 +24,14 @@ import org.toprung.core.radial.RadialMethod;
  * <p>(Edmonds, Angular Momentum in Quantum Mechanics, eq. 7.1.7). The sign is that of the computed
  * element; the modulus is the measured one where the catalogue has one.
  *
- * <p>Uncertainty of a computed element: 1 % of its value, plus in quadrature a part of the core
- * correction. The part is 5 % where that correction is calibrated on a member of the same series
- * (from the second resonance the D lines of Rb and Cs are then met to 0.4 %, where the correction
- * is 7 %), and one half where it is not.
+ * <p>Uncertainty of a computed element: 1 % of its value and, in quadrature, that of the core
+ * correction.
  */
 public final class DipoleElements {
   private static final Map<Species, DipoleElements> SHARED = new ConcurrentHashMap<>();
 
   private static final int ELEMENTS = 20_000;
   private static final double FLOOR = 0.01;
-  private static final double CALIBRATED_PART = 0.05;
-  private static final double COMPUTED_PART = 0.5;
 
   /**
    * The lower level in the order of levels stands first: the mirrored element follows by symmetry.
@@ -117,10 +113,9 @@ public final class DipoleElements {
           DipoleElement.Origin.MEASURED,
           measured.get().source());
     }
-    double part = radial.calibrated() ? CALIBRATED_PART : COMPUTED_PART;
     return new DipoleElement(
         computed,
-        Math.hypot(FLOOR * computed, part * angular * radial.coreCorrectionA0()),
+        Math.hypot(FLOOR * computed, angular * radial.coreUncertaintyA0()),
         radial.calibrated() ? DipoleElement.Origin.CALIBRATED : DipoleElement.Origin.COMPUTED,
         method.description());
   }

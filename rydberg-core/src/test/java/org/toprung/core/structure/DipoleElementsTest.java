@@ -34,7 +34,7 @@ class DipoleElementsTest {
 
             @Override
             public RadialIntegral dipole(Level a, Level b) {
-              return new RadialIntegral(1, 0, false);
+              return new RadialIntegral(1, 0, 0, false);
             }
           });
 
@@ -91,6 +91,15 @@ class DipoleElementsTest {
     DipoleElement element =
         DipoleElements.of(Species.parse(species)).reduced(Level.parse(a), Level.parse(b));
     assertEquals(published, Math.abs(element.valueA0()), within * published);
+  }
+
+  // 5P3/2-5D5/2, where bare parts nearly cancel: 1.983 (Safronova and Safronova 2011, from memory);
+  // computed 4 % low, and the uncertainty must say so
+  @Test
+  void uncertaintyCoversTheDeviationWhereTheCoreCorrectionIsDoubtful() {
+    DipoleElement element = rb("5P3/2", "5D5/2");
+    assertEquals(1.983, Math.abs(element.valueA0()), 2 * element.uncertaintyA0());
+    assertTrue(element.uncertaintyA0() < 0.05 * Math.abs(element.valueA0()));
   }
 
   // standard closed forms: sqrt(2/3) and sqrt(4/3) from S1/2; signs follow from Edmonds 7.1.7
