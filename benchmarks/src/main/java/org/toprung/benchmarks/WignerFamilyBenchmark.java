@@ -17,8 +17,8 @@ import org.toprung.angular.ThreeJFamily;
 import org.toprung.angular.Wigner;
 
 /**
- * Whole families of 3j symbols in one sweep, against the same symbols one by one; the time is that of a whole
- * family of about largestDoubled/3 symbols. Elements of rotations over the same list.
+ * Whole families of 3j symbols in one sweep, against the same symbols one by one; the time is that
+ * of a whole family of about largestDoubled/3 symbols. Elements of rotations over the same list.
  */
 @BenchmarkMode(Mode.AverageTime)
 @OutputTimeUnit(TimeUnit.NANOSECONDS)
