@@ -320,10 +320,10 @@ final class RacahSum {
     return bits >>> 1;
   }
 
-  /** value·2^exponent. */
+  /** value·2^exponent; a zero comes out without a sign. */
   private static double scaled(double value, int exponent) {
     return exponent > -1000 && exponent < 1000
-        ? value * Double.longBitsToDouble((exponent + 1023L) << 52)
-        : Math.scalb(value, exponent);
+        ? value * Double.longBitsToDouble((exponent + 1023L) << 52) + 0.0
+        : Math.scalb(value, exponent) + 0.0;
   }
 }

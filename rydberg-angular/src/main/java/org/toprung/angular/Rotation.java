@@ -282,7 +282,8 @@ public final class Rotation {
         exponent -= 500;
       }
     }
-    return Math.scalb(value, exponent);
+    // Adding zero takes the sign off a zero.
+    return Math.scalb(value, exponent) + 0.0;
   }
 
   private static void requireProjection(int tj, int tm) {

@@ -254,7 +254,7 @@ public final class ThreeJFamily {
 
   private static void scale(double[] f, int from, int to, double factor) {
     for (int i = from; i <= to; i++) {
-      f[i] *= factor;
+      f[i] = f[i] * factor + 0.0; // no negative zeros
     }
   }
 

@@ -126,13 +126,8 @@ public final class ChartReport {
           INK);
     }
     page.path(grid.toString(), "stroke", GRID, "stroke-width", "1");
+    ticks.append(SvgPage.to('M', left, bottom)).append(SvgPage.to('L', right, bottom));
     page.path(ticks.toString(), "stroke", INK, "stroke-width", "1");
-    page.path(
-        SvgPage.to('M', left, bottom) + SvgPage.to('L', right, bottom),
-        "stroke",
-        INK,
-        "stroke-width",
-        "1");
     page.text(
         (left + right) / 2,
         bottom + TICK + 2 * TEXT * LEADING,

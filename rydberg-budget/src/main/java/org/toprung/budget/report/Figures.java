@@ -62,7 +62,7 @@ final class Figures {
   /** A probability in a column: three digits and a power of ten; nothing smaller than matters. */
   static String probability(double value) {
     if (Math.abs(value) < SMALLEST) {
-      return value == 0 ? "0" : "< 1e-10";
+      return value == 0 ? "0" : "<1e-10";
     }
     return String.format(Locale.ROOT, "%.2e", value);
   }

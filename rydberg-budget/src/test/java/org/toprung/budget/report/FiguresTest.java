@@ -21,7 +21,7 @@ class FiguresTest {
   }
 
   @ParameterizedTest
-  @CsvSource({"0, 0", "3e-11, < 1e-10", "5.874e-5, 5.9e-05"})
+  @CsvSource({"0, 0", "3e-11, <1e-10", "5.874e-5, 5.9e-05"})
   void showsTwoDigitsOfAnUncertainty(double value, String expected) {
     assertEquals(expected, Figures.uncertainty(value));
   }
