@@ -84,7 +84,15 @@ public sealed interface DopplerFree {
       implements DopplerFree {
     private static final double ALIGNMENT_TOLERANCE = 1e-6;
 
-    /** Refuses wave numbers that are no sides of a triangle. */
+    /**
+     * Refuses wave numbers that are no sides of a triangle.
+     *
+     * @param firstPerMetre wave number of the first beam, 1/m
+     * @param secondPerMetre wave number of the second beam, 1/m
+     * @param thirdPerMetre wave number of the third beam, 1/m
+     * @throws IllegalArgumentException if one is not positive and finite, or exceeds the sum of the
+     *     others
+     */
     public Triangle {
       double largest = Math.max(firstPerMetre, Math.max(secondPerMetre, thirdPerMetre));
       double least = Math.min(firstPerMetre, Math.min(secondPerMetre, thirdPerMetre));

@@ -63,7 +63,13 @@ public sealed interface Profile {
    * @param waist 1/e² intensity radius in the focus, positive
    */
   record Gaussian(Power beamPower, Length waist) implements Profile {
-    /** Refuses what is not positive. */
+    /**
+     * Refuses what is not positive.
+     *
+     * @param beamPower the power at the atoms
+     * @param waist 1/e² intensity radius in the focus
+     * @throws IllegalArgumentException if one is not positive
+     */
     public Gaussian {
       requirePositive(beamPower);
       requirePositive(waist);
@@ -123,7 +129,18 @@ public sealed interface Profile {
       implements Profile {
     private static final double ALIGNMENT_TOLERANCE = 1e-6;
 
-    /** Refuses what is not positive, and brings the axis to unit length. */
+    /**
+     * Refuses what is not positive, and brings the axis to unit length.
+     *
+     * @param beamPower the power at the atoms
+     * @param firstWaist 1/e² intensity radius along the axis
+     * @param secondWaist 1/e² intensity radius across the axis and the beam
+     * @param axisX component along lab x of the axis of the first waist
+     * @param axisY component along lab y of the axis of the first waist
+     * @param axisZ component along lab z of the axis of the first waist
+     * @throws IllegalArgumentException if power or a waist is not positive, or the axis is zero or
+     *     not finite
+     */
     public Elliptical {
       requirePositive(beamPower);
       requirePositive(firstWaist);
@@ -195,7 +212,12 @@ public sealed interface Profile {
    * @param peakIntensity the intensity at the atoms, positive
    */
   record FlatTop(Intensity peakIntensity) implements Profile {
-    /** Refuses what is not positive. */
+    /**
+     * Refuses what is not positive.
+     *
+     * @param peakIntensity the intensity at the atoms
+     * @throws IllegalArgumentException if it is not positive
+     */
     public FlatTop {
       if (!(peakIntensity.wattsPerSquareMetre() > 0)) {
         throw new IllegalArgumentException("beam intensity " + peakIntensity + " must be positive");
