@@ -127,12 +127,12 @@ final class LadderBuilder {
     }
   }
 
-  double startTrapShiftHertz() {
-    return startTrapShift;
-  }
-
-  double targetTrapShiftHertz() {
-    return targetTrapShift;
+  Drive.TrapLight trapLight(DriveSetup.Trap trap) {
+    return new Drive.TrapLight(
+        trap.beam(),
+        wavelength(trap.laser().hertz()),
+        Frequency.ofHertz(startTrapShift),
+        Frequency.ofHertz(targetTrapShift));
   }
 
   private double[] lasers() {
