@@ -439,6 +439,16 @@ public final class Drive {
     return PulsePlanner.plan(ladder, areaRadians);
   }
 
+  /**
+   * Prepares this drive for evaluation at other powers, detunings and places in the beams.
+   *
+   * @return a kernel, to be prepared once and used often
+   * @throws IllegalArgumentException if the drive has three steps
+   */
+  public DriveKernel kernel() {
+    return DriveKernel.of(KernelBuilder.build(setup, toString()));
+  }
+
   @Override
   public String toString() {
     StringBuilder text = new StringBuilder(species().name()).append(' ').append(start());
