@@ -235,7 +235,7 @@ public final class DriveKernel {
    * @return a fresh result, for this kernel and those corrected from it
    */
   public KernelResult newResult() {
-    return new KernelResult(targets);
+    return new KernelResult(targets, energy.length);
   }
 
   /**
@@ -349,7 +349,9 @@ public final class DriveKernel {
   private void two(double first, double second, double detuning, KernelResult into) {
     requireDetuning(detuning);
     double[] c = into.amplitude;
+    double[] inverses = into.inverse;
     requireLength(c.length, 2 * targets, "places of the result");
+    requireLength(inverses.length, energy.length, "places of the result");
     double change = detuning - data.detuningHertz();
     double startNear = 0;
     double startRate = 0;
@@ -359,6 +361,7 @@ public final class DriveKernel {
     for (int i = 0; i < energy.length; i++) {
       double e = energy[i] - change;
       double inverse = 1 / (e * e + halfWidth[i] * halfWidth[i]);
+      inverses[i] = inverse;
       double population = (startRe[i] * startRe[i] + startIm[i] * startIm[i]) * inverse;
       startNear -= e * population;
       startRate += decay[i] * population;
@@ -393,7 +396,7 @@ public final class DriveKernel {
         im += linkRe[l] * c[w + 1] - linkIm[l] * c[w];
       }
       double e = energy[i] - change;
-      double population = (re * re + im * im) / (e * e + halfWidth[i] * halfWidth[i]);
+      double population = (re * re + im * im) * inverses[i];
       targetNear -= e * population;
       targetRate += decay[i] * population;
     }

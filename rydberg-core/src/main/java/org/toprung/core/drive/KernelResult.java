@@ -5,15 +5,17 @@ package org.toprung.core.drive;
  * instance serves one thread at a time.
  */
 public final class KernelResult {
-  final double[] amplitude; // couplings start to targets, then scratch: re, im by target
+  final double[] amplitude; // scratch: couplings start to targets, Hz; re, im by target
+  final double[] inverse; // scratch: 1/|E − iγ/4π|² by intermediate, 1/Hz²
 
   private double rabi; // Hz
   private double startShift; // Hz
   private double targetShift; // Hz
   private double scattering; // 1/s
 
-  KernelResult(int targets) {
+  KernelResult(int targets, int intermediates) {
     this.amplitude = new double[2 * targets];
+    this.inverse = new double[intermediates];
     this.rabi = Double.NaN;
     this.startShift = Double.NaN;
     this.targetShift = Double.NaN;

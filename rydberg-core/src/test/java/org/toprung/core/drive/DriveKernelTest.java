@@ -100,7 +100,7 @@ class DriveKernelTest {
    * parts of a shift where those cancel. The detuning moves by up to a third, which for the larger
    * ones is more than a hundred gigahertz.
    */
-  @Property(tries = 250, seed = "11", edgeCases = EdgeCasesMode.MIXIN)
+  @Property(tries = 350, seed = "11", edgeCases = EdgeCasesMode.MIXIN)
   void equalsResolvingAnew(
       @ForAll("schemes") Scheme scheme,
       @ForAll @DoubleRange(min = 0.05, max = 20) double first,
