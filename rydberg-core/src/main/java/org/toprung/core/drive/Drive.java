@@ -449,6 +449,17 @@ public final class Drive {
     return DriveKernel.of(KernelBuilder.build(setup, toString()));
   }
 
+  /**
+   * How the powers of the beams weigh against each other: slopes of the differential light shift,
+   * the ratios that null it and that scatter least, and powers for wanted Rabi frequencies.
+   *
+   * @return the balance at the detuning of this drive
+   * @throws IllegalArgumentException if the drive has three steps
+   */
+  public PowerBalance powerBalance() {
+    return PowerBalance.of(this, elimination);
+  }
+
   @Override
   public String toString() {
     StringBuilder text = new StringBuilder(species().name()).append(' ').append(start());

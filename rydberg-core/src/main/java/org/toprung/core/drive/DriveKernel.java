@@ -230,6 +230,33 @@ public final class DriveKernel {
   }
 
   /**
+   * Begins a calibration of this kernel by measurements, made at the nominal powers and detuning
+   * unless it is told otherwise.
+   *
+   * @return a calibration without measurements
+   */
+  public Calibration calibration() {
+    return Calibration.of(this);
+  }
+
+  /** Light shift of the start by levels outside the ladder, from one beam, Hz. */
+  double startFarShiftHertz(int step, double powerWatts, double detuningHertz) {
+    return farShift(startFar[step], step, powerWatts, detuningHertz);
+  }
+
+  /** Light shift of the target by levels outside the ladder, from one beam, Hz. */
+  double targetFarShiftHertz(int step, double powerWatts, double detuningHertz) {
+    return farShift(targetFar[step], step, powerWatts, detuningHertz);
+  }
+
+  private double farShift(
+      FarShiftSeries.Evaluator far, int step, double powerWatts, double detuningHertz) {
+    double change = detuningHertz - data.detuningHertz();
+    double squared = intensity(step, powerWatts, 1) * squaredField[step];
+    return squared * far.at(step == 0 ? change : -change);
+  }
+
+  /**
    * A result to evaluate into.
    *
    * @return a fresh result, for this kernel and those corrected from it

@@ -43,6 +43,7 @@ final class KernelBuilder {
               1,
               field * field,
               strongest(k),
+              builder.element(k).uncertaintyA0() / Math.abs(builder.element(k).valueA0()),
               far(ladder.start(), k),
               far(wanted[0], k)));
     }
@@ -66,6 +67,7 @@ final class KernelBuilder {
         detuning,
         detuning + lowest,
         detuning + highest,
+        builder.farShiftRelativeUncertainty(),
         partners,
         wanted.length,
         direct(),

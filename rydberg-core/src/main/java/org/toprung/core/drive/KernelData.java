@@ -16,6 +16,8 @@ import org.toprung.core.structure.FarShiftSeries;
  * @param detuningHertz nominal detuning of the first step, Hz; 0 for a single step
  * @param lowestDetuningHertz lower end of the range the numbers hold for, Hz
  * @param highestDetuningHertz upper end of the range the numbers hold for, Hz
+ * @param farShiftRelativeUncertainty relative standard uncertainty of the far-off-resonant shifts,
+ *     at least 0
  * @param partners fine-structure partners of the intermediate level; none for a single step
  * @param targets number of wanted targets: one for each nuclear projection
  * @param direct couplings from the start straight to the targets, of a single step
@@ -28,6 +30,7 @@ public record KernelData(
     double detuningHertz,
     double lowestDetuningHertz,
     double highestDetuningHertz,
+    double farShiftRelativeUncertainty,
     List<Partner> partners,
     int targets,
     List<Link> direct,
@@ -53,6 +56,7 @@ public record KernelData(
       double intensityRatio,
       double squaredField,
       double strongestHertz,
+      double relativeUncertainty,
       FarShiftSeries start,
       FarShiftSeries target) {
     /**
@@ -62,6 +66,7 @@ public record KernelData(
      * @param intensityRatio intensity over the expected one
      * @param squaredField E0², (V/m)²
      * @param strongestHertz the largest coupling, Hz
+     * @param relativeUncertainty uncertainty of the dipole element
      * @param start shift of the start
      * @param target shift of the target
      * @throws IllegalArgumentException if a number is not positive and finite, or a series is
@@ -71,10 +76,8 @@ public record KernelData(
       requirePositive(powerWatts, "power in W");
       requirePositive(intensityRatio, "intensity ratio");
       requirePositive(squaredField, "squared field in (V/m)²");
-      if (!(strongestHertz >= 0 && strongestHertz < Double.POSITIVE_INFINITY)) {
-        throw new IllegalArgumentException(
-            "strongest coupling in Hz must be at least 0 and finite, given " + strongestHertz);
-      }
+      requireNotNegative(strongestHertz, "strongest coupling in Hz");
+      requireNotNegative(relativeUncertainty, "uncertainty of the dipole element");
       if (start == null || target == null) {
         throw new IllegalArgumentException("a step needs the light shifts of start and target");
       }
@@ -141,6 +144,7 @@ public record KernelData(
    * @param detuningHertz nominal detuning, Hz
    * @param lowestDetuningHertz lower end of the range, Hz
    * @param highestDetuningHertz upper end of the range, Hz
+   * @param farShiftRelativeUncertainty uncertainty of the far-off-resonant shifts
    * @param partners fine-structure partners
    * @param targets number of wanted targets, at least 1
    * @param direct couplings of a single step
@@ -173,6 +177,7 @@ public record KernelData(
               lowestDetuningHertz,
               highestDetuningHertz));
     }
+    requireNotNegative(farShiftRelativeUncertainty, "uncertainty of the far-off-resonant shifts");
     double sum = lowestDetuningHertz + highestDetuningHertz;
     for (Partner partner : partners) {
       sum += partner.distanceHertz();
@@ -204,6 +209,12 @@ public record KernelData(
     return link.re() + link.im();
   }
 
+  private static void requireNotNegative(double value, String what) {
+    if (!(value >= 0 && value < Double.POSITIVE_INFINITY)) {
+      throw new IllegalArgumentException(what + " must be at least 0 and finite, given " + value);
+    }
+  }
+
   private static void requirePositive(double value, String what) {
     if (!(value > 0 && value < Double.POSITIVE_INFINITY)) {
       throw new IllegalArgumentException(what + " must be positive and finite, given " + value);
@@ -221,6 +232,7 @@ public record KernelData(
               s.intensityRatio() * factor[k],
               s.squaredField(),
               s.strongestHertz(),
+              s.relativeUncertainty(),
               s.start(),
               s.target());
     }
@@ -230,6 +242,7 @@ public record KernelData(
         detuningHertz,
         lowestDetuningHertz,
         highestDetuningHertz,
+        farShiftRelativeUncertainty,
         partners,
         targets,
         direct,

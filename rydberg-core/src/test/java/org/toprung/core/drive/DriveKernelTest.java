@@ -380,6 +380,7 @@ class DriveKernelTest {
         detuning,
         d.lowestDetuningHertz(),
         d.highestDetuningHertz(),
+        d.farShiftRelativeUncertainty(),
         d.partners(),
         targets,
         d.direct(),
