@@ -460,6 +460,16 @@ public final class Drive {
     return PowerBalance.of(this, elimination);
   }
 
+  /**
+   * How the effective Rabi frequency comes about, factor by factor, to be checked by hand.
+   *
+   * @return the working, as data and as text
+   * @throws IllegalArgumentException if the drive has three steps
+   */
+  public Derivation derivation() {
+    return DerivationBuilder.build(setup, this);
+  }
+
   @Override
   public String toString() {
     StringBuilder text = new StringBuilder(species().name()).append(' ').append(start());

@@ -200,6 +200,11 @@ final class LadderBuilder {
     return dipoles.reduced(named(step + 1), named(step));
   }
 
+  /** The reduced element between two levels. */
+  DipoleElement element(Level upper, Level lower) {
+    return dipoles.reduced(upper, lower);
+  }
+
   double laserHertz(int step) {
     return laser[step];
   }
