@@ -24,9 +24,13 @@ final class DerivationText {
     out.line("Reduced dipole elements");
     d.elements().forEach(out::element);
     out.line("");
-    out.line("Legs: A = a(q) Σ ± c' c (J' 1 J; -mJ' q mJ), ± = (-1)^(J'-mJ'); Ω = E (e a0/h) d A");
+    out.line(
+        "Legs: A = a(q) Σ ±(c' * c * (J' 1 J; -mJ' q mJ)), ± = (-1)^(J'-mJ'); Ω = E (e a0/h) d A");
     Set<Derivation.Leg> legs = new LinkedHashSet<>();
-    d.paths().forEach(p -> legs.addAll(p.legs()));
+    for (int k = 0; k < d.lights().size(); k++) {
+      int step = k;
+      d.paths().forEach(p -> legs.add(p.legs().get(step)));
+    }
     legs.forEach(out::leg);
     out.line("");
     boolean single = d.lights().size() == 1;
@@ -68,7 +72,7 @@ final class DerivationText {
     line("  leg %d: %s -> %s, q = %+d", leg.step(), leg.lower(), leg.upper(), leg.q());
     for (Derivation.AngularTerm t : leg.terms()) {
       line(
-          "    mI = %s, mJ = %s -> %s: %s%s * %s * %s",
+          "    mI = %s, mJ = %s -> %s: %s(%s * %s * %s)",
           t.mI(),
           t.lowerMj(),
           t.upperMj(),
