@@ -12,6 +12,7 @@ import java.util.regex.Pattern;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.constraints.DoubleRange;
+import net.jqwik.api.constraints.Scale;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.function.Executable;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -67,8 +68,8 @@ class DriveDocumentTest {
 
   @Property(tries = 60, seed = "42")
   void givesPlansBackExactly(
-      @ForAll @DoubleRange(min = 1e-6, max = 1) double first,
-      @ForAll @DoubleRange(min = 1e-6, max = 1) double second,
+      @ForAll @DoubleRange(min = 1e-6, max = 1) @Scale(9) double first,
+      @ForAll @DoubleRange(min = 1e-6, max = 1) @Scale(9) double second,
       @ForAll @DoubleRange(min = 0.1, max = 1) double factor,
       @ForAll @DoubleRange(min = 0.1, max = 10) double area) {
     ShotPlan plan =
@@ -99,7 +100,7 @@ class DriveDocumentTest {
     assertTrue(plan.length() < 1000, () -> "characters: " + plan.length());
     String kernel = DriveDocument.render(KERNEL);
     assertTrue(kernel.startsWith("{\"format\":\"toprung-kernel\",\"version\":1,"), kernel);
-    assertTrue(kernel.length() < 16_000, () -> "characters: " + kernel.length());
+    assertTrue(kernel.length() < 12_000, () -> "characters: " + kernel.length());
   }
 
   private static ShotPlan plan() {
@@ -129,7 +130,7 @@ class DriveDocumentTest {
       })
   void refusesPlansThatAreNone(String part, String instead, String message) {
     String good = DriveDocument.render(plan());
-    assertTrue(good.contains(part), good);
+    assertTrue(good.contains(part), part);
     refused(message, () -> DriveDocument.parsePlan(good.replace(part, instead)));
   }
 
@@ -140,14 +141,14 @@ class DriveDocumentTest {
       value = {
         "\"version\":1      | \"version\":0       | version: given 0; allowed: 1",
         "\"kept\":false     | \"kept\":0          | partners[0].kept: given 0; allowed: true or false",
-        "\"targets\":3      | \"targets\":1       | must be from 0 to 0",
+        "\"targets\":4      | \"targets\":1       | must be from 0 to 0",
         "\"power_W\":0.002  | \"power_W\":0       | power in W must be positive",
         "\"closure\":false  | \"closure\":false,\"y\":1 | unknown key steps[0].start_shift.y",
         "\"steps\":[        | \"steps\":[7,       | steps[0].: given 7; allowed: a JSON object",
       })
   void refusesKernelsThatAreNone(String part, String instead, String message) {
     String good = DriveDocument.render(KERNEL);
-    assertTrue(good.contains(part), good);
+    assertTrue(good.contains(part), part);
     refused(message, () -> DriveDocument.parseKernel(good.replaceFirst(quoted(part), instead)));
   }
 
