@@ -75,6 +75,7 @@ public final class DriveDocument {
             document.number("lowest_detuning_Hz"),
             document.number("highest_detuning_Hz"),
             document.number("far_shift_relative_uncertainty"),
+            document.number("trap_shift_Hz"),
             document.records(
                 "partners", r -> new KernelData.Partner(r.number("distance_Hz"), r.truth("kept"))),
             document.integer("targets"),
@@ -204,6 +205,7 @@ public final class DriveDocument {
     json.writeNumberField("lowest_detuning_Hz", data.lowestDetuningHertz());
     json.writeNumberField("highest_detuning_Hz", data.highestDetuningHertz());
     json.writeNumberField("far_shift_relative_uncertainty", data.farShiftRelativeUncertainty());
+    json.writeNumberField("trap_shift_Hz", data.trapShiftHertz());
     json.writeArrayFieldStart("partners");
     for (KernelData.Partner partner : data.partners()) {
       json.writeStartObject();

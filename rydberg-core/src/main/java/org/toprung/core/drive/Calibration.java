@@ -351,91 +351,87 @@ public final class Calibration {
         intensities, misfit, measurements.size() - n, kernel.withIntensitiesScaled(ratio));
   }
 
-  /** The kernel at the point of the measurements, split into what goes with each intensity. */
+  /** The kernel at the point of the measurements, as a function of the logarithms of the ratios. */
   private static final class Model {
-    private final int n;
-    private final double rabi; // Hz
-    private final double[] start; // Hz, by step
-    private final double[] target;
-    private final double[] startFar; // the far-off-resonant part
-    private final double[] targetFar;
-    private final double[] uncertainty; // relative: elements by step, then the far shifts
+    private static final double STEP = 1e-4; // of ln r; derivatives are good to its square
+    private static final double DARK = 1e-12; // power of a beam that is off
+
+    private final DriveKernel kernel;
+    private final double[] watts;
+    private final double detuning; // Hz
+    private final double[] ones;
+    private final KernelResult result;
 
     Model(DriveKernel kernel, double[] watts, double detuning) {
-      this.n = watts.length;
-      KernelResult base = evaluated(kernel, watts, detuning);
-      this.rabi = base.rabiHertz();
-      this.start = new double[n];
-      this.target = new double[n];
-      this.startFar = new double[n];
-      this.targetFar = new double[n];
-      this.uncertainty = new double[n + 1];
-      for (int k = 0; k < n; k++) {
-        // shifts are linear in each intensity: one more unit of it adds its part
-        double[] doubled = watts.clone();
-        doubled[k] *= 2;
-        KernelResult more = evaluated(kernel, doubled, detuning);
-        start[k] = more.startLightShiftHertz() - base.startLightShiftHertz();
-        target[k] = more.targetLightShiftHertz() - base.targetLightShiftHertz();
-        startFar[k] = kernel.startFarShiftHertz(k, watts[k], detuning);
-        targetFar[k] = kernel.targetFarShiftHertz(k, watts[k], detuning);
-        uncertainty[k] = kernel.data().steps().get(k).relativeUncertainty();
-      }
-      uncertainty[n] = kernel.data().farShiftRelativeUncertainty();
+      this.kernel = kernel;
+      this.watts = watts;
+      this.detuning = detuning;
+      this.ones = new double[watts.length];
+      Arrays.fill(ones, 1);
+      this.result = kernel.newResult();
     }
 
-    private static KernelResult evaluated(DriveKernel kernel, double[] watts, double detuning) {
-      double[] ones = new double[watts.length];
-      Arrays.fill(ones, 1);
-      KernelResult result = kernel.newResult();
-      kernel.evaluate(watts, detuning, ones, result);
-      return result;
+    private double[] powers(Measurement m, double[] u) {
+      double[] powers = new double[watts.length];
+      for (int k = 0; k < powers.length; k++) {
+        powers[k] = watts[k] * (m.step < 0 || m.step == k ? Math.exp(u[k]) : DARK);
+      }
+      return powers;
     }
 
     double value(Measurement m, double[] u) {
-      if (m.kind == Kind.RABI) {
-        return rabi * Math.exp(0.5 * Arrays.stream(u).sum());
-      }
-      return Arrays.stream(slope(m, u)).sum();
+      kernel.evaluate(powers(m, u), detuning, ones, result);
+      return switch (m.kind) {
+        case RABI -> result.rabiHertz();
+        case START -> result.startLightShiftHertz();
+        case TARGET -> result.targetLightShiftHertz();
+        case DIFFERENTIAL -> result.targetLightShiftHertz() - result.startLightShiftHertz();
+      };
     }
 
-    /** Derivative with ln r; shifts are their own derivative. */
+    /** Derivative with ln r. */
     double[] slope(Measurement m, double[] u) {
-      double[] slope = new double[n];
-      for (int k = 0; k < n; k++) {
-        if (m.kind == Kind.RABI) {
-          slope[k] = 0.5 * value(m, u);
-        } else if (m.step < 0 || m.step == k) {
-          slope[k] = Math.exp(u[k]) * pick(m.kind, start[k], target[k]);
+      double[] slope = new double[watts.length];
+      for (int k = 0; k < slope.length; k++) {
+        if (m.step < 0 || m.step == k) {
+          double[] moved = u.clone();
+          moved[k] = u[k] + STEP;
+          double above = value(m, moved);
+          moved[k] = u[k] - STEP;
+          slope[k] = (above - value(m, moved)) / (2 * STEP);
         }
       }
       return slope;
     }
 
     int parameters() {
-      return n + 1;
+      return watts.length + 1;
     }
 
+    /** Relative uncertainty: elements by step, then the far shifts. */
     double elementUncertainty(int parameter) {
-      return uncertainty[parameter];
+      return parameter < watts.length
+          ? kernel.data().steps().get(parameter).relativeUncertainty()
+          : kernel.data().farShiftRelativeUncertainty();
     }
 
     /** Derivative with the logarithm of the element of a step, or of all far shifts. */
     double elementSlope(Measurement m, double[] u, int parameter) {
       if (m.kind == Kind.RABI) {
-        return parameter < n ? value(m, u) : 0;
+        return parameter < watts.length ? value(m, u) : 0;
       }
+      double[] powers = powers(m, u);
+      kernel.evaluate(powers, detuning, ones, result);
       double sum = 0;
-      for (int k = 0; k < n; k++) {
-        if (m.step >= 0 && m.step != k) {
-          continue;
-        }
-        double far = pick(m.kind, startFar[k], targetFar[k]);
-        double near = pick(m.kind, start[k], target[k]) - far;
-        if (parameter == n) {
-          sum += Math.exp(u[k]) * far;
+      for (int k = 0; k < watts.length; k++) {
+        double startFar = kernel.startFarShiftHertz(k, powers[k], detuning);
+        double targetFar = kernel.targetFarShiftHertz(k, powers[k], detuning);
+        double far = pick(m.kind, startFar, targetFar);
+        double all = pick(m.kind, result.startLightShiftHertz(k), result.targetLightShiftHertz(k));
+        if (parameter == watts.length) {
+          sum += far;
         } else if (parameter == k) {
-          sum += 2 * Math.exp(u[k]) * near;
+          sum += 2 * (all - far);
         }
       }
       return sum;

@@ -14,8 +14,9 @@ import org.toprung.core.structure.DipoleElement;
  *       reduced element d in a0 and A = a(q) Σ ± c′ c (J′ 1 J; −m′ q m), summed over the nuclear
  *       projections that both sublevels hold, ± being (−1)<sup>J′−m′</sup>.
  *   <li>A path through an intermediate sublevel contributes Ω1Ω2/(2Δ + iγ/2π), Δ being the light
- *       minus the transition and γ the decay rate; for sublevels of a partner level that is
- *       eliminated γ is left out. Contributions to the same target add with their signs.
+ *       minus the transition, from the start as far-off-resonant levels have moved it, and γ the
+ *       decay rate; for sublevels of a partner level that is eliminated γ and that move are left
+ *       out. Contributions to the same target add with their signs.
  *   <li>The effective Rabi frequency is the root of the summed squares over the targets, which
  *       differ in their nuclear projection.
  * </ol>

@@ -83,6 +83,11 @@ final class DerivationBuilder {
   }
 
   private List<Derivation.Path> two(int target) {
+    // kept sublevels lie where the levels outside the ladder have moved the start
+    double startShift = 0;
+    for (int k = 0; k < ladder.steps(); k++) {
+      startShift += ladder.farShiftHertz(ladder.start(), k);
+    }
     List<Derivation.Path> paths = new ArrayList<>();
     for (Ladder.Coupling first : ladder.couplings()) {
       for (Ladder.Coupling second : ladder.couplings()) {
@@ -94,7 +99,7 @@ final class DerivationBuilder {
               path(
                   target,
                   builder.product(first.upper()),
-                  -middle.energyHertz(),
+                  startShift - middle.energyHertz(),
                   middle.decayPerSecond()));
         }
       }

@@ -17,8 +17,8 @@ import org.toprung.core.structure.FarShiftSeries;
  *
  * <p>With intensities I<sub>k</sub> relative to nominal, H<sub>is</sub> and H<sub>wi</sub> half the
  * Rabi frequencies from the start s to the intermediate sublevels i and from there to the wanted
- * targets w, and E<sub>i</sub> = E<sub>i</sub>(nominal) − δ after a change δ of the detuning, it
- * works out the sums of {@link Elimination} for two steps,
+ * targets w, and E<sub>i</sub> = E<sub>i</sub>(nominal) − δ − (far-off-resonant shift of the start)
+ * after a change δ of the detuning, it works out the sums of {@link Elimination} for two steps,
  *
  * <ul>
  *   <li>c<sub>w</sub> = −Σ<sub>i</sub> H<sub>wi</sub>H<sub>is</sub>/(E<sub>i</sub> −
@@ -366,11 +366,9 @@ public final class DriveKernel {
       norm += directRe[w] * directRe[w] + directIm[w] * directIm[w];
     }
     double squared = intensity * squaredField[0];
-    into.set(
-        2 * Math.sqrt(intensity * norm),
-        squared * startFar[0].at(0),
-        squared * targetFar[0].at(0),
-        0);
+    into.set(2 * Math.sqrt(intensity * norm), data.trapShiftHertz());
+    into.setStart(squared * startFar[0].at(0), 0, 0);
+    into.setTarget(squared * targetFar[0].at(0), 0, 0);
   }
 
   private void two(double first, double second, double detuning, KernelResult into) {
@@ -380,13 +378,18 @@ public final class DriveKernel {
     requireLength(c.length, 2 * targets, "places of the result");
     requireLength(inverses.length, energy.length, "places of the result");
     double change = detuning - data.detuningHertz();
+    double one = first * squaredField[0];
+    double two = second * squaredField[1];
+    double startFirst = one * startFar[0].at(change);
+    double startSecond = two * startFar[1].at(-change);
+    double below = change + startFirst + startSecond;
     double startNear = 0;
     double startRate = 0;
     for (int w = 0; w < c.length; w++) {
       c[w] = 0;
     }
     for (int i = 0; i < energy.length; i++) {
-      double e = energy[i] - change;
+      double e = energy[i] - below;
       double inverse = 1 / (e * e + halfWidth[i] * halfWidth[i]);
       inverses[i] = inverse;
       double population = (startRe[i] * startRe[i] + startIm[i] * startIm[i]) * inverse;
@@ -422,22 +425,21 @@ public final class DriveKernel {
         re += linkRe[l] * c[w] + linkIm[l] * c[w + 1];
         im += linkRe[l] * c[w + 1] - linkIm[l] * c[w];
       }
-      double e = energy[i] - change;
+      double e = energy[i] - below;
       double population = (re * re + im * im) * inverses[i];
       targetNear -= e * population;
       targetRate += decay[i] * population;
     }
     targetNear /= norm;
     targetRate /= norm;
-    double one = first * squaredField[0];
-    double two = second * squaredField[1];
     double rabi = 2 * Math.sqrt(first * second * norm);
     requireCoupling(rabi, first, second);
-    into.set(
-        rabi,
-        first * startNear + one * startFar[0].at(change) + two * startFar[1].at(-change),
-        second * targetNear + one * targetFar[0].at(change) + two * targetFar[1].at(-change),
-        0.5 * (first * startRate + second * targetRate));
+    into.set(rabi, data.trapShiftHertz());
+    into.setStart(first * startNear + startFirst, startSecond, first * startRate);
+    into.setTarget(
+        one * targetFar[0].at(change),
+        second * targetNear + two * targetFar[1].at(-change),
+        second * targetRate);
   }
 
   private void requireDetuning(double detuning) {

@@ -3,11 +3,16 @@ package org.toprung.core.drive;
 import java.util.ArrayList;
 import java.util.List;
 import org.toprung.core.atom.Level;
+import org.toprung.core.quantity.Length;
+import org.toprung.core.quantity.PhysicalConstants;
+import org.toprung.core.quantity.Power;
 import org.toprung.core.structure.FarLightShift;
 import org.toprung.core.structure.FarShiftSeries;
 
 /** Takes the numbers of a {@link DriveKernel} from the description of a drive. */
 final class KernelBuilder {
+  private static final double SAME_FIELD = 1e-10; // relative
+
   private final DriveSetup setup;
   private final LadderBuilder builder;
   private final Ladder ladder;
@@ -39,7 +44,7 @@ final class KernelBuilder {
       double field = builder.fieldVoltsPerMetre(k);
       steps.add(
           new KernelData.Step(
-              setup.beam(k).power().watts(),
+              watts(k),
               1,
               field * field,
               strongest(k),
@@ -54,6 +59,8 @@ final class KernelBuilder {
       // both lasers must keep a positive frequency
       narrow(-builder.laserHertz(0));
       narrow(builder.laserHertz(1));
+      keepFocus(0);
+      keepFocus(1);
       for (double distance : builder.partnerHertz(1)) {
         partners.add(new KernelData.Partner(distance, LadderBuilder.isNear(distance, detuning)));
       }
@@ -68,11 +75,45 @@ final class KernelBuilder {
         detuning + lowest,
         detuning + highest,
         builder.farShiftRelativeUncertainty(),
+        builder.targetTrapShiftHertz() - builder.startTrapShiftHertz(),
         partners,
         wanted.length,
         direct(),
         intermediates(),
         paths());
+  }
+
+  private double watts(int step) {
+    Profile profile = setup.beam(step).profile();
+    return profile
+        .power()
+        .map(Power::watts)
+        .orElseThrow(
+            () ->
+                new IllegalArgumentException(
+                    "a kernel takes the power of each beam, but beam "
+                        + (step + 1)
+                        + " is given as a "
+                        + profile
+                        + " without one"));
+  }
+
+  /** Off the focus the field depends on the wavelength: keeps the detuning where it does not. */
+  private void keepFocus(int step) {
+    double laser = builder.laserHertz(step);
+    double probe = Math.min(FarShiftSeries.REACH_HERTZ, laser / 2);
+    double change =
+        Math.abs(fieldAt(step, laser + probe) / fieldAt(step, laser - probe) - 1) / probe;
+    if (change > 0) {
+      narrow(SAME_FIELD / change);
+      narrow(-SAME_FIELD / change);
+    }
+  }
+
+  private double fieldAt(int step, double laser) {
+    return setup
+        .beam(step)
+        .fieldVoltsPerMetre(Length.ofMetres(PhysicalConstants.SPEED_OF_LIGHT / laser));
   }
 
   /** Keeps the change of the detuning on this side of a limit. */

@@ -18,6 +18,7 @@ import org.toprung.core.structure.FarShiftSeries;
  * @param highestDetuningHertz upper end of the range the numbers hold for, Hz
  * @param farShiftRelativeUncertainty relative standard uncertainty of the far-off-resonant shifts,
  *     at least 0
+ * @param trapShiftHertz light shift of the target minus that of the start by a trap, Hz; 0 without
  * @param partners fine-structure partners of the intermediate level; none for a single step
  * @param targets number of wanted targets: one for each nuclear projection
  * @param direct couplings from the start straight to the targets, of a single step
@@ -31,6 +32,7 @@ public record KernelData(
     double lowestDetuningHertz,
     double highestDetuningHertz,
     double farShiftRelativeUncertainty,
+    double trapShiftHertz,
     List<Partner> partners,
     int targets,
     List<Link> direct,
@@ -145,6 +147,7 @@ public record KernelData(
    * @param lowestDetuningHertz lower end of the range, Hz
    * @param highestDetuningHertz upper end of the range, Hz
    * @param farShiftRelativeUncertainty uncertainty of the far-off-resonant shifts
+   * @param trapShiftHertz differential shift by a trap, Hz
    * @param partners fine-structure partners
    * @param targets number of wanted targets, at least 1
    * @param direct couplings of a single step
@@ -178,7 +181,7 @@ public record KernelData(
               highestDetuningHertz));
     }
     requireNotNegative(farShiftRelativeUncertainty, "uncertainty of the far-off-resonant shifts");
-    double sum = lowestDetuningHertz + highestDetuningHertz;
+    double sum = trapShiftHertz + lowestDetuningHertz + highestDetuningHertz;
     for (Partner partner : partners) {
       sum += partner.distanceHertz();
     }
@@ -243,6 +246,7 @@ public record KernelData(
         lowestDetuningHertz,
         highestDetuningHertz,
         farShiftRelativeUncertainty,
+        trapShiftHertz,
         partners,
         targets,
         direct,

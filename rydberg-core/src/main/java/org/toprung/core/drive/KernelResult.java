@@ -1,5 +1,7 @@
 package org.toprung.core.drive;
 
+import java.util.Objects;
+
 /**
  * What a {@link DriveKernel} answers, owned by the caller and overwritten by each evaluation. One
  * instance serves one thread at a time.
@@ -9,24 +11,37 @@ public final class KernelResult {
   final double[] inverse; // scratch: 1/|E − iγ/4π|² by intermediate, 1/Hz²
 
   private double rabi; // Hz
-  private double startShift; // Hz
-  private double targetShift; // Hz
-  private double scattering; // 1/s
+  private double trapShift; // Hz
+  private double startFirst; // Hz, by the first beam
+  private double startSecond; // Hz
+  private double targetFirst; // Hz
+  private double targetSecond; // Hz
+  private double startScattering; // 1/s
+  private double targetScattering; // 1/s
 
   KernelResult(int targets, int intermediates) {
     this.amplitude = new double[2 * targets];
     this.inverse = new double[intermediates];
-    this.rabi = Double.NaN;
-    this.startShift = Double.NaN;
-    this.targetShift = Double.NaN;
-    this.scattering = Double.NaN;
+    set(Double.NaN, Double.NaN);
+    setStart(Double.NaN, Double.NaN, Double.NaN);
+    setTarget(Double.NaN, Double.NaN, Double.NaN);
   }
 
-  void set(double rabiHertz, double startShiftHertz, double targetShiftHertz, double perSecond) {
+  void set(double rabiHertz, double trapShiftHertz) {
     this.rabi = rabiHertz;
-    this.startShift = startShiftHertz;
-    this.targetShift = targetShiftHertz;
-    this.scattering = perSecond;
+    this.trapShift = trapShiftHertz;
+  }
+
+  void setStart(double firstHertz, double secondHertz, double perSecond) {
+    this.startFirst = firstHertz;
+    this.startSecond = secondHertz;
+    this.startScattering = perSecond;
+  }
+
+  void setTarget(double firstHertz, double secondHertz, double perSecond) {
+    this.targetFirst = firstHertz;
+    this.targetSecond = secondHertz;
+    this.targetScattering = perSecond;
   }
 
   /**
@@ -44,7 +59,7 @@ public final class KernelResult {
    * @return the move of its energy over h, Hz, positive upwards; NaN before the first evaluation
    */
   public double startLightShiftHertz() {
-    return startShift;
+    return startFirst + startSecond;
   }
 
   /**
@@ -53,7 +68,45 @@ public final class KernelResult {
    * @return the move of its energy over h, Hz, positive upwards; NaN before the first evaluation
    */
   public double targetLightShiftHertz() {
-    return targetShift;
+    return targetFirst + targetSecond;
+  }
+
+  /**
+   * Light shift of the start by one beam. The near-resonant part counts with the first beam.
+   *
+   * @param step index of the step, 0 or 1
+   * @return the move of its energy over h, Hz, positive upwards; 0 for a beam that is not there
+   */
+  public double startLightShiftHertz(int step) {
+    return Objects.checkIndex(step, 2) == 0 ? startFirst : startSecond;
+  }
+
+  /**
+   * Light shift of the target by one beam. The near-resonant part counts with the last beam.
+   *
+   * @param step index of the step, 0 or 1
+   * @return the move of its energy over h, Hz, positive upwards; 0 for a beam that is not there
+   */
+  public double targetLightShiftHertz(int step) {
+    return Objects.checkIndex(step, 2) == 0 ? targetFirst : targetSecond;
+  }
+
+  /**
+   * Rate at which the start scatters.
+   *
+   * @return the rate, 1/s; NaN before the first evaluation
+   */
+  public double startScatteringPerSecond() {
+    return startScattering;
+  }
+
+  /**
+   * Rate at which the target scatters.
+   *
+   * @return the rate, 1/s; NaN before the first evaluation
+   */
+  public double targetScatteringPerSecond() {
+    return targetScattering;
   }
 
   /**
@@ -62,17 +115,18 @@ public final class KernelResult {
    * @return the rate, 1/s; NaN before the first evaluation
    */
   public double scatteringPerSecond() {
-    return scattering;
+    return 0.5 * (startScattering + targetScattering);
   }
 
   /**
    * What to add to the last laser's frequency, counted from bare resonance, to sit on the
-   * light-shifted resonance: to second order target shift − start shift.
+   * light-shifted resonance: to second order target shift − start shift, plus that of a trap that
+   * shines during the pulse.
    *
    * @return the offset, Hz; NaN before the first evaluation
    */
   public double frequencyOffsetHertz() {
-    return targetShift - startShift;
+    return targetLightShiftHertz() - startLightShiftHertz() + trapShift;
   }
 
   /**
@@ -98,6 +152,6 @@ public final class KernelResult {
    * @throws IllegalArgumentException if the area is not positive and finite
    */
   public double scatteringPerPulse(double areaRadians) {
-    return scattering * durationSeconds(areaRadians);
+    return scatteringPerSecond() * durationSeconds(areaRadians);
   }
 }

@@ -13,6 +13,7 @@ public final class KernelTable {
   private final double[] startShift;
   private final double[] targetShift;
   private final double[] scattering;
+  private final double[] offset;
   private int size;
 
   KernelTable(int capacity, KernelResult point) {
@@ -21,6 +22,7 @@ public final class KernelTable {
     this.startShift = new double[capacity];
     this.targetShift = new double[capacity];
     this.scattering = new double[capacity];
+    this.offset = new double[capacity];
   }
 
   void clear() {
@@ -32,6 +34,7 @@ public final class KernelTable {
     startShift[size] = point.startLightShiftHertz();
     targetShift[size] = point.targetLightShiftHertz();
     scattering[size] = point.scatteringPerSecond();
+    offset[size] = point.frequencyOffsetHertz();
     size++;
   }
 
@@ -106,7 +109,7 @@ public final class KernelTable {
    * @throws IndexOutOfBoundsException if there is no such point
    */
   public double frequencyOffsetHertz(int index) {
-    return targetLightShiftHertz(index) - startLightShiftHertz(index);
+    return offset[Objects.checkIndex(index, size)];
   }
 
   /**

@@ -1,61 +1,62 @@
 package org.toprung.core.drive;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
-import java.util.Locale;
 import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.Power;
 
 /**
  * How the powers of the beams of a drive weigh against each other, at its detuning.
  *
- * <p>For one and two steps the effective Rabi frequency goes as the root of the product of the
- * powers, and every light shift and scattering rate is a sum of parts that are each proportional to
- * one power ({@link Elimination}, second order). So
+ * <p>To lowest order the effective Rabi frequency goes as the root of the product of the powers,
+ * and every light shift and scattering rate is a sum of parts that are each proportional to one
+ * power ({@link Elimination}). So
  *
  * <ul>
- *   <li>the differential shift is D = Σ D<sub>k</sub>P<sub>k</sub>, with constant slopes;
- *   <li>it vanishes at P2/P1 = −D1/D2 where the slopes differ in sign. With the near-resonant parts
- *       alone this is Ω1 = Ω2;
+ *   <li>the differential shift D = Σ D<sub>k</sub>P<sub>k</sub> vanishes at P2/P1 = −D1/D2 where
+ *       the slopes differ in sign. With the near-resonant parts alone this is Ω1 = Ω2;
  *   <li>at a given Rabi frequency, hence pulse length, the mean scattering rate ½(s1P1 + s2P2) is
  *       least at P2/P1 = s1/s2: the closed form q + 1/q of Saffman and Walker, Phys. Rev. A 72,
  *       022347 (2005), is least at q = Ω2/Ω1 = 1.
  * </ul>
  *
+ * <p>The far-off-resonant shift of the start moves the detuning with the powers, which bends all of
+ * this by about that shift over the detuning. It is followed with the {@link DriveKernel}: ratios
+ * and powers are repeated until they stand still.
+ *
  * <p>Immutable and thread-safe.
  */
 public final class PowerBalance {
+  private static final int REPEATS = 30; // each gains the shift over the detuning
+  private static final double STILL = 1e-12;
+  private static final double SMALL = 1e-4; // relative change of a power for a slope
+
   private final List<Drive.Step> steps;
+  private final DriveKernel kernel;
   private final double rabi; // Hz
   private final double[] watts;
-  private final double[] slope; // Hz/W
-  private final double[] scattering; // 1/(s W)
 
-  private PowerBalance(Drive drive, Elimination elimination) {
+  private PowerBalance(Drive drive) {
     this.steps = drive.steps();
-    this.rabi = elimination.rabiHertz();
-    this.watts = steps.stream().mapToDouble(s -> s.beam().power().watts()).toArray();
-    this.slope = new double[watts.length];
+    this.kernel = drive.kernel();
+    this.watts = new double[steps.size()];
     for (int k = 0; k < watts.length; k++) {
-      slope[k] = (elimination.targetShiftHertz(k) - elimination.startShiftHertz(k)) / watts[k];
+      watts[k] = kernel.powerWatts(k);
     }
-    this.scattering =
-        watts.length == 1
-            ? new double[1]
-            : new double[] {
-              elimination.startScatteringPerSecond() / watts[0],
-              elimination.targetScatteringPerSecond() / watts[1]
-            };
+    this.rabi = at(watts).rabiHertz();
   }
 
-  static PowerBalance of(Drive drive, Elimination elimination) {
-    if (drive.steps().size() > 2) {
-      throw new IllegalArgumentException(
-          "powers are balanced for one or two steps, given "
-              + drive.steps().size()
-              + ": with a step between two intermediate levels shifts are not proportional to powers");
-    }
-    return new PowerBalance(drive, elimination);
+  static PowerBalance of(Drive drive) {
+    return new PowerBalance(drive);
+  }
+
+  private KernelResult at(double... powers) {
+    double[] ones = new double[powers.length];
+    Arrays.fill(ones, 1);
+    KernelResult result = kernel.newResult();
+    kernel.evaluate(powers, kernel.detuningHertz(), ones, result);
+    return result;
   }
 
   /**
@@ -66,29 +67,26 @@ public final class PowerBalance {
    * @throws IndexOutOfBoundsException if there is no such step
    */
   public double differentialShiftHertzPerWatt(int step) {
-    return slope[step];
+    double[] powers = watts.clone();
+    powers[step] = watts[step] * (1 + SMALL);
+    double above = at(powers).frequencyOffsetHertz();
+    powers[step] = watts[step] * (1 - SMALL);
+    return (above - at(powers).frequencyOffsetHertz()) / (2 * SMALL * watts[step]);
   }
 
   /**
-   * The power ratio at which start and target shift alike.
+   * The power ratio at which the beams shift start and target alike; what a trap adds is left out.
    *
    * @return the ratio, or why there is none
    */
   public PowerRatio nullsDifferentialShift() {
-    if (watts.length == 1) {
-      return single();
-    }
-    double ratio = -slope[0] / slope[1];
-    if (!(ratio > 0 && ratio < Double.POSITIVE_INFINITY)) {
-      return new PowerRatio.None(
-          String.format(
-              Locale.ROOT,
-              "both beams move target against start the same way, by %.6g and %.6g Hz/W, so no ratio"
-                  + " of powers cancels the shift",
-              slope[0],
-              slope[1]));
-    }
-    return found(ratio);
+    return ratio(
+        (powers, result) -> {
+          double first = result.targetLightShiftHertz(0) - result.startLightShiftHertz(0);
+          double second = result.targetLightShiftHertz(1) - result.startLightShiftHertz(1);
+          return -first / powers[0] / (second / powers[1]);
+        },
+        "both beams move target against start the same way, so no ratio of powers cancels the shift");
   }
 
   /**
@@ -97,34 +95,66 @@ public final class PowerBalance {
    * @return the ratio, or why there is none
    */
   public PowerRatio minimizesScattering() {
+    return ratio(
+        (powers, result) ->
+            result.startScatteringPerSecond()
+                / powers[0]
+                / (result.targetScatteringPerSecond() / powers[1]),
+        "only one of start and target scatters");
+  }
+
+  /** The ratio P2/P1 that would be right if everything were proportional to the powers. */
+  private interface Proportional {
+    double ratio(double[] powers, KernelResult result);
+  }
+
+  private PowerRatio ratio(Proportional rule, String whyNone) {
     if (watts.length == 1) {
-      return single();
+      return new PowerRatio.None("a single beam has no power ratio");
     }
-    double ratio = scattering[0] / scattering[1];
-    if (!(ratio > 0 && ratio < Double.POSITIVE_INFINITY)) {
-      return new PowerRatio.None(
-          String.format(
-              Locale.ROOT,
-              "scattering has no minimum: the beams add %.6g and %.6g per second and watt",
-              scattering[0],
-              scattering[1]));
+    double[] powers = watts.clone();
+    double ratio = 0;
+    for (int i = 0; i < REPEATS; i++) {
+      double next = rule.ratio(powers, at(powers));
+      if (!(next > 0 && next < Double.POSITIVE_INFINITY)) {
+        return new PowerRatio.None(whyNone);
+      }
+      boolean still = Math.abs(next - ratio) <= STILL * next;
+      ratio = next;
+      powers = withRabi(rabi, ratio);
+      if (still) {
+        return new PowerRatio.Found(ratio, quantities(powers));
+      }
     }
-    return found(ratio);
+    throw new ArithmeticException(
+        "the power ratio does not settle within " + REPEATS + " repeats: the last is " + ratio);
   }
 
-  private static PowerRatio single() {
-    return new PowerRatio.None("a single beam has no power ratio");
+  /** Powers of a ratio that have an effective Rabi frequency. */
+  private double[] withRabi(double wanted, double ratio) {
+    double product = watts[0] * watts[1] * Math.pow(wanted / rabi, 2);
+    for (int i = 0; i < REPEATS; i++) {
+      double[] powers = {Math.sqrt(product / ratio), Math.sqrt(product * ratio)};
+      double off = wanted / at(powers).rabiHertz();
+      if (Math.abs(off - 1) <= STILL) {
+        return powers;
+      }
+      product *= off * off;
+    }
+    throw notSettled(wanted);
   }
 
-  private PowerRatio found(double ratio) {
-    return new PowerRatio.Found(ratio, atSameRabi(ratio));
+  private static ArithmeticException notSettled(double wanted) {
+    return new ArithmeticException(
+        "the powers for a Rabi frequency of "
+            + wanted
+            + " Hz do not settle within "
+            + REPEATS
+            + " repeats");
   }
 
-  /** Powers of this ratio and the same product as now. */
-  private List<Power> atSameRabi(double ratio) {
-    double product = watts[0] * watts[1];
-    return List.of(
-        Power.ofWatts(Math.sqrt(product / ratio)), Power.ofWatts(Math.sqrt(product * ratio)));
+  private static List<Power> quantities(double[] powers) {
+    return Arrays.stream(powers).mapToObj(Power::ofWatts).toList();
   }
 
   /**
@@ -152,7 +182,7 @@ public final class PowerBalance {
    * @return the power of each beam
    */
   public List<Power> powersForEqualStepRabi() {
-    return watts.length == 1 ? List.of(steps.get(0).beam().power()) : atSameRabi(equalRabiRatio());
+    return quantities(watts.length == 1 ? watts : withRabi(rabi, equalRabiRatio()));
   }
 
   private double equalRabiRatio() {
@@ -176,28 +206,45 @@ public final class PowerBalance {
       throw new IllegalArgumentException(
           "a limit is needed for each of " + watts.length + " beams, given " + limits.length);
     }
-    double largest = rabi;
+    double[] most = new double[limits.length];
     for (int k = 0; k < limits.length; k++) {
-      if (!(limits[k].watts() > 0)) {
+      most[k] = limits[k].watts();
+      if (!(most[k] > 0)) {
         throw new IllegalArgumentException(
             "power limit " + limits[k] + " of beam " + (k + 1) + " must be positive");
       }
-      largest *= Math.sqrt(limits[k].watts() / watts[k]);
     }
+    double largest = at(most).rabiHertz();
     if (wanted.hertz() > largest) {
       return new PowerPlan.OutOfReach(List.of(limits), Frequency.ofHertz(largest));
     }
-    double scale = wanted.hertz() / rabi;
-    double squared = scale * scale;
+    return new PowerPlan.Reached(quantities(within(wanted.hertz(), most)), wanted);
+  }
+
+  private double[] within(double wanted, double[] most) {
     if (watts.length == 1) {
-      return new PowerPlan.Reached(List.of(Power.ofWatts(watts[0] * squared)), wanted);
+      return new double[] {watts[0] * Math.pow(wanted / rabi, 2)};
     }
-    double product = watts[0] * watts[1] * squared;
-    double first = Math.sqrt(product / equalRabiRatio());
-    first = Math.min(first, limits[0].watts());
-    double second = Math.min(product / first, limits[1].watts());
-    first = Math.min(product / second, limits[0].watts());
-    return new PowerPlan.Reached(List.of(Power.ofWatts(first), Power.ofWatts(second)), wanted);
+    double[] free = withRabi(wanted, equalRabiRatio());
+    for (int k = 0; k < 2; k++) {
+      if (free[k] > most[k]) {
+        return withOneFixed(wanted, k, most[k]);
+      }
+    }
+    return free;
+  }
+
+  private double[] withOneFixed(double wanted, int fixed, double power) {
+    double[] powers = watts.clone();
+    powers[fixed] = power;
+    for (int i = 0; i < REPEATS; i++) {
+      double off = wanted / at(powers).rabiHertz();
+      if (Math.abs(off - 1) <= STILL) {
+        return powers;
+      }
+      powers[1 - fixed] *= off * off;
+    }
+    throw notSettled(wanted);
   }
 
   private static void requirePositive(Frequency rabi) {

@@ -381,6 +381,7 @@ class DriveKernelTest {
         d.lowestDetuningHertz(),
         d.highestDetuningHertz(),
         d.farShiftRelativeUncertainty(),
+        d.trapShiftHertz(),
         d.partners(),
         targets,
         d.direct(),
