@@ -63,6 +63,15 @@ class MainTest {
   }
 
   @Test
+  void printsTheDerivationWhenAsked() {
+    CommandLineRun run = budget("--derivation");
+    assertEquals(0, run.status(), run.err());
+    assertTrue(run.out().contains("\nCoupling of Rb-87: 5S1/2 F=2 mF=2 to 68S1/2"), run.out());
+    assertTrue(run.out().contains("Effective Rabi frequency √(Σ |sum|²) = "), run.out());
+    assertTrue(!budget().out().contains("Coupling of"));
+  }
+
+  @Test
   void repeatsItselfForTheSameSeedOnly() {
     String first = budget("--seed", "7").out();
     assertEquals(first, budget("--seed", "7").out());
@@ -75,7 +84,9 @@ class MainTest {
     CommandLineRun help = CommandLineRun.of("budget", "--help");
     assertEquals(0, help.status());
     for (String word :
-        new String[] {"SCENARIO", "--json", "--chart", "--shots", "--seed", "2000"}) {
+        new String[] {
+          "SCENARIO", "--json", "--chart", "--shots", "--seed", "--derivation", "2000"
+        }) {
       assertTrue(help.out().contains(word), word);
     }
     assertEquals(0, CommandLineRun.of("--help").status());

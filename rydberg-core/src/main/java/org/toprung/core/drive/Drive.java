@@ -612,6 +612,39 @@ public final class Drive {
     return PulsePlanner.plan(ladder, areaRadians);
   }
 
+  /**
+   * Prepares this drive for evaluation at other powers, detunings and places in the beams.
+   *
+   * @return a kernel, to be prepared once and used often
+   * @throws IllegalArgumentException if the drive has three steps, or a beam is given by its
+   *     intensity instead of its power
+   */
+  public DriveKernel kernel() {
+    return DriveKernel.of(KernelBuilder.build(setup, toString()));
+  }
+
+  /**
+   * How the powers of the beams weigh against each other: slopes of the differential light shift,
+   * the ratios that null it and that scatter least, and powers for wanted Rabi frequencies.
+   *
+   * @return the balance at the detuning of this drive
+   * @throws IllegalArgumentException if the drive has three steps, or a beam is given by its
+   *     intensity instead of its power
+   */
+  public PowerBalance powerBalance() {
+    return PowerBalance.of(this);
+  }
+
+  /**
+   * How the effective Rabi frequency comes about, factor by factor, to be checked by hand.
+   *
+   * @return the working, as data and as text
+   * @throws IllegalArgumentException if the drive has three steps
+   */
+  public Derivation derivation() {
+    return DerivationBuilder.build(setup, this);
+  }
+
   @Override
   public String toString() {
     StringBuilder text = new StringBuilder(species().name()).append(' ').append(start());

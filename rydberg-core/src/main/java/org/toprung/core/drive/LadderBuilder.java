@@ -54,10 +54,14 @@ final class LadderBuilder {
   private final List<Integer> rungs = new ArrayList<>();
   private final List<Double> energies = new ArrayList<>(); // Hz, rotating frame
   private final List<Set<Level>> levels = new ArrayList<>(); // by rung
+  private int[] keptStates; // state by index in the ladder, once built
   private final Map<String, Estimate> knownFarShifts = new HashMap<>();
   private double farShiftRelativeUncertainty;
   private double startTrapShift; // Hz
   private double targetTrapShift; // Hz
+
+  /** One way from a lower to an upper sublevel through a sublevel that is not kept. */
+  record PartnerPath(ProductState middle, double productRe, double productIm, double awayHertz) {}
 
   LadderBuilder(DriveSetup setup) {
     this.setup = setup;
@@ -248,8 +252,12 @@ final class LadderBuilder {
 
   /** The named level itself, or a partner that the lasers are not much farther from. */
   private boolean isNear(Level level, int rung) {
-    double away = detuning[rung] - transition(named(rung), level);
-    return level.equals(named(rung)) || Math.abs(away) < NEAR_FACTOR * Math.abs(detuning[rung]);
+    return level.equals(named(rung)) || isNear(transition(named(rung), level), detuning[rung]);
+  }
+
+  /** Whether lasers at a detuning from a level are near its partner at a distance from it, Hz. */
+  static boolean isNear(double partnerHertz, double detuningHertz) {
+    return Math.abs(detuningHertz - partnerHertz) < NEAR_FACTOR * Math.abs(detuningHertz);
   }
 
   private static List<Level> fineStructure(Level level) {
@@ -272,6 +280,11 @@ final class LadderBuilder {
     return dipoles.reduced(named(step + 1), named(step));
   }
 
+  /** The reduced element between two levels. */
+  DipoleElement element(Level upper, Level lower) {
+    return dipoles.reduced(upper, lower);
+  }
+
   double laserHertz(int step) {
     return laser[step];
   }
@@ -291,6 +304,7 @@ final class LadderBuilder {
     }
     int start = indexOfStart();
     Map<Integer, Integer> kept = reachable(all, start);
+    this.keptStates = kept.keySet().stream().mapToInt(Integer::intValue).toArray();
     for (int r = 1; r < steps; r++) {
       all.addAll(couplingsAcross(r, kept));
     }
@@ -394,14 +408,64 @@ final class LadderBuilder {
       int lower, int upper, int rung, List<ProductState> middle, double base) {
     double re = 0;
     double im = 0;
+    for (PartnerPath path : paths(lower, upper, rung, middle, base)) {
+      re += path.productRe() / (2 * path.awayHertz());
+      im += path.productIm() / (2 * path.awayHertz());
+    }
+    return new Ladder.Coupling(lower, upper, re, im);
+  }
+
+  private List<PartnerPath> paths(
+      int lower, int upper, int rung, List<ProductState> middle, double base) {
+    List<PartnerPath> paths = new ArrayList<>();
     for (ProductState m : middle) {
       double[] low = rabi(states.get(lower), m, rung - 1);
       double[] up = rabi(m, states.get(upper), rung);
-      double away = energies.get(lower) - base - m.energyHertz();
-      re += (up[0] * low[0] - up[1] * low[1]) / (2 * away);
-      im += (up[0] * low[1] + up[1] * low[0]) / (2 * away);
+      double re = up[0] * low[0] - up[1] * low[1];
+      double im = up[0] * low[1] + up[1] * low[0];
+      if (re != 0 || im != 0) {
+        paths.add(new PartnerPath(m, re, im, energies.get(lower) - base - m.energyHertz()));
+      }
     }
-    return new Ladder.Coupling(lower, upper, re, im);
+    return paths;
+  }
+
+  /** The ways across a rung that the ladder holds as one coupling; indices of the built ladder. */
+  List<PartnerPath> partnerPaths(int lower, int upper, int rung) {
+    List<PartnerPath> paths = new ArrayList<>();
+    for (Level level : fineStructure(named(rung))) {
+      if (!levels.get(rung).contains(level)) {
+        double base = transition(named(rung), level) - detuning[rung];
+        List<ProductState> middle = ProductState.uncoupled(species, level, setup.field());
+        paths.addAll(paths(keptStates[lower], keptStates[upper], rung, middle, base));
+      }
+    }
+    return paths;
+  }
+
+  /** Distances of the fine-structure partners of a named level from it, Hz. */
+  double[] partnerHertz(int rung) {
+    return fineStructure(named(rung)).stream()
+        .filter(level -> !level.equals(named(rung)))
+        .mapToDouble(level -> transition(named(rung), level))
+        .toArray();
+  }
+
+  /** The sublevel behind a state of the built ladder. */
+  ProductState product(int index) {
+    return states.get(keptStates[index]);
+  }
+
+  double detuningHertz(int rung) {
+    return detuning[rung];
+  }
+
+  double fieldVoltsPerMetre(int step) {
+    return field[step];
+  }
+
+  SphericalComponents light(int step) {
+    return light[step];
   }
 
   /** Old index to new index of every state the light connects with the start. */
@@ -473,7 +537,7 @@ final class LadderBuilder {
   }
 
   /** The levels whose resonant coupling to a rung by a beam the ladder itself holds. */
-  private Set<Level> inLadder(int rung, int step) {
+  Set<Level> inLadder(int rung, int step) {
     if (rung == 0 && step == 0) {
       return levels.get(1);
     }

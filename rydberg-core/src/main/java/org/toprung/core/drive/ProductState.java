@@ -115,6 +115,34 @@ record ProductState(
     return new double[] {sum * light.re(tq / 2), sum * light.im(tq / 2)};
   }
 
+  /**
+   * The terms of {@link #angular} before the light's amplitude, one for each nuclear projection.
+   */
+  static List<Derivation.AngularTerm> angularTerms(ProductState lower, ProductState upper) {
+    List<Derivation.AngularTerm> terms = new ArrayList<>();
+    int tq = upper.doubledM - lower.doubledM;
+    int tJu = upper.level.doubledJ();
+    int tJl = lower.level.doubledJ();
+    for (int u = 0; u < upper.doubledMj.length; u++) {
+      for (int l = 0; l < lower.doubledMj.length; l++) {
+        int tMu = upper.doubledMj[u];
+        int tMl = lower.doubledMj[l];
+        if (Math.abs(tq) <= 2 && tMu - tMl == tq) {
+          terms.add(
+              new Derivation.AngularTerm(
+                  HalfInteger.ofHalves(tMu),
+                  HalfInteger.ofHalves(tMl),
+                  HalfInteger.ofHalves(upper.doubledM - tMu),
+                  (tJu - tMu) / 2 % 2 == 0 ? 1 : -1,
+                  upper.amplitude[u],
+                  lower.amplitude[l],
+                  Wigner.threeJDoubled(tJu, 2, tJl, -tMu, tq, tMl)));
+        }
+      }
+    }
+    return terms;
+  }
+
   /** Nuclear projection of the only component of an uncoupled state, doubled. */
   int doubledMi() {
     return doubledM - doubledMj[0];
