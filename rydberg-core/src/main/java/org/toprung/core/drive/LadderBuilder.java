@@ -131,6 +131,11 @@ final class LadderBuilder {
     }
   }
 
+  /** By how much more the trap moves the target than the start, Hz. */
+  double trapShiftHertz() {
+    return targetTrapShift - startTrapShift;
+  }
+
   Drive.TrapLight trapLight(DriveSetup.Trap trap) {
     return new Drive.TrapLight(
         trap.beam(),
