@@ -30,6 +30,7 @@ import org.toprung.core.quantity.Frequency;
  */
 public final class Calibration {
   private static final int ITERATIONS = 200;
+  private static final double FARTHEST = 7; // of ln r: a thousand times off is no calibration
   private static final double CONVERGED = 1e-12; // of ln r
   private static final double INDEPENDENT = 1e-10; // least 1 − cos² between sensitivities
 
@@ -179,7 +180,8 @@ public final class Calibration {
    * @return intensity ratios with their uncertainties, and a corrected kernel
    * @throws IllegalArgumentException if the measurements do not fix the intensity of every beam;
    *     the message says what is missing
-   * @throws ArithmeticException if no intensities fit; the message gives the number of iterations
+   * @throws ArithmeticException if no intensities within a factor of a thousand fit; the message
+   *     gives the number of iterations
    */
   public CalibrationResult solve() {
     if (measurements.size() < watts.length) {
@@ -201,11 +203,11 @@ public final class Calibration {
     double misfit = misfit(model, u);
     for (int iteration = 0; iteration < ITERATIONS; iteration++) {
       double[][] normal = normal(model, u);
-      if (undetermined(normal).isPresent()) {
+      if (undetermined(normal).isPresent() || !(largest(u) < FARTHEST)) {
         throw noFit(iteration, misfit);
       }
       double[] step = times(inverse(normal), gradient(model, u));
-      double length = Arrays.stream(step).map(Math::abs).max().orElseThrow();
+      double length = largest(step);
       double damping = Math.min(1, 1 / length);
       double[] next = moved(u, step, damping);
       double nextMisfit = misfit(model, next);
@@ -221,6 +223,10 @@ public final class Calibration {
       misfit = nextMisfit;
     }
     throw noFit(ITERATIONS, misfit);
+  }
+
+  private static double largest(double[] u) {
+    return Arrays.stream(u).map(Math::abs).max().orElseThrow();
   }
 
   private ArithmeticException noFit(int iterations, double misfit) {

@@ -84,28 +84,38 @@ class CalibrationTest {
     assertEquals(second, found.intensities().get(1).ratio(), 1e-8);
   }
 
+  /** Start shift of the first beam alone. */
+  private static double alone(DriveKernel kernel) {
+    return at(kernel, 1.2e9, 0.002, 1e-15).startLightShiftHertz();
+  }
+
   /**
    * Closed form: with the start shift s of beam 1 alone, r1 = s/s0 and r2 = (Ω/Ω0)²/r1, so the
-   * relative variances are σs² and 4σΩ² + σs². Of the elements d1 and d2, r1 d1² and r1 r2 d1² d2²
-   * are measured (the far part of the shift is small), so r1 is uncertain by 2u1 and r2 by 2u2.
+   * relative variances are σs² and 4σΩ² + σs², but for the far-off-resonant shift that moves the
+   * detuning. Of the elements d1 and d2, r1 d1² and r1 r2 d1² d2² are measured (the far part of the
+   * shift is small), so r1 is uncertain by 2u1 and r2 by 2u2.
    */
   @Test
   void propagatesUncertainties() {
-    double rabi = DRIVE.rabi().hertz();
-    double shift = DRIVE.startLightShift(0).hertz();
+    DriveKernel actual = KERNEL.withIntensitiesScaled(0.9, 1.3);
+    double rabi = at(actual, 1.2e9, 0.002, 0.15).rabiHertz();
+    double shift = alone(actual);
     CalibrationResult found =
         KERNEL
             .calibration()
-            .rabi(hertz(1.1 * rabi), hertz(0.011 * rabi))
-            .startLightShift(0, hertz(0.9 * shift), hertz(0.018 * Math.abs(shift)))
+            .rabi(hertz(rabi), hertz(0.01 * rabi))
+            .startLightShift(0, hertz(shift), hertz(0.02 * Math.abs(shift)))
             .solve();
     CalibrationResult.Intensity first = found.intensities().get(0);
     CalibrationResult.Intensity second = found.intensities().get(1);
     assertEquals(0.9, first.ratio(), 1e-9);
-    assertEquals(1.21 / 0.9, second.ratio(), 1e-9);
-    assertEquals(0.02, first.measurementUncertainty() / first.ratio(), 1e-9);
-    double expected = Math.sqrt(4 * 0.01 * 0.01 + 0.02 * 0.02);
-    assertEquals(expected, second.measurementUncertainty() / second.ratio(), 1e-9);
+    assertEquals(1.3, second.ratio(), 1e-9);
+    assertEquals(0.02, first.measurementUncertainty() / first.ratio(), 2e-5);
+    // the far-off-resonant shift F2 of the start moves the detuning: Ω ∝ √(r1 r2)/(Δ + F2 r2)
+    double far = KERNEL.startFarShiftHertz(1, 1.3 * 0.15, 1.2e9);
+    double power = 0.5 - far / 1.125e9;
+    double expected = Math.sqrt(0.01 * 0.01 + 0.25 * 0.02 * 0.02) / power;
+    assertEquals(expected, second.measurementUncertainty() / second.ratio(), 2e-5);
     double u1 = DRIVE.steps().get(0).relativeUncertainty();
     double u2 = DRIVE.steps().get(1).relativeUncertainty();
     assertEquals(2 * u1, first.elementUncertainty() / first.ratio(), 0.1 * u1);
@@ -140,7 +150,7 @@ class CalibrationTest {
   @Test
   void weighsMeasurementsThatDisagree() {
     double rabi = DRIVE.rabi().hertz();
-    double shift = DRIVE.startLightShift(0).hertz();
+    double shift = alone(KERNEL);
     CalibrationResult found =
         KERNEL
             .calibration()

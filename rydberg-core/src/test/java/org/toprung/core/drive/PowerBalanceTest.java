@@ -57,9 +57,9 @@ class PowerBalanceTest {
 
   /**
    * Closed form: near-resonant shifts Ω1²/4Δ and Ω2²/4Δ cancel at q = Ω2/Ω1 = 1 (Saffman and
-   * Walker, Phys. Rev. A 72, 022347 (2005)). The far-off-resonant ones F1 and F2 move that to q² =
-   * (Ω1² − 4ΔF1)/(Ω2² + 4ΔF2) · Ω2²/Ω1²: at 1.2 GHz the infrared beam, which moves the ground level
-   * down and the target up, halves q; nearer to resonance q tends to 1.
+   * Walker, Phys. Rev. A 72, 022347 (2005)). Far-off-resonant ones of F in all move that to q² = 1
+   * − 4ΔF/Ω1²: at 1.2 GHz the infrared beam, which moves the ground level down and the target up,
+   * halves q; nearer to resonance q tends to 1.
    */
   @ParameterizedTest
   @CsvSource({"1.2, 0.5", "0.13, 0.1"})
@@ -75,22 +75,21 @@ class PowerBalanceTest {
         nulling.secondOverFirst(),
         powers.get(1).watts() / powers.get(0).watts(),
         1e-9 * nulling.secondOverFirst());
-    Ladder ladder = drive.ladder();
-    double[] far = new double[2];
-    for (int k = 0; k < 2; k++) {
-      far[k] =
-          ladder.farShiftHertz(ladder.wanted()[0], k) - ladder.farShiftHertz(ladder.start(), k);
-    }
+    Ladder ladder = balanced.ladder();
     double detuning =
         -ladder.states().stream()
-            .filter(s -> s.rung() == 1)
+            .filter(x -> x.rung() == 1)
             .findFirst()
             .orElseThrow()
             .energyHertz();
-    double one = Math.pow(drive.steps().get(0).rabi().hertz(), 2) / (4 * detuning);
-    double two = Math.pow(drive.steps().get(1).rabi().hertz(), 2) / (4 * detuning);
-    double expected = Math.sqrt((one - far[0]) / (two + far[1]) * two / one);
-    assertEquals(expected, q(balanced), 1e-3);
+    double far = 0;
+    for (int k = 0; k < 2; k++) {
+      double start = ladder.farShiftHertz(ladder.start(), k);
+      detuning += start;
+      far += ladder.farShiftHertz(ladder.wanted()[0], k) - start;
+    }
+    double one = balanced.steps().get(0).rabi().hertz();
+    assertEquals(Math.sqrt(1 - 4 * detuning * far / (one * one)), q(balanced), 1e-3);
     assertEquals(1, q(balanced), awayFromOne);
   }
 
@@ -111,20 +110,22 @@ class PowerBalanceTest {
     }
   }
 
-  /** Exact: slopes are differences. */
+  /** Exact: slopes are differences, here of drives resolved anew. */
   @Test
   void hasTheSlopesOfTheDifferentialShift() {
     PowerBalance balance = DRIVE.powerBalance();
-    double before = DRIVE.targetLightShift().hertz() - DRIVE.startLightShift().hertz();
-    Drive more = drive(1.2, milliwatts(3), milliwatts(150));
-    double after = more.targetLightShift().hertz() - more.startLightShift().hertz();
     double slope = balance.differentialShiftHertzPerWatt(0);
-    assertEquals((after - before) / 1e-3, slope, 1e-8 * Math.abs(slope));
-    more = drive(1.2, milliwatts(2), milliwatts(200));
-    after = more.targetLightShift().hertz() - more.startLightShift().hertz();
+    double difference = differential(2.02, 150) - differential(1.98, 150);
+    assertEquals(difference / 0.04e-3, slope, 1e-7 * Math.abs(slope));
     slope = balance.differentialShiftHertzPerWatt(1);
-    assertEquals((after - before) / 50e-3, slope, 1e-8 * Math.abs(slope));
+    difference = differential(2, 151) - differential(2, 149);
+    assertEquals(difference / 2e-3, slope, 1e-7 * Math.abs(slope));
     assertThrows(IndexOutOfBoundsException.class, () -> balance.differentialShiftHertzPerWatt(2));
+  }
+
+  private static double differential(double firstMilliwatts, double secondMilliwatts) {
+    Drive drive = drive(1.2, milliwatts(firstMilliwatts), milliwatts(secondMilliwatts));
+    return drive.targetLightShift().hertz() - drive.startLightShift().hertz();
   }
 
   /**
