@@ -6,6 +6,7 @@ import org.toprung.core.atom.Datum;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.cache.BoundedCache;
+import org.toprung.core.quantity.PhysicalConstants;
 
 /**
  * Radial integrals by Numerov integration at measured energies: in the Coulomb potential for
@@ -55,6 +56,7 @@ public final class NumerovMethod implements RadialMethod {
   private final String description;
   private final ToDoubleFunction<Level> effectiveN;
   private final BoundedCache<Level, RadialWave> waves;
+  private final double lengthScale;
   private final NumerovMethod refined;
   private final Species species;
   private final BoundedCache<Integer, Double> potentialCutoffs;
@@ -66,10 +68,12 @@ public final class NumerovMethod implements RadialMethod {
       Species species,
       boolean calibrate,
       double step,
+      double lengthScale,
       NumerovMethod refined) {
     this.description = description;
     this.effectiveN = effectiveN;
     this.species = species;
+    this.lengthScale = lengthScale;
     this.refined = refined;
     BoundedCache<SolverKey, NumerovSolver> solvers =
         new BoundedCache<>(
@@ -97,14 +101,18 @@ public final class NumerovMethod implements RadialMethod {
   }
 
   /**
-   * The method for an alkali atom.
+   * The method for an atom.
    *
-   * @param species the atom
+   * @param species the atom; for hydrogen the integrals are those of {@link #hydrogen()}, enlarged
+   *     by the reduced mass
    * @return the method, with the core correction calibrated where an element is measured
    */
   public static NumerovMethod of(Species species) {
+    if (species.isHydrogen()) {
+      return hydrogen(PhysicalConstants.RYDBERG_HERTZ / species.rydbergHertz());
+    }
     return new NumerovMethod(
-        "model potential, Numerov", species::effectiveN, species, true, STEP, null);
+        "model potential, Numerov", species::effectiveN, species, true, STEP, 1, null);
   }
 
   /**
@@ -114,8 +122,17 @@ public final class NumerovMethod implements RadialMethod {
    * @return the method, with the cutoff radii of the potential in the core correction
    */
   public static NumerovMethod uncalibrated(Species species) {
+    if (species.isHydrogen()) {
+      return hydrogen(PhysicalConstants.RYDBERG_HERTZ / species.rydbergHertz());
+    }
     return new NumerovMethod(
-        "model potential, Numerov, uncalibrated", species::effectiveN, species, false, STEP, null);
+        "model potential, Numerov, uncalibrated",
+        species::effectiveN,
+        species,
+        false,
+        STEP,
+        1,
+        null);
   }
 
   /**
@@ -124,9 +141,13 @@ public final class NumerovMethod implements RadialMethod {
    * @return the method
    */
   public static NumerovMethod hydrogen() {
+    return hydrogen(1);
+  }
+
+  private static NumerovMethod hydrogen(double lengthScale) {
     NumerovMethod fine =
-        new NumerovMethod("hydrogen, Numerov", Level::n, null, false, STEP / 2, null);
-    return new NumerovMethod(fine.description, Level::n, null, false, STEP, fine);
+        new NumerovMethod("hydrogen, Numerov", Level::n, null, false, STEP / 2, lengthScale, null);
+    return new NumerovMethod(fine.description, Level::n, null, false, STEP, lengthScale, fine);
   }
 
   @Override
@@ -140,7 +161,7 @@ public final class NumerovMethod implements RadialMethod {
     if (species == null) {
       // the error of the Numerov recursion is h⁴ + O(h⁶)
       double fine = refined == null ? bare : refined.waves.get(a).dipole(refined.waves.get(b));
-      return new RadialIntegral(fine + (fine - bare) / 15, 0, 0, false);
+      return new RadialIntegral(lengthScale * (fine + (fine - bare) / 15), 0, 0, false);
     }
     double cutoffA = cutoff(a);
     double cutoffB = cutoff(b);

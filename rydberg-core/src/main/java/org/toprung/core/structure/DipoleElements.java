@@ -1,9 +1,7 @@
 package org.toprung.core.structure;
 
 import java.util.Locale;
-import java.util.Map;
 import java.util.Optional;
-import java.util.concurrent.ConcurrentHashMap;
 import org.toprung.angular.Wigner;
 import org.toprung.core.atom.Datum;
 import org.toprung.core.atom.Level;
@@ -28,7 +26,9 @@ import org.toprung.core.radial.RadialMethod;
  * correction.
  */
 public final class DipoleElements {
-  private static final Map<Species, DipoleElements> SHARED = new ConcurrentHashMap<>();
+  private static final int SPECIES = 64;
+  private static final BoundedCache<Species, DipoleElements> SHARED =
+      new BoundedCache<>(SPECIES, s -> new DipoleElements(s, NumerovMethod.of(s), true));
 
   private static final int ELEMENTS = 20_000;
   private static final double FLOOR = 0.01;
@@ -57,7 +57,7 @@ public final class DipoleElements {
    * @return the elements; one shared instance for each species
    */
   public static DipoleElements of(Species species) {
-    return SHARED.computeIfAbsent(species, s -> new DipoleElements(s, NumerovMethod.of(s), true));
+    return SHARED.get(species);
   }
 
   /**

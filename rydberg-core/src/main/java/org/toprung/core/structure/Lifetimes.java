@@ -1,8 +1,6 @@
 package org.toprung.core.structure;
 
-import java.util.Map;
 import java.util.Optional;
-import java.util.concurrent.ConcurrentHashMap;
 import org.toprung.core.atom.Datum;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
@@ -22,7 +20,9 @@ import org.toprung.core.quantity.Temperature;
  * it follows at the end of the sum, and integrated; this part is trusted to 20 %.
  */
 public final class Lifetimes {
-  private static final Map<Species, Lifetimes> SHARED = new ConcurrentHashMap<>();
+  private static final int SPECIES = 64;
+  private static final BoundedCache<Species, Lifetimes> SHARED =
+      new BoundedCache<>(SPECIES, Lifetimes::new);
   private static final int LEVELS = 2000;
 
   /** Levels above by up to this in n are summed one by one. */
@@ -75,7 +75,7 @@ public final class Lifetimes {
    * @return the lifetimes; one shared instance for each species
    */
   public static Lifetimes of(Species species) {
-    return SHARED.computeIfAbsent(species, Lifetimes::new);
+    return SHARED.get(species);
   }
 
   /**

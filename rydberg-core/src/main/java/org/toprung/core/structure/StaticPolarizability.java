@@ -1,8 +1,6 @@
 package org.toprung.core.structure;
 
 import java.util.List;
-import java.util.Map;
-import java.util.concurrent.ConcurrentHashMap;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.cache.BoundedCache;
@@ -23,7 +21,9 @@ import org.toprung.core.quantity.PhysicalConstants;
  * against the polarizability of Rydberg levels.
  */
 public final class StaticPolarizability {
-  private static final Map<Species, StaticPolarizability> SHARED = new ConcurrentHashMap<>();
+  private static final int SPECIES = 64;
+  private static final BoundedCache<Species, StaticPolarizability> SHARED =
+      new BoundedCache<>(SPECIES, StaticPolarizability::new);
   private static final int LEVELS = 2000;
   private static final int REACH = 12;
   private static final int LEAST_N = 25;
@@ -47,7 +47,7 @@ public final class StaticPolarizability {
    * @return the polarizabilities; one shared instance for each species
    */
   public static StaticPolarizability of(Species species) {
-    return SHARED.computeIfAbsent(species, StaticPolarizability::new);
+    return SHARED.get(species);
   }
 
   /**
