@@ -32,7 +32,7 @@ import org.toprung.core.quantity.PhysicalConstants;
  *
  * <p>Immutable to the outside; waves are kept in a bounded cache.
  */
-public final class NumerovMethod implements RadialMethod {
+public final class NumerovMethod implements WaveMethod {
   private static final double STEP = 0.02;
 
   /** Parts of the core correction that are its uncertainty. */
@@ -54,11 +54,12 @@ public final class NumerovMethod implements RadialMethod {
   private record SolverKey(int l, int doubledJ) {}
 
   private final String description;
-  private final ToDoubleFunction<Level> effectiveN;
   private final BoundedCache<Level, RadialWave> waves;
   private final double lengthScale;
   private final NumerovMethod refined;
   private final Species species;
+  private final BoundedCache<Level, Double> eigenvalues =
+      new BoundedCache<>(WAVES, this::eigenvalue);
   private final BoundedCache<Integer, Double> potentialCutoffs;
   private final BoundedCache<Integer, Double> calibrations;
 
@@ -71,7 +72,6 @@ public final class NumerovMethod implements RadialMethod {
       double lengthScale,
       NumerovMethod refined) {
     this.description = description;
-    this.effectiveN = effectiveN;
     this.species = species;
     this.lengthScale = lengthScale;
     this.refined = refined;
@@ -136,6 +136,27 @@ public final class NumerovMethod implements RadialMethod {
   }
 
   /**
+   * The method for an alkali atom at the eigenvalues of its potential instead of the measured
+   * energies, uncalibrated. The waves are regular at the nucleus.
+   *
+   * @param species the atom
+   * @return the method
+   */
+  public static NumerovMethod atEigenvalues(Species species) {
+    NumerovMethod measured = uncalibrated(species);
+    return species.isHydrogen()
+        ? measured
+        : new NumerovMethod(
+            "model potential at its eigenvalues, Numerov",
+            measured::eigenvalueEffectiveN,
+            species,
+            false,
+            STEP,
+            1,
+            null);
+  }
+
+  /**
    * The method for hydrogen with an infinitely heavy nucleus, nonrelativistic; j has no influence.
    *
    * @return the method
@@ -176,6 +197,44 @@ public final class NumerovMethod implements RadialMethod {
     double other = correction(a, b, Math.min(cutoffA, cutoffB));
     double spread = Math.max(COMPUTED_PART * Math.abs(correction), Math.abs(correction - other));
     return new RadialIntegral(bare, correction, spread, false);
+  }
+
+  @Override
+  public double power(Level a, Level b, int k) {
+    WaveMethod.requirePower(k);
+    double coarse = waves.get(a).power(waves.get(b), k);
+    if (refined == null) {
+      return Math.pow(lengthScale, k) * coarse;
+    }
+    double fine = refined.waves.get(a).power(refined.waves.get(b), k);
+    return Math.pow(lengthScale, k) * (fine + (fine - coarse) / 15);
+  }
+
+  @Override
+  public Wavefunction wavefunction(Level level) {
+    return waves.get(level).table(lengthScale);
+  }
+
+  /**
+   * Where the potential itself has the level, as a check of its parameters.
+   *
+   * @param level the level
+   * @return the effective quantum number √(−1/2E) of the eigenvalue with the nodes of the level; n
+   *     for hydrogen
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
+   * @throws ArithmeticException if the potential has no such state near the measured level
+   */
+  public double eigenvalueEffectiveN(Level level) {
+    if (species == null) {
+      return level.n();
+    }
+    return eigenvalues.get(level);
+  }
+
+  private double eigenvalue(Level level) {
+    double measured = species.effectiveN(level);
+    return PotentialEigenvalue.effectiveN(
+        new ModelPotential(species, level.l(), level.doubledJ()), level.n(), level.l(), measured);
   }
 
   /** The cutoff radius of a level in a0. */
