@@ -50,6 +50,7 @@ final class CoulombWave {
 
   /** The panels reach to 2ν² + 22ν^(4/3) + 40, where the wave is below 1e-17. */
   private static final double TAIL = 22;
+
   private static final double LEAST_TAIL = 40;
   private static final double LEAST_ARGUMENT = 100;
 
