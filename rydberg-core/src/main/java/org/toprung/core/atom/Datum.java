@@ -39,6 +39,7 @@ public record Datum(
     ATOM("nothing", ""),
     LEVEL("a level, for example 5P3/2", LevelText.LEVEL),
     PAIR("two levels, for example 5S1/2-5P3/2", LevelText.LEVEL + "-" + LevelText.LEVEL),
+    SHELL("n and the letter of l, for example 5P", "\\d{1,3}[A-Z]"),
     SERIES("a series, for example P3/2", "[A-Z]\\d{1,2}/2"),
     LETTER("the letter of l", "[SPDF]");
 
@@ -99,6 +100,10 @@ public record Datum(
     ELECTRONIC_G(Form.LEVEL, Unit.PURE, false),
     /** Charge number of the nucleus. */
     NUCLEAR_CHARGE(Form.ATOM, Unit.PURE, true),
+    /** Published Rydberg constant of the isotope, times the speed of light, Hz. */
+    RYDBERG_CONSTANT(Form.ATOM, Unit.FREQUENCY, true),
+    /** Published fine-structure splitting of a shell, upper j minus lower j, Hz. */
+    FINE_SPLITTING(Form.SHELL, Unit.FREQUENCY, false),
     /** Smallest n of the valence electron for a letter of l; l + 1 where there is no row. */
     LOWEST_N(Form.LETTER, Unit.PURE, true),
     /** Mass number of the isotope on which the rows of an element were measured. */
