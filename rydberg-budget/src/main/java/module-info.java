@@ -1,6 +1,7 @@
 /** Error budgets of Rydberg excitation pulses, composed from causes and checked by simulation. */
 module org.toprung.budget {
   requires transitive org.toprung.core;
+  requires java.xml;
   requires org.apache.commons.math4.legacy;
 
   // what only scenario files, reports and the command line need
@@ -8,8 +9,6 @@ module org.toprung.budget {
   requires static com.fasterxml.jackson.databind;
   requires static com.fasterxml.jackson.dataformat.toml;
   requires static info.picocli;
-  requires static java.desktop;
-  requires static org.knowm.xchart;
 
   exports org.toprung.budget;
   exports org.toprung.budget.bench;

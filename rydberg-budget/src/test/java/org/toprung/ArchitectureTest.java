@@ -135,7 +135,7 @@ class ArchitectureTest {
             "org.toprung.budget.scenario", "org.toprung.budget.report", "org.toprung.budget.app")
         .should()
         .dependOnClassesThat()
-        .resideInAnyPackage("com.fasterxml..", "picocli..", "org.knowm..")
+        .resideInAnyPackage("com.fasterxml..", "picocli..")
         .check(CLASSES);
   }
 }

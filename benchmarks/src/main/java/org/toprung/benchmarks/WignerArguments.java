@@ -44,6 +44,30 @@ final class WignerArguments {
     return rows;
   }
 
+  /** Rows of nine doubled arguments of 9j symbols that obey every selection rule. */
+  static int[][] nineJ(int largestDoubled, long seed) {
+    SplittableRandom random = new SplittableRandom(seed);
+    int[][] rows = new int[COUNT][];
+    for (int i = 0; i < COUNT; ) {
+      int ta = random.nextInt(largestDoubled + 1);
+      int tb = random.nextInt(largestDoubled + 1);
+      int td = random.nextInt(largestDoubled + 1);
+      int te = random.nextInt(largestDoubled + 1);
+      int tc = third(random, ta, tb, largestDoubled);
+      int tf = third(random, td, te, largestDoubled);
+      int tg = third(random, ta, td, largestDoubled);
+      int th = third(random, tb, te, largestDoubled);
+      if (tc < 0 || tf < 0 || tg < 0 || th < 0) {
+        continue;
+      }
+      int ti = third(random, tg, th, largestDoubled);
+      if (ti >= Math.abs(tc - tf) && ti <= tc + tf && ((ti ^ tc ^ tf) & 1) == 0) {
+        rows[i++] = new int[] {ta, tb, tc, td, te, tf, tg, th, ti};
+      }
+    }
+    return rows;
+  }
+
   /** A third side, evenly from those allowed; negative if none is. */
   private static int third(SplittableRandom random, int ta, int tb, int largest) {
     int low = Math.abs(ta - tb);

@@ -30,6 +30,7 @@ public class WignerBenchmark {
 
   private int[][] threeJ;
   private int[][] sixJ;
+  private int[][] nineJ;
   private int next;
 
   /** Draws the argument lists. */
@@ -37,13 +38,14 @@ public class WignerBenchmark {
   public void drawArguments() {
     threeJ = WignerArguments.threeJ(largestDoubled, 20261201L);
     sixJ = WignerArguments.sixJ(largestDoubled, 20261202L);
+    nineJ = WignerArguments.nineJ(largestDoubled, 20261204L);
   }
 
   private int[] row(int[][] rows) {
     return rows[next++ & rows.length - 1];
   }
 
-  /** Reading a row, to be subtracted from nothing but worth knowing. */
+  /** Reading a row: part of every other figure. */
   @Benchmark
   public int[] readingTheList() {
     return row(threeJ);
@@ -61,6 +63,13 @@ public class WignerBenchmark {
   public double sixJ() {
     int[] a = row(sixJ);
     return Wigner.sixJDoubled(a[0], a[1], a[2], a[3], a[4], a[5]);
+  }
+
+  /** 9j symbol. */
+  @Benchmark
+  public double nineJ() {
+    int[] a = row(nineJ);
+    return Wigner.nineJDoubled(a[0], a[1], a[2], a[3], a[4], a[5], a[6], a[7], a[8]);
   }
 
   /** 3j symbol in exact form. */

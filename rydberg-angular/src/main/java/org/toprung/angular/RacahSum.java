@@ -209,7 +209,13 @@ final class RacahSum {
       double factor,
       double divisor,
       int exponent) {
-    int largest = Math.max(Math.max(q1, q2), q3) - first + (six ? from + 2 : 0);
+    // No factor of n or d exceeds this; the bit more per factor covers the difference of the
+    // products.
+    int largest =
+        six
+            ? from + 2
+            : Math.max(
+                Math.max(Math.max(q1, q2), q3) - first, from + 1 - Math.min(0, Math.min(p2, p3)));
     int bitsPerStep = (six ? 4 : 3) * (33 - Integer.numberOfLeadingZeros(largest));
     int half = (from - first + 1) * bitsPerStep / 64 + 4;
     long[] limbs = SCRATCH.get();
@@ -245,7 +251,7 @@ final class RacahSum {
   }
 
   /** D ← d·D, N ← d·D − n·N; returns the number of limbs, one more than before if it is needed. */
-  private static int step(long[] limbs, int half, int size, long n, long d) {
+  static int step(long[] limbs, int half, int size, long n, long d) {
     long carryN = 0;
     long carryD = 0;
     long borrow = 0;
@@ -314,10 +320,10 @@ final class RacahSum {
     return bits >>> 1;
   }
 
-  /** value·2^exponent. */
+  /** value·2^exponent; a zero comes out without a sign. */
   private static double scaled(double value, int exponent) {
     return exponent > -1000 && exponent < 1000
-        ? value * Double.longBitsToDouble((exponent + 1023L) << 52)
-        : Math.scalb(value, exponent);
+        ? value * Double.longBitsToDouble((exponent + 1023L) << 52) + 0.0
+        : Math.scalb(value, exponent) + 0.0;
   }
 }

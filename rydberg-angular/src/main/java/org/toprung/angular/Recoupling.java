@@ -200,7 +200,7 @@ public final class Recoupling {
       HalfInteger jPrime,
       HalfInteger fPrime,
       HalfInteger mFPrime) {
-    return wignerEckart(f, mF, k, q, fPrime, mFPrime) * firstPart(j, i, f, jPrime, fPrime, k);
+    return wignerEckart(f, mF, k, q, fPrime, mFPrime) * firstPart(j, i, f, jPrime, fPrime, k) + 0.0;
   }
 
   /**
@@ -236,7 +236,8 @@ public final class Recoupling {
       HalfInteger f,
       HalfInteger mF) {
     HalfInteger mJ = mF.minus(mI);
-    return wignerEckart(jPrime, mJPrime, k, q, j, mJ) * Wigner.clebschGordan(j, mJ, i, mI, f, mF);
+    return wignerEckart(jPrime, mJPrime, k, q, j, mJ) * Wigner.clebschGordan(j, mJ, i, mI, f, mF)
+        + 0.0;
   }
 
   /**

@@ -131,6 +131,24 @@ public final class Rotation {
   }
 
   /**
+   * Returns a real vector rotated.
+   *
+   * @param vx x component of the vector
+   * @param vy y component of the vector
+   * @param vz z component of the vector
+   * @return the three components of the rotated vector, a fresh array
+   */
+  public double[] appliedTo(double vx, double vy, double vz) {
+    // v + 2w (u × v) + 2 u × (u × v) with the unit quaternion (w, u)
+    double tx = 2 * (y * vz - z * vy);
+    double ty = 2 * (z * vx - x * vz);
+    double tz = 2 * (x * vy - y * vx);
+    return new double[] {
+      vx + w * tx + y * tz - z * ty, vy + w * ty + z * tx - x * tz, vz + w * tz + x * ty - y * tx
+    };
+  }
+
+  /**
    * Returns the middle Euler angle.
    *
    * @return β in radians, from 0 to π
@@ -264,7 +282,8 @@ public final class Rotation {
         exponent -= 500;
       }
     }
-    return Math.scalb(value, exponent);
+    // Adding zero takes the sign off a zero.
+    return Math.scalb(value, exponent) + 0.0;
   }
 
   private static void requireProjection(int tj, int tm) {

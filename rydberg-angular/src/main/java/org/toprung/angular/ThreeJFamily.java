@@ -5,14 +5,13 @@ package org.toprung.angular;
  * of the caller.
  *
  * <p>The symbols obey a three-term recurrence in j1 or in m2 (references 1, 2). In the outer,
- * classically forbidden parts of the range it is stable only inwards; so one sweep runs upwards to
- * the first maximum, one downwards to the same place, where they are joined, and the whole is
- * scaled to one symbol from {@link Wigner#threeJDoubled}. Where the symbol is much smaller than
- * both neighbours the recurrence has cancelled, and the symbol is taken from there too.
+ * classically forbidden parts of the range it is stable only inwards; so one sweep runs upwards and
+ * one downwards. They are joined halfway between the outermost maxima, and the whole is scaled to
+ * one symbol from {@link Wigner#threeJDoubled}. Where the symbol is much smaller than the maxima
+ * around it the recurrence has cancelled, and the symbol is taken from there too.
  *
- * <p>Accuracy: 10<sup>−12</sup> of the largest neighbour, in the tails relative to the symbol
- * itself, for angular momenta up to 500. Nothing is allocated; all methods are safe for any number
- * of threads, each with its own array.
+ * <p>Accuracy: 10<sup>−11</sup> relative for angular momenta up to 500. Nothing is allocated; all
+ * methods are safe for any number of threads, each with its own array.
  *
  * <ol>
  *   <li>K. Schulten, R. G. Gordon, Exact recursive evaluation of 3j- and 6j-coefficients for
@@ -27,8 +26,8 @@ public final class ThreeJFamily {
   /** Entries are scaled down by its inverse when one exceeds it, far from overflow. */
   private static final double LARGE = 0x1p600;
 
-  /** A symbol below this part of both neighbours is evaluated on its own. */
-  private static final double CANCELLED = 0x1p-10;
+  /** A symbol below this part of the maxima around it is evaluated on its own. */
+  private static final double CANCELLED = 0x1p-6;
 
   private ThreeJFamily() {}
 
@@ -128,10 +127,10 @@ public final class ThreeJFamily {
   private static void fill(
       boolean overJ, int lowest, int a, int b, int c, int d, double[] f, int count) {
     int last = count - 1;
-    f[0] = 1;
-    int peak = sweepUp(overJ, lowest, a, b, c, d, f, last);
-    if (peak < last) {
-      joinFromAbove(overJ, lowest, a, b, c, d, f, last, peak);
+    f[last] = 1;
+    int high = sweepDown(overJ, lowest, a, b, c, d, f, last);
+    if (high > 0) {
+      sweepUpAndJoin(overJ, lowest, a, b, c, d, f, last, high);
     }
     int anchor = 0;
     for (int i = 1; i <= last; i++) {
@@ -140,83 +139,122 @@ public final class ThreeJFamily {
       }
     }
     scale(f, 0, last, symbol(overJ, lowest + 2 * anchor, a, b, c, d) / f[anchor]);
+    int left = 0;
+    int right = nextMaximum(f, 0, last);
     for (int i = 1; i < last; i++) {
-      double neighbours = Math.min(Math.abs(f[i - 1]), Math.abs(f[i + 1]));
-      if (f[i] != 0 && Math.abs(f[i]) < CANCELLED * neighbours) {
+      if (i > right) {
+        left = right;
+        right = nextMaximum(f, right, last);
+      }
+      double maxima = Math.min(Math.abs(f[left]), Math.abs(f[right]));
+      if (f[i] != 0 && Math.abs(f[i]) < CANCELLED * maxima) {
         f[i] = symbol(overJ, lowest + 2 * i, a, b, c, d);
       }
     }
   }
 
-  /** Runs up to the entry after the first maximum; returns the index of that maximum. */
-  private static int sweepUp(
+  /** Index of the next local maximum of the modulus above a maximum or the first entry. */
+  private static int nextMaximum(double[] f, int from, int last) {
+    int i = from;
+    while (i < last && Math.abs(f[i + 1]) < Math.abs(f[i])) {
+      i++;
+    }
+    while (i < last && Math.abs(f[i + 1]) >= Math.abs(f[i])) {
+      i++;
+    }
+    return i;
+  }
+
+  /** Runs down from the last entry to the first maximum; returns its index. */
+  private static int sweepDown(
       boolean overJ, int lowest, int a, int b, int c, int d, double[] f, int last) {
-    double below = 0;
-    for (int i = 0; i < last; i++) {
-      int t = lowest + 2 * i;
-      double above = link(overJ, t + 2, a, b, c, d);
-      if (t == 0 && overJ) {
-        // The recurrence is empty at j1 = 0; (1 j j; 0 m −m)/(0 j j; 0 m −m) = m/√(j(j+1)).
-        f[1] = f[0] * c / Math.sqrt(a * (a + 2.0));
-      } else {
-        double previous = i == 0 ? 0 : f[i - 1];
-        f[i + 1] =
-            -(middle(overJ, t, a, b, c, d) * f[i] + lowerFactor(overJ, t) * below * previous)
-                / (upperFactor(overJ, t) * above);
-      }
-      below = above;
-      if (Math.abs(f[i + 1]) < Math.abs(f[i])) {
+    for (int i = last; i > 0; i--) {
+      double value = entryBelow(overJ, lowest, i, a, b, c, d, f, last);
+      if (Math.abs(value) < Math.abs(f[i])) {
         return i;
       }
-      if (Math.abs(f[i + 1]) > LARGE) {
-        scale(f, 0, i + 1, 1 / LARGE);
+      f[i - 1] = value;
+      if (Math.abs(value) > LARGE) {
+        scale(f, i - 1, last, 1 / LARGE);
       }
     }
-    return last;
+    return 0;
   }
 
   /**
-   * Runs down from the last entry to the peak, and scales what it found to meet the sweep upwards.
+   * Runs up from the first entry to a maximum halfway between the outermost ones, since rounding
+   * builds up with the square of the distance; then goes on with the sweep downwards to meet it
+   * there.
    */
-  private static void joinFromAbove(
-      boolean overJ, int lowest, int a, int b, int c, int d, double[] f, int last, int peak) {
-    double upPeak = f[peak];
-    double upNext = f[peak + 1];
-    f[last] = 1;
-    double next = 0;
-    double above = 0;
-    double downPeak = 0;
-    for (int i = last; i > peak; i--) {
-      int t = lowest + 2 * i;
-      double below = link(overJ, t, a, b, c, d);
-      double value =
-          -(middle(overJ, t, a, b, c, d) * f[i] + upperFactor(overJ, t) * above * next)
-              / (lowerFactor(overJ, t) * below);
-      next = f[i];
-      above = below;
-      if (i - 1 == peak) {
-        downPeak = value;
-      } else {
-        f[i - 1] = value;
-        if (Math.abs(value) > LARGE) {
-          scale(f, i - 1, last, 1 / LARGE);
-          next = f[i];
+  private static void sweepUpAndJoin(
+      boolean overJ, int lowest, int a, int b, int c, int d, double[] f, int last, int high) {
+    f[0] = 1;
+    int middle = -1;
+    int meeting = 0;
+    double upNext;
+    while (true) {
+      upNext = entryAbove(overJ, lowest, meeting, a, b, c, d, f);
+      if (Math.abs(upNext) < Math.abs(f[meeting])) {
+        if (middle < 0) {
+          middle = (meeting + high) / 2;
+        }
+        if (meeting >= middle) {
+          break;
         }
       }
+      if (meeting + 1 == high) {
+        break;
+      }
+      meeting++;
+      f[meeting] = upNext;
+      if (Math.abs(upNext) > LARGE) {
+        scale(f, 0, meeting, 1 / LARGE);
+      }
     }
-    double downNext = f[peak + 1];
+    double up = f[meeting];
+    for (int i = high; i > meeting + 1; i--) {
+      f[i - 1] = entryBelow(overJ, lowest, i, a, b, c, d, f, last);
+    }
+    double downNext = f[meeting + 1];
+    double down = entryBelow(overJ, lowest, meeting + 1, a, b, c, d, f, last);
     // Least squares over the two shared entries: one of them may be a zero of the symbol. Ratios,
     // so
     // that squares of large entries cannot overflow.
-    double size = Math.max(Math.abs(downPeak), Math.abs(downNext));
-    double p = downPeak / size;
+    double size = Math.max(Math.abs(down), Math.abs(downNext));
+    double p = down / size;
     double n = downNext / size;
-    scale(f, peak + 1, last, (upPeak * p + upNext * n) / (p * p + n * n) / size);
+    scale(f, meeting + 1, last, (up * p + upNext * n) / (p * p + n * n) / size);
+  }
+
+  /** Entry i − 1 from entries i and i + 1. */
+  private static double entryBelow(
+      boolean overJ, int lowest, int i, int a, int b, int c, int d, double[] f, int last) {
+    int t = lowest + 2 * i;
+    double sum = middle(overJ, t, a, b, c, d) * f[i];
+    if (i < last) {
+      sum += upperFactor(overJ, t) * link(overJ, t + 2, a, b, c, d) * f[i + 1];
+    }
+    return -sum / (lowerFactor(overJ, t) * link(overJ, t, a, b, c, d));
+  }
+
+  /** Entry i + 1 from entries i and i − 1. */
+  private static double entryAbove(
+      boolean overJ, int lowest, int i, int a, int b, int c, int d, double[] f) {
+    int t = lowest + 2 * i;
+    if (t == 0 && overJ) {
+      // The recurrence is empty at j1 = 0; (1 j j; 0 m −m)/(0 j j; 0 m −m) = m/√(j(j+1)).
+      return f[0] * c / Math.sqrt(a * (a + 2.0));
+    }
+    double sum = middle(overJ, t, a, b, c, d) * f[i];
+    if (i > 0) {
+      sum += lowerFactor(overJ, t) * link(overJ, t, a, b, c, d) * f[i - 1];
+    }
+    return -sum / (upperFactor(overJ, t) * link(overJ, t + 2, a, b, c, d));
   }
 
   private static void scale(double[] f, int from, int to, double factor) {
     for (int i = from; i <= to; i++) {
-      f[i] *= factor;
+      f[i] = f[i] * factor + 0.0; // no negative zeros
     }
   }
 
@@ -254,12 +292,12 @@ public final class ThreeJFamily {
     return b * (b + 2.0) + c * (c + 2.0) - a * (a + 2.0) + 2 * t * m3;
   }
 
-  /** Factor of the link upwards: j, times 2... */
+  /** Factor of the link upwards: j, or 1. */
   private static double upperFactor(boolean overJ, int t) {
     return overJ ? t / 2.0 : 1;
   }
 
-  /** Factor of the link downwards. */
+  /** Factor of the link downwards: j + 1, or 1. */
   private static double lowerFactor(boolean overJ, int t) {
     return overJ ? t / 2.0 + 1 : 1;
   }

@@ -53,7 +53,7 @@ public final class Wigner {
    * A 9j sum is accepted in floating point if it keeps this part of the sum of the moduli of its
    * terms: each term carries a few units of 1e-16.
    */
-  private static final double CANCELLATION_LIMIT = 1e-3;
+  private static final double CANCELLATION_LIMIT = 1e-4;
 
   /** Below this the moduli of the terms of a 9j sum may have lost digits. */
   private static final double UNDERFLOW_LIMIT = 1e-280;

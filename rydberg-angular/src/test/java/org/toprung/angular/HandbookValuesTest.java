@@ -35,6 +35,72 @@ class HandbookValuesTest {
     }
   }
 
+  /** No result is a negative zero, whatever the sign that goes with the vanishing sum. */
+  @Test
+  void zerosHaveNoSign() {
+    double[] family = new double[20];
+    for (int a = 0; a <= 8; a += 2) {
+      for (int b = 0; b <= 8; b += 2) {
+        for (int c = Math.abs(a - b); c <= a + b; c += 2) {
+          assertUnsigned(Wigner.threeJDoubled(a, b, c, 0, 0, 0));
+          assertUnsigned(Wigner.clebschGordanDoubled(a, 0, b, 0, c, 0));
+          assertUnsigned(Wigner.sixJDoubled(a, b, c, 3, 3, 3));
+          assertUnsigned(Wigner.nineJDoubled(a, b, c, a, b, c, 2, 2, 2));
+          assertUnsigned(Wigner.racahWDoubled(a, b, c, 2, 2, 2));
+        }
+        int count = ThreeJFamily.overJ1Doubled(a, b, 0, 0, family);
+        for (int i = 0; i < count; i++) {
+          assertUnsigned(family[i]);
+        }
+        assertUnsigned(Rotation.smallDDoubled(a + b, a, -b, 0));
+        assertUnsigned(
+            Recoupling.hyperfineToFine(
+                HalfInteger.of(a),
+                HalfInteger.of(0),
+                HalfInteger.of(0),
+                b,
+                0,
+                HalfInteger.of(2),
+                HalfInteger.of(2),
+                HalfInteger.of(3),
+                HalfInteger.of(0)));
+        assertUnsigned(
+            Recoupling.hyperfineElement(
+                HalfInteger.of(a),
+                HalfInteger.of(2),
+                HalfInteger.of(3),
+                HalfInteger.of(0),
+                b,
+                0,
+                HalfInteger.of(2),
+                HalfInteger.of(2),
+                HalfInteger.of(0)));
+      }
+    }
+  }
+
+  private static void assertUnsigned(double value) {
+    assertEquals(value + 0.0, value);
+  }
+
+  /** The same where the sum needs many limbs, all of which must cancel. */
+  @ParameterizedTest
+  @CsvSource({
+    "100, 100, 102",
+    "400, 400, 402",
+    "1000, 1000, 1002",
+    "4000, 4000, 4000",
+    "4000, 3000, 2002"
+  })
+  void largeSumsCancelToAnExactZero(int a, int b, int c) {
+    double value = Wigner.threeJDoubled(a, b, c, 0, 0, 0);
+    if (((a + b + c) / 2 & 1) != 0) {
+      assertEquals(0.0, value);
+    } else {
+      assertTrue(value != 0);
+    }
+  }
+
   /** (1 1 2; 0 0 0) = √(2/15), (2 2 2; 0 0 0) = −√(2/35), (3 2 3; ...): Edmonds table 2. */
   @ParameterizedTest
   @CsvSource({

@@ -77,6 +77,10 @@ class RotationTest {
     assertTrue(Math.abs(expected) < 1e-150 && expected != 0);
     assertEquals(
         expected, Rotation.smallDDoubled(1000, 900, -700, 0.7), 1e-11 * Math.abs(expected));
+    // Polynomials above 2^500, which have to be scaled on the way.
+    double scaled = wignerSum(1000, 300, -300, 0.05);
+    assertTrue(scaled != 0);
+    assertEquals(scaled, Rotation.smallDDoubled(1000, 300, -300, 0.05), 1e-11 * Math.abs(scaled));
     double steep = wignerSum(1000, 1000, -1000, 1.2);
     assertEquals(steep, Rotation.smallDDoubled(1000, 1000, -1000, 1.2), 1e-11 * Math.abs(steep));
   }
@@ -280,6 +284,25 @@ class RotationTest {
     assertTrue(e.getMessage().contains("2 is no projection of j = 1"), e.getMessage());
     assertThrows(IllegalArgumentException.class, () -> Rotation.smallDDoubled(2, 0, 1, 1));
     assertThrows(IllegalArgumentException.class, () -> Rotation.smallDDoubled(-2, 0, 0, 1));
+    assertThrows(
+        IllegalArgumentException.class,
+        () -> Rotation.smallDDoubled(Wigner.MAX_DOUBLED_J + 2, 0, 0, 1));
     assertThrows(IllegalArgumentException.class, () -> Rotation.IDENTITY.element(h(2), h(1), h(0)));
+  }
+
+  /** A real vector is a polarization of real components, and turns like one. */
+  @Property(seed = "408", tries = 100)
+  void realVectorsTurnLikePolarizations(
+      @ForAll @DoubleRange(min = -3, max = 3) double alpha,
+      @ForAll @DoubleRange(min = 0, max = 3) double beta,
+      @ForAll @DoubleRange(min = -3, max = 3) double gamma,
+      @ForAll @DoubleRange(min = -1, max = 1) double x) {
+    Rotation r = Rotation.ofEulerRadians(alpha, beta, gamma);
+    double norm = Math.sqrt(x * x + 0.41);
+    PolarizationVector e = PolarizationVector.of(x, 0, 0.4, 0, 0.5, 0).rotatedBy(r);
+    double[] v = r.appliedTo(x, 0.4, 0.5);
+    assertEquals(e.xRe() * norm, v[0], 1e-14);
+    assertEquals(e.yRe() * norm, v[1], 1e-14);
+    assertEquals(e.zRe() * norm, v[2], 1e-14);
   }
 }

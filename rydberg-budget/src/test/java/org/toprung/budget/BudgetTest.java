@@ -19,14 +19,22 @@ import net.jqwik.api.Property;
 import net.jqwik.api.constraints.DoubleRange;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.function.Executable;
+import org.toprung.angular.Polarization;
 import org.toprung.budget.bench.Bench;
 import org.toprung.budget.pulse.Pulse;
+import org.toprung.core.atom.Level;
+import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
+import org.toprung.core.drive.Beam;
 import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.DriveSetup;
 import org.toprung.core.quantity.ElectricField;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Intensity;
+import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.MagneticField;
 import org.toprung.core.quantity.PhysicalConstants;
+import org.toprung.core.quantity.Power;
 import org.toprung.core.quantity.Temperature;
 
 class BudgetTest {
@@ -198,6 +206,81 @@ class BudgetTest {
     assertEquals(spread * spread, composed, 0.05 * composed);
     double quiet = budget(drive, Bench.unknown()).check(2, 1).total();
     Check check = budget.check(3000, 12);
+    assertEquals(check.total() - quiet, composed, 4 * check.standardError() + 0.03 * composed);
+  }
+
+  private static DriveSetup withLowerBeam(Beam lower) {
+    return Drive.of(Species.RUBIDIUM_87)
+        .from(Sublevel.hyperfine("5S1/2", 2, 2))
+        .step(Level.parse("6P3/2"), lower.polarized(Polarization.SIGMA_PLUS).along(0, 0, 1))
+        .step(
+            Sublevel.fine("68S1/2", 0.5),
+            Beam.flatTop(Intensity.wattsPerSquareMillimetre(153))
+                .polarized(Polarization.SIGMA_MINUS)
+                .along(0, 0, -1))
+        .detuned(Frequency.gigahertz(1.2))
+        .in(MagneticField.gauss(4));
+  }
+
+  private static Bench moving() {
+    return Bench.unknown()
+        .withTemperature(microkelvin(20))
+        .withTrapFrequencies(kilohertz(20), kilohertz(20), kilohertz(20));
+  }
+
+  /**
+   * Closed form: off the axis by d the field changes by −2dx/w² to first order in the displacement
+   * x, which is a relative amplitude error ε of the pulse, (πε/2)², and twice that of the light
+   * shift of the beam, δ²/Ω². The flat top of the other beam adds nothing.
+   */
+  @Test
+  void countsTheSlopeOfABeamThatIsOffTheAtom() {
+    Length none = Length.ofMetres(0);
+    Beam lower = Beam.gaussian(Power.milliwatts(4), Length.micrometres(50));
+    Drive drive = withLowerBeam(lower.focusedAt(Length.micrometres(25), none, none)).resolve();
+    Budget budget = budget(drive, moving());
+    double velocity =
+        Math.sqrt(PhysicalConstants.BOLTZMANN * 20e-6 / drive.species().massKilograms());
+    double slope = 2 * 25e-6 / 2500e-12;
+    double amplitude = slope * velocity / (2 * Math.PI * 20e3);
+    double shift = drive.targetLightShift(0).hertz() - drive.startLightShift(0).hertz();
+    double detuning = 2 * amplitude * shift / budget.plan().rabi().hertz();
+    double expected = Math.pow(Math.PI * amplitude / 2, 2) + detuning * detuning;
+    assertEquals(expected, error(budget, "Position in the beams"), 0.01 * expected);
+    Check check = budget.check(6000, 21);
+    double quiet = budget(drive, Bench.unknown()).check(2, 1).total();
+    double composed = budget.total() - budget(drive, Bench.unknown()).total();
+    assertEquals(check.total() - quiet, composed, 4 * check.standardError() + 0.03 * composed);
+  }
+
+  /** In flat tops the place of the atom does not matter. */
+  @Test
+  void countsNoPositionInFlatTops() {
+    Drive drive = withLowerBeam(Beam.flatTop(Intensity.wattsPerSquareMillimetre(1))).resolve();
+    assertEquals(0, error(budget(drive, moving()), "Position in the beams"), 1e-15);
+  }
+
+  /**
+   * Closed form: in a static field E0 the stray field e shifts by −αE0e to first order, which
+   * counts as δ²/Ω², and more than the stray field alone.
+   */
+  @Test
+  void countsStrayFieldsOnTopOfTheStaticOne() {
+    double stray = 0.3;
+    ElectricField none = ElectricField.ofVoltsPerMetre(0);
+    Drive drive =
+        TestDrives.rubidium()
+            .inElectricField(none, none, ElectricField.ofVoltsPerMetre(8))
+            .resolve();
+    Bench bench = Bench.unknown().withElectricField(ElectricField.ofVoltsPerMetre(stray));
+    Budget budget = budget(drive, bench);
+    double alphaE = -2 * drive.starkShift().hertz() / 8;
+    double spread = alphaE * stray / Math.sqrt(3) / budget.plan().rabi().hertz();
+    double composed = error(budget, "Electric field");
+    assertEquals(spread * spread, composed, 0.02 * composed);
+    assertTrue(composed > 30 * error(budget(RUBIDIUM, bench), "Electric field"));
+    Check check = budget.check(6000, 22);
+    double quiet = budget(drive, Bench.unknown()).check(2, 1).total();
     assertEquals(check.total() - quiet, composed, 4 * check.standardError() + 0.03 * composed);
   }
 

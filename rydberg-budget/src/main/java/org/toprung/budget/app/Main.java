@@ -36,7 +36,6 @@ public final class Main implements Runnable {
    * @param args the arguments
    */
   public static void main(String[] args) {
-    System.setProperty("java.awt.headless", "true");
     PrintStream out = utf8(FileDescriptor.out);
     PrintStream err = utf8(FileDescriptor.err);
     int status = run(args, out, err);

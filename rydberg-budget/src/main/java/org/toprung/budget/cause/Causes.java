@@ -18,6 +18,9 @@ public final class Causes {
   private static final String STATIC_DETUNING =
       "exact square-pulse response over a Gaussian detuning; 1 − P = δ²/Ω² when small";
 
+  private static final String MORE_DETUNINGS =
+      "larger detunings from the intermediate levels, with the power that keeps the Rabi frequency";
+
   private final List<Cause> assessed = new ArrayList<>();
   private final List<String> notAssessed = new ArrayList<>();
 
@@ -32,6 +35,7 @@ public final class Causes {
    */
   public static Causes of(Drive drive, Bench bench) {
     Causes causes = new Causes();
+    causes.addScattering(drive);
     causes.addLoss(bench);
     causes.addMotion(drive, bench);
     causes.addFields(drive, bench);
@@ -40,19 +44,29 @@ public final class Causes {
     return causes;
   }
 
-  private void addLoss(Bench bench) {
+  private void addScattering(Drive drive) {
+    int levels = drive.intermediates().size();
+    if (levels == 0) {
+      return;
+    }
     assessed.add(
         new FixedCause(
             "Intermediate scattering",
             "γΣΩ²/4Δ² of start and target, half the pulse each (Saffman and Walker, Phys. Rev. A 72,"
                 + " 022347 (2005)), summed over sublevels",
             PulseModel::scatteringPerPulse,
-            m ->
-                String.format(
-                    Locale.ROOT,
-                    "double the detuning at twice the power in both beams: about %.2g remains at the"
-                        + " same Rabi frequency; bring the step Rabi frequencies closer",
-                    0.5 * m.scatteringPerPulse())));
+            m -> levels == 1 ? moreDetuning(m) : MORE_DETUNINGS));
+  }
+
+  private static String moreDetuning(PulseModel model) {
+    return String.format(
+        Locale.ROOT,
+        "double the detuning at twice the power in both beams: about %.2g remains at the same Rabi"
+            + " frequency; bring the step Rabi frequencies closer",
+        0.5 * model.scatteringPerPulse());
+  }
+
+  private void addLoss(Bench bench) {
     assessed.add(
         new FixedCause(
             "Rydberg decay, spontaneous",

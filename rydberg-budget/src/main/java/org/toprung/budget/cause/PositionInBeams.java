@@ -31,7 +31,6 @@ final class PositionInBeams extends Disturbance {
                     drive
                         .steps()
                         .get(k)
-                        .beam()
                         .fieldFactorAt(
                             scale * motion.positionMetres(0) * x,
                             scale * motion.positionMetres(1) * y,

@@ -73,7 +73,8 @@ public final class PulseModel {
     }
     this.plan = PulsePlanner.plan(ladder, pulse.areaRadians());
     this.elimination = Elimination.of(ladder);
-    this.stark = StarkShift.of(drive.species(), drive.target());
+    double[] e = drive.electricFieldVoltsPerMetre();
+    this.stark = StarkShift.of(drive.species(), drive.target()).about(e[0], e[1], e[2]);
     this.noiseFree = NoiseFreePulse.of(ladder, setting(plan.frequencyOffset().hertz()), seconds());
   }
 
@@ -226,7 +227,7 @@ public final class PulseModel {
     return inputs.blackbody() * rate.value();
   }
 
-  /** Stark shift of the target in a field with these components, Hz. */
+  /** Stark shift of the target when these components are added to the static field, Hz. */
   double starkShiftHertz(double ex, double ey, double ez) {
     return inputs.polarizability() * stark.hertz(ex, ey, ez);
   }

@@ -38,7 +38,8 @@ final class ShotNoise {
                 t -> ThermalMotion.of(drive.species().massKilograms(), t, bench.trapFrequencies()));
     this.magnetic = bench.magneticNoise().map(b -> b.tesla()).orElse(0.0);
     this.electric = bench.electricField().map(e -> e.voltsPerMetre()).orElse(0.0) / Math.sqrt(3);
-    this.stark = StarkShift.of(drive.species(), drive.target());
+    double[] e = drive.electricFieldVoltsPerMetre();
+    this.stark = StarkShift.of(drive.species(), drive.target()).about(e[0], e[1], e[2]);
     int steps = drive.steps().size();
     this.drift = hertz(bench.drifts(), steps);
     this.linewidth = hertz(bench.linewidths(), steps);
@@ -89,11 +90,7 @@ final class ShotNoise {
               .withFieldFactor(
                   k,
                   Math.sqrt(relative)
-                      * drive
-                          .steps()
-                          .get(k)
-                          .beam()
-                          .fieldFactorAt(position[0], position[1], position[2]));
+                      * drive.steps().get(k).fieldFactorAt(position[0], position[1], position[2]));
     }
     return setting.withTargetShift(
         stark.hertz(

@@ -1,72 +1,65 @@
 package org.toprung.budget.report;
 
-import java.awt.BasicStroke;
-import java.awt.Color;
-import java.awt.Font;
-import java.awt.font.FontRenderContext;
-import java.io.ByteArrayOutputStream;
-import java.io.IOException;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
-import org.knowm.xchart.VectorGraphicsEncoder;
-import org.knowm.xchart.XYChart;
-import org.knowm.xchart.XYSeries;
-import org.knowm.xchart.style.Styler.ChartTheme;
-import org.knowm.xchart.style.XYStyler;
-import org.knowm.xchart.style.markers.SeriesMarkers;
-import org.toprung.budget.CauseEntry;
+import javax.xml.stream.XMLStreamException;
+import org.toprung.budget.report.ChartContent.Kind;
+import org.toprung.budget.report.ChartContent.Row;
+import org.toprung.budget.report.SvgPage.Anchor;
 
 /**
- * The causes of a budget as a bar chart in SVG, largest on top, on a logarithmic axis since errors
- * span decades. A dark line across the end of a bar is its uncertainty, one standard deviation to
- * each side. Text is drawn as outlines, so that the chart looks the same everywhere.
+ * The causes of a budget as a bar chart in SVG, largest on top, below the total and the simulated
+ * total. The axis is logarithmic, since errors span decades; whiskers are standard uncertainties.
+ * Causes that a logarithmic axis cannot show are listed below it.
+ *
+ * <p>Text is text, in whatever sans-serif font the viewer has. Nothing but the Java platform's own
+ * XML is needed, neither fonts nor a display.
  */
 public final class ChartReport {
-  private static final int WIDTH = 960; // px
-  private static final int ROW = 32; // px
-  private static final int FRAME = 130; // px for title and axis
-  private static final int LONGEST_TITLE = 60; // characters
-  private static final float BAR = 16; // px
-  private static final float MARK = 3; // px
-  private static final double DECADES = 5; // that bars may span
-  private static final double NOTHING = 1e-9; // error that is not worth a bar
-  private static final Color BAR_COLOR = new Color(0x3B7A8C);
-  private static final Color TOTAL_COLOR = new Color(0xB5533C);
-  private static final Color MARK_COLOR = new Color(0x1F1F1F);
-  private static final Color GRID_COLOR = new Color(0xD5D5D5);
+  private static final double WIDTH = 960; // px, as all lengths here
+  private static final double MARGIN = 24;
+  private static final double ROOM = WIDTH - 2 * MARGIN;
+  private static final double GAP = 12;
+  private static final double TITLE = 18; // size of text
+  private static final double TEXT = 13;
+  private static final double SMALL = 12;
+  private static final double LEADING = 1.4; // line to line, in sizes
+  private static final double MIDDLE = 0.36; // baseline below the middle of a line, in sizes
+  private static final double ROW = 26;
+  private static final double BAR = 14;
+  private static final double CAP = 4; // half height of the end of a whisker
+  private static final double TICK = 5;
+  private static final int LONGEST_TITLE = 2; // lines
+  private static final String INK = "#1a1a1a";
+  private static final String FAINT_INK = "#555555";
+  private static final String GRID = "#d4d4d4";
+  private static final String CAUSE_FILL = "#8fb3c4";
+  private static final String TOTAL_FILL = "#2f4b5c";
 
-  private final XYChart chart;
-  private final double left; // error at the left end of the axis
+  private final ChartContent content;
+  private final List<String> title;
+  private final List<String> subtitles = new ArrayList<>();
+  private final List<String> notes = new ArrayList<>();
+  private final double left; // of the axis
+  private final double right;
+  private final double top;
+  private final double bottom;
+  private final SvgPage page;
 
-  private ChartReport(ReportContent content) {
-    double total = Math.max(NOTHING, content.budget().total());
-    double right = decadeAbove(total + content.budget().uncertainty());
-    List<CauseEntry> all = content.budget().causes();
-    double smallest =
-        all.stream().mapToDouble(CauseEntry::error).filter(e -> e > NOTHING).min().orElse(total);
-    this.left =
-        Math.min(right / 1000, Math.max(decadeBelow(smallest), right * Math.pow(10, -DECADES)));
-    List<CauseEntry> shown = all.stream().filter(c -> c.error() > left).toList();
-    int rows = shown.size() + 1;
-    this.chart = new XYChart(WIDTH, FRAME + ROW * rows, ChartTheme.Matlab);
-    chart.setTitle(shortened(content.title()));
-    String axis = "error of one pulse (probability; dark line: ± 1 standard uncertainty)";
-    int hidden = all.size() - shown.size();
-    chart.setXAxisTitle(
-        hidden == 0
-            ? axis
-            : axis + String.format(Locale.ROOT, "; %d causes below %.0e left out", hidden, left));
-    List<String> names = new ArrayList<>(); // from the bottom up
-    for (int i = shown.size() - 1; i >= 0; i--) {
-      CauseEntry cause = shown.get(i);
-      names.add(
-          bar(cause.cause(), names.size() + 1, cause.error(), cause.uncertainty(), BAR_COLOR));
-    }
-    names.add(bar("TOTAL", rows, total, content.budget().uncertainty(), TOTAL_COLOR));
-    style(names, right);
+  private ChartReport(ChartContent content) throws XMLStreamException {
+    this.content = content;
+    this.title =
+        Lines.wrapped(content.title(), ROOM, LONGEST_TITLE, s -> SansSerif.boldWidth(s, TITLE));
+    content.subtitles().forEach(s -> subtitles.addAll(wrapped(s, TEXT)));
+    content.notes().forEach(s -> notes.addAll(wrapped(s, SMALL)));
+    List<Row> rows = content.rows();
+    this.left = MARGIN + GAP + widest(rows.stream().map(Row::name).toList());
+    this.right = WIDTH - MARGIN - GAP - widest(rows.stream().map(Row::value).toList());
+    this.top = MARGIN + title.size() * TITLE * LEADING + subtitles.size() * TEXT * LEADING + GAP;
+    this.bottom = top + rows.size() * ROW + GAP;
+    double height = bottom + 2 * TEXT * LEADING + 2 * GAP + notes.size() * SMALL * LEADING + GAP;
+    this.page = new SvgPage(WIDTH, Math.ceil(height), content.title(), content.description());
   }
 
   /**
@@ -74,93 +67,132 @@ public final class ChartReport {
    *
    * @param content what to tell about
    * @return an SVG document
-   * @throws IllegalStateException if this Java cannot measure text
+   * @throws IllegalStateException if a number of the budget is not finite
    */
   public static String render(ReportContent content) {
-    requireFonts();
-    ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+    return render(ChartContent.of(content));
+  }
+
+  static String render(ChartContent content) {
     try {
-      VectorGraphicsEncoder.saveVectorGraphic(
-          new ChartReport(content).chart, bytes, VectorGraphicsEncoder.VectorGraphicsFormat.SVG);
-    } catch (IOException e) {
-      throw new UncheckedIOException(e);
-    }
-    return bytes.toString(StandardCharsets.UTF_8);
-  }
-
-  /**
-   * Makes sure that a chart can be drawn: some minimal systems have a Java but no fonts.
-   *
-   * @throws IllegalStateException if this Java cannot measure text
-   */
-  public static void requireFonts() {
-    try {
-      new Font(Font.SANS_SERIF, Font.PLAIN, 12)
-          .getLineMetrics("x", new FontRenderContext(null, true, true));
-    } catch (LinkageError | InternalError | RuntimeException e) {
-      throw new IllegalStateException(
-          "this Java installation has no usable fonts to draw a chart with; install fontconfig and"
-              + " a font",
-          e);
+      return new ChartReport(content).draw();
+    } catch (XMLStreamException e) {
+      throw new IllegalStateException("the chart cannot be written: " + e.getMessage(), e);
     }
   }
 
-  private void style(List<String> names, double right) {
-    XYStyler style = chart.getStyler();
-    style.setLegendVisible(false);
-    style.setChartBackgroundColor(Color.WHITE);
-    style.setChartTitleFont(new Font(Font.SANS_SERIF, Font.BOLD, 16));
-    style.setAxisTitleFont(new Font(Font.SANS_SERIF, Font.PLAIN, 13));
-    style.setAxisTickLabelsFont(new Font(Font.SANS_SERIF, Font.PLAIN, 13));
-    style.setXAxisLogarithmic(true);
-    style.setXAxisLogarithmicDecadeOnly(true);
-    style.setXAxisMin(left);
-    style.setXAxisMax(right);
-    style.setXAxisDecimalPattern("0E0");
-    style.setYAxisMin(0.0);
-    style.setYAxisMax(names.size() + 1.0);
-    style.setYAxisTickMarkSpacingHint(ROW * 3 / 4);
-    style.setyAxisTickLabelsFormattingFunction(y -> rowName(y, names));
-    style.setPlotContentSize(1);
-    style.setPlotGridHorizontalLinesVisible(false);
-    style.setPlotGridLinesColor(GRID_COLOR);
-    style.setPlotGridLinesStroke(new BasicStroke(1));
-    style.setPlotTicksMarksVisible(false);
-  }
-
-  /** Names the rows, which sit at whole numbers; the labels of other ticks are blank but differ. */
-  private static String rowName(double y, List<String> names) {
-    long row = Math.round(y);
-    if (Math.abs(y - row) > 1e-6 || row < 1 || row > names.size()) {
-      return " ".repeat(1 + (int) Math.round(10 * Math.abs(y)));
+  private String draw() throws XMLStreamException {
+    double y = lines(title, MARGIN, TITLE, "font-weight", "bold", "fill", INK);
+    lines(subtitles, y, TEXT, "fill", INK);
+    axis();
+    double middle = top + ROW / 2;
+    for (Row row : content.rows()) {
+      row(row, row.kind() == Kind.CAUSE ? middle + GAP : middle);
+      middle += ROW;
     }
-    return names.get((int) row - 1);
+    lines(notes, bottom + 2 * TEXT * LEADING + 2 * GAP, SMALL, "fill", FAINT_INK);
+    return page.finish();
   }
 
-  /** Draws the bar of a row and its uncertainty; gives the row's label. */
-  private String bar(String name, int row, double error, double uncertainty, Color color) {
-    line(name, row, left, error, BAR, color);
-    double low = Math.max(left, error - uncertainty);
-    line("± " + name, row, low, error + uncertainty, MARK, MARK_COLOR);
-    return String.format(Locale.ROOT, "%s  %.1e", name, error);
+  /** Writes lines one below the other; gives where the next would be. */
+  private double lines(List<String> lines, double from, double size, String... style)
+      throws XMLStreamException {
+    double y = from;
+    for (String line : lines) {
+      page.text(MARGIN, y + size, size, Anchor.START, line, style);
+      y += size * LEADING;
+    }
+    return y;
   }
 
-  private void line(String name, int row, double from, double to, float width, Color color) {
-    XYSeries series = chart.addSeries(name, new double[] {from, to}, new double[] {row, row});
-    series.setMarker(SeriesMarkers.NONE);
-    series.setLineStyle(new BasicStroke(width, BasicStroke.CAP_BUTT, BasicStroke.JOIN_MITER));
-    series.setLineColor(color);
+  private void axis() throws XMLStreamException {
+    StringBuilder grid = new StringBuilder();
+    StringBuilder ticks = new StringBuilder();
+    DecadeScale scale = content.scale();
+    for (int exponent = scale.first(); exponent <= scale.last(); exponent++) {
+      double decade = Math.pow(10, exponent);
+      grid.append(SvgPage.to('M', x(decade), top)).append(SvgPage.to('L', x(decade), bottom));
+      for (int digit = 2; digit <= 9 && exponent < scale.last(); digit++) {
+        double x = x(digit * decade);
+        ticks.append(SvgPage.to('M', x, bottom)).append(SvgPage.to('L', x, bottom + TICK));
+      }
+      page.text(
+          x(decade),
+          bottom + TICK + TEXT * LEADING,
+          TEXT,
+          Anchor.MIDDLE,
+          String.format(Locale.ROOT, "%.0e", decade),
+          "fill",
+          INK);
+    }
+    page.path(grid.toString(), "stroke", GRID, "stroke-width", "1");
+    ticks.append(SvgPage.to('M', left, bottom)).append(SvgPage.to('L', right, bottom));
+    page.path(ticks.toString(), "stroke", INK, "stroke-width", "1");
+    page.text(
+        (left + right) / 2,
+        bottom + TICK + 2 * TEXT * LEADING,
+        TEXT,
+        Anchor.MIDDLE,
+        "error (probability)",
+        "fill",
+        INK);
   }
 
-  private static double decadeAbove(double value) {
-    return Math.pow(10, Math.ceil(Math.log10(value)));
+  private void row(Row row, double middle) throws XMLStreamException {
+    double baseline = middle + MIDDLE * TEXT;
+    String weight = row.kind() == Kind.TOTAL ? "bold" : "normal";
+    page.text(
+        left - GAP, baseline, TEXT, Anchor.END, row.name(), "font-weight", weight, "fill", INK);
+    page.text(
+        right + GAP, baseline, TEXT, Anchor.START, row.value(), "font-weight", weight, "fill", INK);
+    if (content.scale().reaches(row.error())) {
+      double length = x(row.error()) - left;
+      page.rectangle(left, middle - BAR / 2, length, BAR, look(row.kind()));
+    }
+    whisker(row, middle);
   }
 
-  private static double decadeBelow(double value) {
-    return Math.pow(10, Math.floor(Math.log10(value)));
+  /** Fills that differ in grey too. */
+  private static String[] look(Kind kind) {
+    return switch (kind) {
+      case TOTAL -> new String[] {"class", "total", "fill", TOTAL_FILL};
+      case SIMULATED ->
+          new String[] {"class", "simulated", "fill", "#ffffff", "stroke", TOTAL_FILL};
+      case CAUSE -> new String[] {"class", "cause", "fill", CAUSE_FILL};
+    };
   }
 
-  private static String shortened(String title) {
-    return title.length() <= LONGEST_TITLE ? title : title.substring(0, LONGEST_TITLE) + "...";
+  /** A line over the uncertainty, edged in white to be seen on any bar; no cap where it is cut. */
+  private void whisker(Row row, double middle) throws XMLStreamException {
+    double low = row.error() - row.uncertainty();
+    double high = row.error() + row.uncertainty();
+    DecadeScale scale = content.scale();
+    if (!scale.reaches(high) || !(row.uncertainty() > 0)) {
+      return;
+    }
+    StringBuilder path = new StringBuilder();
+    path.append(SvgPage.to('M', x(low), middle)).append(SvgPage.to('L', x(high), middle));
+    for (double end : new double[] {low, high}) {
+      if (scale.fraction(end) > 0 && scale.fraction(end) < 1) {
+        path.append(SvgPage.to('M', x(end), middle - CAP))
+            .append(SvgPage.to('L', x(end), middle + CAP));
+      }
+    }
+    page.path(path.toString(), "stroke", "#ffffff", "stroke-width", "3.5", "fill", "none");
+    page.path(
+        path.toString(), "class", "whisker", "stroke", INK, "stroke-width", "1.5", "fill", "none");
+  }
+
+  private double x(double value) {
+    return left + content.scale().fraction(value) * (right - left);
+  }
+
+  private static List<String> wrapped(String text, double size) {
+    return Lines.wrapped(text, ROOM, s -> SansSerif.width(s, size));
+  }
+
+  /** Every row may be as wide as the bold one. */
+  private static double widest(List<String> texts) {
+    return texts.stream().mapToDouble(t -> SansSerif.boldWidth(t, TEXT)).max().orElse(0);
   }
 }

@@ -2,9 +2,13 @@ package org.toprung.budget.report;
 
 import java.math.BigDecimal;
 import java.math.MathContext;
+import java.math.RoundingMode;
+import java.util.Arrays;
 import java.util.Locale;
 import java.util.regex.Pattern;
+import java.util.stream.Collectors;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Intensity;
 import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.Power;
 import org.toprung.core.quantity.Time;
@@ -12,6 +16,7 @@ import org.toprung.core.quantity.Time;
 /** Numbers as people read them: a few significant digits and a unit. */
 final class Figures {
   private static final int DIGITS = 4;
+  private static final int VECTOR_DIGITS = 3;
   private static final Pattern DECIMAL = Pattern.compile("\\d+\\.\\d+(?:E-?\\d+)?");
   private static final double SMALLEST = 1e-10; // probability told from zero
 
@@ -33,6 +38,17 @@ final class Figures {
     return Length.ofMetres(rounded(value.metres())).toString();
   }
 
+  static String of(Intensity value) {
+    return Intensity.ofWattsPerSquareMetre(rounded(value.wattsPerSquareMetre())).toString();
+  }
+
+  /** The components of a vector, in parentheses. */
+  static String vector(double... components) {
+    return Arrays.stream(components)
+        .mapToObj(c -> number(c, VECTOR_DIGITS))
+        .collect(Collectors.joining(", ", "(", ")"));
+  }
+
   /** A wavelength: always in nanometres, to a picometre. */
   static String nanometres(Length value) {
     return String.format(Locale.ROOT, "%.3f nm", value.metres() * 1e9);
@@ -46,9 +62,24 @@ final class Figures {
   /** A probability in a column: three digits and a power of ten; nothing smaller than matters. */
   static String probability(double value) {
     if (Math.abs(value) < SMALLEST) {
-      return value == 0 ? "0" : "< 1e-10";
+      return value == 0 ? "0" : "<1e-10";
     }
     return String.format(Locale.ROOT, "%.2e", value);
+  }
+
+  /** A standard uncertainty of a probability: two digits say all it knows. */
+  static String uncertainty(double value) {
+    return value < SMALLEST ? probability(value) : String.format(Locale.ROOT, "%.1e", value);
+  }
+
+  /** A value to the second digit of its uncertainty. */
+  static String measured(double value, double uncertainty) {
+    if (!(uncertainty > 0)) {
+      return number(value, DIGITS) + " ± 0";
+    }
+    BigDecimal known = new BigDecimal(uncertainty).round(new MathContext(2));
+    BigDecimal rounded = new BigDecimal(value).setScale(known.scale(), RoundingMode.HALF_EVEN);
+    return rounded.toPlainString() + " ± " + known.toPlainString();
   }
 
   static String percent(double fraction) {

@@ -13,7 +13,9 @@ import org.toprung.budget.Budget;
 import org.toprung.budget.CauseEntry;
 import org.toprung.budget.Check;
 import org.toprung.core.atom.Level;
+import org.toprung.core.drive.Beam;
 import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.Profile;
 import org.toprung.core.drive.PulsePlan;
 import org.toprung.core.structure.DipoleElement;
 
@@ -74,6 +76,8 @@ public final class JsonReport {
     Drive drive = budget.drive();
     json.writeObjectFieldStart("drive");
     number("magnetic_field_T", drive.field().tesla());
+    vector("electric_field_V_per_m", drive.electricFieldVoltsPerMetre());
+    number("stark_shift_Hz", drive.starkShift().hertz());
     number("rabi_Hz", drive.rabi().hertz());
     number("relative_uncertainty", drive.relativeUncertainty());
     json.writeArrayFieldStart("steps");
@@ -87,6 +91,7 @@ public final class JsonReport {
     number("intermediate_admixture", drive.admixture());
     number("intermediate_scattering_per_pulse", budget.scatteringPerPulse());
     vector("wave_vector_per_m", drive.waveVectorPerMetre());
+    number("recoil_shift_Hz", drive.recoilShift().hertz());
     number("magnetic_sensitivity_Hz_per_T", drive.magneticSensitivityHertzPerTesla());
     json.writeArrayFieldStart("other_targets");
     for (Drive.OtherTarget other : drive.otherTargets()) {
@@ -109,10 +114,7 @@ public final class JsonReport {
     if (k < drive.intermediates().size()) {
       number("detuning_Hz", drive.detuning(k).hertz());
     }
-    number("power_W", step.beam().power().watts());
-    number("waist_m", step.beam().waist().metres());
-    json.writeStringField("polarization", step.beam().polarization().toString());
-    vector("direction", step.beam().direction());
+    beam(step);
     number("rabi_Hz", step.rabi().hertz());
     number("reduced_dipole_ea0", Math.abs(element.valueA0()));
     number("reduced_dipole_uncertainty_ea0", element.uncertaintyA0());
@@ -121,6 +123,26 @@ public final class JsonReport {
     number("start_light_shift_Hz", drive.startLightShift(k).hertz());
     number("target_light_shift_Hz", drive.targetLightShift(k).hertz());
     json.writeEndObject();
+  }
+
+  private void beam(Drive.Step step) throws IOException {
+    Beam beam = step.beam();
+    if (beam.profile() instanceof Profile.Gaussian round) {
+      number("power_W", round.beamPower().watts());
+      number("waist_m", round.waist().metres());
+    }
+    if (beam.profile() instanceof Profile.Elliptical e) {
+      number("power_W", e.beamPower().watts());
+      vector("waists_m", new double[] {e.firstWaist().metres(), e.secondWaist().metres()});
+      vector("waist_axis", new double[] {e.axisX(), e.axisY(), e.axisZ()});
+    }
+    number("peak_intensity_W_per_m2", beam.profile().peakIntensity().wattsPerSquareMetre());
+    vector("focus_m", beam.focusMetres());
+    number("field_V_per_m", step.fieldVoltsPerMetre());
+    json.writeStringField("polarization", beam.polarization().toString());
+    number("impurity", beam.impurity());
+    number("impurity_phase_deg", beam.impurityPhaseDegrees());
+    vector("direction", beam.direction());
   }
 
   private void pulse(Budget budget) throws IOException {

@@ -4,6 +4,8 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.Profile;
+import org.toprung.core.quantity.Power;
 
 /**
  * A short caution about beams in the hazardous laser classes.
@@ -11,8 +13,9 @@ import org.toprung.core.drive.Drive;
  * <p>For continuous visible light the class 3B range of IEC 60825-1 begins at 5 mW and class 4 at
  * 0.5 W. Outside the visible, where no blink protects the eye, class 3B begins at lower powers that
  * depend on wavelength and geometry, so every such beam below class 4 is counted as 3B; below 315
- * nm class 4 begins lower too, so every such beam is counted as class 4. The limits are common
- * practice. This is a reminder, not a classification.
+ * nm class 4 begins lower too, so every such beam is counted as class 4. A beam known by its
+ * intensity alone is counted as class 4. The limits are common practice. This is a reminder, not a
+ * classification.
  */
 final class LaserCaution {
   private static final double CLASS_3B_WATTS = 0.005;
@@ -28,14 +31,20 @@ final class LaserCaution {
     List<String> cautions = new ArrayList<>();
     for (int k = 0; k < steps.size(); k++) {
       Drive.Step step = steps.get(k);
-      String found = range(step.wavelength().metres(), step.beam().power().watts());
+      Profile profile = step.beam().profile();
+      // of a beam known by its intensity alone the worst is assumed
+      double watts = profile.power().map(Power::watts).orElse(Double.POSITIVE_INFINITY);
+      String found = range(step.wavelength().metres(), watts);
       if (!found.isEmpty()) {
         cautions.add(
             String.format(
                 Locale.ROOT,
                 "Laser beam %d, %s at %s: %s.",
                 k + 1,
-                Figures.of(step.beam().power()),
+                profile
+                    .power()
+                    .map(Figures::of)
+                    .orElse(Figures.of(profile.peakIntensity()) + " of unknown power"),
                 Figures.nanometres(step.wavelength()),
                 found));
       }

@@ -1,6 +1,5 @@
 package org.toprung.budget.report;
 
-import java.util.ArrayList;
 import java.util.List;
 
 /** Text that is built line by line and never gets wider than {@value #WIDTH} columns. */
@@ -54,29 +53,8 @@ final class Page {
     text.append(line.stripTrailing()).append('\n');
   }
 
-  /** Breaks at spaces, or inside a word that is wider than a whole line. */
   private static List<String> wrap(String text, int columns) {
-    List<String> lines = new ArrayList<>();
-    StringBuilder line = new StringBuilder();
-    int used = 0;
-    for (String word : text.strip().split(" +")) {
-      int width = word.codePointCount(0, word.length());
-      if (used > 0 && used + 1 + width > columns) {
-        lines.add(line.toString());
-        line.setLength(0);
-        used = 0;
-      }
-      String rest = word;
-      while (rest.codePointCount(0, rest.length()) > columns) {
-        int cut = rest.offsetByCodePoints(0, columns);
-        lines.add(rest.substring(0, cut));
-        rest = rest.substring(cut);
-      }
-      line.append(used > 0 ? " " : "").append(rest);
-      used += (used > 0 ? 1 : 0) + rest.codePointCount(0, rest.length());
-    }
-    lines.add(line.toString());
-    return lines;
+    return Lines.wrapped(text, columns, line -> line.codePointCount(0, line.length()));
   }
 
   @Override

@@ -29,7 +29,10 @@ public record ReportContent(String title, Budget budget, Check check) {
     }
   }
 
-  /** Part of the sum of all causes that one of them makes, from 0 to 1. */
+  /**
+   * Part of the sum of all causes that one of them makes; all parts add up to 1. Negative for a
+   * cause that lessens the error.
+   */
   double share(double error) {
     double sum = budget.causes().stream().mapToDouble(c -> c.error()).sum();
     return sum > 0 ? error / sum : 0;

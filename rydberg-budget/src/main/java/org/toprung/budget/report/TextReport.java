@@ -14,11 +14,12 @@ import org.toprung.core.quantity.Frequency;
 /**
  * The report for people: one page of text that fits {@value Page#WIDTH} columns.
  *
- * <p>Levers of causes below 1 % of the total are left out here to keep the table short; {@link
- * JsonReport} has them all.
+ * <p>To keep the table short, levers of causes below 1 % of the total are left out here and causes
+ * that hardly exist are only named; {@link JsonReport} has them all.
  */
 public final class TextReport {
   private static final double WORTH_A_LEVER = 0.01; // share of the total
+  private static final double NEGLIGIBLE = 1e-9; // error not worth a row
   private static final int MOST_TARGETS = 5;
   private static final double FAINTEST_HERTZ = 1; // Rabi frequency of a target worth a line
   private static final double TESLA_PER_GAUSS = 1e-4;
@@ -49,12 +50,13 @@ public final class TextReport {
 
   private String render() {
     page.title(content.title());
+    result();
+    plan();
     drive();
     for (int k = 0; k < drive.steps().size(); k++) {
       step(k);
     }
     ladder();
-    plan();
     causes();
     check();
     list("Not assessed, so not in the total", budget.notAssessed());
@@ -63,19 +65,39 @@ public final class TextReport {
     return page.toString();
   }
 
+  /** What a reader in a hurry needs. */
+  private void result() {
+    page.heading("Result");
+    page.value(
+        "error of one pulse",
+        "("
+            + Figures.measured(100 * budget.total(), 100 * budget.uncertainty())
+            + ") %, which is 1 - probability of the wanted outcome");
+    CauseEntry largest = budget.causes().get(0);
+    page.value(
+        "largest cause", largest.cause() + ", " + share(largest) + " of the sum of all causes");
+    page.value(
+        "simulation",
+        content.check().agrees() ? "agrees with the total" : "DISAGREES with the total, see below");
+  }
+
   private void drive() {
     page.heading("Drive");
-    page.value("atom", drive.species().name() + " in " + drive.field() + " along z");
-    StringBuilder ladder = new StringBuilder(drive.start().toString());
-    for (Drive.Step step : drive.steps()) {
-      ladder.append(" -> ").append(step.to());
+    page.value("ladder", drive.toString());
+    page.value("magnetic field", drive.field() + " along z");
+    double[] e = drive.electricFieldVoltsPerMetre();
+    if (e[0] != 0 || e[1] != 0 || e[2] != 0) {
+      page.value(
+          "electric field",
+          Figures.vector(e)
+              + " V/m, shifts the target by "
+              + Figures.signed(drive.starkShift())
+              + " (in its wavelength already)");
     }
-    page.value("ladder", ladder.toString());
   }
 
   private void step(int k) {
     Drive.Step step = drive.steps().get(k);
-    double[] direction = step.beam().direction();
     page.heading("Step " + (k + 1) + " to " + step.to());
     page.value("laser", Figures.nanometres(step.wavelength()) + " (vacuum)");
     if (k < drive.intermediates().size()) {
@@ -83,25 +105,14 @@ public final class TextReport {
           "detuning",
           Figures.signed(drive.detuning(k)) + " from the centre of gravity of " + step.to());
     }
-    page.value(
-        "beam",
-        String.format(
-            Locale.ROOT,
-            "%s, waist %s, %s, along (%s, %s, %s)",
-            Figures.of(step.beam().power()),
-            Figures.of(step.beam().waist()),
-            Figures.shortened(step.beam().polarization().toString()),
-            Figures.number(direction[0], 3),
-            Figures.number(direction[1], 3),
-            Figures.number(direction[2], 3)));
+    page.value("beam", BeamText.of(step));
     page.value("Rabi frequency", Figures.of(step.rabi()));
     page.value(
         "reduced dipole element",
         String.format(
             Locale.ROOT,
-            "%s ± %s a0, %s: %s",
-            Figures.number(Math.abs(step.element().valueA0()), 4),
-            Figures.number(step.element().uncertaintyA0(), 2),
+            "(%s) e a0, %s: %s",
+            Figures.measured(Math.abs(step.element().valueA0()), step.element().uncertaintyA0()),
             origin(step),
             step.element().source()));
   }
@@ -114,7 +125,10 @@ public final class TextReport {
     page.heading("Whole ladder");
     page.value(
         "Rabi frequency",
-        Figures.of(drive.rabi()) + " ± " + Figures.percent(drive.relativeUncertainty()));
+        Figures.of(drive.rabi())
+            + " ± "
+            + Figures.percent(drive.relativeUncertainty())
+            + ", to lowest order");
     page.value(
         "light shift of start",
         Figures.signed(drive.startLightShift()) + byBeam(drive::startLightShift));
@@ -123,7 +137,7 @@ public final class TextReport {
         Figures.signed(drive.targetLightShift()) + byBeam(drive::targetLightShift));
     page.value(
         "intermediate scattering",
-        Figures.probability(budget.scatteringPerPulse()) + " photons per pulse");
+        "probability " + Figures.probability(budget.scatteringPerPulse()) + " per pulse");
     double[] k = drive.waveVectorPerMetre();
     double length = Math.sqrt(k[0] * k[0] + k[1] * k[1] + k[2] * k[2]);
     page.value(
@@ -135,6 +149,9 @@ public final class TextReport {
             Figures.number(k[1] * 1e-6, 4),
             Figures.number(k[2] * 1e-6, 4),
             Figures.of(Frequency.ofHertz(length / (2 * Math.PI)))));
+    page.value(
+        "recoil shift",
+        Figures.signed(drive.recoilShift()) + ", not in the wavelengths or the frequency offset");
     page.value(
         "magnetic sensitivity",
         Figures.signed(
@@ -179,11 +196,11 @@ public final class TextReport {
     PulsePlan plan = budget.plan();
     page.heading("Pulse");
     page.value("duration", Figures.of(plan.duration()));
-    page.value("Rabi frequency", Figures.of(plan.rabi()) + " during the pulse");
+    page.value("Rabi frequency", Figures.of(plan.rabi()) + ", which the duration follows from");
     page.value(
         "frequency offset",
         Figures.signed(plan.frequencyOffset())
-            + " added to the last laser puts the ladder on the light-shifted resonance");
+            + " added to the last laser puts the ladder on its light-shifted resonance");
     if (budget.pulse().offset().hertz() != 0) {
       page.value(
           "deliberate offset", Figures.signed(budget.pulse().offset()) + " from that resonance");
@@ -191,25 +208,37 @@ public final class TextReport {
   }
 
   private void causes() {
-    page.heading("Error budget (error: 1 - probability of the wanted outcome; ±: atomic values)");
+    page.heading(
+        "Error budget (probabilities; ±: one standard uncertainty, from the atomic values)");
     page.hanging(row("cause", "error", "±", "share"), "lever");
+    StringJoiner negligible = new StringJoiner("; ");
     for (CauseEntry cause : budget.causes()) {
-      double share = content.share(cause.error());
+      if (Math.max(Math.abs(cause.error()), cause.uncertainty()) < NEGLIGIBLE) {
+        negligible.add(cause.cause());
+        continue;
+      }
       page.hanging(
           row(
               cause.cause(),
               Figures.probability(cause.error()),
-              Figures.probability(cause.uncertainty()),
-              String.format(Locale.ROOT, "%.1f %%", 100 * share)),
-          share >= WORTH_A_LEVER ? cause.lever() : "");
+              Figures.uncertainty(cause.uncertainty()),
+              share(cause)),
+          content.share(cause.error()) >= WORTH_A_LEVER ? cause.lever() : "");
+    }
+    if (negligible.length() > 0) {
+      page.value(String.format(Locale.ROOT, "below %.0e each", NEGLIGIBLE), negligible.toString());
     }
     page.hanging(
         row(
             "TOTAL",
             Figures.probability(budget.total()),
-            Figures.probability(budget.uncertainty()),
+            Figures.uncertainty(budget.uncertainty()),
             ""),
-        "that is " + Figures.percent(budget.total()));
+        "");
+  }
+
+  private String share(CauseEntry cause) {
+    return String.format(Locale.ROOT, "%.1f %%", 100 * content.share(cause.error()));
   }
 
   private static String row(String cause, String error, String uncertainty, String share) {
@@ -229,18 +258,19 @@ public final class TextReport {
         "simulated total",
         String.format(
             Locale.ROOT,
-            "%s ± %s (%d shots, seed %d)",
+            "%s ± %s (one standard error; %d shots, seed %d)",
             Figures.probability(check.total()),
-            Figures.probability(check.standardError()),
+            Figures.uncertainty(check.standardError()),
             check.shots(),
             check.seed()));
+    double difference = budget.total() - check.total();
     page.value(
         check.agrees() ? "agrees" : "DISAGREES",
         String.format(
             Locale.ROOT,
-            "composed %s, difference %s; agreement is 10 %% or three standard errors",
-            Figures.probability(budget.total()),
-            Figures.probability(budget.total() - check.total())));
+            "the total of the causes is %s %s; agreement is 10 %% or three standard errors",
+            Figures.probability(Math.abs(difference)),
+            difference < 0 ? "smaller" : "larger"));
   }
 
   private void list(String heading, List<String> sentences) {

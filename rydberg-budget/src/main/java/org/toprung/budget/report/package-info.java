@@ -3,7 +3,7 @@
  *
  * <p>All three are rendered to text in memory from the same {@link
  * org.toprung.budget.report.ReportContent}. Errors are probabilities; every key, column and axis
- * says its unit. JSON (Jackson) and chart (XChart) need optional dependencies, which an application
- * that asks for them brings along; the table needs none.
+ * says its unit. JSON needs an optional dependency (Jackson), which an application that asks for it
+ * brings along; table and chart need none.
  */
 package org.toprung.budget.report;

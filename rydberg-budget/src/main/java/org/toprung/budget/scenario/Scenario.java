@@ -12,6 +12,7 @@ import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.DriveSetup;
+import org.toprung.core.quantity.ElectricField;
 import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.MagneticField;
 
@@ -27,6 +28,11 @@ import org.toprung.core.quantity.MagneticField;
  * pulse} and, where something is known of the apparatus, {@code bench}. The last step has no
  * detuning of its own: the lasers sit on resonance with the target, light shifts compensated,
  * unless {@code pulse.offset} says otherwise. Without a {@code title} the file's name stands in.
+ *
+ * <p>Optional: in {@code field} a static {@code electric} field; in a {@code step} two waists with
+ * a {@code waist_axis}, an {@code intensity} in place of power and waist, the {@code offset} of the
+ * focus from the atom, and an {@code impurity} of the polarization with its {@code
+ * impurity_phase_deg}.
  *
  * <p>Immutable and thread-safe.
  */
@@ -52,10 +58,8 @@ public final class Scenario {
         root.table("atom", List.of("species"))
             .required("species", "text such as \"Rb-87\"")
             .parsed(Species::parse, "Rb-87");
-    Value magnetic =
-        root.table("field", List.of("magnetic")).required("magnetic", "text such as \"4 G\"");
-    MagneticField field = magnetic.parsed(MagneticField::parse, "4 G");
-    DriveSetup inField = magnetic.guarded(() -> Drive.of(species).in(field));
+    DriveSetup inField =
+        field(root.table("field", List.of("magnetic", "electric")), Drive.of(species));
     DriveSetup started = start(root.table("start", List.of("level", "F", "mF")), species, inField);
     List<Table> steps = root.tables("step", MOST_STEPS, STEP_KEYS, LAST_STEP_KEYS);
     this.setup = steps(steps, species, started);
@@ -110,6 +114,21 @@ public final class Scenario {
     Level level = value.parsed(Level::parse, "6P3/2");
     value.guarded(() -> species.requireValid(level));
     return level;
+  }
+
+  private static DriveSetup field(Table table, DriveSetup setup) {
+    Value magnetic = table.required("magnetic", "text such as \"4 G\"");
+    MagneticField size = magnetic.parsed(MagneticField::parse, "4 G");
+    DriveSetup inField = magnetic.guarded(() -> setup.in(size));
+    return table.optional("electric").map(v -> inElectricField(v, inField)).orElse(inField);
+  }
+
+  private static DriveSetup inElectricField(Value value, DriveSetup setup) {
+    List<ElectricField> e =
+        value.items(3, "a list of 3 texts such as \"10 V/m\", along x, y and z").stream()
+            .map(v -> v.parsed(ElectricField::parse, "10 V/m"))
+            .toList();
+    return setup.inElectricField(e.get(0), e.get(1), e.get(2));
   }
 
   private static DriveSetup start(Table table, Species species, DriveSetup setup) {

@@ -103,6 +103,32 @@ class BadInputTest {
           direction = [0, 0, 1]    | direction = [0, 0, 0] | step[1].direction | 0.0             | not zero
           direction = [0, 0, 1]    | direction = [0, 1]  | step[1].direction | [0,1]             | three numbers
           direction = [0, 0, 1]    | direction = [0, 0, inf] | step[1].direction[3] | Infinity   | finite
+          waist = "20 um"          | waist = ["20 um", "30 um"] | step[1].waist_axis | is missing   | [1, 0, 0]
+          waist = "20 um"          | waist = ["20 um"]   | step[1].waist     | ["20 um"]         | two such texts
+          waist = "20 um"          | waist = ["20 um", "0 um"] | step[1].waist[2] | "0 um"        | above zero
+          waist = "20 um"          | waist = ["-1 um", "2 um"] | step[1].waist[1] | "-1 um"       | above zero
+          waist = "20 um"          | waist = 20          | step[1].waist     | given 20          | "20 um"
+          waist = "20 um"          | waist = "20 um"\\nwaist_axis = [1, 0, 0] | step[1].waist_axis | [1,0,0] | two waists
+          waist = "20 um"          | waist = ["20 um", "30 um"]\\nwaist_axis = [0, 0, 0] | step[1].waist_axis | 0.0 | not zero
+          waist = "20 um"          | waist = ["20 um", "30 um"]\\nwaist_axis = [0, nan, 0] | step[1].waist_axis[2] | NaN | finite
+          waist = "20 um"          | waist = ["20 um", "30 um"]\\nwaist_axis = [1, 0, 1] | step[1].direction | [0,0,1] | across the beam
+          waist = "20 um"          | waist = ["20 um", "30 um"]\\nwaist_axis = [1, 0] | step[1].waist_axis | [1,0] | three numbers
+          waist = "20 um"          | intensity = "2 W/cm2" | step[1].power   | "2 mW"            | nothing beside
+          power = "2 mW"           | intensity = "2 W/cm2" | step[1].waist   | "20 um"           | nothing beside
+          power = "2 mW"\\nwaist = "20 um" | intensity = "0 W/cm2" | step[1].intensity | "0 W/cm2" | above zero
+          power = "2 mW"\\nwaist = "20 um" | intensity = "2 mW" | step[1].intensity | mW           | W/cm2
+          direction = [0, 0, 1]    | direction = [0, 0, 1]\\noffset = ["1 um", "0 um"] | step[1].offset | ["1 um","0 um"] | 3 texts
+          direction = [0, 0, 1]    | direction = [0, 0, 1]\\noffset = ["1 um", "0 um", 3] | step[1].offset[3] | given 3 | "1 um"
+          direction = [0, 0, 1]    | direction = [0, 0, 1]\\noffset = ["1 um", "0 um", "nan um"] | step[1].offset[3] | nan | a number
+          direction = [0, 0, 1]    | direction = [0, 0, 1]\\noffset = ["1 mm", "0 um", "0 um"] | step | beam 1 misses | allowed
+          direction = [0, 0, 1]    | direction = [0, 0, 1]\\nimpurity = 0.6 | step[1].impurity | 0.6 | from 0 to 0.5
+          direction = [0, 0, 1]    | direction = [0, 0, 1]\\nimpurity = -0.1 | step[1].impurity | -0.1 | from 0 to 0.5
+          direction = [0, 0, 1]    | direction = [0, 0, 1]\\nimpurity = nan | step[1].impurity | NaN | from 0 to 0.5
+          direction = [0, 0, 1]    | direction = [0, 0, 1]\\nimpurity = "1 %" | step[1].impurity | 1 % | from 0 to 0.5
+          direction = [0, 0, 1]    | direction = [0, 0, 1]\\nimpurity_phase_deg = 90 | step[1].impurity_phase_deg | given 90 | only with an impurity
+          direction = [0, 0, 1]    | direction = [0, 0, 1]\\nimpurity = 0.1\\nimpurity_phase_deg = inf | step[1].impurity_phase_deg | Infinity | degrees
+          magnetic = "4 G"         | magnetic = "4 G"\\nelectric = "10 V/m" | field.electric | "10 V/m" | 3 texts
+          magnetic = "4 G"         | magnetic = "4 G"\\nelectric = ["0 V/m", "0 V/m", "1 G"] | field.electric[3] | 1 G | V/cm
           kind = "pi"              | kind = "half"       | pulse.kind        | half              | "pi"
           temperature = "10 uK"    | temperature = "0 K" | bench.temperature | 0 K               | above zero
           temperature = "10 uK"    | temperature = "-9 uK" | bench.temperature | "-9 uK"         | not be below 0
@@ -120,7 +146,11 @@ class BadInputTest {
           """)
   void refusesImpossibleValues(String old, String instead, String key, String given, String allowed)
       throws IOException {
-    refuses(ReferenceScenario.with(old, instead), key, given, allowed);
+    refuses(ReferenceScenario.with(lines(old), lines(instead)), key, given, allowed);
+  }
+
+  private static String lines(String text) {
+    return text.replace("\\n", "\n");
   }
 
   @ParameterizedTest(name = "without {0}")

@@ -118,9 +118,32 @@ class JsonReportTest {
         .forEach(
             field -> {
               boolean number = field.getValue().isNumber();
-              boolean unit = field.getKey().matches(".*_(Hz|T|Hz_per_T|per_m|m|s|W)");
+              boolean unit = field.getKey().matches(".*_(Hz|T|Hz_per_T|per_m|m|s|W|V_per_m)");
               assertFalse(number && !unit && !pure.contains(field.getKey()), field.getKey());
             });
+  }
+
+  @Test
+  void carriesShapeAndPlaceOfBeamsAndTheElectricField() throws IOException {
+    ReportContent content = SampleReport.shaped();
+    Drive drive = content.budget().drive();
+    JsonNode json = parsed(content).at("/drive");
+    JsonNode first = json.at("/steps/0");
+    assertEquals(2e-3, first.at("/power_W").doubleValue());
+    assertEquals(30e-6, first.at("/waists_m/1").doubleValue());
+    assertEquals(1, first.at("/waist_axis/1").doubleValue());
+    assertTrue(first.at("/waist_m").isMissingNode());
+    assertEquals(5e-6, first.at("/focus_m/1").doubleValue());
+    assertEquals(0.002, first.at("/impurity").doubleValue());
+    assertEquals(45, first.at("/impurity_phase_deg").doubleValue());
+    JsonNode second = json.at("/steps/1");
+    assertTrue(second.at("/power_W").isMissingNode());
+    assertEquals(1.5e8, second.at("/peak_intensity_W_per_m2").doubleValue());
+    assertEquals(
+        drive.steps().get(1).fieldVoltsPerMetre(), second.at("/field_V_per_m").doubleValue());
+    assertEquals(5, json.at("/electric_field_V_per_m/2").doubleValue());
+    assertEquals(drive.starkShift().hertz(), json.at("/stark_shift_Hz").doubleValue());
+    assertEquals(drive.recoilShift().hertz(), json.at("/recoil_shift_Hz").doubleValue());
   }
 
   @Test

@@ -27,4 +27,19 @@ final class SampleReport {
             .replace("\"sigma-\"\n", "[0.123456789, 0.987654321, 0]\n");
     return of(text.substring(0, text.indexOf("[bench]")));
   }
+
+  /** Beams of other shapes than the round one in its focus, and an electric field. */
+  static ReportContent shaped() {
+    return of(
+        ReferenceScenario.text()
+            .replace(
+                "magnetic = \"4 G\"",
+                "electric = [\"0 V/m\", \"0 V/m\", \"5 V/m\"]\nmagnetic = \"4 G\"")
+            .replace(
+                "waist = \"20 um\"",
+                "waist = [\"20 um\", \"30 um\"]\nwaist_axis = [0, 1, 0]\n"
+                    + "offset = [\"0 um\", \"5 um\", \"0 um\"]\nimpurity = 0.002\nimpurity_phase_deg = 45")
+            .replace("power = \"150 mW\"", "intensity = \"15 kW/cm2\"")
+            .replace("waist = \"25 um\"\n", ""));
+  }
 }

@@ -14,7 +14,8 @@ class TextReportTest {
 
   @Test
   void fitsAHundredColumnsWhateverTheScenario() {
-    for (ReportContent content : List.of(SampleReport.reference(), SampleReport.wide())) {
+    for (ReportContent content :
+        List.of(SampleReport.reference(), SampleReport.wide(), SampleReport.shaped())) {
       for (String line : TextReport.render(content).lines().toList()) {
         assertTrue(line.codePointCount(0, line.length()) <= 100, line);
         assertEquals(line.stripTrailing(), line);
@@ -25,7 +26,7 @@ class TextReportTest {
   @Test
   void tellsEveryCauseAndEveryWarning() {
     ReportContent content = SampleReport.of(ReferenceScenario.with("1.2 GHz", "80 MHz"));
-    String text = TextReport.render(content);
+    String text = TextReport.render(content).replaceAll("\\s+", " ");
     for (CauseEntry cause : content.budget().causes()) {
       assertTrue(text.contains(cause.cause()), cause.cause());
     }
@@ -53,6 +54,19 @@ class TextReportTest {
   }
 
   @Test
+  void saysFirstHowLargeTheErrorIsAndWhatCausesIt() {
+    ReportContent content = SampleReport.reference();
+    List<String> lines = TextReport.render(content).lines().toList();
+    double percent = 100 * content.budget().total();
+    String error = lines.stream().filter(l -> l.contains("error of one pulse")).findFirst().get();
+    double shown = Double.parseDouble(error.substring(error.indexOf('(') + 1, error.indexOf('±')));
+    assertEquals(percent, shown, 100 * content.budget().uncertainty());
+    assertTrue(lines.indexOf(error) < 5, error);
+    String cause = lines.stream().filter(l -> l.contains("largest cause")).findFirst().get();
+    assertTrue(cause.contains(content.budget().causes().get(0).cause()), cause);
+  }
+
+  @Test
   void sharesAddUpToOne() {
     ReportContent content = SampleReport.reference();
     double sum =
@@ -63,5 +77,23 @@ class TextReportTest {
   @Test
   void cautionsThatFiguresAreEstimates() {
     assertTrue(TextReport.render(SampleReport.reference()).contains("confirmed on the apparatus"));
+  }
+
+  /** exp(−(5/20)²) = 0.939 of the field is left at a quarter of the waist. */
+  @Test
+  void tellsShapeAndPlaceOfBeamsAndTheElectricField() {
+    String joined = TextReport.render(SampleReport.shaped()).replaceAll("\\s+", " ");
+    for (String part :
+        List.of(
+            "2 mW, waists 20 um along (0, 1, 0) and 30 um, sigma+ with 0.2 % orthogonal to it at 45 deg",
+            "focus at (0, 5, 0) um from the atom, 93.9 % of the peak field there",
+            "flat top of 15 kW/cm2, sigma-, along (0, 0, -1)",
+            "electric field (0, 0, 5) V/m, shifts the target by -",
+            "recoil shift +",
+            "15 kW/cm2 of unknown power")) {
+      assertTrue(joined.contains(part), part + " in " + joined);
+    }
+    String plain = TextReport.render(SampleReport.reference());
+    assertFalse(plain.contains("focus at") || plain.contains("orthogonal"), plain);
   }
 }

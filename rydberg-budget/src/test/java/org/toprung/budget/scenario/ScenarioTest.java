@@ -26,8 +26,10 @@ import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
 import org.toprung.core.drive.Beam;
 import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.Profile;
 import org.toprung.core.quantity.ElectricField;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Intensity;
 import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.MagneticField;
 import org.toprung.core.quantity.Power;
@@ -143,6 +145,80 @@ class ScenarioTest {
   void takesDirectionsOfAnyLength() {
     Scenario s = parse(ReferenceScenario.with("direction = [0, 0, 1]", "direction = [0, 0, 7.5]"));
     assertArrayEquals(new double[] {0, 0, 1}, s.drive().steps().get(0).beam().direction());
+  }
+
+  @Test
+  void readsEllipticalBeamsWithTheirFocus() {
+    String text =
+        ReferenceScenario.with(
+            "waist = \"20 um\"",
+            "waist = [\"20 um\", \"30 um\"]\nwaist_axis = [0, 2, 0]\n"
+                + "offset = [\"1 um\", \"-2 um\", \"0.1 mm\"]");
+    Beam beam = parse(text).drive().steps().get(0).beam();
+    assertEquals(
+        new Profile.Elliptical(
+            Power.milliwatts(2), Length.micrometres(20), Length.micrometres(30), 0, 1, 0),
+        beam.profile());
+    assertArrayEquals(new double[] {1e-6, -2e-6, 1e-4}, beam.focusMetres());
+  }
+
+  @Test
+  void readsAnIntensityInsteadOfPowerAndWaist() {
+    String text =
+        ReferenceScenario.with("power = \"2 mW\"", "intensity = \"300 W/cm2\"")
+            .replace("waist = \"20 um\"", "");
+    assertEquals(
+        new Profile.FlatTop(Intensity.wattsPerSquareCentimetre(300)),
+        parse(text).drive().steps().get(0).beam().profile());
+  }
+
+  @Test
+  void readsTheImpurityOfAPolarization() {
+    String key = "polarization = \"sigma+\"";
+    Beam beam =
+        parse(ReferenceScenario.with(key, "impurity = 0.01\nimpurity_phase_deg = -90\n" + key))
+            .drive()
+            .steps()
+            .get(0)
+            .beam();
+    assertEquals(0.01, beam.impurity());
+    assertEquals(-90, beam.impurityPhaseDegrees());
+    assertEquals(Polarization.SIGMA_PLUS, beam.polarization());
+    Beam plain =
+        parse(ReferenceScenario.with(key, "impurity = 0.02\n" + key)).drive().steps().get(0).beam();
+    assertEquals(0.02, plain.impurity());
+    assertEquals(0, plain.impurityPhaseDegrees());
+  }
+
+  @Test
+  void readsTheElectricField() {
+    String key = "magnetic = \"4 G\"";
+    String text =
+        ReferenceScenario.with(key, key + "\nelectric = [\"1 V/m\", \"0 V/m\", \"20 mV/cm\"]");
+    assertArrayEquals(new double[] {1, 0, 2}, parse(text).drive().electricFieldVoltsPerMetre());
+    assertArrayEquals(
+        new double[3], parse(ReferenceScenario.text()).drive().electricFieldVoltsPerMetre());
+  }
+
+  /** The commented keys of the example are read as they stand there. */
+  @Test
+  void readsTheOptionalKeysOfTheExample() throws Exception {
+    String text =
+        Files.readString(Path.of("examples", "rubidium-two-photon.toml"))
+            .replace("# electric =", "electric =")
+            .replace("# offset =", "offset =")
+            .replace("# impurity", "impurity")
+            .replace("# waist_axis", "waist_axis")
+            .replaceFirst("waist = \"25 um\"", "")
+            .replace("# waist =", "waist =");
+    Drive drive = parse(text).drive();
+    Beam beam = drive.steps().get(0).beam();
+    assertEquals(2, beam.profile().waists().size());
+    assertEquals(0.01, beam.impurity());
+    assertEquals(90, beam.impurityPhaseDegrees());
+    assertArrayEquals(new double[] {1e-6, 0, 0}, beam.focusMetres());
+    assertArrayEquals(new double[] {0, 0, 10}, drive.electricFieldVoltsPerMetre());
+    assertTrue(text.contains("# intensity = \"2 W/cm2\""));
   }
 
   @Test

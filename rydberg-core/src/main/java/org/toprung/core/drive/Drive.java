@@ -35,6 +35,7 @@ import org.toprung.core.structure.DipoleElement;
  */
 public final class Drive {
   private static final double LARGE_ADMIXTURE = 0.1;
+  private static final double LARGE_DIVERGENCE = 0.3; // rad; the next order is its square over 4
   private static final double NEGLIGIBLE = 1e-9; // of the wanted Rabi frequency
 
   /**
@@ -58,6 +59,28 @@ public final class Drive {
     public double relativeUncertainty() {
       return element.uncertaintyA0() / Math.abs(element.valueA0());
     }
+
+    /**
+     * Electric field of the beam at the nominal position of the atom.
+     *
+     * @return the amplitude E0 of E0 cos ωt, V/m
+     */
+    public double fieldVoltsPerMetre() {
+      return beam.fieldVoltsPerMetre(wavelength);
+    }
+
+    /**
+     * Field of a displaced atom over that at the nominal position.
+     *
+     * @param x displacement along lab x, m
+     * @param y displacement along lab y, m
+     * @param z displacement along lab z, m
+     * @return the factor on the field; its square is that on the intensity
+     * @throws IllegalArgumentException if the displacement is not finite
+     */
+    public double fieldFactorAt(double x, double y, double z) {
+      return beam.fieldFactorAt(x, y, z, wavelength);
+    }
   }
 
   /**
@@ -70,6 +93,15 @@ public final class Drive {
    */
   public record OtherTarget(String sublevel, Frequency rabi, Frequency detuning) {}
 
+  /**
+   * A line that a weak first laser sees.
+   *
+   * @param position what to add to the first laser's nominal frequency to be resonant
+   * @param rabi coupling to the start over 2π; its square is the strength of the line
+   * @param rydbergFraction population of the Rydberg level in the dressed state, 0 to 1
+   */
+  public record Line(Frequency position, Frequency rabi, double rydbergFraction) {}
+
   private final DriveSetup setup;
   private final Ladder ladder;
   private final Elimination elimination;
@@ -80,6 +112,9 @@ public final class Drive {
   private final double[][] stepWaveVectors; // 1/m
   private final double magneticSensitivity; // Hz/T
   private final double farShiftUncertainty; // relative
+  private final double firstLaser; // Hz
+  private final Frequency startTrapShift;
+  private final Frequency targetTrapShift;
 
   private Drive(DriveSetup setup) {
     this.setup = setup;
@@ -101,11 +136,19 @@ public final class Drive {
     }
     this.steps = List.copyOf(resolved);
     this.otherTargets = others();
-    this.warnings = nearResonances();
+    List<String> doubts = new ArrayList<>(nearResonances());
+    for (int k = 0; k < setup.steps(); k++) {
+      doubts.addAll(tightFoci(k));
+    }
+    doubts.addAll(setup.electric().warnings(setup.species(), setup.target(), setup.field()));
+    this.warnings = List.copyOf(doubts);
     this.magneticSensitivity =
         ladder.states().get(reference).hertzPerTesla()
             - ladder.states().get(ladder.start()).hertzPerTesla();
     this.farShiftUncertainty = builder.farShiftRelativeUncertainty();
+    this.firstLaser = builder.laserHertz(0);
+    this.startTrapShift = Frequency.ofHertz(builder.startTrapShiftHertz());
+    this.targetTrapShift = Frequency.ofHertz(builder.targetTrapShiftHertz());
   }
 
   /**
@@ -182,6 +225,28 @@ public final class Drive {
     return List.copyOf(others);
   }
 
+  private List<String> tightFoci(int step) {
+    List<String> found = new ArrayList<>();
+    Length wavelength = steps.get(step).wavelength();
+    for (Length waist : setup.beam(step).profile().waists()) {
+      double divergence = wavelength.metres() / (Math.PI * waist.metres());
+      if (!(divergence <= LARGE_DIVERGENCE)) {
+        found.add(
+            String.format(
+                Locale.ROOT,
+                "beam %d is focused so tightly, to a waist of %s at %.4g nm, that it diverges by %.2g"
+                    + " rad (should be below %.1g): a Gaussian beam with one polarization is a poor"
+                    + " picture of it",
+                step + 1,
+                waist,
+                wavelength.metres() * 1e9,
+                divergence,
+                LARGE_DIVERGENCE));
+      }
+    }
+    return found;
+  }
+
   private List<String> nearResonances() {
     List<String> found = new ArrayList<>();
     for (int i = 0; i < ladder.size(); i++) {
@@ -250,6 +315,29 @@ public final class Drive {
    */
   public MagneticField field() {
     return setup.field();
+  }
+
+  /**
+   * The static electric field.
+   *
+   * @return a fresh array of three components in the lab frame, V/m
+   */
+  public double[] electricFieldVoltsPerMetre() {
+    StaticField e = setup.electric();
+    return new double[] {e.x(), e.y(), e.z()};
+  }
+
+  /**
+   * Quadratic Stark shift of the wanted target in the static electric field. The wavelength of the
+   * last laser has it in already.
+   *
+   * @return the move of its energy over h, positive upwards
+   */
+  public Frequency starkShift() {
+    return Frequency.ofHertz(
+        setup
+            .electric()
+            .shiftHertz(setup.species(), setup.target().level(), setup.target().doubledM()));
   }
 
   /**
@@ -351,6 +439,55 @@ public final class Drive {
   }
 
   /**
+   * Light shift of the start by the trap, if one shines during the pulse. It is not part of {@link
+   * #startLightShift()}, but of the pulse plan.
+   *
+   * @return the move of its energy over h, positive upwards; zero without a trap
+   */
+  public Frequency startTrapShift() {
+    return startTrapShift;
+  }
+
+  /**
+   * Light shift of the wanted target by the trap, if one shines during the pulse.
+   *
+   * @return the move of its energy over h, positive upwards; zero without a trap
+   */
+  public Frequency targetTrapShift() {
+    return targetTrapShift;
+  }
+
+  /**
+   * Photon scattering of the dressed start, and where it leaves the atom.
+   *
+   * @return rates while the atom is in the start
+   */
+  public Scattering startScattering() {
+    return Scattering.of(setup, ladder, elimination.startFollowing(), firstLaser);
+  }
+
+  /**
+   * Photon scattering of the dressed target, and where it leaves the atom.
+   *
+   * @return rates while the atom is in the target
+   */
+  public Scattering targetScattering() {
+    return Scattering.of(setup, ladder, elimination.targetFollowing(), firstLaser);
+  }
+
+  /**
+   * What the light does to a ground sublevel, such as the idle state of a qubit.
+   *
+   * @param sublevel a hyperfine sublevel of the ground level
+   * @return its light shift and scattering rate; those of the start for the start
+   * @throws IllegalArgumentException if the species has no such ground sublevel
+   */
+  public GroundLight groundLight(Sublevel sublevel) {
+    setup.from(sublevel); // refuses what is no ground sublevel
+    return new LadderBuilder(setup).groundLight(sublevel);
+  }
+
+  /**
    * The largest amplitude Ω/2|Δ| of an intermediate sublevel in the dressed start or target.
    *
    * @return the admixture; second-order results are good to about its square
@@ -392,6 +529,22 @@ public final class Drive {
   }
 
   /**
+   * Recoil shift of the ladder: the kinetic energy ħ²|Σk|²/2m that an atom at rest gains, which the
+   * lasers have to deliver on top of the energies of the sublevels. Not part of the wavelengths,
+   * the detunings and the plan; absent in a trap that is deep in the Lamb-Dicke regime.
+   *
+   * @return the move of the resonance over h, never negative
+   */
+  public Frequency recoilShift() {
+    double square = 0;
+    for (double component : waveVector) {
+      square += component * component;
+    }
+    return Frequency.ofRadiansPerSecond(
+        PhysicalConstants.REDUCED_PLANCK * square / (2 * species().massKilograms()));
+  }
+
+  /**
    * Derivative of the transition frequency from start to target with the magnetic field.
    *
    * @return d(target − start)/dB over h, Hz/T
@@ -407,6 +560,16 @@ public final class Drive {
    */
   public List<OtherTarget> otherTargets() {
     return otherTargets;
+  }
+
+  /**
+   * The lines that the first laser sees when it is weak, with the other steps as strong and as near
+   * resonance as they are: exact in everything but the first step (Autler-Townes splitting).
+   *
+   * @return an immutable list by rising position
+   */
+  public List<Line> dressedLines() {
+    return DressedLines.of(ladder);
   }
 
   /**

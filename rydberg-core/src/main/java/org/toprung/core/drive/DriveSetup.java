@@ -2,11 +2,15 @@ package org.toprung.core.drive;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
+import org.toprung.core.quantity.ElectricField;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.MagneticField;
+import org.toprung.core.quantity.PhysicalConstants;
 
 /**
  * The description of a drive before it is resolved: start, steps, detuning and field.
@@ -25,30 +29,36 @@ public final class DriveSetup {
     }
   }
 
+  /** Light that shines on the atom without driving it. */
+  record Trap(Beam beam, Frequency laser) {}
+
   private final Species species;
   private final Sublevel start;
   private final List<Step> steps;
   private final List<Frequency> detunings; // one for each step but the last; null until given
-  private final MagneticField field;
+  private final Site site;
+  private final Trap trap; // null when off during the pulse
 
   private DriveSetup(
       Species species,
       Sublevel start,
       List<Step> steps,
       List<Frequency> detunings,
-      MagneticField field) {
+      Site site,
+      Trap trap) {
     this.species = species;
     this.start = start;
     this.steps = steps;
     this.detunings = detunings;
-    this.field = field;
+    this.site = site;
+    this.trap = trap;
   }
 
   static DriveSetup of(Species species) {
     if (species == null) {
       throw new IllegalArgumentException("a drive needs a species, not null");
     }
-    return new DriveSetup(species, null, List.of(), null, null);
+    return new DriveSetup(species, null, List.of(), null, Site.ORIGIN, null);
   }
 
   /**
@@ -68,7 +78,7 @@ public final class DriveSetup {
               + " must be a hyperfine sublevel of the ground level "
               + species.groundLevel());
     }
-    return new DriveSetup(species, sublevel, steps, detunings, field);
+    return new DriveSetup(species, sublevel, steps, detunings, site, trap);
   }
 
   /**
@@ -111,7 +121,7 @@ public final class DriveSetup {
     step.beam().polarizationVector();
     List<Step> longer = new ArrayList<>(steps);
     longer.add(step);
-    return new DriveSetup(species, start, List.copyOf(longer), detunings, field);
+    return new DriveSetup(species, start, List.copyOf(longer), detunings, site, trap);
   }
 
   /**
@@ -126,7 +136,7 @@ public final class DriveSetup {
    * @return a copy with these detunings
    */
   public DriveSetup detuned(Frequency... newDetunings) {
-    return new DriveSetup(species, start, steps, List.of(newDetunings), field);
+    return new DriveSetup(species, start, steps, List.of(newDetunings), site, trap);
   }
 
   /**
@@ -143,7 +153,54 @@ public final class DriveSetup {
               + newField
               + " must be at least 0: it points along lab z by convention");
     }
-    return new DriveSetup(species, start, steps, detunings, newField);
+    return new DriveSetup(species, start, steps, detunings, site.with(newField), trap);
+  }
+
+  /**
+   * Sets a static electric field, which shifts the Rydberg sublevels: {@link Drive#starkShift()}.
+   *
+   * @param ex component along lab x
+   * @param ey component along lab y
+   * @param ez component along lab z, the magnetic field
+   * @return a copy in this electric field
+   */
+  public DriveSetup inElectricField(ElectricField ex, ElectricField ey, ElectricField ez) {
+    StaticField newField =
+        new StaticField(ex.voltsPerMetre(), ey.voltsPerMetre(), ez.voltsPerMetre());
+    return new DriveSetup(species, start, steps, detunings, site.with(newField), trap);
+  }
+
+  /**
+   * Moves the atom from the lab origin, where the beams are focused unless they say otherwise.
+   *
+   * @param x position along lab x
+   * @param y position along lab y
+   * @param z position along lab z
+   * @return a copy with the atom there; the beams of the resolved drive count their focus from it
+   */
+  public DriveSetup atomAt(Length x, Length y, Length z) {
+    Site moved = site.at(x.metres(), y.metres(), z.metres());
+    return new DriveSetup(species, start, steps, detunings, moved, trap);
+  }
+
+  /**
+   * Leaves a trap on during the pulse: its light moves the levels, but drives nothing. The lasers
+   * keep their frequencies; the pulse plan follows the moved levels.
+   *
+   * @param beam the trap beam at the atom, with polarization and direction
+   * @param wavelength its vacuum wavelength, far from every transition of the ladder
+   * @return a copy with this trap
+   * @throws IllegalArgumentException if the wavelength is not positive or the beam cannot have its
+   *     polarization
+   * @throws IllegalStateException if the beam lacks polarization or direction
+   */
+  public DriveSetup trappedBy(Beam beam, Length wavelength) {
+    if (!(wavelength.metres() > 0)) {
+      throw new IllegalArgumentException("trap wavelength " + wavelength + " must be positive");
+    }
+    beam.polarizationVector();
+    Frequency laser = Frequency.ofHertz(PhysicalConstants.SPEED_OF_LIGHT / wavelength.metres());
+    return new DriveSetup(species, start, steps, detunings, site, new Trap(beam, laser));
   }
 
   /**
@@ -156,7 +213,7 @@ public final class DriveSetup {
    */
   public Drive resolve() {
     requireGiven(start, "a start: call from(...)");
-    requireGiven(field, "a magnetic field: call in(...)");
+    requireGiven(field(), "a magnetic field: call in(...)");
     boolean climbs = !steps.isEmpty() && steps.size() <= MAX_STEPS;
     for (int k = 0; climbs && k < steps.size(); k++) {
       climbs = steps.get(k).target() == null ^ k == steps.size() - 1;
@@ -206,8 +263,9 @@ public final class DriveSetup {
     return steps.get(steps.size() - 1).target();
   }
 
+  /** The beam of a step as the atom sees it: its focus counted from the atom. */
   Beam beam(int step) {
-    return steps.get(step).beam();
+    return site.sees(steps.get(step).beam());
   }
 
   Frequency detuning(int step) {
@@ -215,6 +273,14 @@ public final class DriveSetup {
   }
 
   MagneticField field() {
-    return field;
+    return site.magnetic();
+  }
+
+  StaticField electric() {
+    return site.electric();
+  }
+
+  Optional<Trap> trap() {
+    return Optional.ofNullable(trap).map(t -> new Trap(site.sees(t.beam()), t.laser()));
   }
 }

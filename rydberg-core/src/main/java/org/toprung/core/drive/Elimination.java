@@ -42,8 +42,8 @@ public final class Elimination {
   private final double startScattering; // 1/s
   private final double targetScattering; // 1/s
   private final double admixture;
-  private final double[] startAdmixture; // squared amplitude by state
-  private final double[] targetAdmixture;
+  private final double[][] startFollowing; // amplitudes by state, real and imaginary
+  private final double[][] targetFollowing;
 
   private Elimination(Ladder ladder) {
     int n = ladder.size();
@@ -52,6 +52,11 @@ public final class Elimination {
     double[] im = new double[n * n];
     ladder.hamiltonianHertz(LadderSetting.nominal(ladder.steps()), re, im);
     ladder.addLossHertz(0, im);
+    // on resonance both ends lie where levels outside the ladder have moved the start
+    double energy = re[ladder.start() * n + ladder.start()];
+    for (int i = 0; i < n; i++) {
+      re[i * n + i] -= energy;
+    }
     Following following = new Following(ladder, re, im);
     double[][] s = following.of(ladder.start());
     int[] wanted = ladder.wanted();
@@ -93,15 +98,15 @@ public final class Elimination {
     }
     startShift[0] += following.shift(s);
     targetShift[last] += following.shift(x);
-    this.startAdmixture = following.populations(s);
-    this.targetAdmixture = following.populations(x);
+    this.startFollowing = s;
+    this.targetFollowing = x;
     double largest = 0;
     double fromStart = 0;
     double fromTarget = 0;
     for (int i = 0; i < n; i++) {
-      largest = Math.max(largest, Math.max(startAdmixture[i], targetAdmixture[i]));
-      fromStart += ladder.states().get(i).decayPerSecond() * startAdmixture[i];
-      fromTarget += ladder.states().get(i).decayPerSecond() * targetAdmixture[i];
+      largest = Math.max(largest, Math.max(startAdmixture(i), targetAdmixture(i)));
+      fromStart += ladder.states().get(i).decayPerSecond() * startAdmixture(i);
+      fromTarget += ladder.states().get(i).decayPerSecond() * targetAdmixture(i);
     }
     this.startScattering = fromStart;
     this.targetScattering = fromTarget;
@@ -194,14 +199,6 @@ public final class Elimination {
         }
       }
       return sum;
-    }
-
-    double[] populations(double[][] x) {
-      double[] p = new double[n];
-      for (int i : q) {
-        p[i] = x[0][i] * x[0][i] + x[1][i] * x[1][i];
-      }
-      return p;
     }
   }
 
@@ -305,7 +302,7 @@ public final class Elimination {
    * @return the population
    */
   public double startAdmixture(int state) {
-    return startAdmixture[state];
+    return population(startFollowing, state);
   }
 
   /**
@@ -315,6 +312,20 @@ public final class Elimination {
    * @return the population
    */
   public double targetAdmixture(int state) {
-    return targetAdmixture[state];
+    return population(targetFollowing, state);
+  }
+
+  private static double population(double[][] x, int state) {
+    return x[0][state] * x[0][state] + x[1][state] * x[1][state];
+  }
+
+  /** Amplitudes of the intermediate sublevels in the dressed start: real and imaginary parts. */
+  double[][] startFollowing() {
+    return startFollowing;
+  }
+
+  /** Amplitudes of the intermediate sublevels in the dressed target: real and imaginary parts. */
+  double[][] targetFollowing() {
+    return targetFollowing;
   }
 }

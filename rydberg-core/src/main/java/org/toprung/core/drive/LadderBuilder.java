@@ -2,6 +2,7 @@ package org.toprung.core.drive;
 
 import java.util.ArrayDeque;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.Deque;
 import java.util.HashMap;
@@ -16,7 +17,10 @@ import org.toprung.angular.HalfInteger;
 import org.toprung.angular.SphericalComponents;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
+import org.toprung.core.atom.Sublevel;
 import org.toprung.core.quantity.Estimate;
+import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.structure.DipoleElement;
 import org.toprung.core.structure.DipoleElements;
@@ -50,7 +54,10 @@ final class LadderBuilder {
   private final List<Integer> rungs = new ArrayList<>();
   private final List<Double> energies = new ArrayList<>(); // Hz, rotating frame
   private final List<Set<Level>> levels = new ArrayList<>(); // by rung
+  private final Map<String, Estimate> knownFarShifts = new HashMap<>();
   private double farShiftRelativeUncertainty;
+  private double startTrapShift; // Hz
+  private double targetTrapShift; // Hz
 
   LadderBuilder(DriveSetup setup) {
     this.setup = setup;
@@ -60,7 +67,6 @@ final class LadderBuilder {
     this.field = new double[steps];
     this.light = new SphericalComponents[steps];
     for (int k = 0; k < steps; k++) {
-      field[k] = setup.beam(k).peakFieldVoltsPerMetre();
       light[k] = setup.beam(k).polarizationVector().componentsAbout(0, 0, 1);
       element(k); // refuses a forbidden step by name before any sum is attempted
     }
@@ -72,6 +78,9 @@ final class LadderBuilder {
       detuning[r] = detuning[r - 1] + setup.detuning(r - 1).hertz();
     }
     this.laser = lasers();
+    for (int k = 0; k < steps; k++) {
+      field[k] = fieldAtAtom(k);
+    }
     addRung(0, Set.of(named(0)), -startEnergy);
     for (int r = 1; r < steps; r++) {
       int rung = r;
@@ -81,13 +90,54 @@ final class LadderBuilder {
     }
     Set<Level> target = new TreeSet<>(Comparator.comparing(Level::toString));
     fineStructure(named(steps)).stream().filter(this::canBeReached).forEach(target::add);
-    addRung(steps, target, -zeeman(setup.target().doubledM()));
+    addRung(steps, target, -fieldShift());
+    setup.trap().ifPresent(this::shiftByTrap);
+  }
+
+  /**
+   * Moves every level by the trap light; the start stays at zero, the lasers at their frequencies.
+   */
+  private void shiftByTrap(DriveSetup.Trap trap) {
+    double field = trap.beam().fieldVoltsPerMetre(wavelength(trap.laser().hertz()));
+    SphericalComponents polarization = trap.beam().polarizationVector().componentsAbout(0, 0, 1);
+    FarLightShift shifts = FarLightShift.of(species);
+    Map<String, Double> known = new HashMap<>();
+    double[] moved = new double[states.size()];
+    for (int i = 0; i < moved.length; i++) {
+      ProductState s = states.get(i);
+      for (int c = 0; c < s.amplitude().length; c++) {
+        int tMj = s.doubledMj()[c];
+        double perSquare =
+            known.computeIfAbsent(
+                s.level() + " " + tMj,
+                key ->
+                    shifts
+                        .hertzPerFieldSquared(
+                            s.level(), tMj, trap.laser().hertz(), polarization, Set.of())
+                        .value());
+        moved[i] += s.amplitude()[c] * s.amplitude()[c] * perSquare * field * field;
+      }
+      if (isWanted(i)) {
+        targetTrapShift = moved[i];
+      }
+    }
+    startTrapShift = moved[indexOfStart()];
+    for (int i = 0; i < moved.length; i++) {
+      energies.set(i, energies.get(i) + moved[i] - startTrapShift);
+    }
+  }
+
+  double startTrapShiftHertz() {
+    return startTrapShift;
+  }
+
+  double targetTrapShiftHertz() {
+    return targetTrapShift;
   }
 
   private double[] lasers() {
     double[] frequencies = new double[steps];
-    double left =
-        transition(named(0), named(steps)) - startEnergy + zeeman(setup.target().doubledM());
+    double left = transition(named(0), named(steps)) - startEnergy + fieldShift();
     for (int k = 0; k < steps - 1; k++) {
       frequencies[k] = transition(named(k), named(k + 1)) + setup.detuning(k).hertz();
       if (k == 0) {
@@ -113,6 +163,30 @@ final class LadderBuilder {
     return frequencies;
   }
 
+  private static Length wavelength(double laserHertz) {
+    return Length.ofMetres(PhysicalConstants.SPEED_OF_LIGHT / laserHertz);
+  }
+
+  private double fieldAtAtom(int step) {
+    Beam beam = setup.beam(step);
+    double atAtom = beam.fieldVoltsPerMetre(wavelength(laser[step]));
+    if (!(atAtom > NEGLIGIBLE * beam.peakFieldVoltsPerMetre())) {
+      double[] f = beam.focusMetres();
+      throw new IllegalArgumentException(
+          String.format(
+              Locale.ROOT,
+              "beam %d misses the atom: focused at (%.6g, %.6g, %.6g) um from it, it has %.2g of its"
+                  + " peak field there (allowed: more than %.0e)",
+              step + 1,
+              f[0] * 1e6,
+              f[1] * 1e6,
+              f[2] * 1e6,
+              atAtom / beam.peakFieldVoltsPerMetre(),
+              NEGLIGIBLE));
+    }
+    return atAtom;
+  }
+
   private String detunings() {
     List<String> given = new ArrayList<>();
     for (int k = 0; k < steps - 1; k++) {
@@ -132,7 +206,7 @@ final class LadderBuilder {
       for (ProductState s : sublevels) {
         states.add(s);
         rungs.add(rung);
-        energies.add(base + s.energyHertz());
+        energies.add(base + s.energyHertz() + (rung < steps ? 0 : stark(level, s.doubledMj()[0])));
       }
     }
   }
@@ -157,13 +231,19 @@ final class LadderBuilder {
     return species.energyHertz(to).value() - species.energyHertz(from).value();
   }
 
-  /** Electronic Zeeman shift of a target sublevel, Hz. */
-  private double zeeman(int doubledMj) {
-    return 0.5
-        * doubledMj
-        * species.gJ(named(steps))
-        * PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA
-        * setup.field().tesla();
+  /** Electronic Zeeman shift and Stark shift of the wanted target, Hz. */
+  private double fieldShift() {
+    double zeeman =
+        0.5
+            * setup.target().doubledM()
+            * species.gJ(named(steps))
+            * PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA
+            * setup.field().tesla();
+    return zeeman + stark(named(steps), setup.target().doubledM());
+  }
+
+  private double stark(Level level, int doubledMj) {
+    return setup.electric().shiftHertz(species, level, doubledMj);
   }
 
   /** The named level itself, or a partner that the lasers are not much farther from. */
@@ -226,7 +306,7 @@ final class LadderBuilder {
     for (int w : ladder.wanted()) {
       if (elimination.rabiHertz(w) > strongest) {
         strongest = elimination.rabiHertz(w);
-        reference = ladder.states().get(w).energyHertz();
+        reference = ladder.states().get(w).energyHertz() - (targetTrapShift - startTrapShift);
       }
     }
     double scale = 1;
@@ -346,8 +426,6 @@ final class LadderBuilder {
   }
 
   private double[][] farShifts(Map<Integer, Integer> kept, int start, int wanted) {
-    FarLightShift shifts = FarLightShift.of(species);
-    Map<String, Estimate> known = new HashMap<>();
     double[][] far = new double[kept.size()][steps];
     double size = 0;
     double uncertainty = 0;
@@ -357,28 +435,41 @@ final class LadderBuilder {
       if (rung > 0 && rung < steps) {
         continue;
       }
-      for (int k = 0; k < steps; k++) {
-        int step = k;
-        double squared = field[k] * field[k];
-        for (int c = 0; c < s.amplitude().length; c++) {
-          int tMj = s.doubledMj()[c];
-          Estimate e =
-              known.computeIfAbsent(
-                  s.level() + " " + tMj + " " + k,
-                  key ->
-                      shifts.hertzPerFieldSquared(
-                          s.level(), tMj, laser[step], light[step], inLadder(rung, step)));
-          double weight = s.amplitude()[c] * s.amplitude()[c];
-          far[entry.getValue()][k] += weight * e.value() * squared;
-          if (entry.getKey() == start || entry.getKey() == wanted) {
-            size += weight * Math.abs(e.value()) * squared;
-            uncertainty += weight * e.uncertainty() * squared;
+      far[entry.getValue()] = farShiftHertz(s, rung);
+      if (entry.getKey() == start || entry.getKey() == wanted) {
+        for (int k = 0; k < steps; k++) {
+          for (int c = 0; c < s.amplitude().length; c++) {
+            double weight = s.amplitude()[c] * s.amplitude()[c] * field[k] * field[k];
+            Estimate e = farShift(s.level(), s.doubledMj()[c], rung, k);
+            size += weight * Math.abs(e.value());
+            uncertainty += weight * e.uncertainty();
           }
         }
       }
     }
     farShiftRelativeUncertainty = size > 0 ? uncertainty / size : 0;
     return far;
+  }
+
+  /** Shift of a state of the first or last rung by levels outside the ladder, Hz by step. */
+  private double[] farShiftHertz(ProductState s, int rung) {
+    double[] shift = new double[steps];
+    for (int k = 0; k < steps; k++) {
+      for (int c = 0; c < s.amplitude().length; c++) {
+        double weight = s.amplitude()[c] * s.amplitude()[c] * field[k] * field[k];
+        shift[k] += weight * farShift(s.level(), s.doubledMj()[c], rung, k).value();
+      }
+    }
+    return shift;
+  }
+
+  private Estimate farShift(Level level, int doubledMj, int rung, int step) {
+    return knownFarShifts.computeIfAbsent(
+        level + " " + doubledMj + " " + step,
+        key ->
+            FarLightShift.of(species)
+                .hertzPerFieldSquared(
+                    level, doubledMj, laser[step], light[step], inLadder(rung, step)));
   }
 
   /** The levels whose resonant coupling to a rung by a beam the ladder itself holds. */
@@ -390,6 +481,41 @@ final class LadderBuilder {
       return levels.get(steps - 1);
     }
     return Set.of();
+  }
+
+  /** What the beams do to a ground sublevel that need not be the start. */
+  GroundLight groundLight(Sublevel sublevel) {
+    int index = -1;
+    for (int i = 0; i < states.size(); i++) {
+      ProductState s = states.get(i);
+      if (rungs.get(i) == 0
+          && s.doubledF() == sublevel.doubledF()
+          && s.doubledM() == sublevel.doubledM()) {
+        index = i;
+      }
+    }
+    double[] shift = farShiftHertz(states.get(index), 0);
+    double scattering = 0;
+    Lifetimes lifetimes = Lifetimes.of(species);
+    for (int u = 0; u < states.size(); u++) {
+      if (rungs.get(u) != 1) {
+        continue;
+      }
+      double[] rabi = rabi(states.get(index), states.get(u), 0);
+      double square = rabi[0] * rabi[0] + rabi[1] * rabi[1];
+      if (square == 0) {
+        continue;
+      }
+      double away = energies.get(index) - energies.get(u);
+      double rate =
+          steps == 1 ? 0 : lifetimes.spontaneousRatePerSecond(states.get(u).level()).value();
+      double width = rate / (2 * Math.PI);
+      double denominator = 4 * away * away + width * width;
+      shift[0] += square * away / denominator;
+      scattering += rate * square / denominator;
+    }
+    return new GroundLight(
+        sublevel, Arrays.stream(shift).mapToObj(Frequency::ofHertz).toList(), scattering);
   }
 
   private Ladder assemble(

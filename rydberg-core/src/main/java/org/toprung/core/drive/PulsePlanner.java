@@ -32,7 +32,9 @@ public final class PulsePlanner {
           "pulse area " + areaRadians + " rad must be positive and finite");
     }
     Elimination second = Elimination.of(ladder);
-    double offset = second.targetShiftHertz() - second.startShiftHertz();
+    double eliminated =
+        second.targetShiftHertz() - second.startShiftHertz() + targetEnergy(ladder, second);
+    double offset = eliminated;
     double rabi = second.rabiHertz();
     try {
       for (int i = 0; i < ITERATIONS; i++) {
@@ -44,13 +46,24 @@ public final class PulsePlanner {
         }
       }
     } catch (ArithmeticException notSeparable) {
-      offset = second.targetShiftHertz() - second.startShiftHertz();
+      offset = eliminated;
       rabi = second.rabiHertz();
     }
     return new PulsePlan(
         Time.ofSeconds(areaRadians / (2 * Math.PI * rabi)),
         Frequency.ofHertz(offset),
         Frequency.ofHertz(rabi));
+  }
+
+  /** Energy of the wanted sublevel that couples most: a trap moves it off bare resonance. */
+  private static double targetEnergy(Ladder ladder, Elimination second) {
+    int strongest = ladder.wanted()[0];
+    for (int w : ladder.wanted()) {
+      if (second.rabiHertz(w) > second.rabiHertz(strongest)) {
+        strongest = w;
+      }
+    }
+    return ladder.states().get(strongest).energyHertz();
   }
 
   /** Rabi frequency and remaining gap target − start of the dressed two-level system, Hz. */

@@ -15,6 +15,14 @@ enum Dimension {
   FREQUENCY(
       "frequency", unit("THz", 12), unit("GHz", 9), unit("MHz", 6), unit("kHz", 3), unit("Hz", 0)),
   POWER("power", unit("W", 0), unit("mW", -3), unit("uW", -6), unit("nW", -9)),
+  INTENSITY(
+      "intensity",
+      unit("kW/cm2", 7),
+      unit("W/mm2", 6),
+      unit("W/cm2", 4),
+      unit("mW/mm2", 3),
+      unit("mW/cm2", 1),
+      unit("W/m2", 0)),
   LENGTH("length", unit("m", 0), unit("cm", -2), unit("mm", -3), unit("um", -6), unit("nm", -9)),
   MAGNETIC_FIELD(
       "magnetic field",

@@ -17,14 +17,28 @@ import org.toprung.core.quantity.Estimate;
  * <p>Immutable and thread-safe.
  */
 public final class StarkShift {
+  private static final int REACH = 6; // in n, beyond the nearest level of any defect
+
   private final double scalar; // Hz/(V/m)²
   private final double tensor; // Hz/(V/m)², with the factor of m
   private final double relativeUncertainty;
+  private final Species species;
+  private final Level level;
+  private final double[] bias; // V/m; shifts are counted from it
 
-  private StarkShift(double scalar, double tensor, double relativeUncertainty) {
+  private StarkShift(
+      double scalar,
+      double tensor,
+      double relativeUncertainty,
+      Species species,
+      Level level,
+      double[] bias) {
     this.scalar = scalar;
     this.tensor = tensor;
     this.relativeUncertainty = relativeUncertainty;
+    this.species = species;
+    this.level = level;
+    this.bias = bias;
   }
 
   /**
@@ -53,7 +67,20 @@ public final class StarkShift {
               * (3 * m * m - j * (j + 1))
               / (j * (2 * j - 1));
     }
-    return new StarkShift(alpha0.value(), alpha2, alpha0.relative());
+    return new StarkShift(alpha0.value(), alpha2, alpha0.relative(), species, level, new double[3]);
+  }
+
+  /**
+   * The shift that a change of field makes in a field that is there already.
+   *
+   * @param ex component of the field along lab x, V/m
+   * @param ey component of the field along lab y, V/m
+   * @param ez component of the field along lab z, the quantization axis, V/m
+   * @return the shift as a function of what is added to this field, zero where nothing is
+   */
+  public StarkShift about(double ex, double ey, double ez) {
+    return new StarkShift(
+        scalar, tensor, relativeUncertainty, species, level, new double[] {ex, ey, ez});
   }
 
   /**
@@ -65,6 +92,10 @@ public final class StarkShift {
    * @return the shift over h, positive upwards, Hz
    */
   public double hertz(double ex, double ey, double ez) {
+    return total(bias[0] + ex, bias[1] + ey, bias[2] + ez) - total(bias[0], bias[1], bias[2]);
+  }
+
+  private double total(double ex, double ey, double ez) {
     double square = ex * ex + ey * ey + ez * ez;
     return -0.5 * (scalar * square + tensor * 0.5 * (3 * ez * ez - square));
   }
@@ -76,5 +107,20 @@ public final class StarkShift {
    */
   public double relativeUncertainty() {
     return relativeUncertainty;
+  }
+
+  /**
+   * Distance to the nearest level that a dipole couples with this one. With a single such level at
+   * the distance D a shift S is quadratic to about S/D of itself: exactly, it is √(D²/4 + SD) −
+   * D/2.
+   *
+   * @return the distance, Hz, positive
+   */
+  public double distanceToOtherParityHertz() {
+    double energy = species.energyHertz(level).value();
+    return Partners.of(species, level, level.n() + REACH).stream()
+        .mapToDouble(other -> Math.abs(species.energyHertz(other).value() - energy))
+        .min()
+        .orElseThrow();
   }
 }

@@ -57,10 +57,10 @@ class DriveTest {
     double detuning = -middle.energyHertz();
     double one = drive.steps().get(0).rabi().hertz();
     double two = drive.steps().get(1).rabi().hertz();
-    assertEquals(one * two / (2 * detuning), drive.rabi().hertz(), 1e-5 * drive.rabi().hertz());
+    assertEquals(one * two / (2 * detuning), drive.rabi().hertz(), 1e-4 * drive.rabi().hertz());
     int start = drive.ladder().start();
     double near = drive.startLightShift(0).hertz() - drive.ladder().farShiftHertz(start, 0);
-    assertEquals(one * one / (4 * detuning), near, 1e-5 * near);
+    assertEquals(one * one / (4 * detuning), near, 1e-4 * near);
     double q = two / one;
     double gamma = middle.decayPerSecond() / (2 * Math.PI);
     double tau = 1 / (2 * drive.rabi().hertz());
@@ -97,11 +97,13 @@ class DriveTest {
                 0.5)
             .resolve();
     double expected = base.rabi().hertz() * Math.sqrt(first * second);
-    assertEquals(expected, scaled.rabi().hertz(), 1e-9 * expected);
+    // the far-off-resonant shift of the start, linear in power, moves its detuning by 1e-4 of
+    // itself
+    assertEquals(expected, scaled.rabi().hertz(), 5e-4 * expected);
     assertEquals(
         base.startLightShift(0).hertz() * first,
         scaled.startLightShift(0).hertz(),
-        1e-9 * Math.abs(scaled.startLightShift(0).hertz()));
+        5e-4 * Math.abs(scaled.startLightShift(0).hertz()));
   }
 
   /** Turning the whole apparatus about the field changes no rate. */

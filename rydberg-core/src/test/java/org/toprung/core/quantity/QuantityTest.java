@@ -23,6 +23,7 @@ class QuantityTest {
           Frequency::ofRadiansPerSecond,
           Frequency::gigahertz,
           Power::ofWatts,
+          Intensity::ofWattsPerSquareMetre,
           Length::ofMetres,
           MagneticField::ofTesla,
           ElectricField::ofVoltsPerMetre,
@@ -60,6 +61,10 @@ class QuantityTest {
   void eachClassReadsItsUnits() {
     assertEquals(1.2e9, Frequency.parse("1.2 GHz").hertz());
     assertEquals(2e-3, Power.parse("2 mW").watts());
+    assertEquals(2e4, Intensity.parse("2 W/cm2").wattsPerSquareMetre());
+    assertEquals(2e7, Intensity.parse("2 kW/cm2").wattsPerSquareMetre());
+    assertEquals(2e3, Intensity.parse("2 mW/mm2").wattsPerSquareMetre());
+    assertEquals(2, Intensity.parse("2 W/m2").wattsPerSquareMetre());
     assertEquals(20e-6, Length.parse("20 um").metres());
     assertEquals(420.298e-9, Length.parse("420.298 nm").metres());
     assertEquals(0.1, ElectricField.parse("1 mV/cm").voltsPerMetre());
@@ -73,6 +78,9 @@ class QuantityTest {
     assertEquals(Frequency.parse("1.2 MHz"), Frequency.megahertz(1.2));
     assertEquals(Frequency.parse("1.2 THz"), Frequency.terahertz(1.2));
     assertEquals(Power.parse("1.2 uW"), Power.microwatts(1.2));
+    assertEquals(Intensity.parse("1.2 W/mm2"), Intensity.wattsPerSquareMillimetre(1.2));
+    assertEquals(Intensity.parse("1.2 W/cm2"), Intensity.wattsPerSquareCentimetre(1.2));
+    assertEquals(Intensity.parse("1.2 mW/cm2"), Intensity.milliwattsPerSquareCentimetre(1.2));
     assertEquals(Length.parse("1.2 nm"), Length.nanometres(1.2));
     assertEquals(MagneticField.parse("1.2 mG"), MagneticField.milligauss(1.2));
     assertEquals(MagneticField.parse("1.2 G"), MagneticField.gauss(1.2));
@@ -112,6 +120,7 @@ class QuantityTest {
     roundTrip(MagneticField.ofTesla(si * 1e-24), MagneticField::parse);
     roundTrip(ElectricField.ofVoltsPerMetre(si), ElectricField::parse);
     roundTrip(Time.ofSeconds(si * 1e-28), Time::parse);
+    roundTrip(Intensity.ofWattsPerSquareMetre(si), Intensity::parse);
     roundTrip(Power.ofWatts(si * 1e-15), Power::parse);
     roundTrip(Temperature.ofKelvin(Math.abs(si) * 1e-25), Temperature::parse);
   }

@@ -1,0 +1,133 @@
+package org.toprung.budget.report;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.stream.DoubleStream;
+import org.toprung.budget.CauseEntry;
+import org.toprung.budget.Check;
+
+/**
+ * What a chart shows: which rows, on which axis, and what has to be said because no bar can show
+ * it. A logarithmic axis has no place for zero and negative errors, and none for very small ones.
+ *
+ * @param title names the scenario
+ * @param subtitles what was driven, and whether the simulation agrees
+ * @param rows rows from the top down: the total, the simulated total, then causes
+ * @param scale the axis
+ * @param notes what the bars do not tell, in sentences
+ */
+record ChartContent(
+    String title, List<String> subtitles, List<Row> rows, DecadeScale scale, List<String> notes) {
+
+  /** What a row stands for. */
+  enum Kind {
+    TOTAL,
+    SIMULATED,
+    CAUSE
+  }
+
+  /** One error with its standard uncertainty. */
+  record Row(Kind kind, String name, double error, double uncertainty) {
+    Row {
+      if (!(Math.abs(error) <= Double.MAX_VALUE && uncertainty <= Double.MAX_VALUE)) {
+        throw new IllegalStateException(
+            name + " is " + error + " ± " + uncertainty + ", which is not finite");
+      }
+    }
+
+    String value() {
+      return Figures.probability(error) + " ± " + Figures.uncertainty(uncertainty);
+    }
+  }
+
+  static ChartContent of(ReportContent content) {
+    return of(
+        content.title(),
+        content.budget().drive() + ", pulse of " + Figures.of(content.budget().plan().duration()),
+        new Row(Kind.TOTAL, "Total", content.budget().total(), content.budget().uncertainty()),
+        content.check(),
+        content.budget().causes(),
+        content.budget().notAssessed());
+  }
+
+  static ChartContent of(
+      String title,
+      String pulse,
+      Row total,
+      Check check,
+      List<CauseEntry> causes,
+      List<String> notAssessed) {
+    Row simulated =
+        new Row(Kind.SIMULATED, "Simulated total", check.total(), check.standardError());
+    List<Row> ranked =
+        causes.stream()
+            .map(c -> new Row(Kind.CAUSE, c.cause(), c.error(), c.uncertainty()))
+            .toList();
+    List<Row> rows = new ArrayList<>(List.of(total, simulated));
+    rows.addAll(ranked);
+    DecadeScale scale =
+        DecadeScale.covering(
+            DoubleStream.concat(
+                    rows.stream().mapToDouble(r -> r.error()),
+                    DoubleStream.of(
+                        total.error() + total.uncertainty(),
+                        simulated.error() + simulated.uncertainty()))
+                .toArray());
+    rows.removeIf(r -> r.kind() == Kind.CAUSE && !scale.reaches(r.error()));
+    String agreement =
+        String.format(
+            Locale.ROOT,
+            "The simulation (%d shots, seed %d) %s the total.",
+            check.shots(),
+            check.seed(),
+            check.agrees() ? "agrees with" : "DISAGREES with");
+    return new ChartContent(
+        title,
+        List.of(pulse, agreement),
+        List.copyOf(rows),
+        scale,
+        notes(ranked, scale, notAssessed));
+  }
+
+  private static List<String> notes(List<Row> causes, DecadeScale scale, List<String> notAssessed) {
+    List<String> notes = new ArrayList<>();
+    notes.add(
+        "Whiskers and ±: one standard uncertainty from the atomic values; for the simulation one"
+            + " standard error.");
+    List<Row> undrawn = causes.stream().filter(r -> !scale.reaches(r.error())).toList();
+    note(
+        notes,
+        String.format(Locale.ROOT, "Too small to draw, at most %.0e", scale.lowest()),
+        undrawn.stream().filter(r -> !isNegative(r)).map(ChartContent::named).toList());
+    note(
+        notes,
+        "Negative, so not drawn; lessening the total",
+        undrawn.stream().filter(ChartContent::isNegative).map(ChartContent::named).toList());
+    note(notes, "Not assessed, so not in the total", notAssessed);
+    return List.copyOf(notes);
+  }
+
+  private static void note(List<String> notes, String start, List<String> items) {
+    if (!items.isEmpty()) {
+      notes.add(start + ": " + String.join("; ", items) + ".");
+    }
+  }
+
+  private static boolean isNegative(Row row) {
+    return Figures.probability(row.error()).startsWith("-");
+  }
+
+  private static String named(Row row) {
+    return row.name() + " (" + Figures.probability(row.error()) + ")";
+  }
+
+  /** The whole chart in words. */
+  String description() {
+    StringBuilder text = new StringBuilder("Error of one pulse as a probability, by cause.");
+    subtitles.forEach(s -> text.append(' ').append(s));
+    rows.forEach(r -> text.append(' ').append(r.name()).append(": ").append(r.value()).append('.'));
+    notes.forEach(n -> text.append(' ').append(n));
+    return text.toString();
+  }
+}
