@@ -48,7 +48,7 @@ class AuditTest {
   }
 
   // validation: measured lifetimes of first resonance lines follow from measured elements to 0.5 %,
-  // those of second ones, with computed elements in the sum, to 4 %
+  // those of second ones too, with computed elements in the sum, but for Rb 6P3/2 with 3 %
   @Test
   void lifetimesFollowFromElements() {
     List<Audit.Finding> lifetimes =
@@ -57,19 +57,23 @@ class AuditTest {
     for (Audit.Finding finding : lifetimes) {
       assertTrue(finding.relative() < 0.04, finding.toString());
     }
-    assertEquals(11, lifetimes.stream().filter(f -> f.relative() < 0.008).count());
+    assertEquals(14, lifetimes.stream().filter(f -> f.relative() < 0.008).count());
   }
 
   @Test
-  void aWrongValueIsTheWorstFinding(@TempDir Path directory) throws IOException {
+  void aWrongValueDisagreesWithTheElementsAndWithTheOldOne(@TempDir Path directory)
+      throws IOException {
     Path file = directory.resolve("wrong.csv");
     Files.writeString(
         file,
         "species,quantity,level,value,uncertainty,unit,source,memory,chosen_because\n"
             + "K,lifetime,4P1/2,29.69,0.05,ns,\"A slip of the pen\",no,\n");
-    Audit.Finding worst = Audit.of(Catalogue.bundled().with(file)).findings().get(0);
-    assertEquals("K-39", worst.species());
-    assertEquals("4P1/2", worst.subject());
-    assertTrue(worst.sigmas() > 10 && worst.origin().endsWith("wrong.csv:2"), worst.toString());
+    List<Audit.Finding> findings = Audit.of(Catalogue.bundled().with(file)).findings();
+    for (int i = 0; i < 2; i++) {
+      assertEquals("K-39", findings.get(i).species());
+      assertEquals("4P1/2", findings.get(i).subject());
+      assertTrue(findings.get(i).sigmas() > 10);
+    }
+    assertTrue(findings.stream().limit(2).anyMatch(f -> f.origin().endsWith("wrong.csv:2")));
   }
 }
