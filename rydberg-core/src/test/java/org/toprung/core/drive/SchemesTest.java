@@ -560,4 +560,81 @@ class SchemesTest {
                 .step(Level.parse("5P3/2"), beam)
                 .quadrupoleStep(Sublevel.fine("60D5/2", 0.5), beam));
   }
+
+  /**
+   * Sum rule: squared couplings to all sublevels of both fine-structure levels, added over the
+   * three polarizations, do not depend on the mF of the start (completeness and Wigner-Eckart).
+   */
+  @Property(tries = 7, seed = "43")
+  void couplesEveryStartEquallyInUnpolarizedLight(@ForAll @IntRange(min = -3, max = 3) int m) {
+    double reference = unpolarized(4, 0);
+    assertEquals(reference, unpolarized(4, m), 1e-6 * reference);
+    assertEquals(reference, unpolarized(3, m), 1e-6 * reference);
+  }
+
+  private static double unpolarized(int f, int m) {
+    double sum = 0;
+    for (Polarization polarization : List.of(SIGMA_MINUS, PI, SIGMA_PLUS)) {
+      int q = polarization == PI ? 0 : polarization == SIGMA_PLUS ? 1 : -1;
+      Drive drive =
+          Drive.of(Species.CAESIUM_133)
+              .from(Sublevel.hyperfine("6S1/2", f, m))
+              .step(Sublevel.fine("40P3/2", m + q > 0 ? 0.5 : -0.5), beam(50, 15, polarization))
+              .in(gauss(1))
+              .resolve();
+      double wanted = drive.rabi().hertz();
+      sum += wanted * wanted;
+      for (Drive.OtherTarget other : drive.otherTargets()) {
+        sum += other.rabi().hertz() * other.rabi().hertz();
+      }
+    }
+    return sum;
+  }
+
+  @Test
+  void doublesEveryOnePhotonRabiFrequencyAtFourTimesThePower() {
+    Drive once = infrared(2, 3).resolve();
+    Drive four =
+        Drive.of(Species.RUBIDIUM_87)
+            .from(Sublevel.hyperfine("5S1/2", 2, 2))
+            .step(Level.parse("5P3/2"), beam(0.02, 100, SIGMA_PLUS))
+            .step(Level.parse("6S1/2"), beam(20, 100, SIGMA_MINUS))
+            .step(Sublevel.fine("60P3/2", 1.5), beam(2000, 50, SIGMA_PLUS))
+            .detuned(gigahertz(2), gigahertz(3))
+            .in(gauss(5))
+            .resolve();
+    for (int k = 0; k < 3; k++) {
+      double rabi = once.steps().get(k).rabi().hertz();
+      assertEquals(2 * rabi, four.steps().get(k).rabi().hertz(), 1e-9 * rabi);
+    }
+  }
+
+  /** Steps in the wrong order do not climb, or break a rule, and are caught. */
+  @Test
+  void catchesStepsInTheWrongOrder() {
+    DriveSetup start =
+        Drive.of(Species.RUBIDIUM_87)
+            .from(Sublevel.hyperfine("5S1/2", 2, 2))
+            .detuned(gigahertz(1))
+            .in(gauss(1));
+    Beam up = beam(1, 10, SIGMA_PLUS);
+    Beam down = beam(1, 10, SIGMA_MINUS);
+    String climbs =
+        assertThrows(
+                IllegalArgumentException.class,
+                () ->
+                    start
+                        .step(Level.parse("60P3/2"), up)
+                        .step(Sublevel.fine("6S1/2", 0.5), down)
+                        .resolve())
+            .getMessage();
+    assertTrue(climbs.contains("does not climb"), climbs);
+    assertThrows(
+        IllegalArgumentException.class,
+        () ->
+            start
+                .step(Level.parse("60S1/2"), down)
+                .step(Sublevel.fine("6P3/2", 1.5), up)
+                .resolve());
+  }
 }
