@@ -663,9 +663,10 @@ final class LadderBuilder {
         new StringBuilder("no light path from ")
             .append(setup.start())
             .append(" to ")
-            .append(setup.target())
-            .append(" through ")
-            .append(through());
+            .append(setup.target());
+    if (steps > 1) {
+      given.append(" through ").append(through());
+    }
     Set<Integer> changes = new TreeSet<>(Set.of(0));
     for (int k = 0; k < steps; k++) {
       List<Integer> photons = photons(k);
@@ -686,8 +687,10 @@ final class LadderBuilder {
           + ")";
     }
     return given
-        + ", and no sublevel in between links these two (projection rule: |m| may not exceed J on any"
-        + " rung)";
+        + (steps == 1
+            ? ", and the start has no electron projection from which that leads there (projection rule)"
+            : ", and no sublevel in between links these two (projection rule: |m| may not exceed J on"
+                + " any rung)");
   }
 
   private List<Integer> photons(int step) {

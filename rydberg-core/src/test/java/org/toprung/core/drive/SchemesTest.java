@@ -579,7 +579,7 @@ class SchemesTest {
       Drive drive =
           Drive.of(Species.CAESIUM_133)
               .from(Sublevel.hyperfine("6S1/2", f, m))
-              .step(Sublevel.fine("40P3/2", m + q > 0 ? 0.5 : -0.5), beam(50, 15, polarization))
+              .step(Sublevel.fine("40P3/2", q >= 0 ? 0.5 : -0.5), beam(50, 15, polarization))
               .in(gauss(1))
               .resolve();
       double wanted = drive.rabi().hertz();
