@@ -3,6 +3,7 @@
 module org.toprung.core {
   requires transitive org.toprung.angular;
   requires org.apache.commons.math4.legacy;
+  requires org.apache.commons.numbers.gamma;
 
   exports org.toprung.core.atom;
   exports org.toprung.core.quantity;

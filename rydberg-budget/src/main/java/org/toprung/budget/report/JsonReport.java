@@ -15,6 +15,7 @@ import org.toprung.budget.Check;
 import org.toprung.core.atom.Level;
 import org.toprung.core.drive.Beam;
 import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.GroundLight;
 import org.toprung.core.drive.Profile;
 import org.toprung.core.drive.PulsePlan;
 import org.toprung.core.structure.DipoleElement;
@@ -87,6 +88,22 @@ public final class JsonReport {
     json.writeEndArray();
     number("start_light_shift_Hz", drive.startLightShift().hertz());
     number("target_light_shift_Hz", drive.targetLightShift().hertz());
+    if (drive.idle().isPresent()) {
+      GroundLight idle = drive.idle().get();
+      json.writeObjectFieldStart("idle");
+      json.writeStringField("sublevel", idle.sublevel().toString());
+      number("light_shift_Hz", idle.shift().hertz());
+      number("scattering_per_s", idle.scatteringPerSecond());
+      json.writeEndObject();
+    }
+    if (drive.trap().isPresent()) {
+      Drive.TrapLight trap = drive.trap().get();
+      json.writeObjectFieldStart("trap");
+      number("wavelength_m", trap.wavelength().metres());
+      number("start_light_shift_Hz", trap.startShift().hertz());
+      number("target_light_shift_Hz", trap.targetShift().hertz());
+      json.writeEndObject();
+    }
     number("far_light_shift_relative_uncertainty", drive.farShiftRelativeUncertainty());
     number("intermediate_admixture", drive.admixture());
     number("intermediate_scattering_per_pulse", budget.scatteringPerPulse());

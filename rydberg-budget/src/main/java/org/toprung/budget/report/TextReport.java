@@ -135,6 +135,30 @@ public final class TextReport {
     page.value(
         "light shift of target",
         Figures.signed(drive.targetLightShift()) + byBeam(drive::targetLightShift));
+    drive
+        .idle()
+        .ifPresent(
+            idle ->
+                page.value(
+                    "light shift of idle",
+                    String.format(
+                        Locale.ROOT,
+                        "%s (%s); it scatters %s photons per second",
+                        Figures.signed(idle.shift()),
+                        idle.sublevel(),
+                        Figures.number(idle.scatteringPerSecond(), 3))));
+    drive
+        .trap()
+        .ifPresent(
+            trap ->
+                page.value(
+                    "trap light",
+                    String.format(
+                        Locale.ROOT,
+                        "%s, shifts start by %s and target by %s; in the frequency offset",
+                        Figures.nanometres(trap.wavelength()),
+                        Figures.signed(trap.startShift()),
+                        Figures.signed(trap.targetShift()))));
     page.value(
         "intermediate scattering",
         "probability " + Figures.probability(budget.scatteringPerPulse()) + " per pulse");

@@ -6,71 +6,300 @@ import java.io.InputStream;
 import java.io.InputStreamReader;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.HashMap;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.TreeMap;
 import java.util.TreeSet;
+import java.util.concurrent.ConcurrentHashMap;
+import java.util.stream.Collectors;
 
 /**
- * The rows of catalogue.csv with their sources resolved. Reading is strict: any row that is not
- * understood is an error that names file and line.
+ * Measured values with their sources: the files that come with the library, one for each element
+ * and read when the element is first asked for, and files of the user laid over them. Reading is
+ * strict: a row that is not understood, is out of range, has no source or is given twice is an
+ * error that names file and line. Immutable to the outside, thread-safe.
+ *
+ * <p><b>Format.</b> Comma-separated, header {@code
+ * species,quantity,level,value,uncertainty,unit,source,memory,chosen_because}; lines that start
+ * with # are comments, a cell in double quotes may hold commas. The quantities are the names of
+ * {@link Datum.Kind} in small letters. Where rows of one species give the same quantity of the same
+ * level, exactly one says in {@code chosen_because} why it is the one in use. The source is a key
+ * of the bibliography; a user's file may also give the citation itself, in more than one word.
+ *
+ * <p><b>Precedence.</b> A user's file goes before the files it is laid over, rows of an isotope go
+ * before those of its element, the chosen row before others. A quantum-defect series is taken whole
+ * from the source of its constant term. All rows stay visible through {@link Species#data()}, with
+ * the file and line they come from.
  */
-final class Catalogue {
+public final class Catalogue {
   private static final String HEADER =
-      "species,quantity,level,value,uncertainty,unit,source,memory";
+      "species,quantity,level,value,uncertainty,unit,source,memory,chosen_because";
   private static final String BIBLIOGRAPHY_HEADER = "key,citation";
+  private static final String ELEMENTS_HEADER = "element,file";
 
   private record Key(String species, Datum.Kind kind, String level) {}
 
-  private final Map<Key, List<Datum>> rows;
-
-  private Catalogue(Map<Key, List<Datum>> rows) {
-    this.rows = rows;
+  private static final class Bundled {
+    static final Catalogue CATALOGUE =
+        new Catalogue(
+            files(lines("elements.csv")), citations("bibliography.csv", lines("bibliography.csv")));
   }
 
-  /** The catalogue that comes with the library. */
-  static Catalogue bundled() {
-    return of(lines("catalogue.csv"), lines("bibliography.csv"));
+  private final Map<String, String> elementFiles;
+  private final Map<String, String> citations;
+
+  /** Rows of the bundled files by element, filled on demand. */
+  private final Map<String, Map<Key, List<Datum>>> elements;
+
+  /** Rows of user files, the one that goes first in front. */
+  private final List<Map<Key, List<Datum>>> overlays;
+
+  private final Map<String, Species> species = new ConcurrentHashMap<>();
+
+  private Catalogue(Map<String, String> elementFiles, Map<String, String> citations) {
+    this.elementFiles = elementFiles;
+    this.citations = citations;
+    this.elements = new ConcurrentHashMap<>();
+    this.overlays = List.of();
   }
 
-  static Catalogue of(List<String> catalogue, List<String> bibliography) {
-    Map<String, String> sources = new HashMap<>();
-    forEachRow(
-        "bibliography.csv",
-        bibliography,
-        BIBLIOGRAPHY_HEADER,
-        cells -> {
-          if (sources.put(cells[0], cells[1]) != null) {
-            throw Refusal.of("key \"%s\" occurs twice", cells[0]);
-          }
-        });
-    Map<Key, List<Datum>> rows = new HashMap<>();
-    Set<String> unused = new TreeSet<>(sources.keySet());
-    forEachRow(
-        "catalogue.csv",
-        catalogue,
-        HEADER,
-        cells -> {
-          Datum datum = datum(cells, sources);
-          rows.computeIfAbsent(
-                  new Key(datum.species(), datum.kind(), datum.level()), k -> new ArrayList<>())
-              .add(datum);
-          unused.remove(cells[6]);
-        });
-    if (!unused.isEmpty()) {
-      throw Refusal.of("bibliography.csv: no row of catalogue.csv uses %s", unused);
+  private Catalogue(Catalogue below, Map<Key, List<Datum>> overlay) {
+    this.elementFiles = below.elementFiles;
+    this.citations = below.citations;
+    this.elements = below.elements;
+    List<Map<Key, List<Datum>>> all = new ArrayList<>();
+    all.add(overlay);
+    all.addAll(below.overlays);
+    this.overlays = List.copyOf(all);
+  }
+
+  /**
+   * The catalogue that comes with the library.
+   *
+   * @return the catalogue
+   */
+  public static Catalogue bundled() {
+    return Bundled.CATALOGUE;
+  }
+
+  /**
+   * This catalogue with the rows of a file laid over it.
+   *
+   * @param file a file in the format of this class, UTF-8
+   * @return a new catalogue; this one stays as it is
+   * @throws IllegalArgumentException if a row is refused; the message begins with file and line
+   * @throws UncheckedIOException if the file cannot be read
+   */
+  public Catalogue with(Path file) {
+    try {
+      return with(file.toString(), Files.readAllLines(file, StandardCharsets.UTF_8));
+    } catch (IOException e) {
+      throw new UncheckedIOException("cannot read " + file, e);
     }
-    rows.values().forEach(list -> list.sort(Comparator.comparingDouble(Datum::uncertainty)));
-    return new Catalogue(rows);
+  }
+
+  Catalogue with(String file, List<String> lines) {
+    return new Catalogue(this, rows(file, lines, citations, true, new HashSet<>()));
+  }
+
+  /**
+   * The isotope of a name with the values of this catalogue.
+   *
+   * @param name element symbol, hyphen, mass number, for example "Rb-87"; "H" for hydrogen
+   * @return the species; one instance for each name
+   * @throws IllegalArgumentException if the name is not known, the message lists the known ones; or
+   *     if a value that every isotope needs is missing
+   */
+  public Species species(String name) {
+    Species known = species.get(name);
+    if (known != null) {
+      return known;
+    }
+    if (best(name, Datum.Kind.MASS, "").isEmpty()) {
+      throw Refusal.of(
+          "species \"%s\" is not known; known: %s", name, String.join(", ", isotopes()));
+    }
+    Species made = new Species(name, this);
+    Species raced = species.putIfAbsent(name, made);
+    return raced == null ? made : raced;
+  }
+
+  /**
+   * The isotopes: whatever has a mass of its own.
+   *
+   * @return their names, sorted
+   */
+  public List<String> isotopes() {
+    Set<String> found = new TreeSet<>();
+    elementFiles.keySet().forEach(element -> addIsotopes(found, bundled(element)));
+    overlays.forEach(rows -> addIsotopes(found, rows));
+    return List.copyOf(found);
+  }
+
+  private static void addIsotopes(Set<String> found, Map<Key, List<Datum>> rows) {
+    for (Key key : rows.keySet()) {
+      if (key.kind() == Datum.Kind.MASS) {
+        found.add(key.species());
+      }
+    }
+  }
+
+  /** Citations of the bibliography that no bundled row uses. */
+  Set<String> unusedSources() {
+    Set<String> unused = new TreeSet<>(citations.values());
+    for (String element : elementFiles.keySet()) {
+      bundled(element).values().forEach(list -> list.forEach(d -> unused.remove(d.source())));
+    }
+    return unused;
+  }
+
+  private Map<Key, List<Datum>> bundled(String element) {
+    String file = elementFiles.get(element);
+    return file == null
+        ? Map.of()
+        : elements.computeIfAbsent(
+            element, e -> rows(file, lines(file), citations, false, new HashSet<>()));
+  }
+
+  /** All rows of one kind for an isotope, the one in use first. */
+  List<Datum> all(String isotope, Datum.Kind kind, String level) {
+    String element = elementOf(isotope);
+    Key own = new Key(isotope, kind, level);
+    Key shared = new Key(element, kind, level);
+    List<Datum> found = new ArrayList<>();
+    for (Map<Key, List<Datum>> rows : overlays) {
+      collect(found, rows, own, shared);
+    }
+    collect(found, bundled(element), own, shared);
+    return found;
+  }
+
+  private static void collect(List<Datum> found, Map<Key, List<Datum>> rows, Key own, Key shared) {
+    found.addAll(rows.getOrDefault(own, List.of()));
+    if (!own.equals(shared)) {
+      found.addAll(rows.getOrDefault(shared, List.of()));
+    }
+  }
+
+  /** The row in use. */
+  Optional<Datum> best(String isotope, Datum.Kind kind, String level) {
+    return all(isotope, kind, level).stream().findFirst();
+  }
+
+  /** Every row that applies to an isotope, by kind and level, the one in use first. */
+  List<Datum> everything(String isotope) {
+    String element = elementOf(isotope);
+    Map<Datum.Kind, Set<String>> levels = new TreeMap<>();
+    List<Map<Key, List<Datum>>> layers = new ArrayList<>(overlays);
+    layers.add(bundled(element));
+    for (Map<Key, List<Datum>> rows : layers) {
+      for (Key key : rows.keySet()) {
+        if (key.species().equals(isotope) || key.species().equals(element)) {
+          levels.computeIfAbsent(key.kind(), k -> new TreeSet<>()).add(key.level());
+        }
+      }
+    }
+    List<Datum> found = new ArrayList<>();
+    levels.forEach((kind, names) -> names.forEach(l -> found.addAll(all(isotope, kind, l))));
+    return List.copyOf(found);
+  }
+
+  private static String elementOf(String isotope) {
+    int dash = isotope.indexOf('-');
+    return dash < 0 ? isotope : isotope.substring(0, dash);
   }
 
   private interface RowReader {
-    void read(String[] cells);
+    void read(String[] cells, String origin);
+  }
+
+  private static Map<String, String> files(List<String> lines) {
+    Map<String, String> files = new TreeMap<>();
+    forEachRow("elements.csv", lines, ELEMENTS_HEADER, (cells, o) -> files.put(cells[0], cells[1]));
+    return files;
+  }
+
+  static Map<String, String> citations(String file, List<String> lines) {
+    Map<String, String> citations = new HashMap<>();
+    forEachRow(
+        file,
+        lines,
+        BIBLIOGRAPHY_HEADER,
+        (cells, origin) -> {
+          if (cells[1].isBlank() || citations.put(cells[0], cells[1]) != null) {
+            throw Refusal.of("key \"%s\" occurs twice or has no citation", cells[0]);
+          }
+        });
+    return citations;
+  }
+
+  private static Map<Key, List<Datum>> rows(
+      String file,
+      List<String> lines,
+      Map<String, String> citations,
+      boolean citationAllowed,
+      Set<String> seen) {
+    Map<Key, List<Datum>> rows = new HashMap<>();
+    forEachRow(
+        file,
+        lines,
+        HEADER,
+        (cells, origin) -> {
+          Datum datum = datum(cells, source(cells[6], citations, citationAllowed), origin);
+          if (!seen.add(cells[0] + "," + cells[1] + "," + cells[2] + "," + datum.source())) {
+            throw Refusal.of(
+                "%s of %s %s is given twice from the same source", cells[1], cells[0], cells[2]);
+          }
+          rows.computeIfAbsent(
+                  new Key(datum.species(), datum.kind(), datum.level()), k -> new ArrayList<>())
+              .add(datum);
+        });
+    for (List<Datum> list : rows.values()) {
+      requireOneChosen(list);
+      list.sort(Comparator.comparingInt(d -> d.chosenBecause().isEmpty() ? 1 : 0));
+    }
+    return rows;
+  }
+
+  /** Later coefficients of a series follow the choice of its constant term. */
+  private static void requireOneChosen(List<Datum> list) {
+    Datum last = list.get(list.size() - 1);
+    long chosen = list.stream().filter(d -> !d.chosenBecause().isEmpty()).count();
+    long wanted = list.size() == 1 || last.kind().isHigherCoefficient() ? 0 : 1;
+    if (chosen != wanted) {
+      throw Refusal.of(
+          "%s: %s of %s %s has %d rows, so %d of them must say why it is chosen, given %d",
+          last.origin(),
+          last.kind().name().toLowerCase(Locale.ROOT),
+          last.species(),
+          last.level(),
+          list.size(),
+          wanted,
+          chosen);
+    }
+  }
+
+  private static String source(String cell, Map<String, String> citations, boolean allowed) {
+    String citation = citations.get(cell);
+    if (citation != null) {
+      return citation;
+    }
+    if (allowed && cell.strip().contains(" ")) {
+      return cell.strip();
+    }
+    throw Refusal.of(
+        "source \"%s\" is not in bibliography.csv%s",
+        cell, allowed ? ", and is no citation of more than one word" : "");
   }
 
   private static void forEachRow(String file, List<String> lines, String header, RowReader reader) {
@@ -81,6 +310,7 @@ final class Catalogue {
       if (line.startsWith("#") || line.isBlank()) {
         continue;
       }
+      String origin = file + ":" + (i + 1);
       try {
         if (!headerSeen) {
           if (!line.equals(header)) {
@@ -89,13 +319,10 @@ final class Catalogue {
           headerSeen = true;
           continue;
         }
-        String[] cells = cells(line);
-        if (cells.length != columns) {
-          throw Refusal.of("row must have %d columns, given %d", columns, cells.length);
-        }
-        reader.read(cells);
+        String[] cells = cells(line, columns);
+        reader.read(cells, origin);
       } catch (IllegalArgumentException e) {
-        throw new IllegalArgumentException(file + ":" + (i + 1) + ": " + e.getMessage(), e);
+        throw new IllegalArgumentException(origin + ": " + e.getMessage(), e);
       }
     }
     if (!headerSeen) {
@@ -104,33 +331,33 @@ final class Catalogue {
   }
 
   /** The cells of a row; a cell in double quotes may hold commas. */
-  private static String[] cells(String line) {
-    List<String> cells = new ArrayList<>();
-    StringBuilder cell = new StringBuilder();
+  private static String[] cells(String line, int columns) {
+    List<String> cells = new ArrayList<>(columns);
+    int start = 0;
     boolean quoted = false;
-    for (int i = 0; i < line.length(); i++) {
-      char c = line.charAt(i);
+    boolean wasQuoted = false;
+    for (int i = 0; i <= line.length(); i++) {
+      char c = i < line.length() ? line.charAt(i) : ',';
       if (c == '"') {
         quoted = !quoted;
-      } else if (c == ',' && !quoted) {
-        cells.add(cell.toString());
-        cell.setLength(0);
-      } else {
-        cell.append(c);
+        wasQuoted = true;
+      } else if (c == ',' && !(quoted && i < line.length())) {
+        String cell = line.substring(start, i);
+        cells.add(wasQuoted ? cell.replace("\"", "") : cell);
+        start = i + 1;
+        wasQuoted = false;
       }
     }
     if (quoted) {
       throw Refusal.of("a quotation mark is not closed");
     }
-    cells.add(cell.toString());
+    if (cells.size() != columns) {
+      throw Refusal.of("row must have %d columns, given %d", columns, cells.size());
+    }
     return cells.toArray(new String[0]);
   }
 
-  private static Datum datum(String[] cells, Map<String, String> sources) {
-    String source = sources.get(cells[6]);
-    if (source == null) {
-      throw Refusal.of("source \"%s\" is not in bibliography.csv", cells[6]);
-    }
+  private static Datum datum(String[] cells, String source, String origin) {
     boolean memory =
         switch (cells[7]) {
           case "yes" -> true;
@@ -139,13 +366,36 @@ final class Catalogue {
         };
     return new Datum(
         cells[0],
-        Datum.Kind.valueOf(cells[1].toUpperCase(Locale.ROOT)),
+        kind(cells[1]),
         cells[2],
-        Double.parseDouble(cells[3]),
-        Double.parseDouble(cells[4]),
+        number("value", cells[3]),
+        number("uncertainty", cells[4]),
         cells[5],
         source,
-        memory);
+        memory,
+        cells[8].strip(),
+        origin);
+  }
+
+  private static Datum.Kind kind(String cell) {
+    try {
+      return Datum.Kind.valueOf(cell.toUpperCase(Locale.ROOT));
+    } catch (IllegalArgumentException e) {
+      throw Refusal.of(
+          "quantity \"%s\" is not known; known: %s",
+          cell,
+          Arrays.stream(Datum.Kind.values())
+              .map(k -> k.name().toLowerCase(Locale.ROOT))
+              .collect(Collectors.joining(", ")));
+    }
+  }
+
+  private static double number(String name, String cell) {
+    try {
+      return Double.parseDouble(cell);
+    } catch (NumberFormatException e) {
+      throw Refusal.of("%s must be a number, given \"%s\"", name, cell);
+    }
   }
 
   private static List<String> lines(String resource) {
@@ -156,45 +406,5 @@ final class Catalogue {
     } catch (IOException e) {
       throw new UncheckedIOException("cannot read " + resource, e);
     }
-  }
-
-  /** All rows of one kind of an isotope and of its element, isotope rows and best values first. */
-  List<Datum> all(String isotope, Datum.Kind kind, String level) {
-    List<Datum> found =
-        new ArrayList<>(rows.getOrDefault(new Key(isotope, kind, level), List.of()));
-    found.addAll(rows.getOrDefault(new Key(elementOf(isotope), kind, level), List.of()));
-    return List.copyOf(found);
-  }
-
-  /** The preferred row. */
-  Optional<Datum> best(String isotope, Datum.Kind kind, String level) {
-    return all(isotope, kind, level).stream().findFirst();
-  }
-
-  /** Every row that applies to an isotope. */
-  List<Datum> everything(String isotope) {
-    return rows.values().stream()
-        .flatMap(List::stream)
-        .filter(d -> d.species().equals(isotope) || d.species().equals(elementOf(isotope)))
-        .sorted(
-            Comparator.comparing(Datum::kind)
-                .thenComparing(Datum::level)
-                .thenComparing(d -> d.species().equals(isotope) ? 0 : 1)
-                .thenComparing(Datum::uncertainty))
-        .toList();
-  }
-
-  /** The isotopes: whatever has a mass. */
-  List<String> isotopes() {
-    return rows.keySet().stream()
-        .filter(k -> k.kind() == Datum.Kind.MASS)
-        .map(Key::species)
-        .sorted()
-        .toList();
-  }
-
-  private static String elementOf(String isotope) {
-    int dash = isotope.indexOf('-');
-    return dash < 0 ? isotope : isotope.substring(0, dash);
   }
 }

@@ -6,7 +6,6 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.function.Function;
 import java.util.stream.Collectors;
 import org.toprung.core.cache.BoundedCache;
 import org.toprung.core.quantity.Estimate;
@@ -20,7 +19,11 @@ import org.toprung.core.quantity.PhysicalConstants;
  * = Σ δ_2k (n − δ_0)^−2k and R_M = R∞/(1 + m_e/(M − m_e)). For l ≥ 4 without measured series the
  * defect is that of a polarizable core, δ = (3α_c/4)(1 − l(l+1)/(3n²)) / [(l−½) l
  * (l+½)(l+1)(l+3/2)] (for example Gallagher, Rydberg Atoms, Cambridge 1994, chapter 17), without
- * fine structure.
+ * fine structure. Hydrogen: δ = (α²/2)(1/(j+½) − 3/(4n)), the fine structure to order α² (Bethe and
+ * Salpeter, section 14); the Lamb shift is left to the uncertainty.
+ *
+ * <p>An isotope without an ionization energy of its own gets that of another isotope and the normal
+ * mass shift, of which one half counts as uncertainty.
  */
 public final class Species {
   private static final List<Datum.Kind> SERIES =
@@ -31,9 +34,6 @@ public final class Species {
           Datum.Kind.QUANTUM_DEFECT_6,
           Datum.Kind.QUANTUM_DEFECT_8,
           Datum.Kind.QUANTUM_DEFECT_10);
-
-  // after SERIES, which loading uses
-  private static final Map<String, Species> BY_NAME = load();
 
   /** Rubidium 87. */
   public static final Species RUBIDIUM_87 = parse("Rb-87");
@@ -47,6 +47,12 @@ public final class Species {
   /** Relative trust in the polarization formula: at l = 4 it meets measured defects to 5 %. */
   private static final double POLARIZATION_TRUST = 0.1;
 
+  /** Part of the normal mass shift that stands for what else distinguishes isotopes. */
+  private static final double SPECIFIC_SHIFT = 0.5;
+
+  /** Largest Lamb shift of hydrogen times n³, Hz (1S: 8.17 GHz). */
+  private static final double LAMB_HERTZ = 8.2e9;
+
   private static final int ENERGIES = 5000;
 
   private final String name;
@@ -55,6 +61,7 @@ public final class Species {
   private final int doubledNuclearSpin;
   private final double gI;
   private final Level groundLevel;
+  private final boolean hydrogen;
   private final double rydbergHertz;
   private final int[] lowestN;
   private final Estimate corePolarizabilityAu;
@@ -64,7 +71,7 @@ public final class Species {
   private final Map<String, List<Datum>> series;
   private final Map<String, List<Level>> hyperfineMembers;
 
-  private Species(String name, Catalogue catalogue) {
+  Species(String name, Catalogue catalogue) {
     this.name = name;
     this.catalogue = catalogue;
     this.massKilograms = require(Datum.Kind.MASS, "").estimate().value();
@@ -72,9 +79,8 @@ public final class Species {
         Halves.doubled("nuclear spin", require(Datum.Kind.NUCLEAR_SPIN, "").value());
     this.gI = require(Datum.Kind.NUCLEAR_G, "").value();
     this.groundLevel = Level.of((int) require(Datum.Kind.LOWEST_N, "S").value(), 0, 1);
-    double electron = PhysicalConstants.ELECTRON_MASS;
-    this.rydbergHertz =
-        PhysicalConstants.RYDBERG_HERTZ / (1 + electron / (massKilograms - electron));
+    this.hydrogen = require(Datum.Kind.NUCLEAR_CHARGE, "").value() == 1;
+    this.rydbergHertz = rydbergHertz(massKilograms);
     this.lowestN = lowestN();
     this.corePolarizabilityAu = require(Datum.Kind.CORE_POLARIZABILITY, "").estimate();
     this.energies = new BoundedCache<>(ENERGIES, this::energy);
@@ -97,37 +103,57 @@ public final class Species {
     measuredEnergies.put(
         groundLevel, new Estimate(-ionizationHertz.value(), ionizationHertz.uncertainty()));
     for (Datum datum : levelEnergies) {
-      Estimate energy = datum.estimate();
-      measuredEnergies.putIfAbsent(
-          Level.parse(datum.level()),
-          new Estimate(
-              energy.value() - ionizationHertz.value(),
-              Math.hypot(energy.uncertainty(), ionizationHertz.uncertainty())));
+      Level level = Level.parse(datum.level());
+      if (!measuredEnergies.containsKey(level)) {
+        measuredEnergies.put(level, fromLimit(datum));
+      }
     }
   }
 
-  private static Map<String, Species> load() {
-    Catalogue catalogue = Catalogue.bundled();
-    return catalogue.isotopes().stream()
-        .map(isotope -> new Species(isotope, catalogue))
-        .collect(Collectors.toUnmodifiableMap(Species::name, Function.identity()));
+  /**
+   * A measured level counted from the ionization limit. Levels of the element are those of the
+   * isotope whose ionization energy is measured; binding energies scale with the reduced mass.
+   */
+  private Estimate fromLimit(Datum datum) {
+    Estimate energy = datum.estimate();
+    Estimate limit = ionizationHertz;
+    double scale = 1;
+    Optional<String> relative = datum.species().equals(name) ? Optional.empty() : reference();
+    if (relative.isPresent()) {
+      limit = ionization(relative.get()).orElseThrow();
+      scale = rydbergHertz / rydbergHertz(mass(relative.get()));
+    }
+    return new Estimate(
+        scale * (energy.value() - limit.value()),
+        Math.hypot(energy.uncertainty(), limit.uncertainty()));
+  }
+
+  private static double rydbergHertz(double massKilograms) {
+    double electron = PhysicalConstants.ELECTRON_MASS;
+    return PhysicalConstants.RYDBERG_HERTZ / (1 + electron / (massKilograms - electron));
+  }
+
+  private double mass(String isotope) {
+    return catalogue.best(isotope, Datum.Kind.MASS, "").orElseThrow().estimate().value();
+  }
+
+  /** The isotope that the rows of the element were measured on, if its limit is measured. */
+  private Optional<String> reference() {
+    return catalogue
+        .best(name, Datum.Kind.REFERENCE_ISOTOPE, "")
+        .map(datum -> datum.species() + "-" + (int) datum.value())
+        .filter(isotope -> ionization(isotope).isPresent());
   }
 
   /**
-   * The species of a name.
+   * The species of a name, with the values that come with the library.
    *
-   * @param name element symbol, hyphen, mass number, for example "Rb-87"
+   * @param name element symbol, hyphen, mass number, for example "Rb-87"; "H" for hydrogen
    * @return the species
    * @throws IllegalArgumentException if the name is not known; the message lists the known ones
    */
   public static Species parse(String name) {
-    Species species = BY_NAME.get(name);
-    if (species == null) {
-      throw Refusal.of(
-          "species \"%s\" is not known; known: %s",
-          name, BY_NAME.keySet().stream().sorted().collect(Collectors.joining(", ")));
-    }
-    return species;
+    return Catalogue.bundled().species(name);
   }
 
   private Datum require(Datum.Kind kind, String level) {
@@ -136,25 +162,64 @@ public final class Species {
         .orElseThrow(() -> Refusal.of("the catalogue has no %s of %s %s", kind, name, level));
   }
 
+  /** The terms of a series, all from the source of its constant term: fits must not be mixed. */
   private List<Datum> expansion(String seriesName) {
+    Datum constant = require(Datum.Kind.QUANTUM_DEFECT_0, seriesName);
     return SERIES.stream()
-        .map(kind -> catalogue.best(name, kind, seriesName))
+        .map(
+            kind ->
+                catalogue.all(name, kind, seriesName).stream()
+                    .filter(d -> isOfTheSameFit(d, constant))
+                    .findFirst())
         .takeWhile(Optional::isPresent)
         .map(Optional::get)
         .toList();
   }
 
+  private static boolean isOfTheSameFit(Datum one, Datum other) {
+    return one.source().equals(other.source())
+        && one.species().equals(other.species())
+        && file(one).equals(file(other));
+  }
+
+  private static String file(Datum datum) {
+    return datum.origin().substring(0, datum.origin().lastIndexOf(':'));
+  }
+
   private Estimate ionization() {
-    Optional<Datum> fromLowest =
-        catalogue.best(name, Datum.Kind.IONIZATION_ENERGY_FROM_LOWEST_F, groundLevel.toString());
-    if (fromLowest.isEmpty()) {
-      return require(Datum.Kind.IONIZATION_ENERGY, groundLevel.toString()).estimate();
+    Optional<Estimate> own = ionization(name);
+    if (own.isPresent()) {
+      return own.get();
     }
-    // for j = 1/2 and A > 0 the lowest level is F = I - 1/2, (I+1)A/2 below the centre of gravity
-    double a = require(Datum.Kind.HYPERFINE_A, groundLevel.toString()).estimate().value();
-    double below = a > 0 ? (doubledNuclearSpin + 2) * a / 4 : -doubledNuclearSpin * a / 4;
-    Estimate measured = fromLowest.get().estimate();
-    return new Estimate(measured.value() - below, measured.uncertainty());
+    Optional<String> relative = reference();
+    if (relative.isPresent()) {
+      // the reduced mass scales all energies; the specific mass shift is of the same order
+      Estimate measured = ionization(relative.get()).orElseThrow();
+      double shift = measured.value() * (rydbergHertz / rydbergHertz(mass(relative.get())) - 1);
+      return new Estimate(
+          measured.value() + shift, Math.hypot(measured.uncertainty(), SPECIFIC_SHIFT * shift));
+    }
+    return require(Datum.Kind.IONIZATION_ENERGY, groundLevel.toString()).estimate();
+  }
+
+  /** The ionization energy measured for one isotope itself. */
+  private Optional<Estimate> ionization(String isotope) {
+    String ground = groundLevel.toString();
+    Optional<Datum> fromLowest =
+        catalogue.best(isotope, Datum.Kind.IONIZATION_ENERGY_FROM_LOWEST_F, ground);
+    if (fromLowest.isPresent()) {
+      double a =
+          catalogue.best(isotope, Datum.Kind.HYPERFINE_A, ground).orElseThrow().estimate().value();
+      double twoI = 2 * catalogue.best(isotope, Datum.Kind.NUCLEAR_SPIN, "").orElseThrow().value();
+      // for j = 1/2 and A > 0 the lowest level is F = I - 1/2, (I+1)A/2 below the centre of gravity
+      double below = a > 0 ? (twoI + 2) * a / 4 : -twoI * a / 4;
+      Estimate measured = fromLowest.get().estimate();
+      return Optional.of(new Estimate(measured.value() - below, measured.uncertainty()));
+    }
+    return catalogue
+        .best(isotope, Datum.Kind.IONIZATION_ENERGY, ground)
+        .filter(d -> d.species().equals(isotope))
+        .map(Datum::estimate);
   }
 
   /**
@@ -200,6 +265,15 @@ public final class Species {
    */
   public double rydbergHertz() {
     return rydbergHertz;
+  }
+
+  /**
+   * Whether the atom is hydrogen, which has no core.
+   *
+   * @return true where the nuclear charge is 1
+   */
+  public boolean isHydrogen() {
+    return hydrogen;
   }
 
   /**
@@ -313,6 +387,11 @@ public final class Species {
   }
 
   private Estimate quantumDefect(Level level) {
+    if (isHydrogen()) {
+      double fine = PhysicalConstants.FINE_STRUCTURE * PhysicalConstants.FINE_STRUCTURE / 2;
+      double defect = fine * (2.0 / (level.doubledJ() + 1) - 0.75 / level.n());
+      return new Estimate(defect, LAMB_HERTZ / (2 * rydbergHertz));
+    }
     List<Datum> terms = series.get(level.series());
     if (terms != null) {
       double inverse = 1 / Math.pow(level.n() - terms.get(0).value(), 2);
@@ -449,8 +528,7 @@ public final class Species {
   }
 
   /**
-   * The preferred value of the catalogue: of the isotope before that of the element, then the one
-   * of the smallest uncertainty.
+   * The value in use, by the precedence that {@link Catalogue} describes.
    *
    * @param kind what is asked for
    * @param level the level, series ("S1/2") or pair of levels ("5S1/2-5P1/2"); empty for a value of
@@ -462,9 +540,9 @@ public final class Species {
   }
 
   /**
-   * All values of the catalogue that apply to this isotope, also those not preferred.
+   * All values of the catalogue that apply to this isotope, also those not in use.
    *
-   * @return the data in a fixed order
+   * @return the data in a fixed order, of each quantity the one in use first
    */
   public List<Datum> data() {
     return catalogue.everything(name);

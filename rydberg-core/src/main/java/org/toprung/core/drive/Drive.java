@@ -3,6 +3,7 @@ package org.toprung.core.drive;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
@@ -94,6 +95,18 @@ public final class Drive {
   public record OtherTarget(String sublevel, Frequency rabi, Frequency detuning) {}
 
   /**
+   * Light that shines on the atom without driving it. Its shifts are not part of the drive's light
+   * shifts, but of the pulse plan.
+   *
+   * @param beam the beam
+   * @param wavelength its vacuum wavelength
+   * @param startShift move of the start's energy over h, positive upwards
+   * @param targetShift move of the wanted target's energy over h, positive upwards
+   */
+  public record TrapLight(
+      Beam beam, Length wavelength, Frequency startShift, Frequency targetShift) {}
+
+  /**
    * A line that a weak first laser sees.
    *
    * @param position what to add to the first laser's nominal frequency to be resonant
@@ -113,8 +126,7 @@ public final class Drive {
   private final double magneticSensitivity; // Hz/T
   private final double farShiftUncertainty; // relative
   private final double firstLaser; // Hz
-  private final Frequency startTrapShift;
-  private final Frequency targetTrapShift;
+  private final Optional<TrapLight> trap;
 
   private Drive(DriveSetup setup) {
     this.setup = setup;
@@ -147,8 +159,7 @@ public final class Drive {
             - ladder.states().get(ladder.start()).hertzPerTesla();
     this.farShiftUncertainty = builder.farShiftRelativeUncertainty();
     this.firstLaser = builder.laserHertz(0);
-    this.startTrapShift = Frequency.ofHertz(builder.startTrapShiftHertz());
-    this.targetTrapShift = Frequency.ofHertz(builder.targetTrapShiftHertz());
+    this.trap = setup.trap().map(builder::trapLight);
   }
 
   /**
@@ -439,22 +450,21 @@ public final class Drive {
   }
 
   /**
-   * Light shift of the start by the trap, if one shines during the pulse. It is not part of {@link
-   * #startLightShift()}, but of the pulse plan.
+   * The trap that shines during the pulse, and what it does.
    *
-   * @return the move of its energy over h, positive upwards; zero without a trap
+   * @return the trap, if one was left on
    */
-  public Frequency startTrapShift() {
-    return startTrapShift;
+  public Optional<TrapLight> trap() {
+    return trap;
   }
 
   /**
-   * Light shift of the wanted target by the trap, if one shines during the pulse.
+   * The ground sublevel that is not driven, and what the light does to it.
    *
-   * @return the move of its energy over h, positive upwards; zero without a trap
+   * @return the idle sublevel, if one was named
    */
-  public Frequency targetTrapShift() {
-    return targetTrapShift;
+  public Optional<GroundLight> idle() {
+    return setup.idle().map(this::groundLight);
   }
 
   /**

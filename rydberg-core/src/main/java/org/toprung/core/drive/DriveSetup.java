@@ -38,6 +38,7 @@ public final class DriveSetup {
   private final List<Frequency> detunings; // one for each step but the last; null until given
   private final Site site;
   private final Trap trap; // null when off during the pulse
+  private final Sublevel idle; // null when there is none
 
   private DriveSetup(
       Species species,
@@ -45,20 +46,22 @@ public final class DriveSetup {
       List<Step> steps,
       List<Frequency> detunings,
       Site site,
-      Trap trap) {
+      Trap trap,
+      Sublevel idle) {
     this.species = species;
     this.start = start;
     this.steps = steps;
     this.detunings = detunings;
     this.site = site;
     this.trap = trap;
+    this.idle = idle;
   }
 
   static DriveSetup of(Species species) {
     if (species == null) {
       throw new IllegalArgumentException("a drive needs a species, not null");
     }
-    return new DriveSetup(species, null, List.of(), null, Site.ORIGIN, null);
+    return new DriveSetup(species, null, List.of(), null, Site.ORIGIN, null, null);
   }
 
   /**
@@ -78,7 +81,7 @@ public final class DriveSetup {
               + " must be a hyperfine sublevel of the ground level "
               + species.groundLevel());
     }
-    return new DriveSetup(species, sublevel, steps, detunings, site, trap);
+    return new DriveSetup(species, sublevel, steps, detunings, site, trap, idle);
   }
 
   /**
@@ -121,7 +124,7 @@ public final class DriveSetup {
     step.beam().polarizationVector();
     List<Step> longer = new ArrayList<>(steps);
     longer.add(step);
-    return new DriveSetup(species, start, List.copyOf(longer), detunings, site, trap);
+    return new DriveSetup(species, start, List.copyOf(longer), detunings, site, trap, idle);
   }
 
   /**
@@ -136,7 +139,7 @@ public final class DriveSetup {
    * @return a copy with these detunings
    */
   public DriveSetup detuned(Frequency... newDetunings) {
-    return new DriveSetup(species, start, steps, List.of(newDetunings), site, trap);
+    return new DriveSetup(species, start, steps, List.of(newDetunings), site, trap, idle);
   }
 
   /**
@@ -153,7 +156,7 @@ public final class DriveSetup {
               + newField
               + " must be at least 0: it points along lab z by convention");
     }
-    return new DriveSetup(species, start, steps, detunings, site.with(newField), trap);
+    return new DriveSetup(species, start, steps, detunings, site.with(newField), trap, idle);
   }
 
   /**
@@ -167,7 +170,7 @@ public final class DriveSetup {
   public DriveSetup inElectricField(ElectricField ex, ElectricField ey, ElectricField ez) {
     StaticField newField =
         new StaticField(ex.voltsPerMetre(), ey.voltsPerMetre(), ez.voltsPerMetre());
-    return new DriveSetup(species, start, steps, detunings, site.with(newField), trap);
+    return new DriveSetup(species, start, steps, detunings, site.with(newField), trap, idle);
   }
 
   /**
@@ -180,7 +183,23 @@ public final class DriveSetup {
    */
   public DriveSetup atomAt(Length x, Length y, Length z) {
     Site moved = site.at(x.metres(), y.metres(), z.metres());
-    return new DriveSetup(species, start, steps, detunings, moved, trap);
+    return new DriveSetup(species, start, steps, detunings, moved, trap, idle);
+  }
+
+  /**
+   * Names the ground sublevel that is not driven, such as the other state of a qubit, so that the
+   * drive tells what its light does to it.
+   *
+   * @param sublevel a hyperfine sublevel of the ground level other than the start
+   * @return a copy with this idle sublevel
+   * @throws IllegalArgumentException if the species has no such ground sublevel, or it is the start
+   */
+  public DriveSetup idling(Sublevel sublevel) {
+    from(sublevel); // refuses what is no ground sublevel
+    if (sublevel.equals(start)) {
+      throw new IllegalArgumentException("the idle sublevel " + sublevel + " is the start");
+    }
+    return new DriveSetup(species, start, steps, detunings, site, trap, sublevel);
   }
 
   /**
@@ -200,7 +219,7 @@ public final class DriveSetup {
     }
     beam.polarizationVector();
     Frequency laser = Frequency.ofHertz(PhysicalConstants.SPEED_OF_LIGHT / wavelength.metres());
-    return new DriveSetup(species, start, steps, detunings, site, new Trap(beam, laser));
+    return new DriveSetup(species, start, steps, detunings, site, new Trap(beam, laser), idle);
   }
 
   /**
@@ -282,5 +301,9 @@ public final class DriveSetup {
 
   Optional<Trap> trap() {
     return Optional.ofNullable(trap).map(t -> new Trap(site.sees(t.beam()), t.laser()));
+  }
+
+  Optional<Sublevel> idle() {
+    return Optional.ofNullable(idle);
   }
 }

@@ -75,7 +75,7 @@ final class KernelBuilder {
         detuning + lowest,
         detuning + highest,
         builder.farShiftRelativeUncertainty(),
-        builder.targetTrapShiftHertz() - builder.startTrapShiftHertz(),
+        builder.trapShiftHertz(),
         partners,
         wanted.length,
         direct(),

@@ -131,12 +131,17 @@ final class LadderBuilder {
     }
   }
 
-  double startTrapShiftHertz() {
-    return startTrapShift;
+  /** By how much more the trap moves the target than the start, Hz. */
+  double trapShiftHertz() {
+    return targetTrapShift - startTrapShift;
   }
 
-  double targetTrapShiftHertz() {
-    return targetTrapShift;
+  Drive.TrapLight trapLight(DriveSetup.Trap trap) {
+    return new Drive.TrapLight(
+        trap.beam(),
+        wavelength(trap.laser().hertz()),
+        Frequency.ofHertz(startTrapShift),
+        Frequency.ofHertz(targetTrapShift));
   }
 
   private double[] lasers() {

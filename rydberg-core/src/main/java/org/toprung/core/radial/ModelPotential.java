@@ -23,7 +23,10 @@ final class ModelPotential implements ValencePotential {
   private static final String LETTERS = "SPDF";
 
   /** The slowest screening exponent in use is above 1, so that r² e^{-a r} is below 1e-14 here. */
-  private static final double CORE_RADIUS = 42;
+  private static final double SCREENING_RADIUS = 42;
+
+  /** Beyond this many cutoff radii e^{-(r/rc)⁶} is below 1e-17. */
+  private static final double CUTOFF_RADII = 1.85;
 
   /** e^−40 is below the resolution of a double next to 1. */
   private static final double SURELY_OUTSIDE = 40;
@@ -79,7 +82,7 @@ final class ModelPotential implements ValencePotential {
 
   @Override
   public double coreRadius() {
-    return CORE_RADIUS;
+    return Math.max(SCREENING_RADIUS, CUTOFF_RADII * rc);
   }
 
   @Override

@@ -6,6 +6,7 @@ import org.toprung.core.atom.Datum;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.cache.BoundedCache;
+import org.toprung.core.quantity.PhysicalConstants;
 
 /**
  * Radial integrals by Numerov integration at measured energies: in the Coulomb potential for
@@ -31,7 +32,7 @@ import org.toprung.core.cache.BoundedCache;
  *
  * <p>Immutable to the outside; waves are kept in a bounded cache.
  */
-public final class NumerovMethod implements RadialMethod {
+public final class NumerovMethod implements WaveMethod {
   private static final double STEP = 0.02;
 
   /** Parts of the core correction that are its uncertainty. */
@@ -53,10 +54,12 @@ public final class NumerovMethod implements RadialMethod {
   private record SolverKey(int l, int doubledJ) {}
 
   private final String description;
-  private final ToDoubleFunction<Level> effectiveN;
   private final BoundedCache<Level, RadialWave> waves;
+  private final double lengthScale;
   private final NumerovMethod refined;
   private final Species species;
+  private final BoundedCache<Level, Double> eigenvalues =
+      new BoundedCache<>(WAVES, this::eigenvalue);
   private final BoundedCache<Integer, Double> potentialCutoffs;
   private final BoundedCache<Integer, Double> calibrations;
 
@@ -66,10 +69,11 @@ public final class NumerovMethod implements RadialMethod {
       Species species,
       boolean calibrate,
       double step,
+      double lengthScale,
       NumerovMethod refined) {
     this.description = description;
-    this.effectiveN = effectiveN;
     this.species = species;
+    this.lengthScale = lengthScale;
     this.refined = refined;
     BoundedCache<SolverKey, NumerovSolver> solvers =
         new BoundedCache<>(
@@ -97,14 +101,18 @@ public final class NumerovMethod implements RadialMethod {
   }
 
   /**
-   * The method for an alkali atom.
+   * The method for an atom.
    *
-   * @param species the atom
+   * @param species the atom; for hydrogen the integrals are those of {@link #hydrogen()}, enlarged
+   *     by the reduced mass
    * @return the method, with the core correction calibrated where an element is measured
    */
   public static NumerovMethod of(Species species) {
+    if (species.isHydrogen()) {
+      return hydrogen(PhysicalConstants.RYDBERG_HERTZ / species.rydbergHertz());
+    }
     return new NumerovMethod(
-        "model potential, Numerov", species::effectiveN, species, true, STEP, null);
+        "model potential, Numerov", species::effectiveN, species, true, STEP, 1, null);
   }
 
   /**
@@ -114,8 +122,38 @@ public final class NumerovMethod implements RadialMethod {
    * @return the method, with the cutoff radii of the potential in the core correction
    */
   public static NumerovMethod uncalibrated(Species species) {
+    if (species.isHydrogen()) {
+      return hydrogen(PhysicalConstants.RYDBERG_HERTZ / species.rydbergHertz());
+    }
     return new NumerovMethod(
-        "model potential, Numerov, uncalibrated", species::effectiveN, species, false, STEP, null);
+        "model potential, Numerov, uncalibrated",
+        species::effectiveN,
+        species,
+        false,
+        STEP,
+        1,
+        null);
+  }
+
+  /**
+   * The method for an alkali atom at the eigenvalues of its potential instead of the measured
+   * energies, uncalibrated. The waves are regular at the nucleus.
+   *
+   * @param species the atom
+   * @return the method
+   */
+  public static NumerovMethod atEigenvalues(Species species) {
+    NumerovMethod measured = uncalibrated(species);
+    return species.isHydrogen()
+        ? measured
+        : new NumerovMethod(
+            "model potential at its eigenvalues, Numerov",
+            measured::eigenvalueEffectiveN,
+            species,
+            false,
+            STEP,
+            1,
+            null);
   }
 
   /**
@@ -124,9 +162,13 @@ public final class NumerovMethod implements RadialMethod {
    * @return the method
    */
   public static NumerovMethod hydrogen() {
+    return hydrogen(1);
+  }
+
+  private static NumerovMethod hydrogen(double lengthScale) {
     NumerovMethod fine =
-        new NumerovMethod("hydrogen, Numerov", Level::n, null, false, STEP / 2, null);
-    return new NumerovMethod(fine.description, Level::n, null, false, STEP, fine);
+        new NumerovMethod("hydrogen, Numerov", Level::n, null, false, STEP / 2, lengthScale, null);
+    return new NumerovMethod(fine.description, Level::n, null, false, STEP, lengthScale, fine);
   }
 
   @Override
@@ -140,7 +182,7 @@ public final class NumerovMethod implements RadialMethod {
     if (species == null) {
       // the error of the Numerov recursion is h⁴ + O(h⁶)
       double fine = refined == null ? bare : refined.waves.get(a).dipole(refined.waves.get(b));
-      return new RadialIntegral(fine + (fine - bare) / 15, 0, 0, false);
+      return new RadialIntegral(lengthScale * (fine + (fine - bare) / 15), 0, 0, false);
     }
     double cutoffA = cutoff(a);
     double cutoffB = cutoff(b);
@@ -155,6 +197,44 @@ public final class NumerovMethod implements RadialMethod {
     double other = correction(a, b, Math.min(cutoffA, cutoffB));
     double spread = Math.max(COMPUTED_PART * Math.abs(correction), Math.abs(correction - other));
     return new RadialIntegral(bare, correction, spread, false);
+  }
+
+  @Override
+  public double power(Level a, Level b, int k) {
+    WaveMethod.requirePower(k);
+    double coarse = waves.get(a).power(waves.get(b), k);
+    if (refined == null) {
+      return Math.pow(lengthScale, k) * coarse;
+    }
+    double fine = refined.waves.get(a).power(refined.waves.get(b), k);
+    return Math.pow(lengthScale, k) * (fine + (fine - coarse) / 15);
+  }
+
+  @Override
+  public Wavefunction wavefunction(Level level) {
+    return waves.get(level).table(lengthScale);
+  }
+
+  /**
+   * Where the potential itself has the level, as a check of its parameters.
+   *
+   * @param level the level
+   * @return the effective quantum number √(−1/2E) of the eigenvalue with the nodes of the level; n
+   *     for hydrogen
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
+   * @throws ArithmeticException if the potential has no such state near the measured level
+   */
+  public double eigenvalueEffectiveN(Level level) {
+    if (species == null) {
+      return level.n();
+    }
+    return eigenvalues.get(level);
+  }
+
+  private double eigenvalue(Level level) {
+    double measured = species.effectiveN(level);
+    return PotentialEigenvalue.effectiveN(
+        new ModelPotential(species, level.l(), level.doubledJ()), level.n(), level.l(), measured);
   }
 
   /** The cutoff radius of a level in a0. */

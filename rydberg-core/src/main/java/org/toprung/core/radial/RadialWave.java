@@ -56,4 +56,27 @@ final class RadialWave {
     }
     return 2 * step * sum;
   }
+
+  /** ∫ P_a r^k P_b dr = 2∫ x^(2k+2) y_a y_b dx. */
+  double power(RadialWave other, int k) {
+    int from = Math.max(first, other.first);
+    int to = Math.min(y.length, other.y.length);
+    double sum = 0;
+    for (int i = from; i < to; i++) {
+      sum += Math.pow(i * step, 2 * k + 2) * y[i] * other.y[i];
+    }
+    return 2 * step * sum;
+  }
+
+  /** The wave P = √x y on its grid, stretched by a factor. */
+  Wavefunction table(double lengthScale) {
+    double[] radii = new double[y.length - first];
+    double[] values = new double[radii.length];
+    for (int i = 0; i < radii.length; i++) {
+      double x = (first + i) * step;
+      radii[i] = lengthScale * x * x;
+      values[i] = Math.sqrt(x / lengthScale) * y[first + i];
+    }
+    return new Wavefunction(radii, values);
+  }
 }

@@ -9,8 +9,10 @@ import org.toprung.core.quantity.Estimate;
  * @param uncertaintyA0 one standard deviation in a0
  * @param origin where the modulus comes from
  * @param source the publication of a measured modulus, or the method of a computed one
+ * @param reason why this origin was taken and no better one
  */
-public record DipoleElement(double valueA0, double uncertaintyA0, Origin origin, String source) {
+public record DipoleElement(
+    double valueA0, double uncertaintyA0, Origin origin, String source, String reason) {
   /** Where the modulus of an element comes from. */
   public enum Origin {
     /** Measured. */
@@ -28,6 +30,7 @@ public record DipoleElement(double valueA0, double uncertaintyA0, Origin origin,
    * @param uncertaintyA0 one standard deviation in a0
    * @param origin where the modulus comes from
    * @param source publication or method
+   * @param reason why this origin was taken
    * @throws IllegalArgumentException if one of them is not finite or the uncertainty is negative
    */
   public DipoleElement {
@@ -45,6 +48,6 @@ public record DipoleElement(double valueA0, double uncertaintyA0, Origin origin,
 
   /** The element of opposite sign. */
   DipoleElement negate() {
-    return new DipoleElement(-valueA0, uncertaintyA0, origin, source);
+    return new DipoleElement(-valueA0, uncertaintyA0, origin, source, reason);
   }
 }

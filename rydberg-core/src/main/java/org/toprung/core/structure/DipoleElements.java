@@ -1,15 +1,16 @@
 package org.toprung.core.structure;
 
+import java.util.List;
 import java.util.Locale;
-import java.util.Map;
 import java.util.Optional;
-import java.util.concurrent.ConcurrentHashMap;
 import org.toprung.angular.Wigner;
 import org.toprung.core.atom.Datum;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.cache.BoundedCache;
+import org.toprung.core.radial.CoulombMethod;
 import org.toprung.core.radial.NumerovMethod;
+import org.toprung.core.radial.QuasiclassicalMethod;
 import org.toprung.core.radial.RadialIntegral;
 import org.toprung.core.radial.RadialMethod;
 
@@ -28,10 +29,23 @@ import org.toprung.core.radial.RadialMethod;
  * correction.
  */
 public final class DipoleElements {
-  private static final Map<Species, DipoleElements> SHARED = new ConcurrentHashMap<>();
+  private static final int SPECIES = 64;
+  private static final BoundedCache<Species, DipoleElements> SHARED =
+      new BoundedCache<>(
+          SPECIES,
+          s ->
+              new DipoleElements(
+                  s,
+                  List.of(NumerovMethod.of(s), CoulombMethod.of(s), QuasiclassicalMethod.of(s)),
+                  true));
 
   private static final int ELEMENTS = 20_000;
   private static final double FLOOR = 0.01;
+
+  private static final String MEASURED = "measured, which goes before every computed value";
+  private static final String CALIBRATED =
+      "not measured; the core correction is calibrated on a measured member of the series";
+  private static final String COMPUTED = "not measured, and no measured member to calibrate on";
 
   /**
    * The lower level in the order of levels stands first: the mirrored element follows by symmetry.
@@ -39,25 +53,27 @@ public final class DipoleElements {
   private record Pair(Level a, Level b) {}
 
   private final Species species;
-  private final RadialMethod method;
+  private final List<RadialMethod> methods;
   private final boolean measuredPreferred;
   private final BoundedCache<Pair, DipoleElement> elements;
 
-  private DipoleElements(Species species, RadialMethod method, boolean measuredPreferred) {
+  private DipoleElements(Species species, List<RadialMethod> methods, boolean measuredPreferred) {
     this.species = species;
-    this.method = method;
+    this.methods = methods;
     this.measuredPreferred = measuredPreferred;
     this.elements = new BoundedCache<>(ELEMENTS, this::evaluate);
   }
 
   /**
-   * The best elements known: measured ones where there are, else computed ones.
+   * The best elements known: measured ones where there are, else computed ones: from the calibrated
+   * model potential, else the potential as it is, else Coulomb waves, else the quasi-classical
+   * formula. Each element says in its reason why none before it was taken.
    *
    * @param species the atom
    * @return the elements; one shared instance for each species
    */
   public static DipoleElements of(Species species) {
-    return SHARED.computeIfAbsent(species, s -> new DipoleElements(s, NumerovMethod.of(s), true));
+    return SHARED.get(species);
   }
 
   /**
@@ -68,7 +84,7 @@ public final class DipoleElements {
    * @return the elements
    */
   public static DipoleElements computed(Species species, RadialMethod method) {
-    return new DipoleElements(species, method, false);
+    return new DipoleElements(species, List.of(method), false);
   }
 
   /**
@@ -101,23 +117,44 @@ public final class DipoleElements {
     Level a = species.requireValid(pair.a());
     Level b = species.requireValid(pair.b());
     requireAllowed(a, b);
+    StringBuilder refusals = new StringBuilder();
+    for (RadialMethod method : methods) {
+      try {
+        return evaluate(a, b, method, refusals.toString());
+      } catch (IllegalArgumentException | ArithmeticException e) {
+        if (methods.size() == 1) {
+          throw e;
+        }
+        refusals.append(method.description()).append(": ").append(e.getMessage()).append("; ");
+      }
+    }
+    throw new IllegalArgumentException(
+        "no method can compute the element between " + a + " and " + b + ": " + refusals);
+  }
+
+  private DipoleElement evaluate(Level a, Level b, RadialMethod method, String refusals) {
     RadialIntegral radial = method.dipole(a, b);
     double angular = angularFactor(a, b);
     double computed = angular * radial.correctedA0();
     Optional<Datum> measured = measuredPreferred ? measured(a, b) : Optional.empty();
     if (measured.isPresent()) {
       var modulus = measured.get().estimate();
+      String choice = measured.get().chosenBecause();
       return new DipoleElement(
           Math.copySign(modulus.value(), computed),
           modulus.uncertainty(),
           DipoleElement.Origin.MEASURED,
-          measured.get().source());
+          measured.get().source(),
+          choice.isEmpty() ? MEASURED : choice);
     }
+    DipoleElement.Origin origin =
+        radial.calibrated() ? DipoleElement.Origin.CALIBRATED : DipoleElement.Origin.COMPUTED;
     return new DipoleElement(
         computed,
         Math.hypot(FLOOR * computed, angular * radial.coreUncertaintyA0()),
-        radial.calibrated() ? DipoleElement.Origin.CALIBRATED : DipoleElement.Origin.COMPUTED,
-        method.description());
+        origin,
+        method.description(),
+        refusals + (radial.calibrated() ? CALIBRATED : COMPUTED));
   }
 
   private Optional<Datum> measured(Level a, Level b) {

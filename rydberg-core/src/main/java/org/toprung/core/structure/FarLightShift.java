@@ -2,9 +2,7 @@ package org.toprung.core.structure;
 
 import java.util.List;
 import java.util.Locale;
-import java.util.Map;
 import java.util.Set;
-import java.util.concurrent.ConcurrentHashMap;
 import java.util.stream.IntStream;
 import org.toprung.angular.SphericalComponents;
 import org.toprung.core.atom.Level;
@@ -41,7 +39,9 @@ import org.toprung.core.quantity.PhysicalConstants;
  * continuum, as for {@link StaticPolarizability}.
  */
 public final class FarLightShift {
-  private static final Map<Species, FarLightShift> SHARED = new ConcurrentHashMap<>();
+  private static final int SPECIES = 64;
+  private static final BoundedCache<Species, FarLightShift> SHARED =
+      new BoundedCache<>(SPECIES, FarLightShift::new);
 
   /** Largest n of the levels summed; higher ones weigh as n^−3 and belong to the remainder. */
   private static final int LARGEST_N = 25;
@@ -80,7 +80,7 @@ public final class FarLightShift {
    * @return the light shifts; one shared instance for each species
    */
   public static FarLightShift of(Species species) {
-    return SHARED.computeIfAbsent(species, FarLightShift::new);
+    return SHARED.get(species);
   }
 
   /**

@@ -1,8 +1,9 @@
 package org.toprung.core.structure;
 
-import java.util.Map;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
 import java.util.Optional;
-import java.util.concurrent.ConcurrentHashMap;
 import org.toprung.core.atom.Datum;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
@@ -19,17 +20,21 @@ import org.toprung.core.quantity.Temperature;
  * times the photon number 1/(e^{ħω/kT} − 1), over levels below and above (Gallagher and Cooke,
  * Phys. Rev. Lett. 42, 835 (1979)). Beyond the levels summed one by one, the line strength per unit
  * of energy, which is continuous across the ionization limit, is continued with the power of ω that
- * it follows at the end of the sum, and integrated; this part is trusted to 20 %.
+ * it follows at the end of the sum, and integrated; this part is trusted to 20 %. Above n = 140 the
+ * levels above are out of reach, and the rate is continued with the power of n* it has between n =
+ * 130 and 140.
  */
 public final class Lifetimes {
-  private static final Map<Species, Lifetimes> SHARED = new ConcurrentHashMap<>();
+  private static final int SPECIES = 64;
+  private static final BoundedCache<Species, Lifetimes> SHARED =
+      new BoundedCache<>(SPECIES, Lifetimes::new);
   private static final int LEVELS = 2000;
 
   /** Levels above by up to this in n are summed one by one. */
   private static final int REACH = 25;
 
-  /** Levels that must be left above for the continuation. */
-  private static final int LEAST_REACH = 10;
+  /** Above this n too few levels are left above for the continuation. */
+  private static final int LARGEST_SUMMED_N = Level.MAXIMUM_N - 10;
 
   private static final double CONTINUATION_TRUST = 0.2;
 
@@ -75,7 +80,7 @@ public final class Lifetimes {
    * @return the lifetimes; one shared instance for each species
    */
   public static Lifetimes of(Species species) {
-    return SHARED.computeIfAbsent(species, Lifetimes::new);
+    return SHARED.get(species);
   }
 
   /**
@@ -94,11 +99,10 @@ public final class Lifetimes {
    * The rate at which blackbody radiation takes the atom from a level to other bound levels, the
    * quantity that is published as the blackbody depopulation rate.
    *
-   * @param level the level, n up to 140
+   * @param level the level
    * @param temperature temperature of the surroundings
    * @return rate in s⁻¹; 0 at 0 K
-   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
-   *     or if n is above 140
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
    */
   public Estimate blackbodyRatePerSecond(Level level, Temperature temperature) {
     return blackbody.get(new Warm(level, temperature)).depopulation();
@@ -107,14 +111,85 @@ public final class Lifetimes {
   /**
    * The rate at which blackbody radiation ionizes the atom.
    *
-   * @param level the level, n up to 140
+   * @param level the level
    * @param temperature temperature of the surroundings
    * @return rate in s⁻¹; 0 at 0 K
-   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
-   *     or if n is above 140
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
    */
   public Estimate blackbodyIonizationRatePerSecond(Level level, Temperature temperature) {
     return blackbody.get(new Warm(level, temperature)).ionization();
+  }
+
+  /**
+   * One way out of a level.
+   *
+   * @param to the level the atom goes to
+   * @param spontaneousPerSecond rate of spontaneous decay in s⁻¹; 0 to higher levels
+   * @param blackbodyPerSecond rate driven by blackbody radiation in s⁻¹
+   */
+  public record Channel(Level to, Estimate spontaneousPerSecond, Estimate blackbodyPerSecond) {
+    /**
+     * Both rates together.
+     *
+     * @return the sum in s⁻¹
+     */
+    public double totalPerSecond() {
+      return spontaneousPerSecond.value() + blackbodyPerSecond.value();
+    }
+  }
+
+  /**
+   * The rates to single levels, from the dipole elements also where a lifetime is measured.
+   *
+   * @param level the level
+   * @param temperature temperature of the surroundings
+   * @return the channels to all lower levels and, above 0 K, to those up to 25 in n above, as far
+   *     as n = 150; the fastest first
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
+   */
+  public List<Channel> channels(Level level, Temperature temperature) {
+    species.requireValid(level);
+    double thermalHertz = thermalHertz(temperature);
+    double energy = species.energyHertz(level).value();
+    int last = Math.max(level.n() + REACH, level.n() + species.groundLevel().n());
+    List<Channel> channels = new ArrayList<>();
+    for (Level other : Partners.of(species, level, last)) {
+      double difference = energy - species.energyHertz(other).value();
+      Estimate part = rate(level, other, Math.abs(difference));
+      double photons = thermalHertz > 0 ? 1 / Math.expm1(Math.abs(difference) / thermalHertz) : 0;
+      Estimate blackbody = new Estimate(part.value() * photons, part.uncertainty() * photons);
+      if (difference > 0 || photons > 0) {
+        channels.add(new Channel(other, difference > 0 ? part : new Estimate(0, 0), blackbody));
+      }
+    }
+    channels.sort(Comparator.comparingDouble(Channel::totalPerSecond).reversed());
+    return List.copyOf(channels);
+  }
+
+  /**
+   * The lifetime with all ways out: spontaneous decay, blackbody radiation to other levels and into
+   * the continuum.
+   *
+   * @param level the level, not the ground level
+   * @param temperature temperature of the surroundings
+   * @return lifetime in s
+   * @throws IllegalArgumentException if the level is the ground level, belongs to the core or is
+   *     not in the catalogue
+   */
+  public Estimate lifetimeSeconds(Level level, Temperature temperature) {
+    if (level.equals(species.groundLevel())) {
+      throw new IllegalArgumentException(level + " is the ground level and does not decay");
+    }
+    Estimate cold = spontaneousRatePerSecond(level);
+    Estimate warm = blackbodyRatePerSecond(level, temperature);
+    Estimate ionization = blackbodyIonizationRatePerSecond(level, temperature);
+    double rate = cold.value() + warm.value() + ionization.value();
+    double uncertainty = cold.uncertainty() + warm.uncertainty() + ionization.uncertainty();
+    return new Estimate(1 / rate, uncertainty / (rate * rate));
+  }
+
+  private static double thermalHertz(Temperature temperature) {
+    return PhysicalConstants.BOLTZMANN / PhysicalConstants.PLANCK * temperature.kelvin();
   }
 
   private Estimate spontaneous(Level level) {
@@ -147,19 +222,21 @@ public final class Lifetimes {
 
   private Blackbody blackbody(Warm warm) {
     Level level = species.requireValid(warm.level());
-    double thermalHertz =
-        PhysicalConstants.BOLTZMANN / PhysicalConstants.PLANCK * warm.temperature().kelvin();
+    if (level.n() > LARGEST_SUMMED_N) {
+      return new Blackbody(
+          HighLevels.continued(
+              species, level, LARGEST_SUMMED_N, l -> blackbodyRatePerSecond(l, warm.temperature())),
+          HighLevels.continued(
+              species,
+              level,
+              LARGEST_SUMMED_N,
+              l -> blackbodyIonizationRatePerSecond(l, warm.temperature())));
+    }
+    double thermalHertz = thermalHertz(warm.temperature());
     if (thermalHertz == 0) {
       return new Blackbody(new Estimate(0, 0), new Estimate(0, 0));
     }
     int last = Math.min(level.n() + REACH, Level.MAXIMUM_N);
-    if (last < level.n() + LEAST_REACH) {
-      throw new IllegalArgumentException(
-          "the blackbody rate of "
-              + level
-              + " needs the levels above it; n must be at most "
-              + (Level.MAXIMUM_N - LEAST_REACH));
-    }
     double energy = species.energyHertz(level).value();
     double rate = 0;
     double uncertainty = 0;

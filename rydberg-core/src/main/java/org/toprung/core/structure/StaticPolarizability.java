@@ -1,8 +1,5 @@
 package org.toprung.core.structure;
 
-import java.util.List;
-import java.util.Map;
-import java.util.concurrent.ConcurrentHashMap;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.cache.BoundedCache;
@@ -21,12 +18,26 @@ import org.toprung.core.quantity.PhysicalConstants;
  * <p>The continuum is left out. In its place stands an uncertainty of 1 atomic unit for the ground
  * level and of a tenth of 1/E² (E the binding energy, atomic units) for others, which is nothing
  * against the polarizability of Rydberg levels.
+ *
+ * <p>Uncertainty of the sum: computed elements share one method, so their errors go the same way
+ * and are added with the sign of their term, and a twentieth of each is taken as independent;
+ * measured elements are independent.
+ *
+ * <p>Above n = 138 the levels above are out of reach, and the value is continued with the power of
+ * n* it has between n = 128 and 138.
  */
 public final class StaticPolarizability {
-  private static final Map<Species, StaticPolarizability> SHARED = new ConcurrentHashMap<>();
+  private static final int SPECIES = 64;
+  private static final BoundedCache<Species, StaticPolarizability> SHARED =
+      new BoundedCache<>(SPECIES, StaticPolarizability::new);
   private static final int LEVELS = 2000;
   private static final int REACH = 12;
   private static final int LEAST_N = 25;
+  private static final int LARGEST_SUMMED_N = Level.MAXIMUM_N - REACH;
+  private static final int HIGH_L_MARGIN = 20;
+
+  /** Part of the uncertainty of a computed element that it does not share with the others. */
+  private static final double INDEPENDENT_PART = 0.05;
 
   private record Pair(Estimate scalar, Estimate tensor) {}
 
@@ -47,7 +58,7 @@ public final class StaticPolarizability {
    * @return the polarizabilities; one shared instance for each species
    */
   public static StaticPolarizability of(Species species) {
-    return SHARED.computeIfAbsent(species, StaticPolarizability::new);
+    return SHARED.get(species);
   }
 
   /**
@@ -74,20 +85,18 @@ public final class StaticPolarizability {
 
   private Pair evaluate(Level level) {
     species.requireValid(level);
-    List<Level> partners = Partners.of(species, level, Math.max(level.n() + REACH, LEAST_N));
+    if (level.n() > LARGEST_SUMMED_N && level.l() < LARGEST_SUMMED_N - HIGH_L_MARGIN) {
+      return new Pair(
+          HighLevels.continued(species, level, LARGEST_SUMMED_N, l -> known.get(l).scalar()),
+          HighLevels.continued(species, level, LARGEST_SUMMED_N, l -> known.get(l).tensor()));
+    }
     int doubledJ = level.doubledJ();
-    double core = species.corePolarizabilityAu().value();
     double unit = PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ;
-    double mean = unit * core;
-    double meanError =
-        unit
-            * Math.hypot(
-                species.corePolarizabilityAu().uncertainty(),
-                SecondOrder.continuumAu(species, level));
-    double stretched = mean;
-    double differenceError = 0;
-    for (Level other : partners) {
-      Estimate strength = elements.reduced(other, level).strength();
+    Estimate core = species.corePolarizabilityAu();
+    Sum mean = new Sum();
+    Sum difference = new Sum();
+    for (Level other : Partners.of(species, level, Math.max(level.n() + REACH, LEAST_N))) {
+      DipoleElement element = elements.reduced(other, level);
       double factor =
           2
               * SecondOrder.COUPLING_SQUARED
@@ -95,14 +104,38 @@ public final class StaticPolarizability {
       // the squared 3j symbols of one q add up to 1/3 over m
       double meanShare = 1.0 / (3 * (doubledJ + 1));
       double stretchedShare = SecondOrder.share(level, doubledJ, other, 0);
-      mean += factor * strength.value() * meanShare;
-      stretched += factor * strength.value() * stretchedShare;
-      meanError += Math.abs(factor) * strength.uncertainty() * meanShare;
-      differenceError += Math.abs(factor * (stretchedShare - meanShare)) * strength.uncertainty();
+      mean.add(factor * meanShare, element);
+      difference.add(factor * (stretchedShare - meanShare), element);
     }
+    double outside = unit * Math.hypot(core.uncertainty(), SecondOrder.continuumAu(species, level));
     // the tensor factor is 1 at m = J
     return new Pair(
-        new Estimate(mean, meanError),
-        doubledJ == 1 ? new Estimate(0, 0) : new Estimate(stretched - mean, differenceError));
+        new Estimate(mean.value + unit * core.value(), Math.hypot(mean.uncertainty(), outside)),
+        doubledJ == 1
+            ? new Estimate(0, 0)
+            : new Estimate(difference.value, difference.uncertainty()));
+  }
+
+  /** A sum over levels with its uncertainty. */
+  private static final class Sum {
+    private double value;
+    private double common;
+    private double independentSquared;
+
+    void add(double factor, DipoleElement element) {
+      Estimate strength = element.strength();
+      double error = factor * strength.uncertainty();
+      value += factor * strength.value();
+      if (element.origin() == DipoleElement.Origin.MEASURED) {
+        independentSquared += error * error;
+      } else {
+        common += error;
+        independentSquared += INDEPENDENT_PART * INDEPENDENT_PART * error * error;
+      }
+    }
+
+    double uncertainty() {
+      return Math.sqrt(common * common + independentSquared);
+    }
   }
 }

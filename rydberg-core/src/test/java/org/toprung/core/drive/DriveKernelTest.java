@@ -364,7 +364,8 @@ class DriveKernelTest {
     Drive anew = offFocus(0.003, 1.2e9);
     assertClose(anew.rabi().hertz(), result.rabiHertz(), 0);
     assertClose(anew.startLightShift().hertz(), result.startLightShiftHertz(), 0);
-    double trap = anew.targetTrapShift().hertz() - anew.startTrapShift().hertz();
+    Drive.TrapLight light = anew.trap().orElseThrow();
+    double trap = light.targetShift().hertz() - light.startShift().hertz();
     assertTrue(Math.abs(trap) > 1e6);
     double shifts = anew.targetLightShift().hertz() - anew.startLightShift().hertz();
     assertClose(shifts + trap, result.frequencyOffsetHertz(), 0);

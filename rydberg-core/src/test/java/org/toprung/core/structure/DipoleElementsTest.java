@@ -5,12 +5,15 @@ import static org.junit.jupiter.api.Assertions.assertSame;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.net.URI;
+import java.nio.file.Path;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.constraints.IntRange;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.toprung.core.atom.Catalogue;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.quantity.PhysicalConstants;
@@ -205,10 +208,34 @@ class DipoleElementsTest {
   void elementsWithImpossiblePartsAreRefused() {
     assertThrows(
         IllegalArgumentException.class,
-        () -> new DipoleElement(Double.NaN, 0, DipoleElement.Origin.COMPUTED, ""));
+        () -> new DipoleElement(Double.NaN, 0, DipoleElement.Origin.COMPUTED, "", ""));
     assertThrows(
         IllegalArgumentException.class,
-        () -> new DipoleElement(1, -1, DipoleElement.Origin.COMPUTED, ""));
+        () -> new DipoleElement(1, -1, DipoleElement.Origin.COMPUTED, "", ""));
+  }
+
+  @Test
+  void everyElementSaysWhyItsOriginWasTaken() {
+    assertTrue(rb("5S1/2", "6P3/2").reason().contains("measured"));
+    assertTrue(
+        CS.reduced(Level.parse("6S1/2"), Level.parse("7P1/2")).reason().contains("later"),
+        "the reason of the catalogue");
+    assertTrue(rb("5S1/2", "40P3/2").reason().contains("calibrated on a measured member"));
+    assertTrue(rb("6P3/2", "40D5/2").reason().contains("no measured member"));
+  }
+
+  // without rows of a potential the Coulomb wave steps in, and the reason says so
+  @Test
+  void withoutAPotentialCoulombWavesTakeOver() {
+    Species bare =
+        Catalogue.bundled()
+            .with(Path.of(URI.create(getClass().getResource("francium_like.csv").toString())))
+            .species("Xx-1");
+    DipoleElement element =
+        DipoleElements.of(bare).reduced(Level.parse("40P3/2"), Level.parse("40S1/2"));
+    assertTrue(element.source().contains("Coulomb"), element.source());
+    assertTrue(element.reason().contains("no POTENTIAL"), element.reason());
+    assertTrue(Math.abs(element.valueA0()) > 1000);
   }
 
   @Test

@@ -131,4 +131,27 @@ class HyperfineManifoldTest {
     IllegalArgumentException e = assertThrows(IllegalArgumentException.class, () -> m.state(6, 0));
     assertTrue(e.getMessage().contains("F=3"), e.getMessage());
   }
+
+  // quadratic shift of the clock transition: Rb-87 575.14 Hz/G² (Bize et al., Europhys. Lett. 45,
+  // 558
+  // (1999)), Cs 427.45 Hz/G² (common practice of caesium clocks), from the difference of the
+  // sublevels
+  @org.junit.jupiter.params.ParameterizedTest
+  @org.junit.jupiter.params.provider.CsvSource({
+    "Rb-87,5S1/2,1,2,575.14",
+    "Cs-133,6S1/2,3,4,427.45"
+  })
+  void clockTransitionsShiftQuadratically(
+      String name, String level, int lower, int upper, double hertzPerSquareGauss) {
+    double gauss = 0.5;
+    double shift =
+        clockHertz(name, level, lower, upper, gauss) - clockHertz(name, level, lower, upper, 0);
+    assertEquals(hertzPerSquareGauss, shift / (gauss * gauss), 0.1);
+  }
+
+  private static double clockHertz(String name, String level, int lower, int upper, double gauss) {
+    HyperfineManifold manifold =
+        HyperfineManifold.of(Species.parse(name), Level.parse(level), MagneticField.gauss(gauss));
+    return manifold.state(2 * upper, 0).energyHertz() - manifold.state(2 * lower, 0).energyHertz();
+  }
 }

@@ -4,6 +4,10 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import net.jqwik.api.ForAll;
+import net.jqwik.api.Property;
+import net.jqwik.api.constraints.DoubleRange;
+import net.jqwik.api.constraints.IntRange;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvFileSource;
@@ -147,15 +151,105 @@ class LifetimesTest {
     assertEquals(3 / 118.0, RB.spontaneousRatePerSecond(Level.parse("6P3/2")).relative(), 1e-9);
   }
 
+  // the rate is smooth in n* to the largest n and stays below the sum rule
   @Test
-  void levelsWithoutRoomAboveAreRefused() {
-    assertTrue(RB.blackbodyRatePerSecond(Level.parse("140S1/2"), ROOM).value() > 0);
-    var e =
-        assertThrows(
-            IllegalArgumentException.class,
-            () -> RB.blackbodyRatePerSecond(Level.parse("141S1/2"), ROOM));
-    assertTrue(e.getMessage().contains("at most 140"), e.getMessage());
+  void blackbodyRatesReachTheLargestN() {
+    for (String series : new String[] {"S1/2", "P3/2", "D5/2"}) {
+      double previous = Double.POSITIVE_INFINITY;
+      for (int n = 136; n <= 150; n += 2) {
+        Level level = Level.parse(n + series);
+        double scaled =
+            RB.blackbodyRatePerSecond(level, ROOM).value()
+                * Math.pow(Species.RUBIDIUM_87.effectiveN(level), 2);
+        assertTrue(
+            previous == Double.POSITIVE_INFINITY || Math.abs(scaled / previous - 1) < 0.01,
+            level + ": " + scaled + " after " + previous);
+        previous = scaled;
+      }
+    }
     assertThrows(
         IllegalArgumentException.class, () -> RB.spontaneousRatePerSecond(Level.parse("4S1/2")));
+  }
+
+  @Test
+  void channelsAddUpToTheRates() {
+    Level level = Level.parse("60D5/2");
+    var channels = RB.channels(level, ROOM);
+    double spontaneous = channels.stream().mapToDouble(c -> c.spontaneousPerSecond().value()).sum();
+    double blackbody = channels.stream().mapToDouble(c -> c.blackbodyPerSecond().value()).sum();
+    double cold = RB.spontaneousRatePerSecond(level).value();
+    double warm = RB.blackbodyRatePerSecond(level, ROOM).value();
+    assertEquals(cold, spontaneous, 1e-9 * cold);
+    // the rest goes to levels more than 25 above
+    assertTrue(blackbody < warm && blackbody > 0.95 * warm, blackbody + " of " + warm);
+    for (int i = 1; i < channels.size(); i++) {
+      assertTrue(channels.get(i).totalPerSecond() <= channels.get(i - 1).totalPerSecond());
+    }
+    assertTrue(
+        RB.channels(level, Temperature.ofKelvin(0)).stream()
+            .allMatch(c -> c.blackbodyPerSecond().value() == 0));
+  }
+
+  // exact for hydrogen (NIST): A(2P-1S) = 6.2649e8 s⁻¹, A(3P-1S) = 1.6725e8, A(3P-2S) = 2.2448e7,
+  // A(3D-2P) = 6.4651e7 from J = 5/2
+  @ParameterizedTest
+  @CsvSource({
+    "2P3/2,1S1/2,6.2649e8",
+    "3P1/2,1S1/2,1.6725e8",
+    "3P3/2,2S1/2,2.2448e7",
+    "3D5/2,2P3/2,6.4651e7"
+  })
+  void ratesOfHydrogenMeetTheExactOnes(String upper, String lower, double published) {
+    double rate =
+        Lifetimes.of(Species.parse("H"))
+            .channels(Level.parse(upper), Temperature.ofKelvin(0))
+            .stream()
+            .filter(c -> c.to().equals(Level.parse(lower)))
+            .mapToDouble(c -> c.spontaneousPerSecond().value())
+            .findFirst()
+            .orElseThrow();
+    assertEquals(published, rate, 2e-4 * published);
+  }
+
+  // every mJ of a level decays at the same rate: Σ over final mJ and q of the squared 3j symbols is
+  // the same for all of them (Wigner-Eckart)
+  @Property(seed = "20261230", tries = 30)
+  void allProjectionsDecayAtTheSameRate(
+      @ForAll @IntRange(min = 0, max = 5) int l, @ForAll @IntRange(min = 0, max = 1) int up) {
+    int doubledJ = 2 * l + (up == 1 || l == 0 ? 1 : -1);
+    Level level = Level.of(40, l, doubledJ);
+    for (Level other : Partners.of(Species.RUBIDIUM_87, level, 12)) {
+      for (int m = -doubledJ; m <= doubledJ; m += 2) {
+        double sum = 0;
+        for (int q = -1; q <= 1; q++) {
+          sum += SecondOrder.share(level, m, other, q);
+        }
+        assertEquals(1.0 / (doubledJ + 1), sum, 1e-13, level + " m " + m + " to " + other);
+      }
+    }
+  }
+
+  // lifetimes grow as n*³ for S and are longer at 0 K than at any temperature
+  @Property(seed = "20261231", tries = 12)
+  void lifetimesScaleAndShortenWithTemperature(
+      @ForAll @IntRange(min = 30, max = 90) int n,
+      @ForAll @DoubleRange(min = 1, max = 600) double kelvin) {
+    for (String name : new String[] {"Li-7", "Na-23", "K-39", "Rb-87", "Cs-133"}) {
+      Species species = Species.parse(name);
+      Lifetimes lifetimes = Lifetimes.of(species);
+      Level level = Level.of(n, 0, 1);
+      Level higher = Level.of(n + 20, 0, 1);
+      double cold = lifetimes.lifetimeSeconds(level, Temperature.ofKelvin(0)).value();
+      double far = lifetimes.lifetimeSeconds(higher, Temperature.ofKelvin(0)).value();
+      double ratio = Math.pow(species.effectiveN(higher) / species.effectiveN(level), 3);
+      assertEquals(ratio, far / cold, 0.02 * ratio, name + level);
+      assertTrue(lifetimes.lifetimeSeconds(level, Temperature.ofKelvin(kelvin)).value() < cold);
+    }
+  }
+
+  @Test
+  void theGroundLevelHasNoLifetime() {
+    assertThrows(
+        IllegalArgumentException.class, () -> RB.lifetimeSeconds(Level.parse("5S1/2"), ROOM));
   }
 }

@@ -14,9 +14,11 @@ import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
 import org.toprung.angular.PolarizationVector;
 import org.toprung.angular.SphericalComponents;
+import org.toprung.angular.Wigner;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.quantity.Estimate;
+import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.PhysicalConstants;
 
 class PolarizabilityTest {
@@ -42,6 +44,9 @@ class PolarizabilityTest {
   @CsvSource({
     "Rb-87,5S1/2,318.8,0,0.005,0",
     "Cs-133,6S1/2,401.0,0,0.005,0",
+    "K-39,4S1/2,290,0,0.01,0",
+    "Na-23,3S1/2,162.7,0,0.01,0",
+    "Li-7,2S1/2,164.1,0,0.012,0",
     "Rb-87,5P1/2,810.6,0,0.02,0",
     "Rb-87,5P3/2,869,-166,0.02,3",
     "Cs-133,6P1/2,1328,0,0.02,0",
@@ -72,6 +77,108 @@ class PolarizabilityTest {
         published,
         StaticPolarizability.of(Species.RUBIDIUM_87).scalarHertzPerFieldSquared(level).value(),
         0.03 * published);
+  }
+
+  // the stated uncertainty lies between the deviation from the measured power law and 3 %
+  @ParameterizedTest
+  @ValueSource(ints = {40, 60, 80})
+  void uncertaintyOfRydbergLevelsIsNeitherTooSmallNorTooLarge(int n) {
+    Level level = Level.of(n, 0, 1);
+    double effective = Species.RUBIDIUM_87.effectiveN(level);
+    double published =
+        100 * (2.202e-9 * Math.pow(effective, 6) + 5.53e-11 * Math.pow(effective, 7));
+    Estimate alpha = StaticPolarizability.of(Species.RUBIDIUM_87).scalarHertzPerFieldSquared(level);
+    assertTrue(Math.abs(alpha.value() - published) < alpha.uncertainty(), "" + alpha);
+    assertTrue(alpha.relative() < 0.03, "" + alpha.relative());
+  }
+
+  // grows as n*^7 without a step where the levels above run out
+  @Test
+  void polarizabilitiesReachTheLargestN() {
+    StaticPolarizability polarizability = StaticPolarizability.of(Species.RUBIDIUM_87);
+    for (String series : new String[] {"S1/2", "P3/2", "D5/2"}) {
+      double previous = 0;
+      for (int n = 134; n <= 150; n++) {
+        Level level = Level.parse(n + series);
+        double scaled =
+            polarizability.scalarHertzPerFieldSquared(level).value()
+                / Math.pow(Species.RUBIDIUM_87.effectiveN(level), 7);
+        assertTrue(previous == 0 || Math.abs(scaled / previous - 1) < 0.01, level.toString());
+        previous = scaled;
+      }
+    }
+  }
+
+  // wavelengths in vacuum at which the light shift of the ground level vanishes: Na 589.5565(3) and
+  // Cs 880.25(4), Arora, Safronova and Clark, Phys. Rev. A 84, 043401 (2011); K 768.9712(15)
+  // measured
+  // by Holmgren et al., Phys. Rev. Lett. 109, 243004 (2012); Rb 790.0324 measured by Leonard et
+  // al.,
+  // Phys. Rev. A 92, 052501 (2015); all from memory
+  @ParameterizedTest
+  @CsvSource({
+    "Na-23,3S1/2,589.5565,0.001",
+    "K-39,4S1/2,768.9712,0.003",
+    "Rb-87,5S1/2,790.0324,0.003",
+    "Cs-133,6S1/2,880.25,0.05"
+  })
+  void scalarPolarizabilityVanishesAtThePublishedWavelength(
+      String name, String text, double nanometres, double within) {
+    DynamicPolarizability dynamic = DynamicPolarizability.of(Species.parse(name));
+    Level level = Level.parse(text);
+    double below = dynamic.scalarAu(level, Frequency.ofHertz(hertz(nanometres - within))).value();
+    double above = dynamic.scalarAu(level, Frequency.ofHertz(hertz(nanometres + within))).value();
+    assertTrue(below * above < 0, below + " " + above);
+  }
+
+  // the sums of Le Kien, Schneeweiss and Rauschenbeutel, Eur. Phys. J. D 67, 92 (2013), eq. 11, for
+  // the valence part
+  @ParameterizedTest
+  @CsvSource({"5S1/2,1064", "5P3/2,1064", "5P1/2,1064", "6P3/2,1300", "4D5/2,1600"})
+  void partsMeetTheIrreducibleSums(String text, double nanometres) {
+    Species species = Species.RUBIDIUM_87;
+    Level level = Level.parse(text);
+    double laser = hertz(nanometres);
+    double j = level.doubledJ() / 2.0;
+    double[] sums = new double[3];
+    for (Level other : Partners.of(species, level, 25)) {
+      double distance = species.energyHertz(other).value() - species.energyHertz(level).value();
+      double strength = DipoleElements.of(species).reduced(other, level).strength().value();
+      for (int k = 0; k < 3; k++) {
+        int exponent = k + (level.doubledJ() + other.doubledJ()) / 2 + 1;
+        sums[k] +=
+            (exponent % 2 == 0 ? 1 : -1)
+                * Math.sqrt(2 * k + 1)
+                * Wigner.sixJDoubled(
+                    2, 2 * k, 2, level.doubledJ(), other.doubledJ(), level.doubledJ())
+                * strength
+                * PhysicalConstants.HARTREE_HERTZ
+                * (1 / (distance - laser) + (k == 1 ? -1 : 1) / (distance + laser));
+      }
+    }
+    DynamicPolarizability dynamic = DynamicPolarizability.of(species);
+    Frequency light = Frequency.ofHertz(laser);
+    double core = species.corePolarizabilityAu().value();
+    double scalar = sums[0] / Math.sqrt(3 * (2 * j + 1));
+    assertEquals(
+        scalar, dynamic.scalarAu(level, light).value() - core, 1e-9 * Math.abs(scalar), "scalar");
+    double vector = -Math.sqrt(2 * j / ((j + 1) * (2 * j + 1))) * sums[1];
+    assertEquals(vector, dynamic.vectorAu(level, light).value(), 1e-9 * Math.abs(vector), "vector");
+    double tensor =
+        -Math.sqrt(2 * j * (2 * j - 1) / (3 * (j + 1) * (2 * j + 1) * (2 * j + 3))) * sums[2];
+    assertEquals(
+        tensor, dynamic.tensorAu(level, light).value(), 1e-9 * (1 + Math.abs(scalar)), "tensor");
+  }
+
+  // exact: −1/ω² of a free electron
+  @Test
+  void rydbergLevelsHaveThePolarizabilityOfAFreeElectron() {
+    double omega = hertz(1064) / PhysicalConstants.HARTREE_HERTZ;
+    double scalar =
+        DynamicPolarizability.of(Species.RUBIDIUM_87)
+            .scalarAu(Level.parse("70S1/2"), Frequency.ofHertz(hertz(1064)))
+            .value();
+    assertEquals(-1 / (omega * omega), scalar, 0.05 / (omega * omega));
   }
 
   @Test
