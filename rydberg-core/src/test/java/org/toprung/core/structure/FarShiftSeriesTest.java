@@ -23,14 +23,12 @@ class FarShiftSeriesTest {
       List.of(Level.parse("5S1/2"), Level.parse("68S1/2"), Level.parse("60D5/2"));
 
   private static SphericalComponents light() {
-    return Polarization.ellipticalDegrees(30, 15)
-        .resolvedFor(1, 0.2, 0.1)
-        .componentsAbout(0, 0, 1);
+    return Polarization.ellipticalDegrees(30, 15).resolvedFor(1, 0.2, 0.1).componentsAbout(0, 0, 1);
   }
 
   /**
-   * Exact: the series is the sum over states itself, for infrared to blue light, below and above the
-   * ionization threshold, with and without near levels.
+   * Exact: the series is the sum over states itself, for infrared to blue light, below and above
+   * the ionization threshold, with and without near levels.
    */
   @Property(tries = 200, seed = "51")
   void equalsTheSumOverStates(
@@ -40,8 +38,7 @@ class FarShiftSeriesTest {
       @ForAll @DoubleRange(min = 0, max = 1) double weight,
       @ForAll boolean near) {
     Level level = LEVELS.get(index);
-    Set<Level> nearLevels =
-        near ? Set.of(Level.parse("6P3/2"), Level.parse("5P1/2")) : Set.of();
+    Set<Level> nearLevels = near ? Set.of(Level.parse("6P3/2"), Level.parse("5P1/2")) : Set.of();
     double laser = terahertz * 1e12;
     double moved = laser + offset * 1e12;
     FarShiftSeries series =
@@ -63,8 +60,7 @@ class FarShiftSeriesTest {
   @Test
   void refusesOffsetsBeyondItsReach() {
     FarShiftSeries series =
-        SHIFTS.series(
-            LEVELS.get(0), new int[] {1}, new double[] {1}, 3e14, light(), Set.of());
+        SHIFTS.series(LEVELS.get(0), new int[] {1}, new double[] {1}, 3e14, light(), Set.of());
     refused("within", () -> series.hertzPerFieldSquared(2.1e12));
     refused("within", () -> series.hertzPerFieldSquared(Double.NaN));
   }
