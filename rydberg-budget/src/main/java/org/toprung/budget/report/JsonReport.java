@@ -19,6 +19,7 @@ import org.toprung.core.drive.GroundLight;
 import org.toprung.core.drive.Profile;
 import org.toprung.core.drive.PulsePlan;
 import org.toprung.core.structure.DipoleElement;
+import org.toprung.core.structure.ReducedElement;
 
 /**
  * The report for programs: JSON with SI units in the key names. A value that is not finite is never
@@ -124,7 +125,9 @@ public final class JsonReport {
 
   private void step(Drive drive, int k) throws IOException {
     Drive.Step step = drive.steps().get(k);
-    DipoleElement element = step.element();
+    ReducedElement element = step.element();
+    String kind = element instanceof DipoleElement ? "dipole" : "quadrupole";
+    String unit = element instanceof DipoleElement ? "ea0" : "ea02";
     json.writeStartObject();
     json.writeStringField("to", step.to());
     number("wavelength_m", step.wavelength().metres());
@@ -133,10 +136,12 @@ public final class JsonReport {
     }
     beam(step);
     number("rabi_Hz", step.rabi().hertz());
-    number("reduced_dipole_ea0", Math.abs(element.valueA0()));
-    number("reduced_dipole_uncertainty_ea0", element.uncertaintyA0());
-    json.writeStringField("dipole_origin", TextReport.origin(step));
-    json.writeStringField("dipole_source", element.source());
+    number("reduced_" + kind + "_" + unit, element.modulus());
+    number(
+        "reduced_" + kind + "_uncertainty_" + unit,
+        element.modulus() * element.relativeUncertainty());
+    json.writeStringField(kind + "_origin", TextReport.origin(step));
+    json.writeStringField(kind + "_source", element.source());
     number("start_light_shift_Hz", drive.startLightShift(k).hertz());
     number("target_light_shift_Hz", drive.targetLightShift(k).hertz());
     json.writeEndObject();

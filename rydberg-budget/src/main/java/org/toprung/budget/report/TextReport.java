@@ -10,6 +10,7 @@ import org.toprung.budget.Check;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.PulsePlan;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.structure.DipoleElement;
 
 /**
  * The report for people: one page of text that fits {@value Page#WIDTH} columns.
@@ -108,11 +109,14 @@ public final class TextReport {
     page.value("beam", BeamText.of(step));
     page.value("Rabi frequency", Figures.of(step.rabi()));
     page.value(
-        "reduced dipole element",
+        step.element() instanceof DipoleElement ? "reduced dipole element" : "reduced quadrupole",
         String.format(
             Locale.ROOT,
-            "(%s) e a0, %s: %s",
-            Figures.measured(Math.abs(step.element().valueA0()), step.element().uncertaintyA0()),
+            "(%s) %s, %s: %s",
+            Figures.measured(
+                step.element().modulus(),
+                step.element().modulus() * step.element().relativeUncertainty()),
+            step.element().unit(),
             origin(step),
             step.element().source()));
   }

@@ -10,6 +10,7 @@ import org.toprung.budget.pulse.Pulse;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
+import org.toprung.core.drive.Beam;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.DriveSetup;
 import org.toprung.core.quantity.ElectricField;
@@ -43,7 +44,8 @@ public final class Scenario {
   private static final List<String> KEYS =
       List.of("title", "atom", "field", "start", "idle", "step", "trap", "pulse", "bench");
   private static final List<String> STEP_KEYS = joined(List.of("to", "detuning"), Beams.KEYS);
-  private static final List<String> LAST_STEP_KEYS = joined(List.of("to", "mJ"), Beams.KEYS);
+  private static final List<String> LAST_STEP_KEYS =
+      joined(List.of("to", "mJ", "multipole"), Beams.KEYS);
 
   private static final List<String> TRAP_KEYS = joined(List.of("wavelength"), Beams.KEYS);
 
@@ -192,7 +194,19 @@ public final class Scenario {
     String number = "a half-integer such as 0.5";
     Value m = table.required("mJ", number);
     Sublevel target = m.guarded(() -> Sublevel.fine(to, m.number(number)));
-    return table.guarded(() -> setup.step(target, Beams.read(table)));
+    boolean quadrupole = table.optional("multipole").map(Scenario::isQuadrupole).orElse(false);
+    Beam beam = Beams.read(table);
+    return table.guarded(
+        () -> quadrupole ? setup.quadrupoleStep(target, beam) : setup.step(target, beam));
+  }
+
+  private static boolean isQuadrupole(Value multipole) {
+    String allowed = "\"E1\" or, for a single step, \"E2\"";
+    return switch (multipole.text(allowed)) {
+      case "E1" -> false;
+      case "E2" -> true;
+      default -> throw multipole.refused(allowed);
+    };
   }
 
   private static Pulse pulse(Table table) {

@@ -115,11 +115,8 @@ class ScenarioTest {
     return new ReportContent(s.title(), budget, budget.check(10, 1));
   }
 
-  @Test
-  void readsOneStepAndThree() {
-    Scenario one =
-        parse(
-            """
+  private static String oneStep() {
+    return """
             [atom]
             species = "Cs-133"
             [field]
@@ -137,7 +134,17 @@ class ScenarioTest {
             direction = [0, 0, 1]
             [pulse]
             kind = "pi"
-            """);
+            """;
+  }
+
+  @Test
+  void readsOneStepAndThree() {
+    Scenario one = parse(oneStep());
+    Scenario quadrupole =
+        parse(oneStep().replace("60P3/2", "60D5/2").replace("mJ", "multipole = \"E2\"\nmJ"));
+    String json = JsonReport.render(report(quadrupole));
+    assertTrue(json.contains("reduced_quadrupole_ea02"), json);
+    assertTrue(TextReport.render(report(quadrupole)).contains("reduced quadrupole"));
     assertEquals(1, one.drive().steps().size());
     assertTrue(one.drive().intermediates().isEmpty());
     assertTrue(TextReport.render(report(one)).contains("60P3/2"));

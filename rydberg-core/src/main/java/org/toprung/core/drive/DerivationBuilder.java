@@ -33,6 +33,9 @@ final class DerivationBuilder {
               + ": a strong step between intermediate levels dresses them, and the coupling is no"
               + " sum over paths");
     }
+    if (setup.isQuadrupole(0)) {
+      throw new IllegalArgumentException("paths are written down for dipole steps alone");
+    }
     return new DerivationBuilder(setup).derivation(drive);
   }
 

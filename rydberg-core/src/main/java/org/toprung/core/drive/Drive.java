@@ -11,7 +11,7 @@ import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.MagneticField;
 import org.toprung.core.quantity.PhysicalConstants;
-import org.toprung.core.structure.DipoleElement;
+import org.toprung.core.structure.ReducedElement;
 
 /**
  * A resolved drive from a ground sublevel to a Rydberg sublevel by one, two or three photons:
@@ -46,11 +46,12 @@ public final class Drive {
    * @param wavelength vacuum wavelength of the laser, light shifts not compensated
    * @param rabi root of the summed squares of the couplings over 2π from the start (first step) or
    *     to the target (last step) over the sublevels of the intermediate level
-   * @param element reduced dipole element between the two levels
+   * @param element reduced dipole element between the two levels; the quadrupole one of a
+   *     quadrupole step
    * @param beam the beam that drives it
    */
   public record Step(
-      String to, Length wavelength, Frequency rabi, DipoleElement element, Beam beam) {
+      String to, Length wavelength, Frequency rabi, ReducedElement element, Beam beam) {
 
     /**
      * Relative standard uncertainty of the dipole element, and so of the step's Rabi frequency.
@@ -58,7 +59,7 @@ public final class Drive {
      * @return the relative uncertainty
      */
     public double relativeUncertainty() {
-      return element.uncertaintyA0() / Math.abs(element.valueA0());
+      return element.relativeUncertainty();
     }
 
     /**

@@ -22,7 +22,7 @@ public final class DriveSetup {
   private static final int MAX_STEPS = 3;
 
   /** One step as described: where it leads and the beam that drives it. */
-  record Step(Level to, Sublevel target, Beam beam) {
+  record Step(Level to, Sublevel target, Beam beam, boolean quadrupole) {
     @Override
     public String toString() {
       return target == null ? to.toString() : target.toString();
@@ -96,7 +96,7 @@ public final class DriveSetup {
    */
   public DriveSetup step(Level to, Beam beam) {
     species.requireValid(to);
-    return withStep(new Step(to, null, beam));
+    return withStep(new Step(to, null, beam, false));
   }
 
   /**
@@ -110,6 +110,29 @@ public final class DriveSetup {
    * @throws IllegalStateException if the beam lacks polarization or direction
    */
   public DriveSetup step(Sublevel target, Beam beam) {
+    return withStep(new Step(requireTarget(target).level(), target, beam, false));
+  }
+
+  /**
+   * Drives the target straight from the ground level by the electric quadrupole of a single beam, S
+   * to D.
+   *
+   * @param target a Rydberg sublevel of a D level with its m<sub>J</sub>
+   * @param beam the beam that drives it, with polarization and direction
+   * @return a copy with this only step
+   * @throws IllegalArgumentException if the species has no such sublevel, it is labelled by F, or
+   *     the beam cannot have its polarization
+   * @throws IllegalStateException if the beam lacks polarization or direction, or there is a step
+   *     already
+   */
+  public DriveSetup quadrupoleStep(Sublevel target, Beam beam) {
+    if (!steps.isEmpty()) {
+      throw new IllegalStateException("a quadrupole step is the only one, not after " + steps);
+    }
+    return withStep(new Step(requireTarget(target).level(), target, beam, true));
+  }
+
+  private Sublevel requireTarget(Sublevel target) {
     species.requireValid(target);
     if (target.isHyperfine()) {
       throw new IllegalArgumentException(
@@ -117,7 +140,7 @@ public final class DriveSetup {
               + target
               + " must be given by its mJ: the nuclear spin of a Rydberg level is a spectator");
     }
-    return withStep(new Step(target.level(), target, beam));
+    return target;
   }
 
   private DriveSetup withStep(Step step) {
@@ -285,6 +308,10 @@ public final class DriveSetup {
   /** The beam of a step as the atom sees it: its focus counted from the atom. */
   Beam beam(int step) {
     return site.sees(steps.get(step).beam());
+  }
+
+  boolean isQuadrupole(int step) {
+    return steps.get(step).quadrupole();
   }
 
   Frequency detuning(int step) {

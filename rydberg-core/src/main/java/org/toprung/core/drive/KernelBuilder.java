@@ -48,7 +48,7 @@ final class KernelBuilder {
               1,
               field * field,
               strongest(k),
-              builder.element(k).uncertaintyA0() / Math.abs(builder.element(k).valueA0()),
+              builder.element(k).relativeUncertainty(),
               far(ladder.start(), k),
               far(wanted[0], k)));
     }

@@ -13,6 +13,7 @@ import java.util.Map;
 import java.util.Set;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 import org.toprung.angular.HalfInteger;
 import org.toprung.angular.SphericalComponents;
 import org.toprung.core.atom.Level;
@@ -26,6 +27,8 @@ import org.toprung.core.structure.DipoleElement;
 import org.toprung.core.structure.DipoleElements;
 import org.toprung.core.structure.FarLightShift;
 import org.toprung.core.structure.Lifetimes;
+import org.toprung.core.structure.QuadrupoleElements;
+import org.toprung.core.structure.ReducedElement;
 
 /**
  * Turns the description of a drive into its {@link Ladder}: every sublevel that the light can reach
@@ -47,6 +50,7 @@ final class LadderBuilder {
   private final DipoleElements dipoles;
   private final double[] field; // V/m by step
   private final SphericalComponents[] light;
+  private final LightTensor[] tensor;
   private final double[] laser; // Hz by step
   private final double[] detuning; // Hz by rung, of the lasers up to it from the named level
   private final double startEnergy; // Hz from the centre of gravity of the ground level
@@ -70,8 +74,13 @@ final class LadderBuilder {
     this.dipoles = DipoleElements.of(species);
     this.field = new double[steps];
     this.light = new SphericalComponents[steps];
+    this.tensor = new LightTensor[steps];
     for (int k = 0; k < steps; k++) {
       light[k] = setup.beam(k).polarizationVector().componentsAbout(0, 0, 1);
+      tensor[k] =
+          setup.isQuadrupole(k)
+              ? LightTensor.quadrupole(light[k], setup.beam(k).direction())
+              : LightTensor.dipole(light[k]);
       element(k); // refuses a forbidden step by name before any sum is attempted
     }
     List<ProductState> ground = ProductState.hyperfine(species, named(0), setup.field());
@@ -275,14 +284,17 @@ final class LadderBuilder {
   }
 
   private boolean canBeReached(Level upper) {
+    int most = 2 * tensor[steps - 1].rank();
     return upper.equals(named(steps))
         || levels.get(steps - 1).stream()
-            .anyMatch(l -> Math.abs(l.doubledJ() - upper.doubledJ()) <= 2);
+            .anyMatch(l -> Math.abs(l.doubledJ() - upper.doubledJ()) <= most);
   }
 
   /** The reduced element of a step between named levels. */
-  DipoleElement element(int step) {
-    return dipoles.reduced(named(step + 1), named(step));
+  ReducedElement element(int step) {
+    return setup.isQuadrupole(step)
+        ? QuadrupoleElements.of(species).reduced(named(step + 1), named(step))
+        : dipoles.reduced(named(step + 1), named(step));
   }
 
   /** The reduced element between two levels. */
@@ -374,16 +386,32 @@ final class LadderBuilder {
 
   /** Complex Rabi frequency over 2π, Hz; zero where J forbids. */
   private double[] rabi(ProductState lower, ProductState upper, int step) {
-    if (Math.abs(lower.level().doubledJ() - upper.level().doubledJ()) > 2) {
+    int change = Math.abs(lower.level().doubledJ() - upper.level().doubledJ());
+    if (change > 2 * tensor[step].rank()) {
       return new double[2];
     }
-    double[] angular = ProductState.angular(lower, upper, light[step]);
+    double[] angular = ProductState.angular(lower, upper, tensor[step]);
     if (angular[0] == 0 && angular[1] == 0) {
       return angular;
     }
-    double scale =
-        field[step] * DIPOLE_UNIT * dipoles.reduced(upper.level(), lower.level()).valueA0();
+    double scale = field[step] * transitionHertz(upper.level(), lower.level(), step);
     return new double[] {scale * angular[0], scale * angular[1]};
+  }
+
+  /**
+   * What multiplies field and angular factor: (e/h)⟨‖r‖⟩ for a dipole, (e k/2h)⟨‖r²C²‖⟩ for a
+   * quadrupole, Hz/(V/m).
+   */
+  private double transitionHertz(Level upper, Level lower, int step) {
+    if (!setup.isQuadrupole(step)) {
+      return DIPOLE_UNIT * dipoles.reduced(upper, lower).valueA0();
+    }
+    double waveNumber = 2 * Math.PI * laser[step] / PhysicalConstants.SPEED_OF_LIGHT;
+    return DIPOLE_UNIT
+        * 0.5
+        * waveNumber
+        * PhysicalConstants.BOHR_RADIUS
+        * QuadrupoleElements.of(species).reduced(upper, lower).valueA0Squared();
   }
 
   /** Couplings across one rung, through the partner level that is not kept there. */
@@ -663,6 +691,10 @@ final class LadderBuilder {
   }
 
   private List<Integer> photons(int step) {
-    return List.of(-1, 0, 1).stream().filter(q -> light[step].power(q) > NEGLIGIBLE).toList();
+    int rank = tensor[step].rank();
+    return IntStream.rangeClosed(-rank, rank)
+        .filter(q -> tensor[step].power(q) > NEGLIGIBLE)
+        .boxed()
+        .toList();
   }
 }

@@ -22,6 +22,7 @@ import org.apache.commons.math4.legacy.linear.Array2DRowRealMatrix;
 import org.apache.commons.math4.legacy.linear.EigenDecomposition;
 import org.junit.jupiter.api.Test;
 import org.toprung.angular.Polarization;
+import org.toprung.angular.Wigner;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
@@ -29,6 +30,7 @@ import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.structure.DipoleElements;
 import org.toprung.core.structure.Lifetimes;
+import org.toprung.core.structure.QuadrupoleElements;
 
 /** One, two and three photons, resonant ladders, idle sublevels, scattering and trap light. */
 class SchemesTest {
@@ -480,5 +482,82 @@ class SchemesTest {
                         .resolve())
             .getMessage();
     assertTrue(message.contains("0 values"), message);
+  }
+
+  private static DriveSetup quadrupole(Species species, double mJ, Beam beam) {
+    int tI = species.doubledNuclearSpin();
+    return Drive.of(species)
+        .from(Sublevel.hyperfine(species.groundLevel(), 0.5 * (tI + 1), 0.5 * (tI + 1)))
+        .quadrupoleStep(Sublevel.fine("60D5/2", mJ), beam)
+        .in(gauss(5));
+  }
+
+  /**
+   * Exact: light along z with ε = e₊ has (r·k̂)(r·ε) = z r₊ = r²C²₁/√3, so that it drives Δm = +1
+   * with (k/2)⟨‖r²C²‖⟩ (5/2 2 1/2; −3/2 1 1/2)/√3, and nothing else.
+   */
+  @Test
+  void drivesAQuadrupoleWithTheGradientOfTheLight() {
+    Species species = Species.RUBIDIUM_87;
+    Drive drive = quadrupole(species, 1.5, beam(100, 20, SIGMA_PLUS)).resolve();
+    double element =
+        QuadrupoleElements.of(species)
+            .reduced(Level.parse("60D5/2"), Level.parse("5S1/2"))
+            .modulus();
+    double k = 2 * Math.PI / drive.steps().get(0).wavelength().metres();
+    double expected =
+        drive.steps().get(0).beam().peakFieldVoltsPerMetre()
+            * PhysicalConstants.ATOMIC_DIPOLE
+            / PhysicalConstants.PLANCK
+            * 0.5
+            * k
+            * PhysicalConstants.BOHR_RADIUS
+            * element
+            * Math.abs(Wigner.threeJDoubled(5, 4, 1, -3, 2, 1))
+            / Math.sqrt(3);
+    assertEquals(expected, drive.rabi().hertz(), 1e-9 * expected);
+    assertTrue(
+        drive.otherTargets().stream().allMatch(t -> t.sublevel().startsWith("60D3/2")),
+        drive.otherTargets().toString());
+    assertEquals("e a0^2", drive.steps().get(0).element().unit());
+  }
+
+  /** Light across the field, polarized across both, drives Δm = ±1 by C²±1 and no Δm = 0. */
+  @Test
+  void choosesQuadrupoleSublevelsByGeometry() {
+    Beam along =
+        Beam.gaussian(milliwatts(100), micrometres(20))
+            .polarized(Polarization.linearDegrees(0))
+            .along(1, 0, 0);
+    // k = x, ε = z: xz is a mixture of C²±1
+    quadrupole(Species.CAESIUM_133, 1.5, along).resolve();
+    assertThrows(
+        IllegalArgumentException.class,
+        () -> quadrupole(Species.CAESIUM_133, 2.5, along).resolve());
+    // k = x, ε = y: xy is a mixture of C²±2
+    Beam across = along.polarized(Polarization.linearDegrees(90));
+    quadrupole(Species.CAESIUM_133, 2.5, across).resolve();
+    String message =
+        assertThrows(
+                IllegalArgumentException.class,
+                () -> quadrupole(Species.CAESIUM_133, 1.5, across).resolve())
+            .getMessage();
+    assertTrue(message.contains("-2 or +2"), message);
+  }
+
+  @Test
+  void refusesAQuadrupoleThatIsNoneOrNotAlone() {
+    Beam beam = beam(1, 10, SIGMA_PLUS);
+    DriveSetup start =
+        Drive.of(Species.RUBIDIUM_87).from(Sublevel.hyperfine("5S1/2", 2, 2)).in(gauss(1));
+    assertThrows(
+        IllegalArgumentException.class,
+        () -> start.quadrupoleStep(Sublevel.fine("60P3/2", 0.5), beam).resolve());
+    assertThrows(
+        IllegalStateException.class,
+        () ->
+            start
+                .step(Level.parse("5P3/2"), beam)
+                .quadrupoleStep(Sublevel.fine("60D5/2", 0.5), beam));
   }
 }
