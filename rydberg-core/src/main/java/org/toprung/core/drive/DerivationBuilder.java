@@ -36,6 +36,14 @@ final class DerivationBuilder {
     if (setup.isQuadrupole(0)) {
       throw new IllegalArgumentException("paths are written down for dipole steps alone");
     }
+    for (int k = 0; k < setup.steps(); k++) {
+      if (setup.isQuadrupole(k)) {
+        throw new IllegalArgumentException(
+            "the working is written down for dipole steps: step "
+                + (k + 1)
+                + " is a quadrupole one");
+      }
+    }
     return new DerivationBuilder(setup).derivation(drive);
   }
 

@@ -640,7 +640,7 @@ public final class Drive {
    * How the effective Rabi frequency comes about, factor by factor, to be checked by hand.
    *
    * @return the working, as data and as text
-   * @throws IllegalArgumentException if the drive has three steps
+   * @throws IllegalArgumentException if the drive has three steps or a quadrupole step
    */
   public Derivation derivation() {
     return DerivationBuilder.build(setup, this);

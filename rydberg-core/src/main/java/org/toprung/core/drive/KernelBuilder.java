@@ -35,6 +35,11 @@ final class KernelBuilder {
               + ": the step between two intermediate levels couples them, so that every new power"
               + " needs a new elimination; resolve the drive anew instead");
     }
+    if (setup.steps() == 2 && (setup.isQuadrupole(0) || setup.isQuadrupole(1))) {
+      throw new IllegalArgumentException(
+          "a kernel of two steps takes dipole steps: the coupling of an electric-quadrupole step"
+              + " changes with the detuning; resolve the drive anew instead");
+    }
     return new KernelBuilder(setup).data(description);
   }
 
