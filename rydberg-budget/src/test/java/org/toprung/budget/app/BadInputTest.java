@@ -60,7 +60,7 @@ class BadInputTest {
       textBlock =
           """
           # what the file says     | instead             | key               | given             | allowed
-          species = "Rb-87"        | species = "Rb-88"   | atom.species      | Rb-88             | Cs-133, Rb-87
+          species = "Rb-87"        | species = "Rb-88"   | atom.species      | Rb-88             | Cs-133, H, K-39
           species = "Rb-87"        | species = 87        | atom.species      | 87                | "Rb-87"
           magnetic = "4 G"         | magnetic = "4 oz"   | field.magnetic    | oz                | mT, G
           magnetic = "4 G"         | magnetic = "4"      | field.magnetic    | "4"               | mT, G

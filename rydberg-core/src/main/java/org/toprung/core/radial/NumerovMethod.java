@@ -51,7 +51,18 @@ public final class NumerovMethod implements WaveMethod {
   private static final double ELEMENT_TOLERANCE = 1e-11;
   private static final int ITERATIONS = 60;
 
-  private record SolverKey(int l, int doubledJ) {}
+  private record SolverKey(int l, int doubledJ) {
+    // by hand: those of a record are slow to start
+    @Override
+    public boolean equals(Object other) {
+      return other instanceof SolverKey that && that.l == l && that.doubledJ == doubledJ;
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * l + doubledJ;
+    }
+  }
 
   private final String description;
   private final BoundedCache<Level, RadialWave> waves;
