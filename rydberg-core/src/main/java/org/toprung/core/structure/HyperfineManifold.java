@@ -8,7 +8,6 @@ import org.toprung.angular.HalfInteger;
 import org.toprung.core.atom.HyperfineConstants;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
-import org.toprung.core.linear.SymmetricEigen;
 import org.toprung.core.quantity.MagneticField;
 import org.toprung.core.quantity.PhysicalConstants;
 

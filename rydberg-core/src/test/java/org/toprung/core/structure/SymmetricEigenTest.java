@@ -1,4 +1,4 @@
-package org.toprung.core.linear;
+package org.toprung.core.structure;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;

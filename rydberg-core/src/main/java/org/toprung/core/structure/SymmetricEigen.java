@@ -1,4 +1,4 @@
-package org.toprung.core.linear;
+package org.toprung.core.structure;
 
 import java.util.Locale;
 
@@ -7,7 +7,7 @@ import java.util.Locale;
  * and Van Loan, Matrix Computations, section 8.5): eigenvalues good to rounding, eigenvectors
  * orthogonal to rounding. Meant for a handful of rows. Immutable.
  */
-public final class SymmetricEigen {
+final class SymmetricEigen {
   private static final int SWEEPS = 50;
 
   private final double[] values;
@@ -26,7 +26,7 @@ public final class SymmetricEigen {
    * @throws IllegalArgumentException if the matrix is empty or not square
    * @throws ArithmeticException if it holds a NaN or an infinity
    */
-  public static SymmetricEigen of(double[][] matrix) {
+  static SymmetricEigen of(double[][] matrix) {
     int n = matrix.length;
     double[][] a = new double[n][];
     double[][] v = new double[n][n];
@@ -125,7 +125,7 @@ public final class SymmetricEigen {
    * @param i index from 0, by rising eigenvalue
    * @return the eigenvalue
    */
-  public double value(int i) {
+  double value(int i) {
     return values[i];
   }
 
@@ -135,7 +135,7 @@ public final class SymmetricEigen {
    * @param i index from 0, by rising eigenvalue
    * @return a new array of its components
    */
-  public double[] vector(int i) {
+  double[] vector(int i) {
     return vectors[i].clone();
   }
 }
