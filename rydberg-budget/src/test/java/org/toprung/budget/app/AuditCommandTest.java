@@ -31,7 +31,7 @@ class AuditCommandTest {
     Path own =
         Files.writeString(
             folder.resolve("own.csv"), HEADER + "K,lifetime,4P1/2,30,0.05,ns,My own bench,no,\n");
-    CommandLineRun run = CommandLineRun.of("audit", "--rows", "1", "--values", own.toString());
+    CommandLineRun run = CommandLineRun.of("audit", "--rows", "3", "--values", own.toString());
     assertEquals(0, run.status(), run.err());
     assertTrue(run.out().contains("own.csv:2"), run.out());
   }

@@ -47,7 +47,21 @@ public final class Catalogue {
   private static final String BIBLIOGRAPHY_HEADER = "key,citation";
   private static final String ELEMENTS_HEADER = "element,file";
 
-  private record Key(String species, Datum.Kind kind, String level) {}
+  private record Key(String species, Datum.Kind kind, String level) {
+    // by hand: those of a record are slow to start
+    @Override
+    public boolean equals(Object other) {
+      return other instanceof Key that
+          && that.species.equals(species)
+          && that.kind.equals(kind)
+          && that.level.equals(level);
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * (31 * species.hashCode() + kind.hashCode()) + level.hashCode();
+    }
+  }
 
   private static final class Bundled {
     static final Catalogue CATALOGUE =
@@ -193,7 +207,8 @@ public final class Catalogue {
 
   /** The row in use. */
   Optional<Datum> best(String isotope, Datum.Kind kind, String level) {
-    return all(isotope, kind, level).stream().findFirst();
+    List<Datum> found = all(isotope, kind, level);
+    return found.isEmpty() ? Optional.empty() : Optional.of(found.get(0));
   }
 
   /** Every row that applies to an isotope, by kind and level, the one in use first. */
@@ -210,7 +225,11 @@ public final class Catalogue {
       }
     }
     List<Datum> found = new ArrayList<>();
-    levels.forEach((kind, names) -> names.forEach(l -> found.addAll(all(isotope, kind, l))));
+    for (Map.Entry<Datum.Kind, Set<String>> entry : levels.entrySet()) {
+      for (String level : entry.getValue()) {
+        found.addAll(all(isotope, entry.getKey(), level));
+      }
+    }
     return List.copyOf(found);
   }
 
@@ -266,7 +285,9 @@ public final class Catalogue {
         });
     for (List<Datum> list : rows.values()) {
       requireOneChosen(list);
-      list.sort(Comparator.comparingInt(d -> d.chosenBecause().isEmpty() ? 1 : 0));
+      if (list.size() > 1) {
+        list.sort(Comparator.comparingInt(d -> d.chosenBecause().isEmpty() ? 1 : 0));
+      }
     }
     return rows;
   }
@@ -274,8 +295,11 @@ public final class Catalogue {
   /** Later coefficients of a series follow the choice of its constant term. */
   private static void requireOneChosen(List<Datum> list) {
     Datum last = list.get(list.size() - 1);
-    long chosen = list.stream().filter(d -> !d.chosenBecause().isEmpty()).count();
-    long wanted = list.size() == 1 || last.kind().isHigherCoefficient() ? 0 : 1;
+    int chosen = 0;
+    for (Datum datum : list) {
+      chosen += datum.chosenBecause().isEmpty() ? 0 : 1;
+    }
+    int wanted = list.size() == 1 || last.kind().isHigherCoefficient() ? 0 : 1;
     if (chosen != wanted) {
       throw Refusal.of(
           "%s: %s of %s %s has %d rows, so %d of them must say why it is chosen, given %d",
@@ -402,7 +426,11 @@ public final class Catalogue {
     try (InputStream stream = Catalogue.class.getResourceAsStream(resource);
         BufferedReader reader =
             new BufferedReader(new InputStreamReader(stream, StandardCharsets.UTF_8))) {
-      return reader.lines().toList();
+      List<String> lines = new ArrayList<>();
+      for (String line = reader.readLine(); line != null; line = reader.readLine()) {
+        lines.add(line);
+      }
+      return lines;
     } catch (IOException e) {
       throw new UncheckedIOException("cannot read " + resource, e);
     }

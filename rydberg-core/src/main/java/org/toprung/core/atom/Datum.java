@@ -1,7 +1,6 @@
 package org.toprung.core.atom;
 
 import java.util.Locale;
-import java.util.regex.Pattern;
 import org.toprung.core.quantity.Estimate;
 import org.toprung.core.quantity.PhysicalConstants;
 
@@ -36,24 +35,44 @@ public record Datum(
 
   /** What the column level must hold. */
   private enum Form {
-    ATOM("nothing", ""),
-    LEVEL("a level, for example 5P3/2", LevelText.LEVEL),
-    PAIR("two levels, for example 5S1/2-5P3/2", LevelText.LEVEL + "-" + LevelText.LEVEL),
-    SHELL("n and the letter of l, for example 5P", "\\d{1,3}[A-Z]"),
-    SERIES("a series, for example P3/2", "[A-Z]\\d{1,2}/2"),
-    LETTER("the letter of l", "[SPDF]");
+    ATOM("nothing"),
+    LEVEL("a level, for example 5P3/2"),
+    PAIR("two levels, for example 5S1/2-5P3/2"),
+    SHELL("n and the letter of l, for example 5P"),
+    SERIES("a series, for example P3/2"),
+    LETTER("the letter of l: S, P, D or F");
+
+    private static final String LETTERS = "SPDF";
 
     private final String description;
-    private final Pattern pattern;
 
-    Form(String description, String pattern) {
+    Form(String description) {
       this.description = description;
-      this.pattern = Pattern.compile(pattern);
     }
-  }
 
-  private static final class LevelText {
-    static final String LEVEL = "\\d{1,3}[A-Z]\\d{1,2}/2";
+    /** Whether a cell has this form; an impossible level in it is refused with its own message. */
+    private boolean fits(String cell) {
+      return switch (this) {
+        case ATOM -> cell.isEmpty();
+        case LEVEL -> isLevel(cell);
+        case PAIR -> {
+          int dash = cell.indexOf('-');
+          yield dash > 0 && isLevel(cell.substring(0, dash)) && isLevel(cell.substring(dash + 1));
+        }
+        case SHELL -> {
+          int last = cell.length() - 1;
+          int l = last > 0 ? LETTERS.indexOf(cell.charAt(last)) : -1;
+          yield l >= 0 && isLevel(cell + (2 * l + 1) + "/2");
+        }
+        case SERIES -> isLevel(Level.MAXIMUM_N + cell);
+        case LETTER -> cell.length() == 1 && LETTERS.contains(cell);
+      };
+    }
+
+    private static boolean isLevel(String text) {
+      Level.parse(text);
+      return true;
+    }
   }
 
   /** What can be measured in which units. */
@@ -181,22 +200,21 @@ public record Datum(
    */
   public Datum {
     new Estimate(value, uncertainty);
-    String name = kind.name().toLowerCase(Locale.ROOT);
     if (!(kind.unit.scale(unit) > 0)) {
       throw Refusal.of(
-          "unit \"%s\" of %s is not known; allowed: %s", unit, name, kind.unit.allowed);
+          "unit \"%s\" of %s is not known; allowed: %s", unit, name(kind), kind.unit.allowed);
     }
-    if (!kind.form.pattern.matcher(level).matches()) {
-      throw Refusal.of("level of %s must be %s, given \"%s\"", name, kind.form.description, level);
-    }
-    if (kind.form == Form.LEVEL || kind.form == Form.PAIR) {
-      for (String part : level.split("-")) {
-        Level.parse(part);
-      }
+    if (!kind.form.fits(level)) {
+      throw Refusal.of(
+          "level of %s must be %s, given \"%s\"", name(kind), kind.form.description, level);
     }
     if (kind.positive && !(value > 0)) {
-      throw Refusal.of("value of %s must be positive, given %s", name, value);
+      throw Refusal.of("value of %s must be positive, given %s", name(kind), value);
     }
+  }
+
+  private static String name(Kind kind) {
+    return kind.name().toLowerCase(Locale.ROOT);
   }
 
   /**

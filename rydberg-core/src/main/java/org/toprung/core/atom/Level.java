@@ -1,8 +1,6 @@
 package org.toprung.core.atom;
 
 import java.util.Comparator;
-import java.util.regex.Matcher;
-import java.util.regex.Pattern;
 
 /**
  * A fine-structure level n l j of the valence electron, written like "6P3/2". Immutable.
@@ -15,8 +13,7 @@ public final class Level implements Comparable<Level> {
   public static final int MAXIMUM_N = 150;
 
   private static final String LETTERS = "SPDFGHIKLMNOQRTUVWXYZ";
-  private static final Pattern TEXT =
-      Pattern.compile("(\\d{1,9})(?:([A-Z])|\\[(\\d{1,9})\\])(\\d{1,9})/2");
+  private static final int MOST_DIGITS = 9;
   private static final Comparator<Level> ORDER =
       Comparator.comparingInt(Level::n)
           .thenComparingInt(Level::l)
@@ -54,25 +51,52 @@ public final class Level implements Comparable<Level> {
    * @throws IllegalArgumentException if the text has another form or names no possible level
    */
   public static Level parse(String text) {
-    Matcher matcher = TEXT.matcher(text);
-    if (!matcher.matches()) {
+    // by hand: levels are read by the hundred when a catalogue is, and a regex is slow to start
+    int letter = digitsEnd(text, 0);
+    boolean bracket = letter < text.length() && text.charAt(letter) == '[';
+    int bracketEnd = bracket ? digitsEnd(text, letter + 1) : letter;
+    int j = bracketEnd + 1;
+    int slash = j <= text.length() ? digitsEnd(text, j) : -1;
+    boolean understood =
+        isNumber(0, letter)
+            && letter < text.length()
+            && (bracket
+                ? isNumber(letter + 1, bracketEnd) && text.startsWith("]", bracketEnd)
+                : text.charAt(letter) >= 'A' && text.charAt(letter) <= 'Z')
+            && isNumber(j, slash)
+            && text.substring(slash).equals("/2");
+    if (!understood) {
       throw Refusal.of(
           "level \"%s\" is not understood; write n, the letter of l and j, for example 6P3/2",
           text);
     }
     int l =
-        matcher.group(2) != null
-            ? LETTERS.indexOf(matcher.group(2))
-            : Integer.parseInt(matcher.group(3));
+        bracket
+            ? Integer.parseInt(text.substring(letter + 1, bracketEnd))
+            : LETTERS.indexOf(text.charAt(letter));
     if (l < 0) {
       throw Refusal.of(
           "level \"%s\": \"%s\" stands for no l; the letters are %s",
-          text, matcher.group(2), LETTERS);
+          text, text.charAt(letter), LETTERS);
     }
-    int n = Integer.parseInt(matcher.group(1));
-    int doubledJ = Integer.parseInt(matcher.group(4));
+    int n = Integer.parseInt(text.substring(0, letter));
+    int doubledJ = Integer.parseInt(text.substring(j, slash));
     requirePossible(n, l, doubledJ, text);
     return new Level(n, l, doubledJ);
+  }
+
+  /** Where the ASCII digits that begin at an index end. */
+  private static int digitsEnd(String text, int from) {
+    int i = from;
+    while (i < text.length() && text.charAt(i) >= '0' && text.charAt(i) <= '9') {
+      i++;
+    }
+    return i;
+  }
+
+  /** Whether that many digits are a number that fits. */
+  private static boolean isNumber(int from, int end) {
+    return end > from && end - from <= MOST_DIGITS;
   }
 
   /**

@@ -165,15 +165,19 @@ public final class Species {
   /** The terms of a series, all from the source of its constant term: fits must not be mixed. */
   private List<Datum> expansion(String seriesName) {
     Datum constant = require(Datum.Kind.QUANTUM_DEFECT_0, seriesName);
-    return SERIES.stream()
-        .map(
-            kind ->
-                catalogue.all(name, kind, seriesName).stream()
-                    .filter(d -> isOfTheSameFit(d, constant))
-                    .findFirst())
-        .takeWhile(Optional::isPresent)
-        .map(Optional::get)
-        .toList();
+    List<Datum> terms = new ArrayList<>();
+    for (Datum.Kind kind : SERIES) {
+      int known = terms.size();
+      for (Datum datum : catalogue.all(name, kind, seriesName)) {
+        if (terms.size() == known && isOfTheSameFit(datum, constant)) {
+          terms.add(datum);
+        }
+      }
+      if (terms.size() == known) {
+        break;
+      }
+    }
+    return List.copyOf(terms);
   }
 
   private static boolean isOfTheSameFit(Datum one, Datum other) {

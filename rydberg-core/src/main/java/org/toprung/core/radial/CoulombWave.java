@@ -239,7 +239,8 @@ final class CoulombWave {
       for (int i = 0; i < NODES; i++) {
         double x = low + half * (1 + node(i));
         int index = panel * NODES + i;
-        sum += half * weight(i) * 2 * Math.pow(x, 2 * k + 1) * values[index] * other.values[index];
+        sum +=
+            half * weight(i) * 2 * Math.pow(x, 2 * k + 1) * (values[index] * other.values[index]);
       }
     }
     return sum;

@@ -34,7 +34,7 @@ final class RadialWave {
     double sum = 0;
     for (int i = from; i < to; i++) {
       double x2 = (double) i * i;
-      sum += x2 * x2 * y[i] * other.y[i];
+      sum += x2 * x2 * (y[i] * other.y[i]);
     }
     return 2 * Math.pow(step, 5) * sum;
   }
@@ -52,7 +52,7 @@ final class RadialWave {
       double x2 = i * step * i * step;
       double square = x2 * x2;
       double distance = square + rc * rc;
-      sum += square / (distance * Math.sqrt(distance)) * y[i] * other.y[i];
+      sum += square / (distance * Math.sqrt(distance)) * (y[i] * other.y[i]);
     }
     return 2 * step * sum;
   }
@@ -63,7 +63,7 @@ final class RadialWave {
     int to = Math.min(y.length, other.y.length);
     double sum = 0;
     for (int i = from; i < to; i++) {
-      sum += Math.pow(i * step, 2 * k + 2) * y[i] * other.y[i];
+      sum += Math.pow(i * step, 2 * k + 2) * (y[i] * other.y[i]);
     }
     return 2 * step * sum;
   }

@@ -50,7 +50,18 @@ public final class DipoleElements {
   /**
    * The lower level in the order of levels stands first: the mirrored element follows by symmetry.
    */
-  private record Pair(Level a, Level b) {}
+  private record Pair(Level a, Level b) {
+    // by hand: those of a record are slow to start
+    @Override
+    public boolean equals(Object other) {
+      return other instanceof Pair that && that.a.equals(a) && that.b.equals(b);
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * a.hashCode() + b.hashCode();
+    }
+  }
 
   private final Species species;
   private final List<RadialMethod> methods;

@@ -50,7 +50,20 @@ public final class FarLightShift {
 
   private static final int SUBLEVELS = 500;
 
-  private record Sublevel(Level level, int doubledMj) {}
+  private record Sublevel(Level level, int doubledMj) {
+    // by hand: those of a record are slow to start
+    @Override
+    public boolean equals(Object other) {
+      return other instanceof Sublevel that
+          && that.level.equals(level)
+          && that.doubledMj == doubledMj;
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * level.hashCode() + doubledMj;
+    }
+  }
 
   /** A level of the sum; shares are those of r_−1, r_0, r_+1 acting on the sublevel. */
   private record Term(Level other, double distanceHertz, Estimate strength, double[] shares) {

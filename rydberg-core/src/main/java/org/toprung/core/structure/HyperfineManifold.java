@@ -4,9 +4,6 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
-import org.apache.commons.math4.legacy.linear.Array2DRowRealMatrix;
-import org.apache.commons.math4.legacy.linear.EigenDecomposition;
-import org.apache.commons.math4.legacy.linear.RealMatrix;
 import org.toprung.angular.HalfInteger;
 import org.toprung.core.atom.HyperfineConstants;
 import org.toprung.core.atom.Level;
@@ -166,22 +163,15 @@ public final class HyperfineManifold {
     List<Eigenstate> states = new ArrayList<>();
     for (int tM = -(tI + tJ); tM <= tI + tJ; tM += 2) {
       int[] tMj = projections(tI, tJ, tM);
-      RealMatrix product = spinProduct(tI, tJ, tM, tMj);
-      RealMatrix h = hyperfine(product, constants, tI, tJ);
+      double[][] product = spinProduct(tI, tJ, tM, tMj);
+      double[][] h = hyperfine(product, constants, tI, tJ);
       for (int i = 0; i < tMj.length; i++) {
-        h.addToEntry(i, i, bohrTimesField * 0.5 * (gJ * tMj[i] + gI * (tM - tMj[i])));
+        h[i][i] += bohrTimesField * 0.5 * (gJ * tMj[i] + gI * (tM - tMj[i]));
       }
       List<Integer> labels = labels(constants, tI, tJ, tM);
-      EigenDecomposition eigen = new EigenDecomposition(h);
-      List<Integer> order = new ArrayList<>();
+      SymmetricEigen eigen = SymmetricEigen.of(h);
       for (int i = 0; i < tMj.length; i++) {
-        order.add(i);
-      }
-      double[] energies = eigen.getRealEigenvalues();
-      order.sort(Comparator.comparingDouble(i -> energies[i]));
-      for (int i = 0; i < tMj.length; i++) {
-        int column = order.get(i);
-        double[] amplitude = phased(eigen.getEigenvector(column).toArray());
+        double[] amplitude = phased(eigen.vector(i));
         double slope = 0;
         for (int k = 0; k < tMj.length; k++) {
           slope +=
@@ -191,8 +181,7 @@ public final class HyperfineManifold {
                   * 0.5
                   * PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA;
         }
-        states.add(
-            new Eigenstate(level, labels.get(i), tM, energies[column], slope, tMj, amplitude));
+        states.add(new Eigenstate(level, labels.get(i), tM, eigen.value(i), slope, tMj, amplitude));
       }
     }
     return new HyperfineManifold(List.copyOf(states));
@@ -209,15 +198,15 @@ public final class HyperfineManifold {
   }
 
   /** I·J = I_z J_z + (I₊J₋ + I₋J₊)/2 within one M. */
-  private static RealMatrix spinProduct(int tI, int tJ, int tM, int[] tMj) {
-    RealMatrix m = new Array2DRowRealMatrix(tMj.length, tMj.length);
+  private static double[][] spinProduct(int tI, int tJ, int tM, int[] tMj) {
+    double[][] m = new double[tMj.length][tMj.length];
     for (int i = 0; i < tMj.length; i++) {
       int tMi = tM - tMj[i];
-      m.setEntry(i, i, 0.25 * tMj[i] * tMi);
+      m[i][i] = 0.25 * tMj[i] * tMi;
       if (i + 1 < tMj.length) {
         double flip = 0.5 * raising(tJ, tMj[i]) * raising(tI, tMi - 2);
-        m.setEntry(i, i + 1, flip);
-        m.setEntry(i + 1, i, flip);
+        m[i][i + 1] = flip;
+        m[i + 1][i] = flip;
       }
     }
     return m;
@@ -228,21 +217,26 @@ public final class HyperfineManifold {
     return 0.5 * Math.sqrt((double) tj * (tj + 2) - (double) tm * (tm + 2));
   }
 
-  private static RealMatrix hyperfine(
-      RealMatrix product, HyperfineConstants constants, int tI, int tJ) {
-    RealMatrix h = product.scalarMultiply(constants.aHertz());
-    if (constants.bHertz() == 0 || tI < 2 || tJ < 2) {
-      return h;
-    }
+  private static double[][] hyperfine(
+      double[][] product, HyperfineConstants constants, int tI, int tJ) {
+    int n = product.length;
     double i = 0.5 * tI;
     double j = 0.5 * tJ;
-    double scale = constants.bHertz() / (2 * i * (2 * i - 1) * j * (2 * j - 1));
-    RealMatrix quadrupole =
-        product.multiply(product).scalarMultiply(3).add(product.scalarMultiply(1.5));
-    for (int k = 0; k < product.getRowDimension(); k++) {
-      quadrupole.addToEntry(k, k, -i * (i + 1) * j * (j + 1));
+    boolean quadrupole = constants.bHertz() != 0 && tI >= 2 && tJ >= 2;
+    double scale = quadrupole ? constants.bHertz() / (2 * i * (2 * i - 1) * j * (2 * j - 1)) : 0;
+    double[][] h = new double[n][n];
+    for (int row = 0; row < n; row++) {
+      for (int column = 0; column < n; column++) {
+        double square = 0;
+        for (int k = 0; k < n; k++) {
+          square += product[row][k] * product[k][column];
+        }
+        double shape = 3 * square + 1.5 * product[row][column];
+        shape -= row == column ? i * (i + 1) * j * (j + 1) : 0;
+        h[row][column] = constants.aHertz() * product[row][column] + scale * shape;
+      }
     }
-    return h.add(quadrupole.scalarMultiply(scale));
+    return h;
   }
 
   /** 2F of the levels that have this M, in order of their energy at zero field. */

@@ -57,7 +57,20 @@ public final class Lifetimes {
               * PhysicalConstants.VACUUM_PERMITTIVITY
               * PhysicalConstants.REDUCED_PLANCK);
 
-  private record Warm(Level level, Temperature temperature) {}
+  private record Warm(Level level, Temperature temperature) {
+    // by hand: those of a record are slow to start
+    @Override
+    public boolean equals(Object other) {
+      return other instanceof Warm that
+          && that.level.equals(level)
+          && that.temperature.equals(temperature);
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * level.hashCode() + temperature.hashCode();
+    }
+  }
 
   private record Blackbody(Estimate depopulation, Estimate ionization) {}
 

@@ -148,7 +148,7 @@ class CatalogueTest {
         "X-1,mass,,1,0,u,ame2016,maybe,;yes or no",
         "X-1,mass,5P1/2,1,0,u,ame2016,yes,;must be nothing",
         "X-1,weight,,1,0,u,ame2016,yes,;quantity \"weight\"",
-        "X-1,lifetime,5P,1,0,ns,ame2016,yes,;a level",
+        "X-1,lifetime,5P,1,0,ns,ame2016,yes,;level \"5P\"",
         "X-1,lifetime,5P5/2,1,0,ns,ame2016,yes,;5P5/2",
         "X-1,reduced_dipole,5P1/2,1,0,a0,ame2016,yes,;two levels",
         "X-1,mass,,1,0,u,\"ame2016,yes,;not closed"

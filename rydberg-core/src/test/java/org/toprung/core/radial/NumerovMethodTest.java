@@ -93,20 +93,27 @@ class NumerovMethodTest {
     assertTrue(e.getMessage().contains("7 nodes instead of 9"), e.getMessage());
   }
 
-  // regression of the numerics: a quarter of the step changes nothing that matters; measured 1.7e-5
-  // for 5S-30P1/2, 4.5e-5 for the F level, whose inner cut lies on the grid, 1e-6 elsewhere
+  // regression of the numerics: a quarter of the step changes nothing that matters; target 1e-7 at
+  // n =
+  // 100. Where positive and negative parts cancel (60P-60D, 100P-100D) that is 1e-9 of n²; the
+  // inner
+  // cut of the F level lies on the grid, inside the core
   @ParameterizedTest
   @CsvSource({
-    "5S1/2,5P1/2",
-    "5S1/2,30P1/2",
-    "5P3/2,50S1/2",
-    "5P3/2,50D5/2",
-    "60P3/2,60S1/2",
-    "4D5/2,60F7/2"
+    "5S1/2,5P1/2,1e-7",
+    "5S1/2,30P1/2,2e-7",
+    "5P3/2,50S1/2,2e-8",
+    "5P3/2,50D5/2,2e-8",
+    "60P3/2,60S1/2,2e-8",
+    "100S1/2,100P3/2,2e-8",
+    "150S1/2,150P1/2,2e-8",
+    "60P3/2,60D5/2,1e-6",
+    "100P3/2,100D5/2,1e-6",
+    "4D5/2,60F7/2,6e-5"
   })
-  void stepIsFineEnough(String left, String right) {
+  void stepIsFineEnough(String left, String right, double within) {
     double coarse = dipole(left, right, 0.02);
-    assertEquals(coarse, dipole(left, right, 0.005), 6e-5 * Math.abs(coarse));
+    assertEquals(coarse, dipole(left, right, 0.005), within * Math.abs(coarse));
   }
 
   private static double dipole(String left, String right, double step) {
