@@ -36,6 +36,7 @@ import org.toprung.core.quantity.MagneticField;
 import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.quantity.Power;
 import org.toprung.core.quantity.Temperature;
+import org.toprung.core.structure.Lifetimes;
 
 class BudgetTest {
   private static final Drive RUBIDIUM = TestDrives.rubidium().resolve();
@@ -368,6 +369,20 @@ class BudgetTest {
       single.shutdown();
     }
     assertFalse(common.equals(budget.check(333, 10)));
+  }
+
+  /** Closed form: a level that is populated half the time of a π pulse loses τ/2T. */
+  @Test
+  void countsEveryWayOutOfTheRydbergLevel() {
+    Budget budget = budget(RUBIDIUM, Bench.unknown().withEnvironment(kelvin(300)));
+    double lifetime =
+        Lifetimes.of(Species.RUBIDIUM_87)
+            .lifetimeSeconds(Level.parse("68S1/2"), kelvin(300))
+            .value();
+    double expected = budget.plan().duration().seconds() / (2 * lifetime);
+    double counted =
+        error(budget, "Rydberg decay, spontaneous") + error(budget, "Rydberg decay, blackbody");
+    assertEquals(expected, counted, 1e-3 * expected);
   }
 
   /** Exact: the mean of independent shots scatters from seed to seed by its standard error. */

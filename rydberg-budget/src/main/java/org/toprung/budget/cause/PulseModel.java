@@ -12,7 +12,6 @@ import org.toprung.core.drive.Ladder;
 import org.toprung.core.drive.LadderSetting;
 import org.toprung.core.drive.PulsePlan;
 import org.toprung.core.drive.PulsePlanner;
-import org.toprung.core.quantity.Estimate;
 import org.toprung.core.quantity.Temperature;
 import org.toprung.core.structure.Lifetimes;
 import org.toprung.core.structure.StarkShift;
@@ -217,14 +216,16 @@ public final class PulseModel {
   }
 
   /**
-   * Rate of blackbody-driven transitions from the target level.
+   * Rate at which blackbody radiation takes the atom from the target level, ionization included.
    *
    * @param environment temperature of the walls
    * @return the rate, 1/s
    */
   public double blackbodyPerSecond(Temperature environment) {
-    Estimate rate = Lifetimes.of(drive.species()).blackbodyRatePerSecond(target(), environment);
-    return inputs.blackbody() * rate.value();
+    Lifetimes lifetimes = Lifetimes.of(drive.species());
+    return inputs.blackbody()
+        * (lifetimes.blackbodyRatePerSecond(target(), environment).value()
+            + lifetimes.blackbodyIonizationRatePerSecond(target(), environment).value());
   }
 
   /** Stark shift of the target when these components are added to the static field, Hz. */

@@ -11,6 +11,7 @@ import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.MagneticField;
 import org.toprung.core.quantity.PhysicalConstants;
+import org.toprung.core.structure.FarLightShift;
 import org.toprung.core.structure.ReducedElement;
 
 /**
@@ -154,13 +155,18 @@ public final class Drive {
       doubts.addAll(tightFoci(k));
     }
     doubts.addAll(setup.electric().warnings(setup.species(), setup.target(), setup.field()));
+    this.trap = setup.trap().map(builder::trapLight);
+    trap.ifPresent(
+        light -> {
+          doubts.addAll(nearTrap(light, setup.start().level(), light.startShift()));
+          doubts.addAll(nearTrap(light, setup.target().level(), light.targetShift()));
+        });
     this.warnings = List.copyOf(doubts);
     this.magneticSensitivity =
         ladder.states().get(reference).hertzPerTesla()
             - ladder.states().get(ladder.start()).hertzPerTesla();
     this.farShiftUncertainty = builder.farShiftRelativeUncertainty();
     this.firstLaser = builder.laserHertz(0);
-    this.trap = setup.trap().map(builder::trapLight);
   }
 
   /**
@@ -257,6 +263,29 @@ public final class Drive {
       }
     }
     return found;
+  }
+
+  /** With a single transition at the distance D a shift S mixes √(S/D) of the other level in. */
+  private List<String> nearTrap(TrapLight light, Level level, Frequency shift) {
+    double distance =
+        FarLightShift.of(setup.species())
+            .distanceToResonanceHertz(
+                level, PhysicalConstants.SPEED_OF_LIGHT / light.wavelength().metres());
+    double amplitude = Math.sqrt(Math.abs(shift.hertz()) / distance);
+    if (amplitude <= LARGE_ADMIXTURE) {
+      return List.of();
+    }
+    return List.of(
+        String.format(
+            Locale.ROOT,
+            "the trap light is nearly resonant: it is %.4g MHz from a transition of %s, shifts it by"
+                + " %.4g MHz and mixes %.2g of another level's amplitude in (should be below %.1g),"
+                + " so its second-order shift is poor",
+            distance * 1e-6,
+            level,
+            shift.hertz() * 1e-6,
+            amplitude,
+            LARGE_ADMIXTURE));
   }
 
   private List<String> nearResonances() {

@@ -234,6 +234,25 @@ public final class FarLightShift {
     return -species.energyHertz(level).value();
   }
 
+  /**
+   * How far light is from the nearest transition of a level; second order wants the shift to be
+   * much smaller than that.
+   *
+   * @param level the level
+   * @param laserFrequencyHertz frequency of the light in Hz
+   * @return the distance, Hz, at least 0
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
+   */
+  public double distanceToResonanceHertz(Level level, double laserFrequencyHertz) {
+    species.requireValid(level);
+    double energy = species.energyHertz(level).value();
+    return Partners.of(species, level, LARGEST_N).stream()
+        .mapToDouble(other -> Math.abs(species.energyHertz(other).value() - energy))
+        .map(transition -> Math.abs(transition - laserFrequencyHertz))
+        .min()
+        .orElseThrow();
+  }
+
   private List<Term> terms(Sublevel sublevel) {
     Level level = sublevel.level();
     double energy = species.energyHertz(level).value();

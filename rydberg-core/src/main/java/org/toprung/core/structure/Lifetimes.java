@@ -169,7 +169,7 @@ public final class Lifetimes {
     for (Level other : Partners.of(species, level, last)) {
       double difference = energy - species.energyHertz(other).value();
       Estimate part = rate(level, other, Math.abs(difference));
-      double photons = thermalHertz > 0 ? 1 / Math.expm1(Math.abs(difference) / thermalHertz) : 0;
+      double photons = photons(Math.abs(difference), thermalHertz);
       Estimate blackbody = new Estimate(part.value() * photons, part.uncertainty() * photons);
       if (difference > 0 || photons > 0) {
         channels.add(new Channel(other, difference > 0 ? part : new Estimate(0, 0), blackbody));
@@ -199,6 +199,15 @@ public final class Lifetimes {
     double rate = cold.value() + warm.value() + ionization.value();
     double uncertainty = cold.uncertainty() + warm.uncertainty() + ionization.uncertainty();
     return new Estimate(1 / rate, uncertainty / (rate * rate));
+  }
+
+  /**
+   * Photons per mode; none at frequency zero, where their number diverges but the rate vanishes.
+   */
+  private static double photons(double frequencyHertz, double thermalHertz) {
+    return frequencyHertz > 0 && thermalHertz > 0
+        ? 1 / Math.expm1(frequencyHertz / thermalHertz)
+        : 0;
   }
 
   private static double thermalHertz(Temperature temperature) {
@@ -257,7 +266,7 @@ public final class Lifetimes {
     for (Level other : Partners.of(species, level, last)) {
       double frequency = Math.abs(energy - species.energyHertz(other).value());
       Estimate part = rate(level, other, frequency);
-      double photons = 1 / Math.expm1(frequency / thermalHertz);
+      double photons = photons(frequency, thermalHertz);
       rate += part.value() * photons;
       uncertainty += part.uncertainty() * photons;
       if (other.n() == last) {

@@ -66,7 +66,8 @@ public final class StaticPolarizability {
    *
    * @param level the level
    * @return α_0/h in Hz/(V/m)²
-   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
+   *     or another one that a dipole couples with it lies at the same energy, as in hydrogen
    */
   public Estimate scalarHertzPerFieldSquared(Level level) {
     return known.get(level).scalar();
@@ -77,7 +78,8 @@ public final class StaticPolarizability {
    *
    * @param level the level
    * @return α_2/h in Hz/(V/m)²; 0 for J = 1/2
-   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
+   *     or another one that a dipole couples with it lies at the same energy, as in hydrogen
    */
   public Estimate tensorHertzPerFieldSquared(Level level) {
     return known.get(level).tensor();
@@ -97,10 +99,18 @@ public final class StaticPolarizability {
     Sum difference = new Sum();
     for (Level other : Partners.of(species, level, Math.max(level.n() + REACH, LEAST_N))) {
       DipoleElement element = elements.reduced(other, level);
-      double factor =
-          2
-              * SecondOrder.COUPLING_SQUARED
-              / (species.energyHertz(other).value() - species.energyHertz(level).value());
+      double distance = species.energyHertz(other).value() - species.energyHertz(level).value();
+      if (distance == 0) {
+        throw new IllegalArgumentException(
+            "the Stark effect of "
+                + species.name()
+                + " "
+                + level
+                + " is linear: it lies at the energy of "
+                + other
+                + ", so that it has no polarizability");
+      }
+      double factor = 2 * SecondOrder.COUPLING_SQUARED / distance;
       // the squared 3j symbols of one q add up to 1/3 over m
       double meanShare = 1.0 / (3 * (doubledJ + 1));
       double stretchedShare = SecondOrder.share(level, doubledJ, other, 0);

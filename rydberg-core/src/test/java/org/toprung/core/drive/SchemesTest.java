@@ -464,7 +464,25 @@ class SchemesTest {
     // themselves
     assertEquals(moved, offset, 0.05 * moved);
     assertTrue(off.trap().isEmpty());
+    assertTrue(on.warnings().isEmpty(), on.warnings().toString());
     assertThrows(IllegalArgumentException.class, () -> setup.trappedBy(trap, nanometres(-1)));
+  }
+
+  /** The D2 line lies at 780.241 nm in vacuum. */
+  @Test
+  void warnsOfATrapNearAResonance() {
+    Beam trap = Beam.gaussian(milliwatts(5), micrometres(1)).polarized(PI).along(1, 0, 0);
+    List<String> warnings =
+        Drive.of(Species.RUBIDIUM_87)
+            .from(Sublevel.hyperfine("5S1/2", 2, 2))
+            .step(Level.parse("6P3/2"), beam(2, 20, SIGMA_PLUS))
+            .step(Sublevel.fine("68S1/2", 0.5), beam(150, 25, SIGMA_MINUS))
+            .detuned(gigahertz(1.2))
+            .in(gauss(4))
+            .trappedBy(trap, nanometres(780.3))
+            .resolve()
+            .warnings();
+    assertTrue(warnings.stream().anyMatch(w -> w.contains("trap light") && w.contains("5S1/2")));
   }
 
   @Test

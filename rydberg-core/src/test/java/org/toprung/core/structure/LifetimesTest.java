@@ -211,6 +211,19 @@ class LifetimesTest {
     assertEquals(published, rate, 2e-4 * published);
   }
 
+  // sum rule Σω²|r|² = ⟨p²⟩ = 1/n² where ħω ≪ kT, as for circular levels: 4α³kT/3n² in atomic units
+  // (Gallagher, Rydberg Atoms, 1994, chapter 5). Degenerate levels add nothing
+  @Test
+  void theBlackbodyRateOfHydrogenMeetsTheSumRule() {
+    double thermal = PhysicalConstants.BOLTZMANN * 300 / PhysicalConstants.PLANCK;
+    double expected = 4 * 2 * Math.PI * thermal / (3 * 900 * Math.pow(137.036, 3));
+    double rate =
+        Lifetimes.of(Species.parse("H"))
+            .blackbodyRatePerSecond(Level.of(30, 28, 57), Temperature.ofKelvin(300))
+            .value();
+    assertEquals(expected, rate, 0.05 * expected);
+  }
+
   // every mJ of a level decays at the same rate: Σ over final mJ and q of the squared 3j symbols is
   // the same for all of them (Wigner-Eckart)
   @Property(seed = "20261230", tries = 30)

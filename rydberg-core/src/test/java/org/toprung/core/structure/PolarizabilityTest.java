@@ -332,4 +332,15 @@ class PolarizabilityTest {
         IllegalArgumentException.class,
         () -> RB.hertzPerFieldSquared(Level.parse(level), doubledM, laser, PI, Set.of()));
   }
+
+  @Test
+  void levelsWithALinearStarkEffectAreRefused() {
+    StaticPolarizability hydrogen = StaticPolarizability.of(Species.parse("H"));
+    String message =
+        assertThrows(
+                IllegalArgumentException.class,
+                () -> hydrogen.scalarHertzPerFieldSquared(Level.parse("60P3/2")))
+            .getMessage();
+    assertTrue(message.contains("60P3/2") && message.contains("linear"), message);
+  }
 }
