@@ -85,7 +85,9 @@ public final class TextReport {
   private void drive() {
     page.heading("Drive");
     page.value("ladder", drive.toString());
-    page.value("magnetic field", drive.field() + " along z");
+    page.value(
+        "magnetic field",
+        Figures.number(drive.field().tesla() / TESLA_PER_GAUSS, 6) + " G along z");
     double[] e = drive.electricFieldVoltsPerMetre();
     if (e[0] != 0 || e[1] != 0 || e[2] != 0) {
       page.value(

@@ -352,7 +352,11 @@ final class LadderBuilder {
               + setup.target()
               + " through the sublevels of "
               + through()
-              + " cancel");
+              + " cancel: the effective Rabi frequency is "
+              + strongest
+              + " Hz where the strongest coupling has "
+              + scale
+              + " Hz");
     }
     return assemble(all, kept, far, start, wanted, reference);
   }
