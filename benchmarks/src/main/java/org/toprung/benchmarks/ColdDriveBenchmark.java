@@ -23,9 +23,9 @@ import org.toprung.core.drive.Drive;
 @Warmup(iterations = 0)
 @Measurement(iterations = 1)
 public class ColdDriveBenchmark {
-  /** Whether every sublevel takes part, or only three. */
-  @Param({"false", "true"})
-  public boolean everySublevel;
+  /** Number of steps of the ladder. */
+  @Param({"1", "2", "3"})
+  public int photons;
 
   /**
    * Resolves a drive.
@@ -34,6 +34,6 @@ public class ColdDriveBenchmark {
    */
   @Benchmark
   public Drive resolve() {
-    return Scenes.drive(everySublevel).resolve();
+    return Scenes.ladder(photons).resolve();
   }
 }

@@ -45,6 +45,31 @@ final class Scenes {
         .in(gauss(4));
   }
 
+  /** A stretched ladder of one, two or three photons. */
+  static DriveSetup ladder(int photons) {
+    if (photons == 2) {
+      return drive(false);
+    }
+    DriveSetup start =
+        Drive.of(Species.RUBIDIUM_87).from(Sublevel.hyperfine("5S1/2", 2, 2)).in(gauss(5));
+    Beam weak =
+        Beam.gaussian(milliwatts(0.05), micrometres(100))
+            .polarized(Polarization.SIGMA_PLUS)
+            .along(0, 0, 1);
+    Beam strong =
+        Beam.gaussian(milliwatts(500), micrometres(50))
+            .polarized(Polarization.SIGMA_PLUS)
+            .along(0, 0, -1);
+    if (photons == 1) {
+      return start.step(Sublevel.fine("60P3/2", 1.5), strong);
+    }
+    return start
+        .step(Level.parse("5P3/2"), weak)
+        .step(Level.parse("6S1/2"), weak.polarized(Polarization.SIGMA_MINUS))
+        .step(Sublevel.fine("60P3/2", 1.5), strong)
+        .detuned(gigahertz(1), gigahertz(-2));
+  }
+
   static Bench bench() {
     return Bench.unknown()
         .withTemperature(microkelvin(10))

@@ -58,6 +58,11 @@ final class BudgetCommand implements Callable<Integer> {
       description = "Seed of the simulation, any integer (default: ${DEFAULT-VALUE}).")
   private long seed;
 
+  @Option(
+      names = "--derivation",
+      description = "Also print how the effective Rabi frequency comes about, path by path.")
+  private boolean derivation;
+
   private final PrintStream err;
 
   BudgetCommand(PrintStream err) {
@@ -73,10 +78,12 @@ final class BudgetCommand implements Callable<Integer> {
     if (chartFile.isPresent()) {
       requireDistinct(jsonFile, chartFile.get());
     }
+    Optional<String> working = derivation ? Optional.of(working(scenario)) : Optional.empty();
     Budget budget = scenario.budget();
     ReportContent content = new ReportContent(scenario.title(), budget, check(budget));
     PrintWriter out = spec.commandLine().getOut();
     out.println(TextReport.render(content));
+    working.ifPresent(out::println);
     jsonFile.ifPresent(
         file -> {
           file.write(JsonReport.render(content));
@@ -100,6 +107,14 @@ final class BudgetCommand implements Callable<Integer> {
       throw new ParameterException(
           spec.commandLine(),
           "--chart: given " + chart + "; allowed: a file name that ends in .svg");
+    }
+  }
+
+  private String working(Scenario scenario) {
+    try {
+      return scenario.drive().derivation().text();
+    } catch (IllegalArgumentException e) {
+      throw new ParameterException(spec.commandLine(), "--derivation: " + e.getMessage(), e);
     }
   }
 

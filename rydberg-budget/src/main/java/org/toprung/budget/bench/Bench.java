@@ -4,6 +4,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.function.Consumer;
 import org.toprung.core.quantity.ElectricField;
 import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.MagneticField;
@@ -19,34 +20,39 @@ import org.toprung.core.quantity.Temperature;
  * <p>Immutable: each {@code with…} method gives a copy.
  */
 public final class Bench {
-  private static final Bench EMPTY = new Bench(null, null, null, null, null, null, null, null);
+  private static final Bench UNKNOWN = new Bench(new Values());
 
-  private final Temperature temperature;
-  private final List<Frequency> trapFrequencies;
-  private final Temperature environment;
-  private final MagneticField magneticNoise;
-  private final ElectricField electricField;
-  private final List<Frequency> linewidths;
-  private final List<Frequency> drifts;
-  private final List<Double> intensityNoise;
+  /** What is known; null stands for what is not. Never changed once a bench holds it. */
+  private static final class Values {
+    private Temperature temperature;
+    private List<Frequency> trapFrequencies;
+    private Temperature environment;
+    private MagneticField magneticNoise;
+    private ElectricField electricField;
+    private List<Frequency> linewidths;
+    private List<Frequency> drifts;
+    private List<Double> intensityNoise;
+  }
 
-  private Bench(
-      Temperature temperature,
-      List<Frequency> trapFrequencies,
-      Temperature environment,
-      MagneticField magneticNoise,
-      ElectricField electricField,
-      List<Frequency> linewidths,
-      List<Frequency> drifts,
-      List<Double> intensityNoise) {
-    this.temperature = temperature;
-    this.trapFrequencies = trapFrequencies;
-    this.environment = environment;
-    this.magneticNoise = magneticNoise;
-    this.electricField = electricField;
-    this.linewidths = linewidths;
-    this.drifts = drifts;
-    this.intensityNoise = intensityNoise;
+  private final Values values;
+
+  private Bench(Values values) {
+    this.values = values;
+  }
+
+  /** A copy in which something is set. */
+  private Bench with(Consumer<Values> change) {
+    Values copy = new Values();
+    copy.temperature = values.temperature;
+    copy.trapFrequencies = values.trapFrequencies;
+    copy.environment = values.environment;
+    copy.magneticNoise = values.magneticNoise;
+    copy.electricField = values.electricField;
+    copy.linewidths = values.linewidths;
+    copy.drifts = values.drifts;
+    copy.intensityNoise = values.intensityNoise;
+    change.accept(copy);
+    return new Bench(copy);
   }
 
   /**
@@ -55,7 +61,7 @@ public final class Bench {
    * @return a bench without any value
    */
   public static Bench unknown() {
-    return EMPTY;
+    return UNKNOWN;
   }
 
   /**
@@ -67,15 +73,7 @@ public final class Bench {
    */
   public Bench withTemperature(Temperature value) {
     requirePositive(value.kelvin(), "temperature " + value);
-    return new Bench(
-        value,
-        trapFrequencies,
-        environment,
-        magneticNoise,
-        electricField,
-        linewidths,
-        drifts,
-        intensityNoise);
+    return with(v -> v.temperature = value);
   }
 
   /**
@@ -91,15 +89,7 @@ public final class Bench {
   public Bench withTrapFrequencies(Frequency x, Frequency y, Frequency z) {
     List<Frequency> three = List.of(x, y, z);
     three.forEach(f -> requirePositive(f.hertz(), "trap frequency " + f));
-    return new Bench(
-        temperature,
-        three,
-        environment,
-        magneticNoise,
-        electricField,
-        linewidths,
-        drifts,
-        intensityNoise);
+    return with(v -> v.trapFrequencies = three);
   }
 
   /**
@@ -111,15 +101,7 @@ public final class Bench {
    */
   public Bench withEnvironment(Temperature value) {
     requirePositive(value.kelvin(), "environment temperature " + value);
-    return new Bench(
-        temperature,
-        trapFrequencies,
-        value,
-        magneticNoise,
-        electricField,
-        linewidths,
-        drifts,
-        intensityNoise);
+    return with(v -> v.environment = value);
   }
 
   /**
@@ -131,15 +113,7 @@ public final class Bench {
    */
   public Bench withMagneticNoise(MagneticField rms) {
     requireNotNegative(rms.tesla(), "magnetic noise " + rms);
-    return new Bench(
-        temperature,
-        trapFrequencies,
-        environment,
-        rms,
-        electricField,
-        linewidths,
-        drifts,
-        intensityNoise);
+    return with(v -> v.magneticNoise = rms);
   }
 
   /**
@@ -151,15 +125,7 @@ public final class Bench {
    */
   public Bench withElectricField(ElectricField rms) {
     requireNotNegative(rms.voltsPerMetre(), "electric field " + rms);
-    return new Bench(
-        temperature,
-        trapFrequencies,
-        environment,
-        magneticNoise,
-        rms,
-        linewidths,
-        drifts,
-        intensityNoise);
+    return with(v -> v.electricField = rms);
   }
 
   /**
@@ -170,17 +136,9 @@ public final class Bench {
    * @throws IllegalArgumentException if a width is negative
    */
   public Bench withLinewidths(Frequency... fwhm) {
-    List<Frequency> values = List.of(fwhm);
-    values.forEach(f -> requireNotNegative(f.hertz(), "linewidth " + f));
-    return new Bench(
-        temperature,
-        trapFrequencies,
-        environment,
-        magneticNoise,
-        electricField,
-        values,
-        drifts,
-        intensityNoise);
+    List<Frequency> given = List.of(fwhm);
+    given.forEach(f -> requireNotNegative(f.hertz(), "linewidth " + f));
+    return with(v -> v.linewidths = given);
   }
 
   /**
@@ -191,17 +149,9 @@ public final class Bench {
    * @throws IllegalArgumentException if a value is negative
    */
   public Bench withDrifts(Frequency... rms) {
-    List<Frequency> values = List.of(rms);
-    values.forEach(f -> requireNotNegative(f.hertz(), "drift " + f));
-    return new Bench(
-        temperature,
-        trapFrequencies,
-        environment,
-        magneticNoise,
-        electricField,
-        linewidths,
-        values,
-        intensityNoise);
+    List<Frequency> given = List.of(rms);
+    given.forEach(f -> requireNotNegative(f.hertz(), "drift " + f));
+    return with(v -> v.drifts = given);
   }
 
   /**
@@ -220,16 +170,8 @@ public final class Bench {
                 Locale.ROOT, "relative intensity noise %s must be between 0 and 0.5", value));
       }
     }
-    List<Double> values = Arrays.stream(rms).boxed().toList();
-    return new Bench(
-        temperature,
-        trapFrequencies,
-        environment,
-        magneticNoise,
-        electricField,
-        linewidths,
-        drifts,
-        values);
+    List<Double> given = Arrays.stream(rms).boxed().toList();
+    return with(v -> v.intensityNoise = given);
   }
 
   private static void requirePositive(double value, String what) {
@@ -250,7 +192,7 @@ public final class Bench {
    * @return the temperature, if known
    */
   public Optional<Temperature> temperature() {
-    return Optional.ofNullable(temperature);
+    return Optional.ofNullable(values.temperature);
   }
 
   /**
@@ -259,7 +201,7 @@ public final class Bench {
    * @return a list of three frequencies, if known
    */
   public Optional<List<Frequency>> trapFrequencies() {
-    return Optional.ofNullable(trapFrequencies);
+    return Optional.ofNullable(values.trapFrequencies);
   }
 
   /**
@@ -268,7 +210,7 @@ public final class Bench {
    * @return the temperature, if known
    */
   public Optional<Temperature> environment() {
-    return Optional.ofNullable(environment);
+    return Optional.ofNullable(values.environment);
   }
 
   /**
@@ -277,7 +219,7 @@ public final class Bench {
    * @return the spread, if known
    */
   public Optional<MagneticField> magneticNoise() {
-    return Optional.ofNullable(magneticNoise);
+    return Optional.ofNullable(values.magneticNoise);
   }
 
   /**
@@ -286,7 +228,7 @@ public final class Bench {
    * @return the field, if known
    */
   public Optional<ElectricField> electricField() {
-    return Optional.ofNullable(electricField);
+    return Optional.ofNullable(values.electricField);
   }
 
   /**
@@ -295,7 +237,7 @@ public final class Bench {
    * @return the full widths at half maximum, if known
    */
   public Optional<List<Frequency>> linewidths() {
-    return Optional.ofNullable(linewidths);
+    return Optional.ofNullable(values.linewidths);
   }
 
   /**
@@ -304,7 +246,7 @@ public final class Bench {
    * @return the root mean squares, if known
    */
   public Optional<List<Frequency>> drifts() {
-    return Optional.ofNullable(drifts);
+    return Optional.ofNullable(values.drifts);
   }
 
   /**
@@ -313,7 +255,7 @@ public final class Bench {
    * @return the root mean squares, if known
    */
   public Optional<List<Double>> intensityNoise() {
-    return Optional.ofNullable(intensityNoise);
+    return Optional.ofNullable(values.intensityNoise);
   }
 
   /**
@@ -323,9 +265,9 @@ public final class Bench {
    * @throws IllegalArgumentException if a list is shorter or longer; the message names it
    */
   public void requireSteps(int steps) {
-    requireLength(linewidths, steps, "linewidth");
-    requireLength(drifts, steps, "drift");
-    requireLength(intensityNoise, steps, "intensity_noise");
+    requireLength(values.linewidths, steps, "linewidth");
+    requireLength(values.drifts, steps, "drift");
+    requireLength(values.intensityNoise, steps, "intensity_noise");
   }
 
   private static void requireLength(List<?> values, int steps, String what) {

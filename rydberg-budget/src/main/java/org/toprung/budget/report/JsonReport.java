@@ -15,9 +15,11 @@ import org.toprung.budget.Check;
 import org.toprung.core.atom.Level;
 import org.toprung.core.drive.Beam;
 import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.GroundLight;
 import org.toprung.core.drive.Profile;
 import org.toprung.core.drive.PulsePlan;
 import org.toprung.core.structure.DipoleElement;
+import org.toprung.core.structure.ReducedElement;
 
 /**
  * The report for programs: JSON with SI units in the key names. A value that is not finite is never
@@ -87,6 +89,22 @@ public final class JsonReport {
     json.writeEndArray();
     number("start_light_shift_Hz", drive.startLightShift().hertz());
     number("target_light_shift_Hz", drive.targetLightShift().hertz());
+    if (drive.idle().isPresent()) {
+      GroundLight idle = drive.idle().get();
+      json.writeObjectFieldStart("idle");
+      json.writeStringField("sublevel", idle.sublevel().toString());
+      number("light_shift_Hz", idle.shift().hertz());
+      number("scattering_per_s", idle.scatteringPerSecond());
+      json.writeEndObject();
+    }
+    if (drive.trap().isPresent()) {
+      Drive.TrapLight trap = drive.trap().get();
+      json.writeObjectFieldStart("trap");
+      number("wavelength_m", trap.wavelength().metres());
+      number("start_light_shift_Hz", trap.startShift().hertz());
+      number("target_light_shift_Hz", trap.targetShift().hertz());
+      json.writeEndObject();
+    }
     number("far_light_shift_relative_uncertainty", drive.farShiftRelativeUncertainty());
     number("intermediate_admixture", drive.admixture());
     number("intermediate_scattering_per_pulse", budget.scatteringPerPulse());
@@ -107,7 +125,9 @@ public final class JsonReport {
 
   private void step(Drive drive, int k) throws IOException {
     Drive.Step step = drive.steps().get(k);
-    DipoleElement element = step.element();
+    ReducedElement element = step.element();
+    String kind = element instanceof DipoleElement ? "dipole" : "quadrupole";
+    String unit = element instanceof DipoleElement ? "ea0" : "ea02";
     json.writeStartObject();
     json.writeStringField("to", step.to());
     number("wavelength_m", step.wavelength().metres());
@@ -116,10 +136,12 @@ public final class JsonReport {
     }
     beam(step);
     number("rabi_Hz", step.rabi().hertz());
-    number("reduced_dipole_ea0", Math.abs(element.valueA0()));
-    number("reduced_dipole_uncertainty_ea0", element.uncertaintyA0());
-    json.writeStringField("dipole_origin", TextReport.origin(step));
-    json.writeStringField("dipole_source", element.source());
+    number("reduced_" + kind + "_" + unit, element.modulus());
+    number(
+        "reduced_" + kind + "_uncertainty_" + unit,
+        element.modulus() * element.relativeUncertainty());
+    json.writeStringField(kind + "_origin", TextReport.origin(step));
+    json.writeStringField(kind + "_source", element.source());
     number("start_light_shift_Hz", drive.startLightShift(k).hertz());
     number("target_light_shift_Hz", drive.targetLightShift(k).hertz());
     json.writeEndObject();

@@ -3,8 +3,10 @@ package org.toprung.budget.report;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.Profile;
+import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.Power;
 
 /**
@@ -27,34 +29,40 @@ final class LaserCaution {
   private LaserCaution() {}
 
   /** Sentences about the beams that need one; none where no beam does. */
-  static List<String> of(List<Drive.Step> steps) {
+  static List<String> of(Drive drive) {
     List<String> cautions = new ArrayList<>();
-    for (int k = 0; k < steps.size(); k++) {
-      Drive.Step step = steps.get(k);
-      Profile profile = step.beam().profile();
-      // of a beam known by its intensity alone the worst is assumed
-      double watts = profile.power().map(Power::watts).orElse(Double.POSITIVE_INFINITY);
-      String found = range(step.wavelength().metres(), watts);
-      if (!found.isEmpty()) {
-        cautions.add(
-            String.format(
-                Locale.ROOT,
-                "Laser beam %d, %s at %s: %s.",
-                k + 1,
-                profile
-                    .power()
-                    .map(Figures::of)
-                    .orElse(Figures.of(profile.peakIntensity()) + " of unknown power"),
-                Figures.nanometres(step.wavelength()),
-                found));
-      }
+    for (int k = 0; k < drive.steps().size(); k++) {
+      Drive.Step step = drive.steps().get(k);
+      about("Laser beam " + (k + 1), step.beam().profile(), step.wavelength())
+          .ifPresent(cautions::add);
     }
+    drive
+        .trap()
+        .flatMap(t -> about("Trap beam", t.beam().profile(), t.wavelength()))
+        .ifPresent(cautions::add);
     if (!cautions.isEmpty()) {
       cautions.add(
           "These are powers at the atoms; more leaves the laser. Laser work follows IEC 60825-1,"
               + " local rules and the laser safety officer.");
     }
     return cautions;
+  }
+
+  private static Optional<String> about(String beam, Profile profile, Length wavelength) {
+    // of a beam known by its intensity alone the worst is assumed
+    double watts = profile.power().map(Power::watts).orElse(Double.POSITIVE_INFINITY);
+    String found = range(wavelength.metres(), watts);
+    if (found.isEmpty()) {
+      return Optional.empty();
+    }
+    String size =
+        profile
+            .power()
+            .map(Figures::of)
+            .orElse(Figures.of(profile.peakIntensity()) + " of unknown power");
+    return Optional.of(
+        String.format(
+            Locale.ROOT, "%s, %s at %s: %s.", beam, size, Figures.nanometres(wavelength), found));
   }
 
   /** The range a beam counts in, or nothing where it needs no caution. */

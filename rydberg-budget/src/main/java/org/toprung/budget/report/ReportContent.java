@@ -56,7 +56,7 @@ public record ReportContent(String title, Budget budget, Check check) {
 
   /** Safety of the beams, and what the numbers are good for. */
   List<String> cautions() {
-    List<String> cautions = new ArrayList<>(LaserCaution.of(budget.drive().steps()));
+    List<String> cautions = new ArrayList<>(LaserCaution.of(budget.drive()));
     cautions.add("All figures are estimates for planning, to be confirmed on the apparatus.");
     return List.copyOf(cautions);
   }

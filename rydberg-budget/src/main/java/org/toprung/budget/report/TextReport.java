@@ -10,6 +10,7 @@ import org.toprung.budget.Check;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.PulsePlan;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.structure.DipoleElement;
 
 /**
  * The report for people: one page of text that fits {@value Page#WIDTH} columns.
@@ -108,11 +109,14 @@ public final class TextReport {
     page.value("beam", BeamText.of(step));
     page.value("Rabi frequency", Figures.of(step.rabi()));
     page.value(
-        "reduced dipole element",
+        step.element() instanceof DipoleElement ? "reduced dipole element" : "reduced quadrupole",
         String.format(
             Locale.ROOT,
-            "(%s) e a0, %s: %s",
-            Figures.measured(Math.abs(step.element().valueA0()), step.element().uncertaintyA0()),
+            "(%s) %s, %s: %s",
+            Figures.measured(
+                step.element().modulus(),
+                step.element().modulus() * step.element().relativeUncertainty()),
+            step.element().unit(),
             origin(step),
             step.element().source()));
   }
@@ -135,6 +139,30 @@ public final class TextReport {
     page.value(
         "light shift of target",
         Figures.signed(drive.targetLightShift()) + byBeam(drive::targetLightShift));
+    drive
+        .idle()
+        .ifPresent(
+            idle ->
+                page.value(
+                    "light shift of idle",
+                    String.format(
+                        Locale.ROOT,
+                        "%s (%s); it scatters %s photons per second",
+                        Figures.signed(idle.shift()),
+                        idle.sublevel(),
+                        Figures.number(idle.scatteringPerSecond(), 3))));
+    drive
+        .trap()
+        .ifPresent(
+            trap ->
+                page.value(
+                    "trap light",
+                    String.format(
+                        Locale.ROOT,
+                        "%s, shifts start by %s and target by %s; in the frequency offset",
+                        Figures.nanometres(trap.wavelength()),
+                        Figures.signed(trap.startShift()),
+                        Figures.signed(trap.targetShift()))));
     page.value(
         "intermediate scattering",
         "probability " + Figures.probability(budget.scatteringPerPulse()) + " per pulse");

@@ -10,10 +10,12 @@ import org.toprung.budget.pulse.Pulse;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
+import org.toprung.core.drive.Beam;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.DriveSetup;
 import org.toprung.core.quantity.ElectricField;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.MagneticField;
 
 /**
@@ -29,19 +31,23 @@ import org.toprung.core.quantity.MagneticField;
  * detuning of its own: the lasers sit on resonance with the target, light shifts compensated,
  * unless {@code pulse.offset} says otherwise. Without a {@code title} the file's name stands in.
  *
- * <p>Optional: in {@code field} a static {@code electric} field; in a {@code step} two waists with
- * a {@code waist_axis}, an {@code intensity} in place of power and waist, the {@code offset} of the
- * focus from the atom, and an {@code impurity} of the polarization with its {@code
- * impurity_phase_deg}.
+ * <p>Optional: {@code idle} names a ground sublevel that is not driven, {@code trap} a beam that
+ * stays on during the pulse without driving anything; in {@code field} a static {@code electric}
+ * field; in a {@code step} two waists with a {@code waist_axis}, an {@code intensity} in place of
+ * power and waist, the {@code offset} of the focus from the atom, and an {@code impurity} of the
+ * polarization with its {@code impurity_phase_deg}.
  *
  * <p>Immutable and thread-safe.
  */
 public final class Scenario {
   private static final int MOST_STEPS = 3;
   private static final List<String> KEYS =
-      List.of("title", "atom", "field", "start", "step", "pulse", "bench");
+      List.of("title", "atom", "field", "start", "idle", "step", "trap", "pulse", "bench");
   private static final List<String> STEP_KEYS = joined(List.of("to", "detuning"), Beams.KEYS);
-  private static final List<String> LAST_STEP_KEYS = joined(List.of("to", "mJ"), Beams.KEYS);
+  private static final List<String> LAST_STEP_KEYS =
+      joined(List.of("to", "mJ", "multipole"), Beams.KEYS);
+
+  private static final List<String> TRAP_KEYS = joined(List.of("wavelength"), Beams.KEYS);
 
   private final Path file;
   private final String title;
@@ -62,7 +68,13 @@ public final class Scenario {
         field(root.table("field", List.of("magnetic", "electric")), Drive.of(species));
     DriveSetup started = start(root.table("start", List.of("level", "F", "mF")), species, inField);
     List<Table> steps = root.tables("step", MOST_STEPS, STEP_KEYS, LAST_STEP_KEYS);
-    this.setup = steps(steps, species, started);
+    DriveSetup driven = steps(steps, species, started);
+    DriveSetup qubit =
+        root.optionalTable("idle", List.of("F", "mF"))
+            .map(table -> idle(table, species, driven))
+            .orElse(driven);
+    this.setup =
+        root.optionalTable("trap", TRAP_KEYS).map(table -> trap(table, qubit)).orElse(qubit);
     this.pulse = pulse(root.table("pulse", List.of("kind", "offset")));
     this.bench = Benches.read(root.optionalTable("bench", Benches.KEYS), steps.size());
     this.drive = root.guarded("step", setup::resolve);
@@ -133,15 +145,32 @@ public final class Scenario {
 
   private static DriveSetup start(Table table, Species species, DriveSetup setup) {
     Value at = table.required("level", "text such as \"5S1/2\"");
-    Level level = level(at, species);
+    Sublevel start = sublevel(table, level(at, species), species);
+    return at.guarded(() -> setup.from(start));
+  }
+
+  private static DriveSetup idle(Table table, Species species, DriveSetup setup) {
+    Sublevel idle = sublevel(table, species.groundLevel(), species);
+    return table.guarded(() -> setup.idling(idle));
+  }
+
+  private static Sublevel sublevel(Table table, Level level, Species species) {
     String number = "an integer or half-integer such as 2 or 2.5";
     Value f = table.required("F", number);
     double total = f.number(number);
     // the stretched sublevel tells whether F alone is possible
     f.guarded(() -> species.requireValid(Sublevel.hyperfine(level, total, total)));
     Value m = table.required("mF", number);
-    Sublevel start = m.guarded(() -> Sublevel.hyperfine(level, total, m.number(number)));
-    return at.guarded(() -> setup.from(start));
+    return m.guarded(() -> Sublevel.hyperfine(level, total, m.number(number)));
+  }
+
+  private static DriveSetup trap(Table table, DriveSetup setup) {
+    Value wavelength = table.required("wavelength", "text such as \"852 nm\"");
+    Length vacuum = wavelength.parsed(Length::parse, "852 nm");
+    if (!(vacuum.metres() > 0)) {
+      throw wavelength.refused("a vacuum wavelength above zero");
+    }
+    return table.guarded(() -> setup.trappedBy(Beams.read(table), vacuum));
   }
 
   private static DriveSetup steps(List<Table> tables, Species species, DriveSetup started) {
@@ -165,7 +194,19 @@ public final class Scenario {
     String number = "a half-integer such as 0.5";
     Value m = table.required("mJ", number);
     Sublevel target = m.guarded(() -> Sublevel.fine(to, m.number(number)));
-    return table.guarded(() -> setup.step(target, Beams.read(table)));
+    boolean quadrupole = table.optional("multipole").map(Scenario::isQuadrupole).orElse(false);
+    Beam beam = Beams.read(table);
+    return table.guarded(
+        () -> quadrupole ? setup.quadrupoleStep(target, beam) : setup.step(target, beam));
+  }
+
+  private static boolean isQuadrupole(Value multipole) {
+    String allowed = "\"E1\" or, for a single step, \"E2\"";
+    return switch (multipole.text(allowed)) {
+      case "E1" -> false;
+      case "E2" -> true;
+      default -> throw multipole.refused(allowed);
+    };
   }
 
   private static Pulse pulse(Table table) {

@@ -196,7 +196,7 @@ class BadInputTest {
           title = "Rub | tittle = "Rub           | tittle              | title, atom, field
           species =    | isotope =               | atom.isotope        | species
           waist = "20  | radius = "20            | step[1].radius      | to, detuning, power, waist
-          mJ = 0.5     | detuning = "1 GHz"      | step[2].detuning    | to, mJ, power, waist
+          mJ = 0.5     | detuning = "1 GHz"      | step[2].detuning    | to, mJ, multipole
           kind =       | shape =                 | pulse.shape         | kind, offset
           drift =      | drifts =                | bench.drifts        | linewidth, drift, intensity_noise
           [bench]      | [lab]                   | lab                 | pulse, bench

@@ -63,6 +63,42 @@ class MainTest {
   }
 
   @Test
+  void printsTheDerivationWhenAsked() {
+    CommandLineRun run = budget("--derivation");
+    assertEquals(0, run.status(), run.err());
+    assertTrue(run.out().contains("\nCoupling of Rb-87: 5S1/2 F=2 mF=2 to 68S1/2"), run.out());
+    assertTrue(run.out().contains("Effective Rabi frequency √(Σ |sum|²) = "), run.out());
+    assertTrue(!budget().out().contains("Coupling of"));
+  }
+
+  @Test
+  void saysWhenThereIsNoDerivation() throws IOException {
+    String beam =
+        """
+        power = "1 mW"
+        waist = "30 um"
+        polarization = "sigma+"
+        direction = [0, 0, 1]
+        """;
+    String text =
+        "atom.species = \"Rb-87\"\nfield.magnetic = \"4 G\"\npulse.kind = \"pi\"\n"
+            + "start = {level = \"5S1/2\", F = 2, mF = 2}\n"
+            + "[[step]]\nto = \"5P3/2\"\ndetuning = \"1 GHz\"\n"
+            + beam
+            + "[[step]]\nto = \"5D5/2\"\ndetuning = \"1 GHz\"\n"
+            + beam
+            + "[[step]]\nto = \"60F7/2\"\nmJ = 3.5\n"
+            + beam;
+    Path three = Files.writeString(folder.resolve("three.toml"), text);
+    CommandLineRun run =
+        CommandLineRun.of("budget", three.toString(), "--shots", "2", "--derivation");
+    assertEquals(2, run.status(), run.err());
+    assertTrue(run.err().contains("--derivation: "), run.err());
+    assertTrue(run.err().contains("one or two steps, given 3"), run.err());
+    assertEquals("", run.out());
+  }
+
+  @Test
   void repeatsItselfForTheSameSeedOnly() {
     String first = budget("--seed", "7").out();
     assertEquals(first, budget("--seed", "7").out());
@@ -75,7 +111,9 @@ class MainTest {
     CommandLineRun help = CommandLineRun.of("budget", "--help");
     assertEquals(0, help.status());
     for (String word :
-        new String[] {"SCENARIO", "--json", "--chart", "--shots", "--seed", "2000"}) {
+        new String[] {
+          "SCENARIO", "--json", "--chart", "--shots", "--seed", "--derivation", "2000"
+        }) {
       assertTrue(help.out().contains(word), word);
     }
     assertEquals(0, CommandLineRun.of("--help").status());

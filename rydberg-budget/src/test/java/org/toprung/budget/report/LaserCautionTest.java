@@ -32,7 +32,7 @@ class LaserCautionTest {
   @Test
   void refersToTheStandardAndTheOfficerWhereABeamIsHazardous() {
     List<String> cautions =
-        LaserCaution.of(Scenario.parse(ReferenceScenario.text(), "s.toml").drive().steps());
+        LaserCaution.of(Scenario.parse(ReferenceScenario.text(), "s.toml").drive());
     // 2 mW of visible light needs none, 150 mW in the infrared does
     assertEquals(2, cautions.size());
     assertTrue(cautions.get(0).startsWith("Laser beam 2, 150 mW"), cautions.get(0));

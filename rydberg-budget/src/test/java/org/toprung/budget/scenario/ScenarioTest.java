@@ -20,7 +20,11 @@ import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 import org.toprung.angular.Polarization;
+import org.toprung.budget.Budget;
 import org.toprung.budget.ReferenceScenario;
+import org.toprung.budget.report.JsonReport;
+import org.toprung.budget.report.ReportContent;
+import org.toprung.budget.report.TextReport;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
@@ -75,6 +79,97 @@ class ScenarioTest {
     assertEquals(
         List.of(Frequency.kilohertz(2), Frequency.kilohertz(2)), s.bench().drifts().orElseThrow());
     assertEquals(List.of(0.005, 0.005), s.bench().intensityNoise().orElseThrow());
+  }
+
+  @Test
+  void readsAnIdleSublevelAndATrap() {
+    Scenario s =
+        parse(
+            ReferenceScenario.with(
+                "[pulse]",
+                """
+                [idle]
+                F = 1
+                mF = 0
+                [trap]
+                wavelength = "852 nm"
+                power = "3 mW"
+                waist = "1 um"
+                polarization = "pi"
+                direction = [1, 0, 0]
+                [pulse]"""));
+    assertEquals(Sublevel.hyperfine("5S1/2", 1, 0), s.drive().idle().orElseThrow().sublevel());
+    Drive.TrapLight trap = s.drive().trap().orElseThrow();
+    assertEquals(Length.nanometres(852).metres(), trap.wavelength().metres(), 1e-18);
+    // red of the D lines: the ground level goes down, the nearly free electron up
+    assertTrue(trap.startShift().hertz() < -1e6 && trap.targetShift().hertz() > 1e5);
+    String text = TextReport.render(report(s));
+    assertTrue(text.contains("light shift of idle"), text);
+    assertTrue(text.contains("Trap beam, 3 mW at 852"), text);
+    String json = JsonReport.render(report(s));
+    assertTrue(json.contains("\"idle\"") && json.contains("\"trap\""), json);
+  }
+
+  private static ReportContent report(Scenario s) {
+    Budget budget = s.budget();
+    return new ReportContent(s.title(), budget, budget.check(10, 1));
+  }
+
+  private static String oneStep() {
+    return """
+            [atom]
+            species = "Cs-133"
+            [field]
+            magnetic = "5 G"
+            [start]
+            level = "6S1/2"
+            F = 4
+            mF = 4
+            [[step]]
+            to = "60P3/2"
+            mJ = 1.5
+            power = "60 mW"
+            waist = "20 um"
+            polarization = "sigma+"
+            direction = [0, 0, 1]
+            [pulse]
+            kind = "pi"
+            """;
+  }
+
+  @Test
+  void readsOneStepAndThree() {
+    Scenario one = parse(oneStep());
+    Scenario quadrupole =
+        parse(oneStep().replace("60P3/2", "60D5/2").replace("mJ", "multipole = \"E2\"\nmJ"));
+    String json = JsonReport.render(report(quadrupole));
+    assertTrue(json.contains("reduced_quadrupole_ea02"), json);
+    assertTrue(TextReport.render(report(quadrupole)).contains("reduced quadrupole"));
+    assertEquals(1, one.drive().steps().size());
+    assertTrue(one.drive().intermediates().isEmpty());
+    assertTrue(TextReport.render(report(one)).contains("60P3/2"));
+    String middle =
+        """
+        [[step]]
+        to = "6S1/2"
+        detuning = "-2 GHz"
+        power = "5 mW"
+        waist = "80 um"
+        polarization = "sigma-"
+        direction = [0, 0, 1]
+        """;
+    String last = ReferenceScenario.with("68S1/2", "68P3/2").replace("mJ = 0.5", "mJ = 1.5");
+    int second = last.indexOf("[[step]]", last.indexOf("[[step]]") + 1);
+    Scenario three =
+        parse(
+            (last.substring(0, second) + middle + last.substring(second))
+                .replace(
+                    "polarization = \"sigma-\"\ndirection = [0, 0, -1]",
+                    "polarization = \"sigma+\"\ndirection = [0, 0, -1]")
+                .replaceAll("(?m)^(linewidth|drift|intensity_noise).*$", "")
+                .replace("6P3/2", "5P3/2"));
+    assertEquals(3, three.drive().steps().size());
+    assertEquals(Frequency.gigahertz(-2), three.drive().detuning(1));
   }
 
   /** What is described in text gives the same drive as what is described in Java. */
@@ -205,12 +300,8 @@ class ScenarioTest {
   void readsTheOptionalKeysOfTheExample() throws Exception {
     String text =
         Files.readString(Path.of("examples", "rubidium-two-photon.toml"))
-            .replace("# electric =", "electric =")
-            .replace("# offset =", "offset =")
-            .replace("# impurity", "impurity")
-            .replace("# waist_axis", "waist_axis")
             .replaceFirst("waist = \"25 um\"", "")
-            .replace("# waist =", "waist =");
+            .replaceAll("(?m)^# (?!intensity)(?=[a-zF]+[_a-zF]* = |\\[)", "");
     Drive drive = parse(text).drive();
     Beam beam = drive.steps().get(0).beam();
     assertEquals(2, beam.profile().waists().size());
@@ -219,6 +310,8 @@ class ScenarioTest {
     assertArrayEquals(new double[] {1e-6, 0, 0}, beam.focusMetres());
     assertArrayEquals(new double[] {0, 0, 10}, drive.electricFieldVoltsPerMetre());
     assertTrue(text.contains("# intensity = \"2 W/cm2\""));
+    assertEquals(Sublevel.hyperfine("5S1/2", 1, 0), drive.idle().orElseThrow().sublevel());
+    assertEquals(Power.milliwatts(3), drive.trap().orElseThrow().beam().power());
   }
 
   @Test

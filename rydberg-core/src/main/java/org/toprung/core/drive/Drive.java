@@ -3,6 +3,7 @@ package org.toprung.core.drive;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
@@ -10,7 +11,7 @@ import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.MagneticField;
 import org.toprung.core.quantity.PhysicalConstants;
-import org.toprung.core.structure.DipoleElement;
+import org.toprung.core.structure.ReducedElement;
 
 /**
  * A resolved drive from a ground sublevel to a Rydberg sublevel by one, two or three photons:
@@ -45,11 +46,12 @@ public final class Drive {
    * @param wavelength vacuum wavelength of the laser, light shifts not compensated
    * @param rabi root of the summed squares of the couplings over 2π from the start (first step) or
    *     to the target (last step) over the sublevels of the intermediate level
-   * @param element reduced dipole element between the two levels
+   * @param element reduced dipole element between the two levels; the quadrupole one of a
+   *     quadrupole step
    * @param beam the beam that drives it
    */
   public record Step(
-      String to, Length wavelength, Frequency rabi, DipoleElement element, Beam beam) {
+      String to, Length wavelength, Frequency rabi, ReducedElement element, Beam beam) {
 
     /**
      * Relative standard uncertainty of the dipole element, and so of the step's Rabi frequency.
@@ -57,7 +59,7 @@ public final class Drive {
      * @return the relative uncertainty
      */
     public double relativeUncertainty() {
-      return element.uncertaintyA0() / Math.abs(element.valueA0());
+      return element.relativeUncertainty();
     }
 
     /**
@@ -94,6 +96,18 @@ public final class Drive {
   public record OtherTarget(String sublevel, Frequency rabi, Frequency detuning) {}
 
   /**
+   * Light that shines on the atom without driving it. Its shifts are not part of the drive's light
+   * shifts, but of the pulse plan.
+   *
+   * @param beam the beam
+   * @param wavelength its vacuum wavelength
+   * @param startShift move of the start's energy over h, positive upwards
+   * @param targetShift move of the wanted target's energy over h, positive upwards
+   */
+  public record TrapLight(
+      Beam beam, Length wavelength, Frequency startShift, Frequency targetShift) {}
+
+  /**
    * A line that a weak first laser sees.
    *
    * @param position what to add to the first laser's nominal frequency to be resonant
@@ -113,8 +127,7 @@ public final class Drive {
   private final double magneticSensitivity; // Hz/T
   private final double farShiftUncertainty; // relative
   private final double firstLaser; // Hz
-  private final Frequency startTrapShift;
-  private final Frequency targetTrapShift;
+  private final Optional<TrapLight> trap;
 
   private Drive(DriveSetup setup) {
     this.setup = setup;
@@ -147,8 +160,7 @@ public final class Drive {
             - ladder.states().get(ladder.start()).hertzPerTesla();
     this.farShiftUncertainty = builder.farShiftRelativeUncertainty();
     this.firstLaser = builder.laserHertz(0);
-    this.startTrapShift = Frequency.ofHertz(builder.startTrapShiftHertz());
-    this.targetTrapShift = Frequency.ofHertz(builder.targetTrapShiftHertz());
+    this.trap = setup.trap().map(builder::trapLight);
   }
 
   /**
@@ -439,22 +451,21 @@ public final class Drive {
   }
 
   /**
-   * Light shift of the start by the trap, if one shines during the pulse. It is not part of {@link
-   * #startLightShift()}, but of the pulse plan.
+   * The trap that shines during the pulse, and what it does.
    *
-   * @return the move of its energy over h, positive upwards; zero without a trap
+   * @return the trap, if one was left on
    */
-  public Frequency startTrapShift() {
-    return startTrapShift;
+  public Optional<TrapLight> trap() {
+    return trap;
   }
 
   /**
-   * Light shift of the wanted target by the trap, if one shines during the pulse.
+   * The ground sublevel that is not driven, and what the light does to it.
    *
-   * @return the move of its energy over h, positive upwards; zero without a trap
+   * @return the idle sublevel, if one was named
    */
-  public Frequency targetTrapShift() {
-    return targetTrapShift;
+  public Optional<GroundLight> idle() {
+    return setup.idle().map(this::groundLight);
   }
 
   /**
@@ -600,6 +611,39 @@ public final class Drive {
    */
   public PulsePlan plan(double areaRadians) {
     return PulsePlanner.plan(ladder, areaRadians);
+  }
+
+  /**
+   * Prepares this drive for evaluation at other powers, detunings and places in the beams.
+   *
+   * @return a kernel, to be prepared once and used often
+   * @throws IllegalArgumentException if the drive has three steps, or a beam is given by its
+   *     intensity instead of its power
+   */
+  public DriveKernel kernel() {
+    return DriveKernel.of(KernelBuilder.build(setup, toString()));
+  }
+
+  /**
+   * How the powers of the beams weigh against each other: slopes of the differential light shift,
+   * the ratios that null it and that scatter least, and powers for wanted Rabi frequencies.
+   *
+   * @return the balance at the detuning of this drive
+   * @throws IllegalArgumentException if the drive has three steps, or a beam is given by its
+   *     intensity instead of its power
+   */
+  public PowerBalance powerBalance() {
+    return PowerBalance.of(this);
+  }
+
+  /**
+   * How the effective Rabi frequency comes about, factor by factor, to be checked by hand.
+   *
+   * @return the working, as data and as text
+   * @throws IllegalArgumentException if the drive has three steps or a quadrupole step
+   */
+  public Derivation derivation() {
+    return DerivationBuilder.build(setup, this);
   }
 
   @Override

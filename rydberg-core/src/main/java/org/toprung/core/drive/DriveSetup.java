@@ -22,7 +22,7 @@ public final class DriveSetup {
   private static final int MAX_STEPS = 3;
 
   /** One step as described: where it leads and the beam that drives it. */
-  record Step(Level to, Sublevel target, Beam beam) {
+  record Step(Level to, Sublevel target, Beam beam, boolean quadrupole) {
     @Override
     public String toString() {
       return target == null ? to.toString() : target.toString();
@@ -38,6 +38,7 @@ public final class DriveSetup {
   private final List<Frequency> detunings; // one for each step but the last; null until given
   private final Site site;
   private final Trap trap; // null when off during the pulse
+  private final Sublevel idle; // null when there is none
 
   private DriveSetup(
       Species species,
@@ -45,20 +46,22 @@ public final class DriveSetup {
       List<Step> steps,
       List<Frequency> detunings,
       Site site,
-      Trap trap) {
+      Trap trap,
+      Sublevel idle) {
     this.species = species;
     this.start = start;
     this.steps = steps;
     this.detunings = detunings;
     this.site = site;
     this.trap = trap;
+    this.idle = idle;
   }
 
   static DriveSetup of(Species species) {
     if (species == null) {
       throw new IllegalArgumentException("a drive needs a species, not null");
     }
-    return new DriveSetup(species, null, List.of(), null, Site.ORIGIN, null);
+    return new DriveSetup(species, null, List.of(), null, Site.ORIGIN, null, null);
   }
 
   /**
@@ -78,7 +81,7 @@ public final class DriveSetup {
               + " must be a hyperfine sublevel of the ground level "
               + species.groundLevel());
     }
-    return new DriveSetup(species, sublevel, steps, detunings, site, trap);
+    return new DriveSetup(species, sublevel, steps, detunings, site, trap, idle);
   }
 
   /**
@@ -93,7 +96,7 @@ public final class DriveSetup {
    */
   public DriveSetup step(Level to, Beam beam) {
     species.requireValid(to);
-    return withStep(new Step(to, null, beam));
+    return withStep(new Step(to, null, beam, false));
   }
 
   /**
@@ -107,6 +110,29 @@ public final class DriveSetup {
    * @throws IllegalStateException if the beam lacks polarization or direction
    */
   public DriveSetup step(Sublevel target, Beam beam) {
+    return withStep(new Step(requireTarget(target).level(), target, beam, false));
+  }
+
+  /**
+   * Drives the target straight from the ground level by the electric quadrupole of a single beam, S
+   * to D.
+   *
+   * @param target a Rydberg sublevel of a D level with its m<sub>J</sub>
+   * @param beam the beam that drives it, with polarization and direction
+   * @return a copy with this only step
+   * @throws IllegalArgumentException if the species has no such sublevel, it is labelled by F, or
+   *     the beam cannot have its polarization
+   * @throws IllegalStateException if the beam lacks polarization or direction, or there is a step
+   *     already
+   */
+  public DriveSetup quadrupoleStep(Sublevel target, Beam beam) {
+    if (!steps.isEmpty()) {
+      throw new IllegalStateException("a quadrupole step is the only one, not after " + steps);
+    }
+    return withStep(new Step(requireTarget(target).level(), target, beam, true));
+  }
+
+  private Sublevel requireTarget(Sublevel target) {
     species.requireValid(target);
     if (target.isHyperfine()) {
       throw new IllegalArgumentException(
@@ -114,14 +140,14 @@ public final class DriveSetup {
               + target
               + " must be given by its mJ: the nuclear spin of a Rydberg level is a spectator");
     }
-    return withStep(new Step(target.level(), target, beam));
+    return target;
   }
 
   private DriveSetup withStep(Step step) {
     step.beam().polarizationVector();
     List<Step> longer = new ArrayList<>(steps);
     longer.add(step);
-    return new DriveSetup(species, start, List.copyOf(longer), detunings, site, trap);
+    return new DriveSetup(species, start, List.copyOf(longer), detunings, site, trap, idle);
   }
 
   /**
@@ -136,7 +162,7 @@ public final class DriveSetup {
    * @return a copy with these detunings
    */
   public DriveSetup detuned(Frequency... newDetunings) {
-    return new DriveSetup(species, start, steps, List.of(newDetunings), site, trap);
+    return new DriveSetup(species, start, steps, List.of(newDetunings), site, trap, idle);
   }
 
   /**
@@ -153,7 +179,7 @@ public final class DriveSetup {
               + newField
               + " must be at least 0: it points along lab z by convention");
     }
-    return new DriveSetup(species, start, steps, detunings, site.with(newField), trap);
+    return new DriveSetup(species, start, steps, detunings, site.with(newField), trap, idle);
   }
 
   /**
@@ -167,7 +193,7 @@ public final class DriveSetup {
   public DriveSetup inElectricField(ElectricField ex, ElectricField ey, ElectricField ez) {
     StaticField newField =
         new StaticField(ex.voltsPerMetre(), ey.voltsPerMetre(), ez.voltsPerMetre());
-    return new DriveSetup(species, start, steps, detunings, site.with(newField), trap);
+    return new DriveSetup(species, start, steps, detunings, site.with(newField), trap, idle);
   }
 
   /**
@@ -180,7 +206,23 @@ public final class DriveSetup {
    */
   public DriveSetup atomAt(Length x, Length y, Length z) {
     Site moved = site.at(x.metres(), y.metres(), z.metres());
-    return new DriveSetup(species, start, steps, detunings, moved, trap);
+    return new DriveSetup(species, start, steps, detunings, moved, trap, idle);
+  }
+
+  /**
+   * Names the ground sublevel that is not driven, such as the other state of a qubit, so that the
+   * drive tells what its light does to it.
+   *
+   * @param sublevel a hyperfine sublevel of the ground level other than the start
+   * @return a copy with this idle sublevel
+   * @throws IllegalArgumentException if the species has no such ground sublevel, or it is the start
+   */
+  public DriveSetup idling(Sublevel sublevel) {
+    from(sublevel); // refuses what is no ground sublevel
+    if (sublevel.equals(start)) {
+      throw new IllegalArgumentException("the idle sublevel " + sublevel + " is the start");
+    }
+    return new DriveSetup(species, start, steps, detunings, site, trap, sublevel);
   }
 
   /**
@@ -200,7 +242,7 @@ public final class DriveSetup {
     }
     beam.polarizationVector();
     Frequency laser = Frequency.ofHertz(PhysicalConstants.SPEED_OF_LIGHT / wavelength.metres());
-    return new DriveSetup(species, start, steps, detunings, site, new Trap(beam, laser));
+    return new DriveSetup(species, start, steps, detunings, site, new Trap(beam, laser), idle);
   }
 
   /**
@@ -268,6 +310,10 @@ public final class DriveSetup {
     return site.sees(steps.get(step).beam());
   }
 
+  boolean isQuadrupole(int step) {
+    return steps.get(step).quadrupole();
+  }
+
   Frequency detuning(int step) {
     return detunings.get(step);
   }
@@ -282,5 +328,9 @@ public final class DriveSetup {
 
   Optional<Trap> trap() {
     return Optional.ofNullable(trap).map(t -> new Trap(site.sees(t.beam()), t.laser()));
+  }
+
+  Optional<Sublevel> idle() {
+    return Optional.ofNullable(idle);
   }
 }

@@ -13,6 +13,7 @@ import java.util.Map;
 import java.util.Set;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 import org.toprung.angular.HalfInteger;
 import org.toprung.angular.SphericalComponents;
 import org.toprung.core.atom.Level;
@@ -26,6 +27,8 @@ import org.toprung.core.structure.DipoleElement;
 import org.toprung.core.structure.DipoleElements;
 import org.toprung.core.structure.FarLightShift;
 import org.toprung.core.structure.Lifetimes;
+import org.toprung.core.structure.QuadrupoleElements;
+import org.toprung.core.structure.ReducedElement;
 
 /**
  * Turns the description of a drive into its {@link Ladder}: every sublevel that the light can reach
@@ -47,6 +50,7 @@ final class LadderBuilder {
   private final DipoleElements dipoles;
   private final double[] field; // V/m by step
   private final SphericalComponents[] light;
+  private final LightTensor[] tensor;
   private final double[] laser; // Hz by step
   private final double[] detuning; // Hz by rung, of the lasers up to it from the named level
   private final double startEnergy; // Hz from the centre of gravity of the ground level
@@ -54,10 +58,14 @@ final class LadderBuilder {
   private final List<Integer> rungs = new ArrayList<>();
   private final List<Double> energies = new ArrayList<>(); // Hz, rotating frame
   private final List<Set<Level>> levels = new ArrayList<>(); // by rung
+  private int[] keptStates; // state by index in the ladder, once built
   private final Map<String, Estimate> knownFarShifts = new HashMap<>();
   private double farShiftRelativeUncertainty;
   private double startTrapShift; // Hz
   private double targetTrapShift; // Hz
+
+  /** One way from a lower to an upper sublevel through a sublevel that is not kept. */
+  record PartnerPath(ProductState middle, double productRe, double productIm, double awayHertz) {}
 
   LadderBuilder(DriveSetup setup) {
     this.setup = setup;
@@ -66,8 +74,13 @@ final class LadderBuilder {
     this.dipoles = DipoleElements.of(species);
     this.field = new double[steps];
     this.light = new SphericalComponents[steps];
+    this.tensor = new LightTensor[steps];
     for (int k = 0; k < steps; k++) {
       light[k] = setup.beam(k).polarizationVector().componentsAbout(0, 0, 1);
+      tensor[k] =
+          setup.isQuadrupole(k)
+              ? LightTensor.quadrupole(light[k], setup.beam(k).direction())
+              : LightTensor.dipole(light[k]);
       element(k); // refuses a forbidden step by name before any sum is attempted
     }
     List<ProductState> ground = ProductState.hyperfine(species, named(0), setup.field());
@@ -127,12 +140,17 @@ final class LadderBuilder {
     }
   }
 
-  double startTrapShiftHertz() {
-    return startTrapShift;
+  /** By how much more the trap moves the target than the start, Hz. */
+  double trapShiftHertz() {
+    return targetTrapShift - startTrapShift;
   }
 
-  double targetTrapShiftHertz() {
-    return targetTrapShift;
+  Drive.TrapLight trapLight(DriveSetup.Trap trap) {
+    return new Drive.TrapLight(
+        trap.beam(),
+        wavelength(trap.laser().hertz()),
+        Frequency.ofHertz(startTrapShift),
+        Frequency.ofHertz(targetTrapShift));
   }
 
   private double[] lasers() {
@@ -248,8 +266,12 @@ final class LadderBuilder {
 
   /** The named level itself, or a partner that the lasers are not much farther from. */
   private boolean isNear(Level level, int rung) {
-    double away = detuning[rung] - transition(named(rung), level);
-    return level.equals(named(rung)) || Math.abs(away) < NEAR_FACTOR * Math.abs(detuning[rung]);
+    return level.equals(named(rung)) || isNear(transition(named(rung), level), detuning[rung]);
+  }
+
+  /** Whether lasers at a detuning from a level are near its partner at a distance from it, Hz. */
+  static boolean isNear(double partnerHertz, double detuningHertz) {
+    return Math.abs(detuningHertz - partnerHertz) < NEAR_FACTOR * Math.abs(detuningHertz);
   }
 
   private static List<Level> fineStructure(Level level) {
@@ -262,14 +284,22 @@ final class LadderBuilder {
   }
 
   private boolean canBeReached(Level upper) {
+    int most = 2 * tensor[steps - 1].rank();
     return upper.equals(named(steps))
         || levels.get(steps - 1).stream()
-            .anyMatch(l -> Math.abs(l.doubledJ() - upper.doubledJ()) <= 2);
+            .anyMatch(l -> Math.abs(l.doubledJ() - upper.doubledJ()) <= most);
   }
 
   /** The reduced element of a step between named levels. */
-  DipoleElement element(int step) {
-    return dipoles.reduced(named(step + 1), named(step));
+  ReducedElement element(int step) {
+    return setup.isQuadrupole(step)
+        ? QuadrupoleElements.of(species).reduced(named(step + 1), named(step))
+        : dipoles.reduced(named(step + 1), named(step));
+  }
+
+  /** The reduced element between two levels. */
+  DipoleElement element(Level upper, Level lower) {
+    return dipoles.reduced(upper, lower);
   }
 
   double laserHertz(int step) {
@@ -291,6 +321,7 @@ final class LadderBuilder {
     }
     int start = indexOfStart();
     Map<Integer, Integer> kept = reachable(all, start);
+    this.keptStates = kept.keySet().stream().mapToInt(Integer::intValue).toArray();
     for (int r = 1; r < steps; r++) {
       all.addAll(couplingsAcross(r, kept));
     }
@@ -355,16 +386,32 @@ final class LadderBuilder {
 
   /** Complex Rabi frequency over 2π, Hz; zero where J forbids. */
   private double[] rabi(ProductState lower, ProductState upper, int step) {
-    if (Math.abs(lower.level().doubledJ() - upper.level().doubledJ()) > 2) {
+    int change = Math.abs(lower.level().doubledJ() - upper.level().doubledJ());
+    if (change > 2 * tensor[step].rank()) {
       return new double[2];
     }
-    double[] angular = ProductState.angular(lower, upper, light[step]);
+    double[] angular = ProductState.angular(lower, upper, tensor[step]);
     if (angular[0] == 0 && angular[1] == 0) {
       return angular;
     }
-    double scale =
-        field[step] * DIPOLE_UNIT * dipoles.reduced(upper.level(), lower.level()).valueA0();
+    double scale = field[step] * transitionHertz(upper.level(), lower.level(), step);
     return new double[] {scale * angular[0], scale * angular[1]};
+  }
+
+  /**
+   * What multiplies field and angular factor: (e/h)⟨‖r‖⟩ for a dipole, (e k/2h)⟨‖r²C²‖⟩ for a
+   * quadrupole, Hz/(V/m).
+   */
+  private double transitionHertz(Level upper, Level lower, int step) {
+    if (!setup.isQuadrupole(step)) {
+      return DIPOLE_UNIT * dipoles.reduced(upper, lower).valueA0();
+    }
+    double waveNumber = 2 * Math.PI * laser[step] / PhysicalConstants.SPEED_OF_LIGHT;
+    return DIPOLE_UNIT
+        * 0.5
+        * waveNumber
+        * PhysicalConstants.BOHR_RADIUS
+        * QuadrupoleElements.of(species).reduced(upper, lower).valueA0Squared();
   }
 
   /** Couplings across one rung, through the partner level that is not kept there. */
@@ -394,14 +441,64 @@ final class LadderBuilder {
       int lower, int upper, int rung, List<ProductState> middle, double base) {
     double re = 0;
     double im = 0;
+    for (PartnerPath path : paths(lower, upper, rung, middle, base)) {
+      re += path.productRe() / (2 * path.awayHertz());
+      im += path.productIm() / (2 * path.awayHertz());
+    }
+    return new Ladder.Coupling(lower, upper, re, im);
+  }
+
+  private List<PartnerPath> paths(
+      int lower, int upper, int rung, List<ProductState> middle, double base) {
+    List<PartnerPath> paths = new ArrayList<>();
     for (ProductState m : middle) {
       double[] low = rabi(states.get(lower), m, rung - 1);
       double[] up = rabi(m, states.get(upper), rung);
-      double away = energies.get(lower) - base - m.energyHertz();
-      re += (up[0] * low[0] - up[1] * low[1]) / (2 * away);
-      im += (up[0] * low[1] + up[1] * low[0]) / (2 * away);
+      double re = up[0] * low[0] - up[1] * low[1];
+      double im = up[0] * low[1] + up[1] * low[0];
+      if (re != 0 || im != 0) {
+        paths.add(new PartnerPath(m, re, im, energies.get(lower) - base - m.energyHertz()));
+      }
     }
-    return new Ladder.Coupling(lower, upper, re, im);
+    return paths;
+  }
+
+  /** The ways across a rung that the ladder holds as one coupling; indices of the built ladder. */
+  List<PartnerPath> partnerPaths(int lower, int upper, int rung) {
+    List<PartnerPath> paths = new ArrayList<>();
+    for (Level level : fineStructure(named(rung))) {
+      if (!levels.get(rung).contains(level)) {
+        double base = transition(named(rung), level) - detuning[rung];
+        List<ProductState> middle = ProductState.uncoupled(species, level, setup.field());
+        paths.addAll(paths(keptStates[lower], keptStates[upper], rung, middle, base));
+      }
+    }
+    return paths;
+  }
+
+  /** Distances of the fine-structure partners of a named level from it, Hz. */
+  double[] partnerHertz(int rung) {
+    return fineStructure(named(rung)).stream()
+        .filter(level -> !level.equals(named(rung)))
+        .mapToDouble(level -> transition(named(rung), level))
+        .toArray();
+  }
+
+  /** The sublevel behind a state of the built ladder. */
+  ProductState product(int index) {
+    return states.get(keptStates[index]);
+  }
+
+  double detuningHertz(int rung) {
+    return detuning[rung];
+  }
+
+  double fieldVoltsPerMetre(int step) {
+    return field[step];
+  }
+
+  SphericalComponents light(int step) {
+    return light[step];
   }
 
   /** Old index to new index of every state the light connects with the start. */
@@ -473,7 +570,7 @@ final class LadderBuilder {
   }
 
   /** The levels whose resonant coupling to a rung by a beam the ladder itself holds. */
-  private Set<Level> inLadder(int rung, int step) {
+  Set<Level> inLadder(int rung, int step) {
     if (rung == 0 && step == 0) {
       return levels.get(1);
     }
@@ -566,9 +663,10 @@ final class LadderBuilder {
         new StringBuilder("no light path from ")
             .append(setup.start())
             .append(" to ")
-            .append(setup.target())
-            .append(" through ")
-            .append(through());
+            .append(setup.target());
+    if (steps > 1) {
+      given.append(" through ").append(through());
+    }
     Set<Integer> changes = new TreeSet<>(Set.of(0));
     for (int k = 0; k < steps; k++) {
       List<Integer> photons = photons(k);
@@ -589,11 +687,17 @@ final class LadderBuilder {
           + ")";
     }
     return given
-        + ", and no sublevel in between links these two (projection rule: |m| may not exceed J on any"
-        + " rung)";
+        + (steps == 1
+            ? ", and the start has no electron projection from which that leads there (projection rule)"
+            : ", and no sublevel in between links these two (projection rule: |m| may not exceed J on"
+                + " any rung)");
   }
 
   private List<Integer> photons(int step) {
-    return List.of(-1, 0, 1).stream().filter(q -> light[step].power(q) > NEGLIGIBLE).toList();
+    int rank = tensor[step].rank();
+    return IntStream.rangeClosed(-rank, rank)
+        .filter(q -> tensor[step].power(q) > NEGLIGIBLE)
+        .boxed()
+        .toList();
   }
 }

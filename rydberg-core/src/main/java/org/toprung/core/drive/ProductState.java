@@ -4,7 +4,6 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import org.toprung.angular.HalfInteger;
-import org.toprung.angular.SphericalComponents;
 import org.toprung.angular.Wigner;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
@@ -86,13 +85,14 @@ record ProductState(
   }
 
   /**
-   * The angular part Σ<sub>q</sub> a<sub>q</sub> ⟨upper|r<sub>q</sub>|lower⟩ / ⟨J'‖r‖J⟩ of an
+   * The angular part Σ<sub>q</sub> a<sub>q</sub> ⟨upper|T<sub>q</sub>|lower⟩ / ⟨J'‖T‖J⟩ of an
    * absorption, by the Wigner-Eckart theorem with the nuclear spin a spectator: real and imaginary
    * part.
    */
-  static double[] angular(ProductState lower, ProductState upper, SphericalComponents light) {
+  static double[] angular(ProductState lower, ProductState upper, LightTensor light) {
     int tq = upper.doubledM - lower.doubledM;
-    if (Math.abs(tq) > 2) {
+    int tk = 2 * light.rank();
+    if (Math.abs(tq) > tk) {
       return new double[2];
     }
     int tJu = upper.level.doubledJ();
@@ -108,11 +108,39 @@ record ProductState(
               phase
                   * upper.amplitude[u]
                   * lower.amplitude[l]
-                  * Wigner.threeJDoubled(tJu, 2, tJl, -tMu, tq, tMl);
+                  * Wigner.threeJDoubled(tJu, tk, tJl, -tMu, tq, tMl);
         }
       }
     }
     return new double[] {sum * light.re(tq / 2), sum * light.im(tq / 2)};
+  }
+
+  /**
+   * The terms of {@link #angular} before the light's amplitude, one for each nuclear projection.
+   */
+  static List<Derivation.AngularTerm> angularTerms(ProductState lower, ProductState upper) {
+    List<Derivation.AngularTerm> terms = new ArrayList<>();
+    int tq = upper.doubledM - lower.doubledM;
+    int tJu = upper.level.doubledJ();
+    int tJl = lower.level.doubledJ();
+    for (int u = 0; u < upper.doubledMj.length; u++) {
+      for (int l = 0; l < lower.doubledMj.length; l++) {
+        int tMu = upper.doubledMj[u];
+        int tMl = lower.doubledMj[l];
+        if (Math.abs(tq) <= 2 && tMu - tMl == tq) {
+          terms.add(
+              new Derivation.AngularTerm(
+                  HalfInteger.ofHalves(tMu),
+                  HalfInteger.ofHalves(tMl),
+                  HalfInteger.ofHalves(upper.doubledM - tMu),
+                  (tJu - tMu) / 2 % 2 == 0 ? 1 : -1,
+                  upper.amplitude[u],
+                  lower.amplitude[l],
+                  Wigner.threeJDoubled(tJu, 2, tJl, -tMu, tq, tMl)));
+        }
+      }
+    }
+    return terms;
   }
 
   /** Nuclear projection of the only component of an uncoupled state, doubled. */

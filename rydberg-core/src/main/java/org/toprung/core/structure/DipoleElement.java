@@ -12,7 +12,8 @@ import org.toprung.core.quantity.Estimate;
  * @param reason why this origin was taken and no better one
  */
 public record DipoleElement(
-    double valueA0, double uncertaintyA0, Origin origin, String source, String reason) {
+    double valueA0, double uncertaintyA0, Origin origin, String source, String reason)
+    implements ReducedElement {
   /** Where the modulus of an element comes from. */
   public enum Origin {
     /** Measured. */
@@ -44,6 +45,21 @@ public record DipoleElement(
    */
   public Estimate strength() {
     return new Estimate(valueA0 * valueA0, 2 * Math.abs(valueA0) * uncertaintyA0);
+  }
+
+  @Override
+  public double modulus() {
+    return Math.abs(valueA0);
+  }
+
+  @Override
+  public double relativeUncertainty() {
+    return uncertaintyA0 / Math.abs(valueA0);
+  }
+
+  @Override
+  public String unit() {
+    return "e a0";
   }
 
   /** The element of opposite sign. */

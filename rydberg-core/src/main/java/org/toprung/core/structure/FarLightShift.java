@@ -66,7 +66,15 @@ public final class FarLightShift {
   }
 
   /** A level of the sum; shares are those of r_−1, r_0, r_+1 acting on the sublevel. */
-  private record Term(Level other, double distanceHertz, Estimate strength, double[] shares) {}
+  private record Term(Level other, double distanceHertz, Estimate strength, double[] shares) {
+    double absorbing(SphericalComponents light) {
+      return light.power(-1) * shares[0] + light.power(0) * shares[1] + light.power(1) * shares[2];
+    }
+
+    double emitting(SphericalComponents light) {
+      return light.power(-1) * shares[2] + light.power(0) * shares[1] + light.power(1) * shares[0];
+    }
+  }
 
   private final Species species;
   private final DipoleElements elements;
@@ -115,8 +123,7 @@ public final class FarLightShift {
               "laser frequency must be positive and finite, given %s Hz",
               laserFrequencyHertz));
     }
-    double energy = species.energyHertz(level).value();
-    boolean closure = laserFrequencyHertz > -energy;
+    boolean closure = laserFrequencyHertz > thresholdHertz(level);
     double coreAu = species.corePolarizabilityAu().value();
     double unit = PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ / 4;
     double shift = -unit * coreAu;
@@ -128,13 +135,8 @@ public final class FarLightShift {
       uncertainty += unit * SecondOrder.continuumAu(species, level);
     }
     for (Term term : terms.get(new Sublevel(level, doubledMj))) {
-      double absorbing = 0;
-      double emitting = 0;
-      for (int q = -1; q <= 1; q++) {
-        double power = polarization.power(q);
-        absorbing += power * term.shares()[q + 1];
-        emitting += power * term.shares()[1 - q];
-      }
+      double absorbing = term.absorbing(polarization);
+      double emitting = term.emitting(polarization);
       boolean near = nearLevels.contains(term.other());
       double sum =
           closure
@@ -145,6 +147,91 @@ public final class FarLightShift {
       uncertainty += Math.abs(factor) * term.strength().uncertainty();
     }
     return new Estimate(shift, uncertainty);
+  }
+
+  /**
+   * The same shift for a superposition of sublevels of one level, as a function of the laser
+   * frequency.
+   *
+   * @param level the level
+   * @param doubledMj twice the projections of its j, one for each member of the superposition
+   * @param weight squared amplitudes of the members, of the same length, which sum to 1
+   * @param laserFrequencyHertz frequency of the light in Hz that the series is made for, positive
+   * @param polarization components of the unit polarization vector about the axis of mJ
+   * @param nearLevels levels whose resonant term is left out
+   * @return the shift as a function of the laser frequency near the given one
+   * @throws IllegalArgumentException as for {@link #hertzPerFieldSquared}, or if the arrays differ
+   *     in length
+   */
+  public FarShiftSeries series(
+      Level level,
+      int[] doubledMj,
+      double[] weight,
+      double laserFrequencyHertz,
+      SphericalComponents polarization,
+      Set<Level> nearLevels) {
+    species.requireValid(level);
+    if (doubledMj.length != weight.length) {
+      throw new IllegalArgumentException(
+          "a superposition needs a weight for each projection: given "
+              + weight.length
+              + " weights of "
+              + doubledMj.length
+              + " projections");
+    }
+    boolean closure = laserFrequencyHertz > thresholdHertz(level);
+    FarShiftSeries.Gatherer sum = new FarShiftSeries.Gatherer(laserFrequencyHertz, closure);
+    double unit = PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ / 4;
+    for (int c = 0; c < doubledMj.length; c++) {
+      SecondOrder.requireProjection(level, doubledMj[c]);
+      sum.constant(-weight[c] * unit * species.corePolarizabilityAu().value());
+      if (closure) {
+        sum.linear(weight[c] * unit * Math.pow(PhysicalConstants.HARTREE_HERTZ, 2), 0);
+      }
+      for (Term term : terms.get(new Sublevel(level, doubledMj[c]))) {
+        boolean near = nearLevels.contains(term.other());
+        gather(sum, term, weight[c], polarization, closure, near);
+      }
+    }
+    return sum.gathered();
+  }
+
+  /** The terms of {@link #direct} and {@link #remainder} by their poles. */
+  private static void gather(
+      FarShiftSeries.Gatherer sum,
+      Term term,
+      double weight,
+      SphericalComponents polarization,
+      boolean closure,
+      boolean near) {
+    double scale = weight * SecondOrder.COUPLING_SQUARED / 4 * term.strength().value();
+    double absorbing = scale * term.absorbing(polarization);
+    double emitting = scale * term.emitting(polarization);
+    double distance = term.distanceHertz();
+    double squared = closure ? distance * distance : 1;
+    boolean leaveAbsorbing = near && distance > 0;
+    boolean leaveEmitting = near && distance <= 0;
+    if (!leaveAbsorbing) {
+      sum.pole(distance, -absorbing * squared);
+    } else if (closure) {
+      sum.linear(-absorbing * distance, -absorbing);
+    }
+    if (!leaveEmitting) {
+      sum.pole(-distance, emitting * squared);
+    } else if (closure) {
+      sum.linear(-emitting * distance, emitting);
+    }
+  }
+
+  /**
+   * The laser frequency that frees the electron of a level: above it the sum over states is closed
+   * over the continuum.
+   *
+   * @param level a level of the atom
+   * @return its binding energy over h, Hz
+   */
+  public double thresholdHertz(Level level) {
+    return -species.energyHertz(level).value();
   }
 
   private List<Term> terms(Sublevel sublevel) {

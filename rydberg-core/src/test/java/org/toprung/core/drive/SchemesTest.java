@@ -22,6 +22,7 @@ import org.apache.commons.math4.legacy.linear.Array2DRowRealMatrix;
 import org.apache.commons.math4.legacy.linear.EigenDecomposition;
 import org.junit.jupiter.api.Test;
 import org.toprung.angular.Polarization;
+import org.toprung.angular.Wigner;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
@@ -29,6 +30,7 @@ import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.structure.DipoleElements;
 import org.toprung.core.structure.Lifetimes;
+import org.toprung.core.structure.QuadrupoleElements;
 
 /** One, two and three photons, resonant ladders, idle sublevels, scattering and trap light. */
 class SchemesTest {
@@ -442,9 +444,10 @@ class SchemesTest {
     Drive off = setup.resolve();
     Beam trap = Beam.gaussian(milliwatts(5), micrometres(1)).polarized(PI).along(1, 0, 0);
     Drive on = setup.trappedBy(trap, nanometres(1064)).resolve();
+    Drive.TrapLight light = on.trap().orElseThrow();
     double square = Math.pow(trap.peakFieldVoltsPerMetre(), 2);
     double ground = -0.25 * 687 * PhysicalConstants.ATOMIC_POLARIZABILITY_HERTZ * square;
-    assertEquals(ground, on.startTrapShift().hertz(), 0.01 * Math.abs(ground));
+    assertEquals(ground, light.startShift().hertz(), 0.01 * Math.abs(ground));
     double omega = 2 * Math.PI * PhysicalConstants.SPEED_OF_LIGHT / 1064e-9;
     double free =
         PhysicalConstants.ELEMENTARY_CHARGE
@@ -452,15 +455,15 @@ class SchemesTest {
             * square
             / (4 * PhysicalConstants.ELECTRON_MASS * omega * omega)
             / PhysicalConstants.PLANCK;
-    assertEquals(free, on.targetTrapShift().hertz(), 0.05 * free);
-    double moved = on.targetTrapShift().hertz() - on.startTrapShift().hertz();
+    assertEquals(free, light.targetShift().hertz(), 0.05 * free);
+    double moved = light.targetShift().hertz() - light.startShift().hertz();
     assertTrue(moved > 1e6, "shift " + moved);
     double offset =
         on.plan(Math.PI).frequencyOffset().hertz() - off.plan(Math.PI).frequencyOffset().hertz();
     // the first laser's detuning changed too, so the light shifts did, by a few per cent of
     // themselves
     assertEquals(moved, offset, 0.05 * moved);
-    assertEquals(0, off.startTrapShift().hertz(), 0);
+    assertTrue(off.trap().isEmpty());
     assertThrows(IllegalArgumentException.class, () -> setup.trappedBy(trap, nanometres(-1)));
   }
 
@@ -479,5 +482,159 @@ class SchemesTest {
                         .resolve())
             .getMessage();
     assertTrue(message.contains("0 values"), message);
+  }
+
+  private static DriveSetup quadrupole(Species species, double mJ, Beam beam) {
+    int tI = species.doubledNuclearSpin();
+    return Drive.of(species)
+        .from(Sublevel.hyperfine(species.groundLevel(), 0.5 * (tI + 1), 0.5 * (tI + 1)))
+        .quadrupoleStep(Sublevel.fine("60D5/2", mJ), beam)
+        .in(gauss(5));
+  }
+
+  /**
+   * Exact: light along z with ε = e₊ has (r·k̂)(r·ε) = z r₊ = r²C²₁/√3, so that it drives Δm = +1
+   * with (k/2)⟨‖r²C²‖⟩ (5/2 2 1/2; −3/2 1 1/2)/√3, and nothing else.
+   */
+  @Test
+  void drivesAQuadrupoleWithTheGradientOfTheLight() {
+    Species species = Species.RUBIDIUM_87;
+    Drive drive = quadrupole(species, 1.5, beam(100, 20, SIGMA_PLUS)).resolve();
+    double element =
+        QuadrupoleElements.of(species)
+            .reduced(Level.parse("60D5/2"), Level.parse("5S1/2"))
+            .modulus();
+    double k = 2 * Math.PI / drive.steps().get(0).wavelength().metres();
+    double expected =
+        drive.steps().get(0).beam().peakFieldVoltsPerMetre()
+            * PhysicalConstants.ATOMIC_DIPOLE
+            / PhysicalConstants.PLANCK
+            * 0.5
+            * k
+            * PhysicalConstants.BOHR_RADIUS
+            * element
+            * Math.abs(Wigner.threeJDoubled(5, 4, 1, -3, 2, 1))
+            / Math.sqrt(3);
+    assertEquals(expected, drive.rabi().hertz(), 1e-9 * expected);
+    assertTrue(
+        drive.otherTargets().stream().allMatch(t -> t.sublevel().startsWith("60D3/2")),
+        drive.otherTargets().toString());
+    assertEquals("e a0^2", drive.steps().get(0).element().unit());
+  }
+
+  /** Light across the field, polarized across both, drives Δm = ±1 by C²±1 and no Δm = 0. */
+  @Test
+  void choosesQuadrupoleSublevelsByGeometry() {
+    Beam along =
+        Beam.gaussian(milliwatts(100), micrometres(20))
+            .polarized(Polarization.linearDegrees(0))
+            .along(1, 0, 0);
+    // k = x, ε = z: xz is a mixture of C²±1
+    quadrupole(Species.CAESIUM_133, 1.5, along).resolve();
+    assertThrows(
+        IllegalArgumentException.class,
+        () -> quadrupole(Species.CAESIUM_133, 2.5, along).resolve());
+    // k = x, ε = y: xy is a mixture of C²±2
+    Beam across = along.polarized(Polarization.linearDegrees(90));
+    quadrupole(Species.CAESIUM_133, 2.5, across).resolve();
+    String message =
+        assertThrows(
+                IllegalArgumentException.class,
+                () -> quadrupole(Species.CAESIUM_133, 1.5, across).resolve())
+            .getMessage();
+    assertTrue(message.contains("-2 or +2"), message);
+  }
+
+  @Test
+  void refusesAQuadrupoleThatIsNoneOrNotAlone() {
+    Beam beam = beam(1, 10, SIGMA_PLUS);
+    DriveSetup start =
+        Drive.of(Species.RUBIDIUM_87).from(Sublevel.hyperfine("5S1/2", 2, 2)).in(gauss(1));
+    assertThrows(
+        IllegalArgumentException.class,
+        () -> start.quadrupoleStep(Sublevel.fine("60P3/2", 0.5), beam).resolve());
+    assertThrows(
+        IllegalStateException.class,
+        () ->
+            start
+                .step(Level.parse("5P3/2"), beam)
+                .quadrupoleStep(Sublevel.fine("60D5/2", 0.5), beam));
+  }
+
+  /**
+   * Sum rule: squared couplings to all sublevels of both fine-structure levels, added over the
+   * three polarizations, do not depend on the mF of the start (completeness and Wigner-Eckart).
+   */
+  @Property(tries = 7, seed = "43")
+  void couplesEveryStartEquallyInUnpolarizedLight(@ForAll @IntRange(min = -3, max = 3) int m) {
+    double reference = unpolarized(4, 0);
+    assertEquals(reference, unpolarized(4, m), 1e-6 * reference);
+    assertEquals(reference, unpolarized(3, m), 1e-6 * reference);
+  }
+
+  private static double unpolarized(int f, int m) {
+    double sum = 0;
+    for (Polarization polarization : List.of(SIGMA_MINUS, PI, SIGMA_PLUS)) {
+      int q = polarization == PI ? 0 : polarization == SIGMA_PLUS ? 1 : -1;
+      Drive drive =
+          Drive.of(Species.CAESIUM_133)
+              .from(Sublevel.hyperfine("6S1/2", f, m))
+              .step(Sublevel.fine("40P3/2", q >= 0 ? 0.5 : -0.5), beam(50, 15, polarization))
+              .in(gauss(1))
+              .resolve();
+      double wanted = drive.rabi().hertz();
+      sum += wanted * wanted;
+      for (Drive.OtherTarget other : drive.otherTargets()) {
+        sum += other.rabi().hertz() * other.rabi().hertz();
+      }
+    }
+    return sum;
+  }
+
+  @Test
+  void doublesEveryOnePhotonRabiFrequencyAtFourTimesThePower() {
+    Drive once = infrared(2, 3).resolve();
+    Drive four =
+        Drive.of(Species.RUBIDIUM_87)
+            .from(Sublevel.hyperfine("5S1/2", 2, 2))
+            .step(Level.parse("5P3/2"), beam(0.02, 100, SIGMA_PLUS))
+            .step(Level.parse("6S1/2"), beam(20, 100, SIGMA_MINUS))
+            .step(Sublevel.fine("60P3/2", 1.5), beam(2000, 50, SIGMA_PLUS))
+            .detuned(gigahertz(2), gigahertz(3))
+            .in(gauss(5))
+            .resolve();
+    for (int k = 0; k < 3; k++) {
+      double rabi = once.steps().get(k).rabi().hertz();
+      assertEquals(2 * rabi, four.steps().get(k).rabi().hertz(), 1e-9 * rabi);
+    }
+  }
+
+  /** Steps in the wrong order do not climb, or break a rule, and are caught. */
+  @Test
+  void catchesStepsInTheWrongOrder() {
+    DriveSetup start =
+        Drive.of(Species.RUBIDIUM_87)
+            .from(Sublevel.hyperfine("5S1/2", 2, 2))
+            .detuned(gigahertz(1))
+            .in(gauss(1));
+    Beam up = beam(1, 10, SIGMA_PLUS);
+    Beam down = beam(1, 10, SIGMA_MINUS);
+    String climbs =
+        assertThrows(
+                IllegalArgumentException.class,
+                () ->
+                    start
+                        .step(Level.parse("60P3/2"), up)
+                        .step(Sublevel.fine("6S1/2", 0.5), down)
+                        .resolve())
+            .getMessage();
+    assertTrue(climbs.contains("does not climb"), climbs);
+    assertThrows(
+        IllegalArgumentException.class,
+        () ->
+            start
+                .step(Level.parse("60S1/2"), down)
+                .step(Sublevel.fine("6P3/2", 1.5), up)
+                .resolve());
   }
 }
