@@ -169,7 +169,7 @@ public final class Lifetimes {
     for (Level other : Partners.of(species, level, last)) {
       double difference = energy - species.energyHertz(other).value();
       Estimate part = rate(level, other, Math.abs(difference));
-      double photons = thermalHertz > 0 ? 1 / Math.expm1(Math.abs(difference) / thermalHertz) : 0;
+      double photons = photons(Math.abs(difference), thermalHertz);
       Estimate blackbody = new Estimate(part.value() * photons, part.uncertainty() * photons);
       if (difference > 0 || photons > 0) {
         channels.add(new Channel(other, difference > 0 ? part : new Estimate(0, 0), blackbody));
@@ -203,6 +203,15 @@ public final class Lifetimes {
 
   private static double thermalHertz(Temperature temperature) {
     return PhysicalConstants.BOLTZMANN / PhysicalConstants.PLANCK * temperature.kelvin();
+  }
+
+  /**
+   * Photons of a mode; 0 at 0 K, and at frequency 0, where the rate vanishes although they do not.
+   */
+  private static double photons(double frequencyHertz, double thermalHertz) {
+    return thermalHertz > 0 && frequencyHertz > 0
+        ? 1 / Math.expm1(frequencyHertz / thermalHertz)
+        : 0;
   }
 
   private Estimate spontaneous(Level level) {
@@ -257,7 +266,7 @@ public final class Lifetimes {
     for (Level other : Partners.of(species, level, last)) {
       double frequency = Math.abs(energy - species.energyHertz(other).value());
       Estimate part = rate(level, other, frequency);
-      double photons = 1 / Math.expm1(frequency / thermalHertz);
+      double photons = photons(frequency, thermalHertz);
       rate += part.value() * photons;
       uncertainty += part.uncertainty() * photons;
       if (other.n() == last) {

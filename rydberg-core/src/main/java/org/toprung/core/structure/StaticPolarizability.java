@@ -66,7 +66,8 @@ public final class StaticPolarizability {
    *
    * @param level the level
    * @return α_0/h in Hz/(V/m)²
-   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
+   *     or is degenerate with one of opposite parity, as the excited levels of hydrogen are
    */
   public Estimate scalarHertzPerFieldSquared(Level level) {
     return known.get(level).scalar();
@@ -77,7 +78,8 @@ public final class StaticPolarizability {
    *
    * @param level the level
    * @return α_2/h in Hz/(V/m)²; 0 for J = 1/2
-   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue
+   * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
+   *     or is degenerate with one of opposite parity, as the excited levels of hydrogen are
    */
   public Estimate tensorHertzPerFieldSquared(Level level) {
     return known.get(level).tensor();
@@ -97,10 +99,17 @@ public final class StaticPolarizability {
     Sum difference = new Sum();
     for (Level other : Partners.of(species, level, Math.max(level.n() + REACH, LEAST_N))) {
       DipoleElement element = elements.reduced(other, level);
-      double factor =
-          2
-              * SecondOrder.COUPLING_SQUARED
-              / (species.energyHertz(other).value() - species.energyHertz(level).value());
+      double distance = species.energyHertz(other).value() - species.energyHertz(level).value();
+      if (distance == 0) {
+        throw new IllegalArgumentException(
+            level
+                + " of "
+                + species
+                + " has no polarizability: it is degenerate with "
+                + other
+                + ", so that it shifts linearly with the field");
+      }
+      double factor = 2 * SecondOrder.COUPLING_SQUARED / distance;
       // the squared 3j symbols of one q add up to 1/3 over m
       double meanShare = 1.0 / (3 * (doubledJ + 1));
       double stretchedShare = SecondOrder.share(level, doubledJ, other, 0);
