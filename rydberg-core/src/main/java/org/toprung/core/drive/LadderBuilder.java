@@ -25,8 +25,8 @@ import org.toprung.core.structure.Lifetimes;
  * from the start, its energy in the rotating frame and its couplings.
  *
  * <p>The fine-structure partner of a named intermediate level (P½ for P3/2 and the reverse) is kept
- * sublevel by sublevel where the lasers are less than {@value #NEAR_FACTOR} times farther from it
- * than from the named level, and eliminated otherwise.
+ * sublevel by sublevel where the lasers are less than 30 times farther from it than from the named
+ * level, and eliminated otherwise.
  */
 final class LadderBuilder {
   private final DriveSetup setup;
@@ -51,20 +51,23 @@ final class LadderBuilder {
     this.setup = setup;
     this.species = setup.species();
     this.steps = setup.steps();
+    for (int k = 0; k < steps; k++) {
+      StepLight.element(setup, k); // refuses a forbidden step by name before anything is computed
+    }
     this.frame = new RotatingFrame(setup);
     this.light = new StepLight(setup, frame);
     this.farShifts = new FarShifts(setup, frame, light, this::inLadder);
-    addRung(0, Set.of(frame.named(0)), -frame.startEnergyHertz());
+    addRung(0, Set.of(setup.named(0)), -frame.startEnergyHertz());
     for (int r = 1; r < steps; r++) {
       int rung = r;
       Set<Level> kept = new TreeSet<>(Comparator.comparing(Level::toString));
-      RotatingFrame.fineStructure(frame.named(r)).stream()
+      RotatingFrame.fineStructure(setup.named(r)).stream()
           .filter(l -> frame.isNear(l, rung))
           .forEach(kept::add);
       addRung(r, kept, -frame.detuningHertz(r));
     }
     Set<Level> target = new TreeSet<>(Comparator.comparing(Level::toString));
-    RotatingFrame.fineStructure(frame.named(steps)).stream()
+    RotatingFrame.fineStructure(setup.named(steps)).stream()
         .filter(this::canBeReached)
         .forEach(target::add);
     addRung(steps, target, -frame.fieldShift());
@@ -120,7 +123,7 @@ final class LadderBuilder {
   private void addRung(int rung, Set<Level> rungLevels, double offset) {
     levels.add(rungLevels);
     for (Level level : rungLevels) {
-      double base = frame.transition(frame.named(rung), level) + offset;
+      double base = frame.transition(setup.named(rung), level) + offset;
       List<ProductState> sublevels =
           rung < steps
               ? ProductState.hyperfine(species, level, setup.field())
@@ -141,13 +144,13 @@ final class LadderBuilder {
   private boolean isWanted(int state) {
     ProductState s = states.get(state);
     return rungs.get(state) == steps
-        && s.level().equals(frame.named(steps))
+        && s.level().equals(setup.named(steps))
         && s.doubledMj()[0] == setup.target().doubledM();
   }
 
   private boolean canBeReached(Level upper) {
     int most = 2 * light.rank(steps - 1);
-    return upper.equals(frame.named(steps))
+    return upper.equals(setup.named(steps))
         || levels.get(steps - 1).stream()
             .anyMatch(l -> Math.abs(l.doubledJ() - upper.doubledJ()) <= most);
   }
@@ -165,7 +168,7 @@ final class LadderBuilder {
   }
 
   boolean isNamed(Ladder.State state) {
-    return state.level().equals(frame.named(state.rung()));
+    return state.level().equals(setup.named(state.rung()));
   }
 
   Ladder build() {
@@ -181,7 +184,7 @@ final class LadderBuilder {
     }
     List<Integer> wanted = kept.keySet().stream().filter(this::isWanted).toList();
     if (wanted.isEmpty()) {
-      throw new Unreachable(setup, frame, light).noPath();
+      throw new Unreachable(setup, light).noPath();
     }
     double[][] far = farShifts(kept, start, wanted.get(0));
     Ladder ladder = assemble(all, kept, far, start, wanted, 0);
@@ -199,7 +202,7 @@ final class LadderBuilder {
       scale = Math.max(scale, c.rabiHertz());
     }
     if (!(strongest > StepLight.NEGLIGIBLE * scale)) {
-      throw new Unreachable(setup, frame, light).cancelled();
+      throw new Unreachable(setup, light).cancelled();
     }
     return assemble(all, kept, far, start, wanted, reference);
   }
@@ -234,11 +237,11 @@ final class LadderBuilder {
   /** Couplings across one rung, through the partner level that is not kept there. */
   private List<Ladder.Coupling> couplingsAcross(int rung, Map<Integer, Integer> kept) {
     List<Ladder.Coupling> couplings = new ArrayList<>();
-    for (Level level : RotatingFrame.fineStructure(frame.named(rung))) {
+    for (Level level : RotatingFrame.fineStructure(setup.named(rung))) {
       if (levels.get(rung).contains(level)) {
         continue;
       }
-      double base = frame.transition(frame.named(rung), level) - frame.detuningHertz(rung);
+      double base = frame.transition(setup.named(rung), level) - frame.detuningHertz(rung);
       List<ProductState> middle = ProductState.uncoupled(species, level, setup.field());
       for (int l : kept.keySet()) {
         for (int u : kept.keySet()) {
@@ -283,9 +286,9 @@ final class LadderBuilder {
   /** The ways across a rung that the ladder holds as one coupling; indices of the built ladder. */
   List<PartnerPath> partnerPaths(int lower, int upper, int rung) {
     List<PartnerPath> paths = new ArrayList<>();
-    for (Level level : RotatingFrame.fineStructure(frame.named(rung))) {
+    for (Level level : RotatingFrame.fineStructure(setup.named(rung))) {
       if (!levels.get(rung).contains(level)) {
-        double base = frame.transition(frame.named(rung), level) - frame.detuningHertz(rung);
+        double base = frame.transition(setup.named(rung), level) - frame.detuningHertz(rung);
         List<ProductState> middle = ProductState.uncoupled(species, level, setup.field());
         paths.addAll(paths(keptStates[lower], keptStates[upper], rung, middle, base));
       }
@@ -295,9 +298,9 @@ final class LadderBuilder {
 
   /** Distances of the fine-structure partners of a named level from it, Hz. */
   double[] partnerHertz(int rung) {
-    return RotatingFrame.fineStructure(frame.named(rung)).stream()
-        .filter(level -> !level.equals(frame.named(rung)))
-        .mapToDouble(level -> frame.transition(frame.named(rung), level))
+    return RotatingFrame.fineStructure(setup.named(rung)).stream()
+        .filter(level -> !level.equals(setup.named(rung)))
+        .mapToDouble(level -> frame.transition(setup.named(rung), level))
         .toArray();
   }
 

@@ -27,7 +27,7 @@ final class RotatingFrame {
     this.species = setup.species();
     this.steps = setup.steps();
     this.startEnergy =
-        ProductState.hyperfine(species, named(0), setup.field()).stream()
+        ProductState.hyperfine(species, setup.named(0), setup.field()).stream()
             .filter(this::isStart)
             .findFirst()
             .orElseThrow()
@@ -57,9 +57,9 @@ final class RotatingFrame {
 
   private double[] lasers() {
     double[] frequencies = new double[steps];
-    double left = transition(named(0), named(steps)) - startEnergy + fieldShift();
+    double left = transition(setup.named(0), setup.named(steps)) - startEnergy + fieldShift();
     for (int k = 0; k < steps - 1; k++) {
-      frequencies[k] = transition(named(k), named(k + 1)) + setup.detuning(k).hertz();
+      frequencies[k] = transition(setup.named(k), setup.named(k + 1)) + setup.detuning(k).hertz();
       if (k == 0) {
         frequencies[0] -= startEnergy;
       }
@@ -74,8 +74,8 @@ final class RotatingFrame {
                 "step %d from %s to %s does not climb: at %s its laser would need %.6g THz, not a"
                     + " positive frequency",
                 k + 1,
-                named(k),
-                named(k + 1),
+                setup.named(k),
+                setup.named(k + 1),
                 detunings(),
                 frequencies[k] * 1e-12));
       }
@@ -95,11 +95,6 @@ final class RotatingFrame {
     return Length.ofMetres(PhysicalConstants.SPEED_OF_LIGHT / laserHertz);
   }
 
-  /** The level named for a rung. */
-  Level named(int rung) {
-    return rung == 0 ? species.groundLevel() : setup.level(rung - 1);
-  }
-
   double transition(Level from, Level to) {
     return species.energyHertz(to).value() - species.energyHertz(from).value();
   }
@@ -109,10 +104,10 @@ final class RotatingFrame {
     double zeeman =
         0.5
             * setup.target().doubledM()
-            * species.gJ(named(steps))
+            * species.gJ(setup.named(steps))
             * PhysicalConstants.BOHR_MAGNETON_HERTZ_PER_TESLA
             * setup.field().tesla();
-    return zeeman + stark(named(steps), setup.target().doubledM());
+    return zeeman + stark(setup.named(steps), setup.target().doubledM());
   }
 
   double stark(Level level, int doubledMj) {
@@ -121,7 +116,8 @@ final class RotatingFrame {
 
   /** The named level itself, or a partner that the lasers are not much farther from. */
   boolean isNear(Level level, int rung) {
-    return level.equals(named(rung)) || isNear(transition(named(rung), level), detuning[rung]);
+    return level.equals(setup.named(rung))
+        || isNear(transition(setup.named(rung), level), detuning[rung]);
   }
 
   /** Whether lasers at a detuning from a level are near its partner at a distance from it, Hz. */

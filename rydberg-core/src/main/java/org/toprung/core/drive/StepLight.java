@@ -82,9 +82,20 @@ final class StepLight {
 
   /** The reduced element of a step between named levels. */
   ReducedElement element(int step) {
+    return element(setup, step);
+  }
+
+  /**
+   * The reduced element of a step between named levels.
+   *
+   * @throws IllegalArgumentException if the step is forbidden; the message names the rule
+   */
+  static ReducedElement element(DriveSetup setup, int step) {
+    Level upper = setup.named(step + 1);
+    Level lower = setup.named(step);
     return setup.isQuadrupole(step)
-        ? QuadrupoleElements.of(species).reduced(frame.named(step + 1), frame.named(step))
-        : dipoles.reduced(frame.named(step + 1), frame.named(step));
+        ? QuadrupoleElements.of(setup.species()).reduced(upper, lower)
+        : DipoleElements.of(setup.species()).reduced(upper, lower);
   }
 
   /** The reduced element between two levels. */

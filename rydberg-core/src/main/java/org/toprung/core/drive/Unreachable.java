@@ -10,12 +10,10 @@ import org.toprung.angular.HalfInteger;
 /** Words for a target that the light cannot reach, which name the rule. */
 final class Unreachable {
   private final DriveSetup setup;
-  private final RotatingFrame frame;
   private final StepLight light;
 
-  Unreachable(DriveSetup setup, RotatingFrame frame, StepLight light) {
+  Unreachable(DriveSetup setup, StepLight light) {
     this.setup = setup;
-    this.frame = frame;
     this.light = light;
   }
 
@@ -40,7 +38,7 @@ final class Unreachable {
   private String through() {
     List<String> names = new ArrayList<>();
     for (int r = 1; r < setup.steps(); r++) {
-      names.add(frame.named(r).toString());
+      names.add(setup.named(r).toString());
     }
     return names.isEmpty() ? "no level" : String.join(" and ", names);
   }
