@@ -370,6 +370,55 @@ class BudgetTest {
     assertFalse(common.equals(budget.check(333, 10)));
   }
 
+  /** Exact: the mean of independent shots scatters from seed to seed by its standard error. */
+  @Test
+  void statesTheScatterOfItsOwnTotal() {
+    Budget budget = budget(RUBIDIUM, Bench.unknown().withLinewidths(kilohertz(20), kilohertz(20)));
+    int seeds = 40;
+    double sum = 0;
+    double squares = 0;
+    double stated = 0;
+    for (int seed = 0; seed < seeds; seed++) {
+      Check check = budget.check(200, seed);
+      sum += check.total();
+      squares += check.total() * check.total();
+      stated += check.standardError() * check.standardError() / seeds;
+    }
+    double variance = (squares - sum * sum / seeds) / (seeds - 1);
+    // 39 degrees of freedom: one standard deviation of the ratio is 0.23
+    assertEquals(1, variance / stated, 0.7);
+  }
+
+  /**
+   * Exact to first order in the coupling Ω′ to a sublevel that lies δ away: an abrupt π pulse
+   * leaves π²Ω′²|∫cos(πΩt) exp(2πiδt) dt|² there, which is Ω′²/4δ² when δ is large.
+   */
+  @Test
+  void countsTheNeighboursOfAOnePhotonTarget() {
+    Drive drive =
+        Drive.of(Species.RUBIDIUM_87)
+            .from(Sublevel.hyperfine("5S1/2", 2, 2))
+            .step(
+                Sublevel.fine("60P3/2", 1.5),
+                Beam.gaussian(Power.milliwatts(2), Length.micrometres(20))
+                    .polarized(Polarization.linearDegrees(45))
+                    .along(0, 1, 0))
+            .in(MagneticField.gauss(20))
+            .resolve();
+    Budget budget = budget(drive, Bench.unknown());
+    double a = Math.PI * budget.plan().rabi().hertz();
+    double expected = 0;
+    for (Drive.OtherTarget other : drive.otherTargets()) {
+      double b = -2 * Math.PI * other.detuning().hertz();
+      double integral =
+          (a * a + b * b - 2 * a * b * Math.sin(b * Math.PI / (2 * a)))
+              / ((a * a - b * b) * (a * a - b * b));
+      expected += Math.pow(Math.PI * other.rabi().hertz(), 2) * integral;
+    }
+    assertTrue(expected > 1e-6, "too weak to test: " + expected);
+    assertEquals(expected, error(budget, "Other Rydberg sublevels"), 0.05 * expected);
+  }
+
   @Test
   void reportsProgressToTheLastShot() {
     AtomicInteger most = new AtomicInteger();

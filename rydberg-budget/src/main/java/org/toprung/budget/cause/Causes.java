@@ -41,6 +41,10 @@ public final class Causes {
     causes.addFields(drive, bench);
     causes.addLasers(drive, bench);
     causes.addPulse();
+    if (drive.trap().isPresent()) {
+      causes.notAssessed.add(
+          "Trap light: its scattering and its noise; its mean shifts are in the frequency offset");
+    }
     return causes;
   }
 

@@ -72,40 +72,32 @@ public final class PulseFrame {
 
   /**
    * Ground and Rydberg states less than half as far from the start's energy as the nearest
-   * intermediate state: the rest is as far off as the intermediate level itself.
+   * intermediate state: the rest is as far off as the intermediate level itself. All of them where
+   * there is no intermediate level.
    */
   private static int[] populated(Ladder ladder) {
     double nearest = Double.POSITIVE_INFINITY;
-    for (Ladder.State s : ladder.states()) {
-      if (s.rung() == 1) {
-        nearest = Math.min(nearest, Math.abs(s.energyHertz()));
+    for (int i = 0; i < ladder.size(); i++) {
+      if (ladder.isIntermediate(i)) {
+        nearest = Math.min(nearest, Math.abs(ladder.states().get(i).energyHertz()));
       }
     }
     List<Integer> found = new ArrayList<>();
     for (int i = 0; i < ladder.size(); i++) {
       Ladder.State s = ladder.states().get(i);
-      boolean own = i == ladder.start() || isWanted(ladder, i);
-      if (own || s.rung() != 1 && Math.abs(s.energyHertz()) < 0.5 * nearest) {
+      boolean own = i == ladder.start() || ladder.isWanted(i);
+      if (own || !ladder.isIntermediate(i) && Math.abs(s.energyHertz()) < 0.5 * nearest) {
         found.add(i);
       }
     }
     return found.stream().mapToInt(Integer::intValue).toArray();
   }
 
-  private static boolean isWanted(Ladder ladder, int index) {
-    for (int w : ladder.wanted()) {
-      if (w == index) {
-        return true;
-      }
-    }
-    return false;
-  }
-
   private static Outcome outcome(Ladder ladder, int index) {
     if (index == ladder.start()) {
       return Outcome.START;
     }
-    if (isWanted(ladder, index)) {
+    if (ladder.isWanted(index)) {
       return Outcome.WANTED;
     }
     return ladder.states().get(index).rung() == 0 ? Outcome.OTHER_GROUND : Outcome.OTHER_RYDBERG;

@@ -110,7 +110,7 @@ public final class ShotSimulation {
     double[] errors = new double[to - from];
     double sum = 0;
     for (int i = from; i < to; i++) {
-      errors[i - from] = shot.error(new SplittableRandom(seed + (i + 1) * GOLDEN_GAMMA));
+      errors[i - from] = shot.error(generator(seed, i));
       sum += errors[i - from];
     }
     double mean = sum / errors.length;
@@ -119,6 +119,14 @@ public final class ShotSimulation {
       square += (e - mean) * (e - mean);
     }
     return new double[] {sum, square, errors.length};
+  }
+
+  /**
+   * The generator of a shot. A seed of its own is drawn for it, because generators that are seeded
+   * a multiple of the golden gamma apart run through the same sequence, one behind the other.
+   */
+  private static SplittableRandom generator(long seed, int shot) {
+    return new SplittableRandom(new SplittableRandom(seed + shot * GOLDEN_GAMMA).nextLong());
   }
 
   /** Workspace of one thread. */

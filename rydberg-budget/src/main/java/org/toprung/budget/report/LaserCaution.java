@@ -14,13 +14,14 @@ import org.toprung.core.quantity.Power;
  *
  * <p>For continuous visible light the class 3B range of IEC 60825-1 begins at 5 mW and class 4 at
  * 0.5 W. Outside the visible, where no blink protects the eye, class 3B begins at lower powers that
- * depend on wavelength and geometry, so every such beam below class 4 is counted as 3B; below 315
- * nm class 4 begins lower too, so every such beam is counted as class 4. A beam known by its
- * intensity alone is counted as class 4. The limits are common practice. This is a reminder, not a
- * classification.
+ * depend on wavelength and geometry: in the infrared the lowest of them, that at 700 nm, is taken,
+ * and every ultraviolet beam below class 4 is counted as 3B; below 315 nm class 4 begins lower too,
+ * so every such beam is counted as class 4. A beam known by its intensity alone is counted as class
+ * 4. The limits are common practice. This is a reminder, not a classification.
  */
 final class LaserCaution {
   private static final double CLASS_3B_WATTS = 0.005;
+  private static final double INFRARED_CLASS_3B_WATTS = 0.0019;
   private static final double CLASS_4_WATTS = 0.5;
   private static final double MIDDLE_ULTRAVIOLET_METRES = 315e-9;
   private static final double VISIBLE_FROM_METRES = 400e-9;
@@ -75,6 +76,9 @@ final class LaserCaution {
     }
     if (kind(metres).isEmpty()) {
       return watts > CLASS_3B_WATTS ? "class 3B range, eyes at risk" : "";
+    }
+    if (metres > VISIBLE_TO_METRES && watts <= INFRARED_CLASS_3B_WATTS) {
+      return "";
     }
     return "class 3B range (invisible light reaches it below 5 mW), "
         + kind(metres)

@@ -102,9 +102,11 @@ public final class TextReport {
     page.heading("Step " + (k + 1) + " to " + step.to());
     page.value("laser", Figures.nanometres(step.wavelength()) + " (vacuum)");
     if (k < drive.intermediates().size()) {
-      page.value(
-          "detuning",
-          Figures.signed(drive.detuning(k)) + " from the centre of gravity of " + step.to());
+      String from =
+          k == 0
+              ? " from the centre of gravity of "
+              : " from the transition " + drive.steps().get(k - 1).to() + " to ";
+      page.value("detuning", Figures.signed(drive.detuning(k)) + from + step.to());
     }
     page.value("beam", BeamText.of(step));
     page.value("Rabi frequency", Figures.of(step.rabi()));
@@ -163,9 +165,11 @@ public final class TextReport {
                         Figures.nanometres(trap.wavelength()),
                         Figures.signed(trap.startShift()),
                         Figures.signed(trap.targetShift()))));
-    page.value(
-        "intermediate scattering",
-        "probability " + Figures.probability(budget.scatteringPerPulse()) + " per pulse");
+    if (!drive.intermediates().isEmpty()) {
+      page.value(
+          "intermediate scattering",
+          "probability " + Figures.probability(budget.scatteringPerPulse()) + " per pulse");
+    }
     double[] k = drive.waveVectorPerMetre();
     double length = Math.sqrt(k[0] * k[0] + k[1] * k[1] + k[2] * k[2]);
     page.value(

@@ -185,28 +185,30 @@ public final class Scenario {
       DriveSetup below = setup;
       setup = table.guarded(() -> below.step(to, Beams.read(table)));
     }
-    return lastStep(tables.get(tables.size() - 1), species, setup)
+    return lastStep(tables.get(tables.size() - 1), tables.size() == 1, species, setup)
         .detuned(detunings.toArray(Frequency[]::new));
   }
 
-  private static DriveSetup lastStep(Table table, Species species, DriveSetup setup) {
+  private static DriveSetup lastStep(
+      Table table, boolean single, Species species, DriveSetup setup) {
     Level to = level(table.required("to", "text such as \"68S1/2\""), species);
     String number = "a half-integer such as 0.5";
     Value m = table.required("mJ", number);
     Sublevel target = m.guarded(() -> Sublevel.fine(to, m.number(number)));
-    boolean quadrupole = table.optional("multipole").map(Scenario::isQuadrupole).orElse(false);
+    boolean quadrupole =
+        table.optional("multipole").map(v -> isQuadrupole(v, single)).orElse(false);
     Beam beam = Beams.read(table);
     return table.guarded(
         () -> quadrupole ? setup.quadrupoleStep(target, beam) : setup.step(target, beam));
   }
 
-  private static boolean isQuadrupole(Value multipole) {
+  private static boolean isQuadrupole(Value multipole, boolean single) {
     String allowed = "\"E1\" or, for a single step, \"E2\"";
-    return switch (multipole.text(allowed)) {
-      case "E1" -> false;
-      case "E2" -> true;
-      default -> throw multipole.refused(allowed);
-    };
+    String kind = multipole.text(allowed);
+    if (kind.equals("E1") || single && kind.equals("E2")) {
+      return kind.equals("E2");
+    }
+    throw multipole.refused(allowed);
   }
 
   private static Pulse pulse(Table table) {

@@ -85,6 +85,8 @@ class BadInputTest {
           to = "68S1/2"            | to = "68S3/2"       | step[2].to        | 3/2               | 1/2
           mJ = 0.5                 | mJ = 1.5            | step[2].mJ        | given 3/2         | -1/2 to 1/2
           mJ = 0.5                 | mJ = 0              | step[2].mJ        | given 0           | -1/2 to 1/2
+          mJ = 0.5                 | mJ = 0.5\\nmultipole = "E2" | step[2].multipole | "E2"    | for a single step
+          mJ = 0.5                 | mJ = 0.5\\nmultipole = "M1" | step[2].multipole | "M1"    | "E1"
           power = "2 mW"           | power = "0 W"       | step[1].power     | "0 W"             | above zero
           power = "2 mW"           | power = "-2 mW"     | step[1].power     | "-2 mW"           | above zero
           power = "2 mW"           | power = "inf mW"    | step[1].power     | inf               | a number

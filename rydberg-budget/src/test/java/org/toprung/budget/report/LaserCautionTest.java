@@ -20,6 +20,8 @@ class LaserCautionTest {
     "480e-9, 0.6, class 4",
     "1013e-9, 0.004, class 3B",
     "1013e-9, 0.6, class 4",
+    "780e-9, 0.002, class 3B",
+    "780e-9, 5e-6, ''",
     "350e-9, 0.002, class 3B",
     "350e-9, 0.002, ultraviolet",
     "297e-9, 0.01, class 4",
