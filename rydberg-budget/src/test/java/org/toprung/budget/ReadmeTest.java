@@ -25,6 +25,8 @@ import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
 import org.toprung.core.drive.Beam;
 import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.DriveKernel;
+import org.toprung.core.drive.KernelResult;
 
 /** The README's code is this test's code, so it compiles and runs. */
 class ReadmeTest {
@@ -53,20 +55,38 @@ class ReadmeTest {
     Budget budget = Budget.of(drive, Pulse.pi()).on(bench).compose();
     Check check = budget.check(2000, 1);
     // end of snippet
+    // snippet
+    DriveKernel kernel = drive.kernel();
+    KernelResult result = kernel.newResult();
+    kernel.evaluate(new double[] {0.0021, 0.149}, 1.2e9, new double[] {1, 1}, result);
+    double pulseSeconds = result.durationSeconds(Math.PI);
+    // end of snippet
+    assertEquals(0.5 / result.rabiHertz(), pulseSeconds, 1e-12 * pulseSeconds);
     assertEquals(3.02e6, drive.rabi().hertz(), 0.06e6);
     assertTrue(budget.plan().duration().seconds() < 1e-6);
     assertTrue(check.agrees());
   }
 
   @Test
-  void isTheSnippetOfTheReadme() throws IOException {
-    String readme = Files.readString(README, StandardCharsets.UTF_8);
-    int begin = readme.indexOf("```java\n") + "```java\n".length();
-    String shown = readme.substring(begin, readme.indexOf("```", begin));
-    String self = Files.readString(SELF, StandardCharsets.UTF_8);
-    int from = self.indexOf("// snippet\n") + "// snippet\n".length();
-    String run = self.substring(from, self.indexOf("// end of snippet"));
-    assertEquals(run.replaceAll("\\s+", ""), shown.replaceAll("\\s+", ""));
+  void holdsTheSnippetsOfTheReadme() throws IOException {
+    List<String> shown = parts(README, "```java\n", "```");
+    List<String> run = parts(SELF, "    // snippet\n", "    // end of snippet");
+    assertEquals(2, shown.size());
+    assertEquals(shown, run);
+  }
+
+  /** What stands between two marks, without white space. */
+  private static List<String> parts(Path file, String begin, String end) throws IOException {
+    String text = Files.readString(file, StandardCharsets.UTF_8);
+    List<String> parts = new ArrayList<>();
+    int from = text.indexOf(begin);
+    while (from >= 0) {
+      int start = from + begin.length();
+      int stop = text.indexOf(end, start);
+      parts.add(text.substring(start, stop).replaceAll("\\s+", ""));
+      from = text.indexOf(begin, stop);
+    }
+    return parts;
   }
 
   /** The first two fenced blocks are the two commands, each one line. */

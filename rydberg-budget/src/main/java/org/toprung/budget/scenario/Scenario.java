@@ -1,12 +1,15 @@
 package org.toprung.budget.scenario;
 
+import java.io.UncheckedIOException;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.stream.Stream;
 import org.toprung.budget.Budget;
 import org.toprung.budget.bench.Bench;
 import org.toprung.budget.pulse.Pulse;
+import org.toprung.core.atom.Catalogue;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
@@ -31,11 +34,12 @@ import org.toprung.core.quantity.MagneticField;
  * detuning of its own: the lasers sit on resonance with the target, light shifts compensated,
  * unless {@code pulse.offset} says otherwise. Without a {@code title} the file's name stands in.
  *
- * <p>Optional: {@code idle} names a ground sublevel that is not driven, {@code trap} a beam that
- * stays on during the pulse without driving anything; in {@code field} a static {@code electric}
- * field; in a {@code step} two waists with a {@code waist_axis}, an {@code intensity} in place of
- * power and waist, the {@code offset} of the focus from the atom, and an {@code impurity} of the
- * polarization with its {@code impurity_phase_deg}.
+ * <p>Optional: {@code atom.values} names a file of one's own atomic values; {@code idle} names a
+ * ground sublevel that is not driven, {@code trap} a beam that stays on during the pulse without
+ * driving anything; in {@code field} a static {@code electric} field; in a {@code step} two waists
+ * with a {@code waist_axis}, an {@code intensity} in place of power and waist, the {@code offset}
+ * of the focus from the atom, and an {@code impurity} of the polarization with its {@code
+ * impurity_phase_deg}.
  *
  * <p>Immutable and thread-safe.
  */
@@ -60,10 +64,7 @@ public final class Scenario {
     this.file = file;
     Table root = Table.root(file, TomlFile.tree(file, text), KEYS);
     this.title = root.optional("title").map(Scenario::title).orElseGet(() -> nameOf(file));
-    Species species =
-        root.table("atom", List.of("species"))
-            .required("species", "text such as \"Rb-87\"")
-            .parsed(Species::parse, "Rb-87");
+    Species species = species(root.table("atom", List.of("species", "values")));
     DriveSetup inField =
         field(root.table("field", List.of("magnetic", "electric")), Drive.of(species));
     DriveSetup started = start(root.table("start", List.of("level", "F", "mF")), species, inField);
@@ -120,6 +121,28 @@ public final class Scenario {
       throw value.refused(allowed);
     }
     return text.strip();
+  }
+
+  /**
+   * The species, with values of the user's own file, beside the scenario, laid over the library's.
+   */
+  private Species species(Table atom) {
+    Value name = atom.required("species", "text such as \"Rb-87\"");
+    Optional<Value> values = atom.optional("values");
+    if (values.isEmpty()) {
+      return name.parsed(Species::parse, "Rb-87");
+    }
+    Path own = file.resolveSibling(values.get().text("the name of a file of values (CSV)"));
+    Catalogue catalogue = values.get().guarded(() -> overlaid(own));
+    return name.parsed(catalogue::species, "Rb-87");
+  }
+
+  private static Catalogue overlaid(Path own) {
+    try {
+      return Catalogue.bundled().with(own);
+    } catch (UncheckedIOException e) {
+      throw new IllegalArgumentException("the file " + own + " cannot be read", e);
+    }
   }
 
   private static Level level(Value value, Species species) {

@@ -81,6 +81,26 @@ class ScenarioTest {
     assertEquals(List.of(0.005, 0.005), s.bench().intensityNoise().orElseThrow());
   }
 
+  /** A longer lifetime of the intermediate level of one's own scatters less. */
+  @Test
+  void laysAFileOfOwnValuesOverTheLibrary(@TempDir Path folder) throws Exception {
+    Files.writeString(
+        folder.resolve("own.csv"),
+        "species,quantity,level,value,uncertainty,unit,source,memory,chosen_because\n"
+            + "Rb,lifetime,6P3/2,236,3,ns,\"Twice the published one, for a test\",no,\n");
+    String key = "species = \"Rb-87\"";
+    Path file =
+        Files.writeString(
+            folder.resolve("s.toml"), ReferenceScenario.with(key, key + "\nvalues = \"own.csv\""));
+    double own = Scenario.read(file).drive().meanScatteringPerSecond();
+    double library = parse(ReferenceScenario.text()).drive().meanScatteringPerSecond();
+    assertEquals(118.0 / 236, own / library, 1e-3);
+    Files.writeString(file, ReferenceScenario.with(key, key + "\nvalues = \"missing.csv\""));
+    ScenarioException e = assertThrows(ScenarioException.class, () -> Scenario.read(file));
+    assertEquals("atom.values", e.key().orElseThrow());
+    assertTrue(e.getMessage().contains("missing.csv"), e.getMessage());
+  }
+
   @Test
   void readsAnIdleSublevelAndATrap() {
     Scenario s =
@@ -301,7 +321,7 @@ class ScenarioTest {
     String text =
         Files.readString(Path.of("examples", "rubidium-two-photon.toml"))
             .replaceFirst("waist = \"25 um\"", "")
-            .replaceAll("(?m)^# (?!intensity)(?=[a-zF]+[_a-zF]* = |\\[)", "");
+            .replaceAll("(?m)^# (?!intensity|values)(?=[a-zF]+[_a-zF]* = |\\[)", "");
     Drive drive = parse(text).drive();
     Beam beam = drive.steps().get(0).beam();
     assertEquals(2, beam.profile().waists().size());

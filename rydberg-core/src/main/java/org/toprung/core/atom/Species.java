@@ -1,7 +1,6 @@
 package org.toprung.core.atom;
 
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
@@ -134,15 +133,17 @@ public final class Species {
   }
 
   private double mass(String isotope) {
-    return catalogue.best(isotope, Datum.Kind.MASS, "").orElseThrow().estimate().value();
+    return require(isotope, Datum.Kind.MASS, "").estimate().value();
   }
 
   /** The isotope that the rows of the element were measured on, if its limit is measured. */
   private Optional<String> reference() {
-    return catalogue
-        .best(name, Datum.Kind.REFERENCE_ISOTOPE, "")
-        .map(datum -> datum.species() + "-" + (int) datum.value())
-        .filter(isotope -> ionization(isotope).isPresent());
+    Optional<Datum> datum = catalogue.best(name, Datum.Kind.REFERENCE_ISOTOPE, "");
+    if (datum.isEmpty()) {
+      return Optional.empty();
+    }
+    String isotope = datum.get().species() + "-" + (int) datum.get().value();
+    return ionization(isotope).isPresent() ? Optional.of(isotope) : Optional.empty();
   }
 
   /**
@@ -157,9 +158,16 @@ public final class Species {
   }
 
   private Datum require(Datum.Kind kind, String level) {
-    return catalogue
-        .best(name, kind, level)
-        .orElseThrow(() -> Refusal.of("the catalogue has no %s of %s %s", kind, name, level));
+    return require(name, kind, level);
+  }
+
+  // no lambdas on the way to the first answer: each costs a cold start half a millisecond
+  private Datum require(String isotope, Datum.Kind kind, String level) {
+    Optional<Datum> datum = catalogue.best(isotope, kind, level);
+    if (datum.isEmpty()) {
+      throw Refusal.of("the catalogue has no %s of %s %s", kind, isotope, level);
+    }
+    return datum.get();
   }
 
   /** The terms of a series, all from the source of its constant term: fits must not be mixed. */
@@ -212,18 +220,17 @@ public final class Species {
     Optional<Datum> fromLowest =
         catalogue.best(isotope, Datum.Kind.IONIZATION_ENERGY_FROM_LOWEST_F, ground);
     if (fromLowest.isPresent()) {
-      double a =
-          catalogue.best(isotope, Datum.Kind.HYPERFINE_A, ground).orElseThrow().estimate().value();
-      double twoI = 2 * catalogue.best(isotope, Datum.Kind.NUCLEAR_SPIN, "").orElseThrow().value();
+      double a = require(isotope, Datum.Kind.HYPERFINE_A, ground).estimate().value();
+      double twoI = 2 * require(isotope, Datum.Kind.NUCLEAR_SPIN, "").value();
       // for j = 1/2 and A > 0 the lowest level is F = I - 1/2, (I+1)A/2 below the centre of gravity
       double below = a > 0 ? (twoI + 2) * a / 4 : -twoI * a / 4;
       Estimate measured = fromLowest.get().estimate();
       return Optional.of(new Estimate(measured.value() - below, measured.uncertainty()));
     }
-    return catalogue
-        .best(isotope, Datum.Kind.IONIZATION_ENERGY, ground)
-        .filter(d -> d.species().equals(isotope))
-        .map(Datum::estimate);
+    Optional<Datum> datum = catalogue.best(isotope, Datum.Kind.IONIZATION_ENERGY, ground);
+    return datum.isPresent() && datum.get().species().equals(isotope)
+        ? Optional.of(datum.get().estimate())
+        : Optional.empty();
   }
 
   /**
@@ -297,12 +304,8 @@ public final class Species {
   private int[] lowestN() {
     int[] lowest = new int[POLARIZATION_L];
     for (int l = 0; l < lowest.length; l++) {
-      int least = l + 1;
-      lowest[l] =
-          catalogue
-              .best(name, Datum.Kind.LOWEST_N, Level.letter(l))
-              .map(datum -> (int) datum.value())
-              .orElse(least);
+      Optional<Datum> datum = catalogue.best(name, Datum.Kind.LOWEST_N, Level.letter(l));
+      lowest[l] = datum.isPresent() ? (int) datum.get().value() : l + 1;
     }
     return lowest;
   }
@@ -466,18 +469,22 @@ public final class Species {
    */
   public HyperfineConstants hyperfine(Level level) {
     requireValid(level);
-    Level member =
-        hyperfineMembers.getOrDefault(level.series(), List.of()).stream()
-            .min(Comparator.comparingInt(m -> Math.abs(m.n() - level.n())))
-            .orElseThrow(
-                () ->
-                    Refusal.of(
-                        "no hyperfine constant of %s is measured for any level of the series %s,"
-                            + " so none can be given for %s",
-                        name, level.series(), level));
+    Level member = null;
+    for (Level candidate : hyperfineMembers.getOrDefault(level.series(), List.of())) {
+      if (member == null
+          || Math.abs(candidate.n() - level.n()) < Math.abs(member.n() - level.n())) {
+        member = candidate;
+      }
+    }
+    if (member == null) {
+      throw Refusal.of(
+          "no hyperfine constant of %s is measured for any level of the series %s, so none can be"
+              + " given for %s",
+          name, level.series(), level);
+    }
     Datum a = require(Datum.Kind.HYPERFINE_A, member.toString());
-    double b =
-        datum(Datum.Kind.HYPERFINE_B, member.toString()).map(d -> d.estimate().value()).orElse(0.0);
+    Optional<Datum> quadrupole = datum(Datum.Kind.HYPERFINE_B, member.toString());
+    double b = quadrupole.isPresent() ? quadrupole.get().estimate().value() : 0;
     if (member.equals(level)) {
       return new HyperfineConstants(a.estimate().value(), b, true, a.source());
     }
@@ -499,9 +506,8 @@ public final class Species {
    */
   public double gJ(Level level) {
     requireValid(level);
-    return datum(Datum.Kind.ELECTRONIC_G, level.toString())
-        .map(Datum::value)
-        .orElseGet(() -> lande(level));
+    Optional<Datum> measured = datum(Datum.Kind.ELECTRONIC_G, level.toString());
+    return measured.isPresent() ? measured.get().value() : lande(level);
   }
 
   private double lande(Level level) {

@@ -50,14 +50,14 @@ final class DerivationBuilder {
   private Derivation derivation(Drive drive) {
     List<Derivation.Light> lights = new ArrayList<>();
     for (int k = 0; k < ladder.steps(); k++) {
-      SphericalComponents light = builder.light(k);
+      SphericalComponents light = builder.light().polarization(k);
       List<Derivation.Complex> components = new ArrayList<>();
       for (int q = -1; q <= 1; q++) {
         components.add(new Derivation.Complex(light.re(q), light.im(q)));
       }
       lights.add(
           new Derivation.Light(
-              k + 1, setup.beam(k).toString(), builder.fieldVoltsPerMetre(k), components));
+              k + 1, setup.beam(k).toString(), builder.light().fieldVoltsPerMetre(k), components));
     }
     List<Derivation.Path> paths = new ArrayList<>();
     List<Derivation.Target> targets = new ArrayList<>();
@@ -136,11 +136,11 @@ final class DerivationBuilder {
   private Derivation.Leg leg(int step, ProductState lower, ProductState upper) {
     List<Derivation.AngularTerm> terms = ProductState.angularTerms(lower, upper);
     int q = (upper.doubledM() - lower.doubledM()) / 2;
-    SphericalComponents light = builder.light(step);
+    SphericalComponents light = builder.light().polarization(step);
     double sum = terms.stream().mapToDouble(Derivation.AngularTerm::value).sum();
     Derivation.Complex angular = new Derivation.Complex(sum * light.re(q), sum * light.im(q));
     double scale =
-        builder.fieldVoltsPerMetre(step)
+        builder.light().fieldVoltsPerMetre(step)
             * DIPOLE_UNIT
             * element(upper.level(), lower.level()).element().valueA0();
     return new Derivation.Leg(
@@ -160,6 +160,6 @@ final class DerivationBuilder {
         upper + " " + lower,
         key ->
             new Derivation.Reduced(
-                upper.toString(), lower.toString(), builder.element(upper, lower)));
+                upper.toString(), lower.toString(), builder.light().element(upper, lower)));
   }
 }

@@ -166,7 +166,7 @@ public final class Drive {
         ladder.states().get(reference).hertzPerTesla()
             - ladder.states().get(ladder.start()).hertzPerTesla();
     this.farShiftUncertainty = builder.farShiftRelativeUncertainty();
-    this.firstLaser = builder.laserHertz(0);
+    this.firstLaser = builder.frame().laserHertz(0);
   }
 
   /**
@@ -218,9 +218,9 @@ public final class Drive {
     }
     return new Step(
         last ? setup.target().toString() : setup.level(k).toString(),
-        Length.ofMetres(PhysicalConstants.SPEED_OF_LIGHT / builder.laserHertz(k)),
+        Length.ofMetres(PhysicalConstants.SPEED_OF_LIGHT / builder.frame().laserHertz(k)),
         Frequency.ofHertz(Math.sqrt(sum)),
-        builder.element(k),
+        builder.light().element(k),
         setup.beam(k));
   }
 

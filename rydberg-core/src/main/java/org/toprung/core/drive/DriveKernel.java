@@ -455,7 +455,7 @@ public final class DriveKernel {
               data.highestDetuningHertz()));
     }
     for (int p = 0; p < partner.length; p++) {
-      if (LadderBuilder.isNear(partner[p], detuning) != partnerKept[p]) {
+      if (RotatingFrame.isNear(partner[p], detuning) != partnerKept[p]) {
         throw new IllegalArgumentException(
             String.format(
                 Locale.ROOT,

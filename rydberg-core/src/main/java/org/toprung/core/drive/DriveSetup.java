@@ -296,6 +296,11 @@ public final class DriveSetup {
     return steps.size();
   }
 
+  /** The level named for a rung: the ground level, then where each step leads. */
+  Level named(int rung) {
+    return rung == 0 ? species.groundLevel() : level(rung - 1);
+  }
+
   /** The level a step leads to. */
   Level level(int step) {
     return steps.get(step).to();

@@ -46,28 +46,28 @@ final class KernelBuilder {
   private KernelData data(String description) {
     List<KernelData.Step> steps = new ArrayList<>();
     for (int k = 0; k < ladder.steps(); k++) {
-      double field = builder.fieldVoltsPerMetre(k);
+      double field = builder.light().fieldVoltsPerMetre(k);
       steps.add(
           new KernelData.Step(
               watts(k),
               1,
               field * field,
               strongest(k),
-              builder.element(k).relativeUncertainty(),
+              builder.light().element(k).relativeUncertainty(),
               far(ladder.start(), k),
               far(wanted[0], k)));
     }
     List<KernelData.Partner> partners = new ArrayList<>();
     double detuning = 0;
     if (ladder.steps() == 2) {
-      detuning = builder.detuningHertz(1);
+      detuning = builder.frame().detuningHertz(1);
       // both lasers must keep a positive frequency
-      narrow(-builder.laserHertz(0));
-      narrow(builder.laserHertz(1));
+      narrow(-builder.frame().laserHertz(0));
+      narrow(builder.frame().laserHertz(1));
       keepFocus(0);
       keepFocus(1);
       for (double distance : builder.partnerHertz(1)) {
-        partners.add(new KernelData.Partner(distance, LadderBuilder.isNear(distance, detuning)));
+        partners.add(new KernelData.Partner(distance, RotatingFrame.isNear(distance, detuning)));
       }
     } else {
       lowest = 0;
@@ -105,7 +105,7 @@ final class KernelBuilder {
 
   /** Off the focus the field depends on the wavelength: keeps the detuning where it does not. */
   private void keepFocus(int step) {
-    double laser = builder.laserHertz(step);
+    double laser = builder.frame().laserHertz(step);
     double probe = Math.min(FarShiftSeries.REACH_HERTZ, laser / 2);
     double change =
         Math.abs(fieldAt(step, laser + probe) / fieldAt(step, laser - probe) - 1) / probe;
@@ -151,13 +151,18 @@ final class KernelBuilder {
     }
     int rung = ladder.states().get(state).rung();
     Level level = s.level();
-    double laser = builder.laserHertz(step);
+    double laser = builder.frame().laserHertz(step);
     FarLightShift shifts = FarLightShift.of(setup.species());
     // across the threshold the sum over states is another one; the second laser goes the other way
     double toThreshold = shifts.thresholdHertz(level) - laser;
     narrow(step == 0 ? toThreshold : -toThreshold);
     return shifts.series(
-        level, s.doubledMj(), weight, laser, builder.light(step), builder.inLadder(rung, step));
+        level,
+        s.doubledMj(),
+        weight,
+        laser,
+        builder.light().polarization(step),
+        builder.inLadder(rung, step));
   }
 
   private List<KernelData.Link> direct() {

@@ -67,21 +67,26 @@ public final class MatrixExponential {
     first.scale(Math.scalb(1.0, -squarings), 0);
     second.setProduct(first, first);
     third.setProduct(second, first);
-    // blocks of three powers, Horner in third: degree 12 = 4 blocks and a head
+    // blocks of three powers, Horner in third; the innermost block needs no product
     sum.clear();
-    addDiagonal(sum, TAYLOR[12]);
-    for (int block = 9; block >= 0; block -= 3) {
+    sum.addScaled(TAYLOR[12], third);
+    addBlock(9);
+    for (int block = 6; block >= 0; block -= 3) {
       work.setProduct(third, sum);
       sum.copyFrom(work);
-      addDiagonal(sum, TAYLOR[block]);
-      sum.addScaled(TAYLOR[block + 1], first);
-      sum.addScaled(TAYLOR[block + 2], second);
+      addBlock(block);
     }
     for (int s = 0; s < squarings; s++) {
       work.setProduct(sum, sum);
       sum.copyFrom(work);
     }
     out.copyFrom(sum);
+  }
+
+  private void addBlock(int block) {
+    addDiagonal(sum, TAYLOR[block]);
+    sum.addScaled(TAYLOR[block + 1], first);
+    sum.addScaled(TAYLOR[block + 2], second);
   }
 
   private void addDiagonal(ComplexMatrix m, double value) {

@@ -201,17 +201,17 @@ public final class Lifetimes {
     return new Estimate(1 / rate, uncertainty / (rate * rate));
   }
 
-  /**
-   * Photons per mode; none at frequency zero, where their number diverges but the rate vanishes.
-   */
-  private static double photons(double frequencyHertz, double thermalHertz) {
-    return frequencyHertz > 0 && thermalHertz > 0
-        ? 1 / Math.expm1(frequencyHertz / thermalHertz)
-        : 0;
-  }
-
   private static double thermalHertz(Temperature temperature) {
     return PhysicalConstants.BOLTZMANN / PhysicalConstants.PLANCK * temperature.kelvin();
+  }
+
+  /**
+   * Photons of a mode; 0 at 0 K, and at frequency 0, where the rate vanishes although they do not.
+   */
+  private static double photons(double frequencyHertz, double thermalHertz) {
+    return thermalHertz > 0 && frequencyHertz > 0
+        ? 1 / Math.expm1(frequencyHertz / thermalHertz)
+        : 0;
   }
 
   private Estimate spontaneous(Level level) {

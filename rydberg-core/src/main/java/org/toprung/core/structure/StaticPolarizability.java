@@ -67,7 +67,7 @@ public final class StaticPolarizability {
    * @param level the level
    * @return α_0/h in Hz/(V/m)²
    * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
-   *     or another one that a dipole couples with it lies at the same energy, as in hydrogen
+   *     or is degenerate with one of opposite parity, as the excited levels of hydrogen are
    */
   public Estimate scalarHertzPerFieldSquared(Level level) {
     return known.get(level).scalar();
@@ -79,7 +79,7 @@ public final class StaticPolarizability {
    * @param level the level
    * @return α_2/h in Hz/(V/m)²; 0 for J = 1/2
    * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
-   *     or another one that a dipole couples with it lies at the same energy, as in hydrogen
+   *     or is degenerate with one of opposite parity, as the excited levels of hydrogen are
    */
   public Estimate tensorHertzPerFieldSquared(Level level) {
     return known.get(level).tensor();
@@ -102,13 +102,12 @@ public final class StaticPolarizability {
       double distance = species.energyHertz(other).value() - species.energyHertz(level).value();
       if (distance == 0) {
         throw new IllegalArgumentException(
-            "the Stark effect of "
-                + species.name()
-                + " "
-                + level
-                + " is linear: it lies at the energy of "
+            level
+                + " of "
+                + species
+                + " has no polarizability: it is degenerate with "
                 + other
-                + ", so that it has no polarizability");
+                + ", so that it shifts linearly with the field");
       }
       double factor = 2 * SecondOrder.COUPLING_SQUARED / distance;
       // the squared 3j symbols of one q add up to 1/3 over m

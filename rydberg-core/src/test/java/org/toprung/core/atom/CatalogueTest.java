@@ -31,7 +31,7 @@ class CatalogueTest {
   }
 
   @Test
-  void everyIsotopeOfTheContractIsThere() {
+  void everyPromisedIsotopeIsThere() {
     assertEquals(
         List.of("Cs-133", "H", "K-39", "K-40", "K-41", "Li-6", "Li-7", "Na-23", "Rb-85", "Rb-87"),
         Catalogue.bundled().isotopes());

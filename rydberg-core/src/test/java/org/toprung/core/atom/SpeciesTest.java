@@ -9,6 +9,9 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
+import net.jqwik.api.ForAll;
+import net.jqwik.api.Property;
+import net.jqwik.api.constraints.IntRange;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -209,5 +212,78 @@ class SpeciesTest {
                 * (upper.doubledJ() + 1));
     double lifetime = species.datum(Datum.Kind.LIFETIME, excited).orElseThrow().estimate().value();
     assertEquals(1, rate * lifetime, 0.004);
+  }
+
+  // NIST Atomic Spectra Database (Kramida, At. Data Nucl. Data Tables 96, 586 (2010)), from memory,
+  // in
+  // cm-1 above 1S; the formula of order α² leaves out the Lamb shift, 0.035 at 2S
+  @ParameterizedTest
+  @CsvSource({
+    "2S1/2,82258.9543993,0.04",
+    "2P1/2,82258.9191133,0.001",
+    "2P3/2,82259.2850014,0.001",
+    "3D5/2,97492.355566,0.001",
+    "4S1/2,102823.8530211,0.005"
+  })
+  void levelsOfHydrogenMeetTheMeasuredOnes(String text, double published, double within) {
+    Species hydrogen = Species.parse("H");
+    double energy =
+        hydrogen.energyHertz(Level.parse(text)).value()
+            - hydrogen.energyHertz(Level.parse("1S1/2")).value();
+    assertEquals(published, energy / PhysicalConstants.HERTZ_PER_RECIPROCAL_CENTIMETRE, within);
+    assertTrue(
+        hydrogen.energyHertz(Level.parse(text)).uncertainty()
+            < 0.05 * PhysicalConstants.HERTZ_PER_RECIPROCAL_CENTIMETRE);
+  }
+
+  // isotope shifts of the D1 lines in MHz: Rb 85 to 87 77.583(12), Banerjee, Das and Natarajan,
+  // Europhys. Lett. 65, 172 (2004); K 39 to 40 125.64(10) and 39 to 41 235.28(33), Falke et al.
+  // 2006;
+  // Li 6 to 7 10533.8, Brown et al. 2013, where the catalogue rows of 1995 lie 1 MHz lower
+  @ParameterizedTest
+  @CsvSource({
+    "Rb-85,Rb-87,5P1/2,77.583,0.2",
+    "K-39,K-40,4P1/2,125.64,0.2",
+    "K-39,K-41,4P1/2,235.28,0.4",
+    "Li-6,Li-7,2P1/2,10533.8,1.5"
+  })
+  void isotopeShiftsMeetPublishedOnes(
+      String lighter, String heavier, String text, double megahertz, double within) {
+    assertEquals(
+        megahertz, lineMegahertz(heavier, text) - lineMegahertz(lighter, text), within, text);
+  }
+
+  private static double lineMegahertz(String name, String text) {
+    Species species = Species.parse(name);
+    return (species.energyHertz(Level.parse(text)).value()
+            - species.energyHertz(species.groundLevel()).value())
+        / 1e6;
+  }
+
+  // P levels of all alkali atoms have normal fine structure
+  @Property(seed = "20261233", tries = 60)
+  void energiesRiseWithNAndWithTheJOfPLevels(
+      @ForAll @IntRange(min = 7, max = 149) int n,
+      @ForAll @IntRange(min = 0, max = 9) int isotope) {
+    Species species = Species.parse(Catalogue.bundled().isotopes().get(isotope));
+    double lower = species.energyHertz(Level.of(n, 1, 1)).value();
+    double upper = species.energyHertz(Level.of(n, 1, 3)).value();
+    assertTrue(upper > lower, species + " " + n);
+    assertTrue(species.energyHertz(Level.of(n + 1, 1, 1)).value() > upper, species + " " + n);
+  }
+
+  // Arimondo, Inguscio and Violino 1977: within a series A falls as n*^-3, here to 20 %
+  @Test
+  void hyperfineConstantsScaleBetweenMeasuredMembers() {
+    for (String name : new String[] {"Li-7", "Na-23", "K-39", "Rb-85", "Rb-87", "Cs-133"}) {
+      Species species = Species.parse(name);
+      int n = species.groundLevel().n();
+      Level first = Level.of(n, 1, 1);
+      Level second = Level.of(n + 1, 1, 1);
+      double scaled =
+          species.hyperfine(first).aHertz()
+              * Math.pow(species.effectiveN(first) / species.effectiveN(second), 3);
+      assertEquals(species.hyperfine(second).aHertz(), scaled, 0.2 * scaled, name);
+    }
   }
 }

@@ -205,6 +205,27 @@ class NumerovMethodTest {
     }
   }
 
+  // no zero of the element and no jump: its size times n*^1.5 falls ever more slowly to a constant,
+  // from step to step by 31 % at n = 8 to below 1e-3 at n = 150 (measured)
+  @ParameterizedTest
+  @CsvSource({"1", "3"})
+  void elementsFromTheGroundLevelOfRubidiumAreSmoothAndOfOneSign(int doubledJ) {
+    double previous = 0;
+    double ratio = 0.65;
+    for (int n = 7; n <= 150; n++) {
+      Level p = Level.of(n, 1, doubledJ);
+      double reduced =
+          RB_METHOD.dipole(RB.groundLevel(), p).correctedA0() * Math.pow(RB.effectiveN(p), 1.5);
+      if (previous != 0) {
+        double step = reduced / previous;
+        assertTrue(step > ratio - 1e-3 && step < 1, "n = " + n + ": " + step + ", " + ratio);
+        ratio = step;
+      }
+      previous = reduced;
+    }
+    assertTrue(ratio > 0.999, "" + ratio);
+  }
+
   // Saffman, Walker and Molmer, Rev. Mod. Phys. 82, 2313 (2010), from memory: 0.014 (50/n)^1.5 a0
   // for 5P3/2 to nS, target 2 %. For 5P3/2 to nD5/2 a one-channel calculation with the same
   // potential gives 0.0249 at n = 50, target 2 %; the 0.024 of the review lies 5 %

@@ -12,6 +12,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvFileSource;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.toprung.core.atom.Catalogue;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.quantity.PhysicalConstants;
@@ -264,5 +265,20 @@ class LifetimesTest {
   void theGroundLevelHasNoLifetime() {
     assertThrows(
         IllegalArgumentException.class, () -> RB.lifetimeSeconds(Level.parse("5S1/2"), ROOM));
+  }
+
+  // levels of hydrogen with the same n and j are degenerate: no rate between them, and no NaN
+  @Test
+  void everyIsotopeHasLifetimesToTheLargestN() {
+    for (String name : Catalogue.bundled().isotopes()) {
+      Lifetimes lifetimes = Lifetimes.of(Species.parse(name));
+      for (String level : new String[] {"20S1/2", "70P1/2", "150D5/2"}) {
+        double cold =
+            lifetimes.lifetimeSeconds(Level.parse(level), Temperature.ofKelvin(0)).value();
+        double warm = lifetimes.lifetimeSeconds(Level.parse(level), ROOM).value();
+        assertTrue(warm > 1e-7 && warm < cold && cold < 1, name + level + " " + warm);
+        assertTrue(lifetimes.channels(Level.parse(level), ROOM).size() > 20);
+      }
+    }
   }
 }

@@ -15,6 +15,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 import org.toprung.angular.PolarizationVector;
 import org.toprung.angular.SphericalComponents;
 import org.toprung.angular.Wigner;
+import org.toprung.core.atom.Catalogue;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.quantity.Estimate;
@@ -333,14 +334,32 @@ class PolarizabilityTest {
         () -> RB.hertzPerFieldSquared(Level.parse(level), doubledM, laser, PI, Set.of()));
   }
 
+  // exact: 9/2 for the ground level of hydrogen (Bethe and Salpeter, section 52); the bound levels
+  // make
+  // 3.66 of it, the continuum stands in the uncertainty
   @Test
-  void levelsWithALinearStarkEffectAreRefused() {
+  void hydrogenHasItsExactPolarizabilityWithinTheUncertaintyAndNoneWhereItIsDegenerate() {
     StaticPolarizability hydrogen = StaticPolarizability.of(Species.parse("H"));
-    String message =
+    Estimate ground = hydrogen.scalarHertzPerFieldSquared(Level.parse("1S1/2"));
+    assertEquals(4.5, ground.value() / AU, ground.uncertainty() / AU);
+    var e =
         assertThrows(
-                IllegalArgumentException.class,
-                () -> hydrogen.scalarHertzPerFieldSquared(Level.parse("60P3/2")))
-            .getMessage();
-    assertTrue(message.contains("60P3/2") && message.contains("linear"), message);
+            IllegalArgumentException.class,
+            () -> hydrogen.scalarHertzPerFieldSquared(Level.parse("2S1/2")));
+    assertTrue(e.getMessage().contains("degenerate with 2P1/2"), e.getMessage());
+  }
+
+  // every alkali isotope, low and high levels: finite, with an uncertainty
+  @Test
+  void everyAlkaliIsotopeHasPolarizabilitiesToTheLargestN() {
+    for (String name : Catalogue.bundled().isotopes()) {
+      if (!name.equals("H")) {
+        StaticPolarizability polarizability = StaticPolarizability.of(Species.parse(name));
+        for (String level : new String[] {"20S1/2", "70P3/2", "150D5/2"}) {
+          Estimate alpha = polarizability.scalarHertzPerFieldSquared(Level.parse(level));
+          assertTrue(alpha.uncertainty() > 0 && alpha.relative() < 0.2, name + level + alpha);
+        }
+      }
+    }
   }
 }
