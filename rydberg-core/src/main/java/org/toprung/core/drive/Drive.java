@@ -135,7 +135,7 @@ public final class Drive {
     LadderBuilder builder = new LadderBuilder(setup);
     this.ladder = builder.build();
     this.elimination = Elimination.of(ladder);
-    int reference = strongest();
+    int reference = elimination.strongestWanted();
     List<Step> resolved = new ArrayList<>();
     this.stepWaveVectors = new double[setup.steps()][];
     this.waveVector = new double[3];
@@ -181,17 +181,6 @@ public final class Drive {
 
   static Drive resolved(DriveSetup setup) {
     return new Drive(setup);
-  }
-
-  /** The wanted sublevel that takes the largest part of the coupling. */
-  private int strongest() {
-    int best = ladder.wanted()[0];
-    for (int w : ladder.wanted()) {
-      if (elimination.rabiHertz(w) > elimination.rabiHertz(best)) {
-        best = w;
-      }
-    }
-    return best;
   }
 
   private Step step(LadderBuilder builder, int k, int reference) {
@@ -523,7 +512,7 @@ public final class Drive {
    * @throws IllegalArgumentException if the species has no such ground sublevel
    */
   public GroundLight groundLight(Sublevel sublevel) {
-    setup.from(sublevel); // refuses what is no ground sublevel
+    setup.requireGround(sublevel, "sublevel");
     return new LadderBuilder(setup).groundLight(sublevel);
   }
 

@@ -73,15 +73,25 @@ public final class DriveSetup {
    *     ground level labelled by F and m<sub>F</sub>
    */
   public DriveSetup from(Sublevel sublevel) {
+    requireGround(sublevel, "start");
+    if (sublevel.equals(idle)) {
+      throw new IllegalArgumentException("the start " + sublevel + " is the idle sublevel");
+    }
+    return new DriveSetup(species, sublevel, steps, detunings, site, trap, idle);
+  }
+
+  /** Refuses what is no hyperfine sublevel of the ground level. */
+  void requireGround(Sublevel sublevel, String what) {
     species.requireValid(sublevel);
     if (!sublevel.isHyperfine() || !sublevel.level().equals(species.groundLevel())) {
       throw new IllegalArgumentException(
-          "the start "
+          "the "
+              + what
+              + " "
               + sublevel
               + " must be a hyperfine sublevel of the ground level "
               + species.groundLevel());
     }
-    return new DriveSetup(species, sublevel, steps, detunings, site, trap, idle);
   }
 
   /**
@@ -218,7 +228,7 @@ public final class DriveSetup {
    * @throws IllegalArgumentException if the species has no such ground sublevel, or it is the start
    */
   public DriveSetup idling(Sublevel sublevel) {
-    from(sublevel); // refuses what is no ground sublevel
+    requireGround(sublevel, "idle sublevel");
     if (sublevel.equals(start)) {
       throw new IllegalArgumentException("the idle sublevel " + sublevel + " is the start");
     }
@@ -242,6 +252,15 @@ public final class DriveSetup {
     }
     beam.polarizationVector();
     Frequency laser = Frequency.ofHertz(PhysicalConstants.SPEED_OF_LIGHT / wavelength.metres());
+    double limit = -species.energyHertz(species.groundLevel()).value();
+    if (!(laser.hertz() < limit)) {
+      throw new IllegalArgumentException(
+          "trap wavelength "
+              + wavelength
+              + " must be longer than "
+              + Length.ofMetres(PhysicalConstants.SPEED_OF_LIGHT / limit)
+              + ", where it ionizes the ground level");
+    }
     return new DriveSetup(species, start, steps, detunings, site, new Trap(beam, laser), idle);
   }
 

@@ -36,6 +36,7 @@ import org.toprung.core.linear.LinearSystem;
  */
 public final class Elimination {
   private final double[] targetRabi; // Hz by state, on the last rung
+  private final int strongest;
   private final double rabi; // Hz
   private final double[] startShift; // Hz by step
   private final double[] targetShift; // Hz by step
@@ -76,6 +77,11 @@ public final class Elimination {
         norm += coupling[0] * coupling[0] + coupling[1] * coupling[1];
       }
     }
+    int best = wanted[0];
+    for (int w : wanted) {
+      best = targetRabi[w] > targetRabi[best] ? w : best;
+    }
+    this.strongest = best;
     this.rabi = 2 * Math.sqrt(norm);
     double[][] x = new double[2][n];
     this.startShift = new double[ladder.steps()];
@@ -219,6 +225,15 @@ public final class Elimination {
    */
   public double rabiHertz(int state) {
     return targetRabi[state];
+  }
+
+  /**
+   * The wanted sublevel that takes the largest part of the coupling.
+   *
+   * @return index of the state
+   */
+  public int strongestWanted() {
+    return strongest;
   }
 
   /**

@@ -189,19 +189,14 @@ final class LadderBuilder {
     double[][] far = farShifts(kept, start, wanted.get(0));
     Ladder ladder = assemble(all, kept, far, start, wanted, 0);
     Elimination elimination = Elimination.of(ladder);
-    double reference = 0;
-    double strongest = 0;
-    for (int w : ladder.wanted()) {
-      if (elimination.rabiHertz(w) > strongest) {
-        strongest = elimination.rabiHertz(w);
-        reference = ladder.states().get(w).energyHertz() - (targetTrapShift - startTrapShift);
-      }
-    }
+    int strongest = elimination.strongestWanted();
+    double reference =
+        ladder.states().get(strongest).energyHertz() - (targetTrapShift - startTrapShift);
     double scale = 1;
     for (Ladder.Coupling c : all) {
       scale = Math.max(scale, c.rabiHertz());
     }
-    if (!(strongest > StepLight.NEGLIGIBLE * scale)) {
+    if (!(elimination.rabiHertz(strongest) > StepLight.NEGLIGIBLE * scale)) {
       throw new Unreachable(setup, light).cancelled();
     }
     return assemble(all, kept, far, start, wanted, reference);

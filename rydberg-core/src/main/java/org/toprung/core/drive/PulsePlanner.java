@@ -32,8 +32,9 @@ public final class PulsePlanner {
           "pulse area " + areaRadians + " rad must be positive and finite");
     }
     Elimination second = Elimination.of(ladder);
-    double eliminated =
-        second.targetShiftHertz() - second.startShiftHertz() + targetEnergy(ladder, second);
+    // a trap moves the target off bare resonance
+    double bare = ladder.states().get(second.strongestWanted()).energyHertz();
+    double eliminated = second.targetShiftHertz() - second.startShiftHertz() + bare;
     double offset = eliminated;
     double rabi = second.rabiHertz();
     try {
@@ -53,17 +54,6 @@ public final class PulsePlanner {
         Time.ofSeconds(areaRadians / (2 * Math.PI * rabi)),
         Frequency.ofHertz(offset),
         Frequency.ofHertz(rabi));
-  }
-
-  /** Energy of the wanted sublevel that couples most: a trap moves it off bare resonance. */
-  private static double targetEnergy(Ladder ladder, Elimination second) {
-    int strongest = ladder.wanted()[0];
-    for (int w : ladder.wanted()) {
-      if (second.rabiHertz(w) > second.rabiHertz(strongest)) {
-        strongest = w;
-      }
-    }
-    return ladder.states().get(strongest).energyHertz();
   }
 
   /** Rabi frequency and remaining gap target − start of the dressed two-level system, Hz. */
