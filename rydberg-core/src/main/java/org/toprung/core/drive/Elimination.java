@@ -36,6 +36,7 @@ import org.toprung.core.linear.LinearSystem;
  */
 public final class Elimination {
   private final double[] targetRabi; // Hz by state, on the last rung
+  private final double[] targetBound; // Hz by state: were all paths to add up
   private final int strongest;
   private final double rabi; // Hz
   private final double[] startShift; // Hz by step
@@ -62,6 +63,7 @@ public final class Elimination {
     double[][] s = following.of(ladder.start());
     int[] wanted = ladder.wanted();
     this.targetRabi = new double[n];
+    this.targetBound = new double[n];
     double[] weightRe = new double[n];
     double[] weightIm = new double[n];
     double norm = 0;
@@ -71,6 +73,7 @@ public final class Elimination {
       }
       double[] coupling = following.effective(t, s, ladder.start());
       targetRabi[t] = 2 * Math.hypot(coupling[0], coupling[1]);
+      targetBound[t] = 2 * following.bound(t, s, ladder.start());
       if (ladder.isWanted(t)) {
         weightRe[t] = coupling[0];
         weightIm[t] = coupling[1];
@@ -192,6 +195,15 @@ public final class Elimination {
       return new double[] {sumRe, sumIm};
     }
 
+    /** |H_ts| + Σ |H_tQ x|, Hz. */
+    double bound(int t, double[][] x, int s) {
+      double sum = Math.hypot(re[t * n + s], im[t * n + s]);
+      for (int i : q) {
+        sum += Math.hypot(re[t * n + i], im[t * n + i]) * Math.hypot(x[0][i], x[1][i]);
+      }
+      return sum;
+    }
+
     /** Re of H_sQ x_s = −x† H_QQ x, the shift of the followed state, Hz. */
     double shift(double[][] x) {
       double sum = 0;
@@ -225,6 +237,16 @@ public final class Elimination {
    */
   public double rabiHertz(int state) {
     return targetRabi[state];
+  }
+
+  /**
+   * Whether the paths to a state cancel, but for rounding.
+   *
+   * @param state index of a state of the last rung
+   * @return true if its Rabi frequency is below 10⁻¹² of the sum of the moduli of its paths
+   */
+  boolean cancels(int state) {
+    return !(targetRabi[state] > StepLight.NEGLIGIBLE * targetBound[state]);
   }
 
   /**

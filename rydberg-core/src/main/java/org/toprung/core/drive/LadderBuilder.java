@@ -192,11 +192,7 @@ final class LadderBuilder {
     int strongest = elimination.strongestWanted();
     double reference =
         ladder.states().get(strongest).energyHertz() - (targetTrapShift - startTrapShift);
-    double scale = 1;
-    for (Ladder.Coupling c : all) {
-      scale = Math.max(scale, c.rabiHertz());
-    }
-    if (!(elimination.rabiHertz(strongest) > StepLight.NEGLIGIBLE * scale)) {
+    if (elimination.cancels(strongest)) {
       throw new Unreachable(setup, light).cancelled();
     }
     return assemble(all, kept, far, start, wanted, reference);
