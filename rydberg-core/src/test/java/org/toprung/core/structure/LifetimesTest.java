@@ -268,4 +268,31 @@ class LifetimesTest {
       }
     }
   }
+
+  // closed form for kT above all photon energies: 4 α³ kT/(3 n²) in atomic units (Cooke and
+  // Gallagher, Phys. Rev. A 21, 588 (1980)); next order −hν/2kT, 2e-4 for neighbours at n = 150
+  @ParameterizedTest
+  @CsvSource({"150,149", "150,148", "150,130", "145,130", "141,131", "150,129"})
+  void nearlyCircularLevelsOfTheLargestNDecayAsTheSumRuleSays(int n, int l) {
+    double alpha = PhysicalConstants.FINE_STRUCTURE;
+    double rule =
+        4
+            / 3.0
+            * Math.pow(alpha, 3)
+            * PhysicalConstants.BOLTZMANN
+            * 300
+            / PhysicalConstants.REDUCED_PLANCK
+            / (n * n);
+    Level level = Level.of(n, l, 2 * l + 1);
+    assertEquals(rule, RB.blackbodyRatePerSecond(level, ROOM).value(), 2e-3 * rule);
+  }
+
+  // Drake, Phys. Rev. A 34, 2871 (1986): two photons, 8.229 s⁻¹, from memory; no dipole does it
+  @Test
+  void theMetastableLevelOfHydrogenLivesAnEighthOfASecond() {
+    Level level = Level.parse("2S1/2");
+    Lifetimes hydrogen = Lifetimes.of(Species.parse("H"));
+    assertEquals(0, hydrogen.computedSpontaneous(level).value());
+    assertEquals(1 / 8.229, hydrogen.lifetimeSeconds(level, Temperature.ofKelvin(0)).value(), 1e-4);
+  }
 }
