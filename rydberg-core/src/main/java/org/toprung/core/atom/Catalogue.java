@@ -123,7 +123,10 @@ public final class Catalogue {
   }
 
   Catalogue with(String file, List<String> lines) {
-    return new Catalogue(this, rows(file, lines, citations, true, new HashSet<>()));
+    Map<Key, List<Datum>> overlay = rows(file, lines, citations, true, new HashSet<>());
+    Catalogue catalogue = new Catalogue(this, overlay);
+    catalogue.requireKnown(overlay);
+    return catalogue;
   }
 
   /**
@@ -139,13 +142,32 @@ public final class Catalogue {
     if (known != null) {
       return known;
     }
-    if (best(name, Datum.Kind.MASS, "").isEmpty()) {
+    if (!isIsotope(name)) {
       throw Refusal.of(
           "species \"%s\" is not known; known: %s", name, String.join(", ", isotopes()));
     }
     Species made = new Species(name, this);
     Species raced = species.putIfAbsent(name, made);
     return raced == null ? made : raced;
+  }
+
+  private boolean isIsotope(String name) {
+    Optional<Datum> mass = best(name, Datum.Kind.MASS, "");
+    return mass.isPresent() && mass.get().species().equals(name);
+  }
+
+  /** Refuses rows that would change nothing, as those of a misspelt isotope. */
+  private void requireKnown(Map<Key, List<Datum>> overlay) {
+    Set<String> elementsKnown = new HashSet<>(elementFiles.keySet());
+    isotopes().forEach(isotope -> elementsKnown.add(elementOf(isotope)));
+    for (List<Datum> list : overlay.values()) {
+      Datum datum = list.get(0);
+      if (!elementsKnown.contains(datum.species()) && !isIsotope(datum.species())) {
+        throw Refusal.of(
+            "%s: species \"%s\" is neither an element nor an isotope with a mass; known: %s",
+            datum.origin(), datum.species(), String.join(", ", isotopes()));
+      }
+    }
   }
 
   /**
@@ -275,9 +297,10 @@ public final class Catalogue {
         HEADER,
         (cells, origin) -> {
           Datum datum = datum(cells, source(cells[6], citations, citationAllowed), origin);
-          if (!seen.add(cells[0] + "," + cells[1] + "," + cells[2] + "," + datum.source())) {
+          if (!seen.add(cells[0] + "," + cells[1] + "," + datum.level() + "," + datum.source())) {
             throw Refusal.of(
-                "%s of %s %s is given twice from the same source", cells[1], cells[0], cells[2]);
+                "%s of %s %s is given twice from the same source",
+                cells[1], cells[0], datum.level());
           }
           rows.computeIfAbsent(
                   new Key(datum.species(), datum.kind(), datum.level()), k -> new ArrayList<>())

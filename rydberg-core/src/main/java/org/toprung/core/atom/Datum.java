@@ -9,8 +9,8 @@ import org.toprung.core.quantity.PhysicalConstants;
  *
  * @param species the isotope ("Rb-87") or, for what all isotopes share, the element ("Rb")
  * @param kind what is measured
- * @param level the level, series or pair of levels it belongs to; empty where it belongs to the
- *     atom
+ * @param level the level, series or pair of levels it belongs to, of a pair the level of smaller n
+ *     (then l, then j) first; empty where it belongs to the atom
  * @param value the value in {@code unit}
  * @param uncertainty one standard deviation in {@code unit}, not negative
  * @param unit the unit of the published value
@@ -50,28 +50,31 @@ public record Datum(
       this.description = description;
     }
 
-    /** Whether a cell has this form; an impossible level in it is refused with its own message. */
-    private boolean fits(String cell) {
+    /**
+     * A cell of this form as it is looked up: levels as they print, the lower of a pair first; null
+     * where it has another form. An impossible level in it is refused with its own message.
+     */
+    private String canonical(String cell) {
       return switch (this) {
-        case ATOM -> cell.isEmpty();
-        case LEVEL -> isLevel(cell);
+        case ATOM -> cell.isEmpty() ? cell : null;
+        case LEVEL -> Level.parse(cell).toString();
         case PAIR -> {
           int dash = cell.indexOf('-');
-          yield dash > 0 && isLevel(cell.substring(0, dash)) && isLevel(cell.substring(dash + 1));
+          if (dash <= 0) {
+            yield null;
+          }
+          Level one = Level.parse(cell.substring(0, dash));
+          Level other = Level.parse(cell.substring(dash + 1));
+          yield one.compareTo(other) <= 0 ? one + "-" + other : other + "-" + one;
         }
         case SHELL -> {
           int last = cell.length() - 1;
           int l = last > 0 ? LETTERS.indexOf(cell.charAt(last)) : -1;
-          yield l >= 0 && isLevel(cell + (2 * l + 1) + "/2");
+          yield l >= 0 ? Level.parse(cell + (2 * l + 1) + "/2").n() + cell.substring(last) : null;
         }
-        case SERIES -> isLevel(Level.MAXIMUM_N + cell);
-        case LETTER -> cell.length() == 1 && LETTERS.contains(cell);
+        case SERIES -> Level.parse(Level.MAXIMUM_N + cell).series();
+        case LETTER -> cell.length() == 1 && LETTERS.contains(cell) ? cell : null;
       };
-    }
-
-    private static boolean isLevel(String text) {
-      Level.parse(text);
-      return true;
     }
   }
 
@@ -187,7 +190,7 @@ public record Datum(
    *
    * @param species isotope or element
    * @param kind what is measured
-   * @param level level, series or pair of levels, or empty
+   * @param level level, series or pair of levels in either order, or empty
    * @param value the value in {@code unit}
    * @param uncertainty one standard deviation in {@code unit}
    * @param unit the unit
@@ -204,10 +207,12 @@ public record Datum(
       throw Refusal.of(
           "unit \"%s\" of %s is not known; allowed: %s", unit, name(kind), kind.unit.allowed);
     }
-    if (!kind.form.fits(level)) {
+    String canonical = kind.form.canonical(level);
+    if (canonical == null) {
       throw Refusal.of(
           "level of %s must be %s, given \"%s\"", name(kind), kind.form.description, level);
     }
+    level = canonical;
     if (kind.positive && !(value > 0)) {
       throw Refusal.of("value of %s must be positive, given %s", name(kind), value);
     }

@@ -17,9 +17,10 @@ import org.toprung.core.quantity.PhysicalConstants;
  * <p>Energies: a measured level energy where there is one, else the series E = −R_M/(n − δ)² with δ
  * = Σ δ_2k (n − δ_0)^−2k and R_M = R∞/(1 + m_e/(M − m_e)). For l ≥ 4 without measured series the
  * defect is that of a polarizable core, δ = (3α_c/4)(1 − l(l+1)/(3n²)) / [(l−½) l
- * (l+½)(l+1)(l+3/2)] (for example Gallagher, Rydberg Atoms, Cambridge 1994, chapter 17), without
- * fine structure. Hydrogen: δ = (α²/2)(1/(j+½) − 3/(4n)), the fine structure to order α² (Bethe and
- * Salpeter, section 14); the Lamb shift is left to the uncertainty.
+ * (l+½)(l+1)(l+3/2)] (for example Gallagher, Rydberg Atoms, Cambridge 1994, chapter 17), to which
+ * the fine structure of hydrogen is added. Hydrogen: δ = (α²/2)(1/(j+½) − 3/(4n)), the fine
+ * structure to order α² (Bethe and Salpeter, section 14); the Lamb shift is left to the
+ * uncertainty.
  *
  * <p>An isotope without an ionization energy of its own gets that of another isotope and the normal
  * mass shift, of which one half counts as uncertainty.
@@ -395,9 +396,7 @@ public final class Species {
 
   private Estimate quantumDefect(Level level) {
     if (isHydrogen()) {
-      double fine = PhysicalConstants.FINE_STRUCTURE * PhysicalConstants.FINE_STRUCTURE / 2;
-      double defect = fine * (2.0 / (level.doubledJ() + 1) - 0.75 / level.n());
-      return new Estimate(defect, LAMB_HERTZ / (2 * rydbergHertz));
+      return new Estimate(fineStructure(level), LAMB_HERTZ / (2 * rydbergHertz));
     }
     List<Datum> terms = series.get(level.series());
     if (terms != null) {
@@ -424,7 +423,13 @@ public final class Species {
             * corePolarizabilityAu().value()
             * (1 - l * (l + 1) / (3 * n * n))
             / ((l - 0.5) * l * (l + 0.5) * (l + 1) * (l + 1.5));
-    return new Estimate(defect, POLARIZATION_TRUST * defect);
+    return new Estimate(defect + fineStructure(level), POLARIZATION_TRUST * defect);
+  }
+
+  /** The defect that stands for the fine structure of hydrogen to order α². */
+  private static double fineStructure(Level level) {
+    double alpha = PhysicalConstants.FINE_STRUCTURE;
+    return alpha * alpha / 2 * (2.0 / (level.doubledJ() + 1) - 0.75 / level.n());
   }
 
   /**
@@ -541,8 +546,8 @@ public final class Species {
    * The value in use, by the precedence that {@link Catalogue} describes.
    *
    * @param kind what is asked for
-   * @param level the level, series ("S1/2") or pair of levels ("5S1/2-5P1/2"); empty for a value of
-   *     the atom
+   * @param level the level, series ("S1/2") or pair of levels ("5S1/2-5P1/2", in the order of
+   *     {@link Level}); empty for a value of the atom
    * @return the datum, if the catalogue has one
    */
   public Optional<Datum> datum(Datum.Kind kind, String level) {

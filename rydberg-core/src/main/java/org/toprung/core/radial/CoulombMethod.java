@@ -74,7 +74,7 @@ public final class CoulombMethod implements WaveMethod {
 
   @Override
   public double power(Level a, Level b, int k) {
-    WaveMethod.requirePower(k);
+    WaveMethod.requirePower(a, b, k);
     return Math.pow(lengthScale, k) * waves.get(a).power(waves.get(b), k);
   }
 

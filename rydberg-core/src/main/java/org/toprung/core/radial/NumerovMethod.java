@@ -213,7 +213,7 @@ public final class NumerovMethod implements WaveMethod {
 
   @Override
   public double power(Level a, Level b, int k) {
-    WaveMethod.requirePower(k);
+    WaveMethod.requirePower(a, b, k);
     double coarse = waves.get(a).power(waves.get(b), k);
     if (refined == null) {
       return Math.pow(lengthScale, k) * coarse;

@@ -41,12 +41,16 @@ public final class RadialComparison {
    * @param a one level
    * @param b the other level; its l differs by 1
    * @return the answers, the most trusted first
-   * @throws IllegalArgumentException if a level belongs to the core or is not in the catalogue, or
-   *     no method can describe the pair
+   * @throws IllegalArgumentException if a level belongs to the core or is not in the catalogue, l
+   *     does not differ by 1, or no method can describe the pair
    */
   public static RadialComparison of(Species species, Level a, Level b) {
     species.requireValid(a);
     species.requireValid(b);
+    if (Math.abs(a.l() - b.l()) != 1) {
+      throw new IllegalArgumentException(
+          "a dipole couples levels whose l differs by 1, given " + a + " and " + b);
+    }
     List<RadialMethod> methods =
         List.of(
             NumerovMethod.of(species),

@@ -223,6 +223,9 @@ public final class Audit {
   private static void lifetime(Species species, Datum datum, List<Finding> findings) {
     Level level = Level.parse(datum.level());
     Estimate rate = Lifetimes.of(species).computedSpontaneous(level);
+    if (!(rate.value() > 0)) {
+      return; // metastable: no element to compare with
+    }
     double nanoseconds = 1e9 / rate.value();
     double measured = datum.estimate().value() * 1e9;
     add(

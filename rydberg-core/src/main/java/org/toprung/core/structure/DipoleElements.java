@@ -169,9 +169,7 @@ public final class DipoleElements {
   }
 
   private Optional<Datum> measured(Level a, Level b) {
-    return species
-        .datum(Datum.Kind.REDUCED_DIPOLE, a + "-" + b)
-        .or(() -> species.datum(Datum.Kind.REDUCED_DIPOLE, b + "-" + a));
+    return species.datum(Datum.Kind.REDUCED_DIPOLE, a + "-" + b);
   }
 
   private static void requireAllowed(Level a, Level b) {

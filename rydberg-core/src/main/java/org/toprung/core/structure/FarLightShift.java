@@ -106,7 +106,8 @@ public final class FarLightShift {
    * @param nearLevels levels whose resonant term is left out
    * @return shift/h in Hz/(V/m)², to be multiplied by E0²; positive where the level moves up
    * @throws IllegalArgumentException if the level belongs to the core or is not in the catalogue,
-   *     the projection is none of the level, or the frequency is not positive and finite
+   *     the projection is none of the level, or the frequency is not positive and finite or exactly
+   *     that of a transition to a level that is not near
    */
   public Estimate hertzPerFieldSquared(
       Level level,
@@ -138,6 +139,16 @@ public final class FarLightShift {
       double absorbing = term.absorbing(polarization);
       double emitting = term.emitting(polarization);
       boolean near = nearLevels.contains(term.other());
+      if (!near && Math.abs(term.distanceHertz()) == laserFrequencyHertz) {
+        throw new IllegalArgumentException(
+            "light of "
+                + laserFrequencyHertz
+                + " Hz is on the resonance of "
+                + level
+                + " with "
+                + term.other()
+                + ", where there is no second-order shift");
+      }
       double sum =
           closure
               ? remainder(absorbing, emitting, term.distanceHertz(), laserFrequencyHertz, near)

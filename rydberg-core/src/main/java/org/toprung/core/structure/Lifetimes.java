@@ -187,7 +187,7 @@ public final class Lifetimes {
    * @param temperature temperature of the surroundings
    * @return lifetime in s
    * @throws IllegalArgumentException if the level is the ground level, belongs to the core or is
-   *     not in the catalogue
+   *     not in the catalogue, or nothing takes the atom out of it at that temperature
    */
   public Estimate lifetimeSeconds(Level level, Temperature temperature) {
     if (level.equals(species.groundLevel())) {
@@ -197,6 +197,15 @@ public final class Lifetimes {
     Estimate warm = blackbodyRatePerSecond(level, temperature);
     Estimate ionization = blackbodyIonizationRatePerSecond(level, temperature);
     double rate = cold.value() + warm.value() + ionization.value();
+    if (!(rate > 0)) {
+      throw new IllegalArgumentException(
+          level
+              + " of "
+              + species
+              + " has no lifetime at "
+              + temperature
+              + ": no dipole transition leads to a lower level, and none is measured");
+    }
     double uncertainty = cold.uncertainty() + warm.uncertainty() + ionization.uncertainty();
     return new Estimate(1 / rate, uncertainty / (rate * rate));
   }

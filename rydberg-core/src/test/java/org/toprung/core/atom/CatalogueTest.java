@@ -81,6 +81,42 @@ class CatalogueTest {
     assertNotSame(Species.RUBIDIUM_87, own);
   }
 
+  // a pair in the other order, or a level written otherwise, is the same quantity
+  @Test
+  void rowsOfTheUserGoFirstHoweverTheLevelIsWritten() {
+    Species own =
+        with(
+                "Rb,reduced_dipole,6P3/2-5S1/2,0.53,0.01,a0,Own measurement,no,",
+                "Rb,lifetime,6[1]3/2,121,1,ns,Own measurement,no,")
+            .species("Rb-87");
+    assertEquals(0.53, own.datum(Datum.Kind.REDUCED_DIPOLE, "5S1/2-6P3/2").orElseThrow().value());
+    assertEquals(121, own.datum(Datum.Kind.LIFETIME, "6P3/2").orElseThrow().value());
+    assertThrows(
+        IllegalArgumentException.class,
+        () ->
+            with(
+                "Rb,reduced_dipole,6P3/2-5S1/2,0.53,0.01,a0,Own measurement,no,",
+                "Rb,reduced_dipole,5S1/2-6P3/2,0.53,0.01,a0,Own measurement,no,"));
+  }
+
+  @ParameterizedTest
+  @ValueSource(strings = {"Rb-78", "Rb87", "rb-87", "Xx"})
+  void rowsOfAnUnknownSpeciesAreRefused(String name) {
+    var e =
+        assertThrows(
+            IllegalArgumentException.class,
+            () -> with(name + ",lifetime,6P3/2,120,1,ns,Own measurement,no,"));
+    assertTrue(e.getMessage().startsWith("own.csv:2: "), e.getMessage());
+    assertTrue(e.getMessage().contains("Rb-87"), e.getMessage());
+  }
+
+  // rows of the element must not make an isotope of what has no mass of its own
+  @ParameterizedTest
+  @ValueSource(strings = {"H-2", "H-1", "Rb-86", "Rb", ""})
+  void namesWithoutAMassOfTheirOwnAreNoIsotopes(String name) {
+    assertThrows(IllegalArgumentException.class, () -> Species.parse(name));
+  }
+
   @Test
   void newIsotopesNeedRowsOnly() {
     Species own =

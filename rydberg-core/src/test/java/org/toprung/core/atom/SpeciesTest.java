@@ -111,6 +111,23 @@ class SpeciesTest {
     assertTrue(40 - RB.effectiveN(h) > 0);
   }
 
+  // hydrogen-like: splitting α² R/(n³ l (l+1)) (Bethe and Salpeter, section 12)
+  @ParameterizedTest
+  @CsvSource({"30,5", "60,8", "40,39", "150,20"})
+  void highAngularMomentaHaveTheFineStructureOfHydrogen(int n, int l) {
+    for (String name : new String[] {"Li-7", "Rb-87", "Cs-133"}) {
+      Species species = Species.parse(name);
+      double splitting =
+          species.energyHertz(Level.of(n, l, 2 * l + 1)).value()
+              - species.energyHertz(Level.of(n, l, 2 * l - 1)).value();
+      double exact =
+          Math.pow(PhysicalConstants.FINE_STRUCTURE, 2)
+              * species.rydbergHertz()
+              / (Math.pow(n, 3) * l * (l + 1));
+      assertEquals(exact, splitting, 0.01 * exact, name);
+    }
+  }
+
   @Test
   void hyperfineConstantsAreMeasuredOrScaled() {
     HyperfineConstants ground = RB.hyperfine(RB.groundLevel());

@@ -138,4 +138,13 @@ class RadialComparisonTest {
         ArithmeticException.class,
         () -> PotentialEigenvalue.effectiveN(ValencePotential.coulomb(), 12, 2, 14));
   }
+
+  @Test
+  void pairsThatNoDipoleCouplesAreRefused() {
+    for (String other : new String[] {"5S1/2", "6S1/2", "4D3/2"}) {
+      assertThrows(
+          IllegalArgumentException.class,
+          () -> RadialComparison.of(Species.RUBIDIUM_87, Level.parse("5S1/2"), Level.parse(other)));
+    }
+  }
 }

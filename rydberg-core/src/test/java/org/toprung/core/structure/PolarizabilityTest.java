@@ -334,6 +334,22 @@ class PolarizabilityTest {
         () -> RB.hertzPerFieldSquared(Level.parse(level), doubledM, laser, PI, Set.of()));
   }
 
+  @Test
+  void lightOnAResonanceHasNoSecondOrderShiftUnlessTheLevelIsNear() {
+    Level ground = Level.parse("5S1/2");
+    Level upper = Level.parse("5P1/2");
+    double line =
+        Species.RUBIDIUM_87.energyHertz(upper).value()
+            - Species.RUBIDIUM_87.energyHertz(ground).value();
+    var e =
+        assertThrows(
+            IllegalArgumentException.class,
+            () -> RB.hertzPerFieldSquared(ground, 1, line, PI, Set.of()));
+    assertTrue(e.getMessage().contains("resonance"), e.getMessage());
+    assertTrue(
+        Double.isFinite(RB.hertzPerFieldSquared(ground, 1, line, PI, Set.of(upper)).value()));
+  }
+
   // exact: 9/2 for the ground level of hydrogen (Bethe and Salpeter, section 52); the bound levels
   // make
   // 3.66 of it, the continuum stands in the uncertainty
