@@ -367,6 +367,8 @@ final class LadderBuilder {
       }
     }
     double[] shift = farShifts.hertz(states.get(index), 0);
+    // as in Elimination, counted from where levels outside the ladder have moved the sublevel
+    double energy = energies.get(index) + Arrays.stream(shift).sum();
     double scattering = 0;
     Lifetimes lifetimes = Lifetimes.of(species);
     for (int u = 0; u < states.size(); u++) {
@@ -378,7 +380,7 @@ final class LadderBuilder {
       if (square == 0) {
         continue;
       }
-      double away = energies.get(index) - energies.get(u);
+      double away = energy - energies.get(u);
       double rate =
           steps == 1 ? 0 : lifetimes.spontaneousRatePerSecond(states.get(u).level()).value();
       double width = rate / (2 * Math.PI);

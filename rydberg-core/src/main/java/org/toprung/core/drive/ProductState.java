@@ -142,9 +142,4 @@ record ProductState(
     }
     return terms;
   }
-
-  /** Nuclear projection of the only component of an uncoupled state, doubled. */
-  int doubledMi() {
-    return doubledM - doubledMj[0];
-  }
 }

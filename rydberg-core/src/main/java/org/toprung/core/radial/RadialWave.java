@@ -22,11 +22,6 @@ final class RadialWave {
     return nodes;
   }
 
-  /** Radius of the inner cut in a0. */
-  double innerRadius() {
-    return first * step * first * step;
-  }
-
   /** ∫ P_a r P_b dr = 2∫ x⁴ y_a y_b dx. */
   double dipole(RadialWave other) {
     int from = Math.max(first, other.first);

@@ -52,20 +52,37 @@ class DriveTest {
   void reducesToTheTextbookThreeLevelLadderWhenThereIsOnePath() {
     Drive drive = rubidium(LOWER, UPPER, "60S1/2", 0.5).resolve();
     assertEquals(3, drive.ladder().size());
-    Ladder.State middle =
-        drive.ladder().states().stream().filter(s -> s.rung() == 1).findFirst().orElseThrow();
-    double detuning = -middle.energyHertz();
+    Ladder.State middle = middle(drive);
+    double detuning = shiftedDetuning(drive);
     double one = drive.steps().get(0).rabi().hertz();
     double two = drive.steps().get(1).rabi().hertz();
-    assertEquals(one * two / (2 * detuning), drive.rabi().hertz(), 1e-4 * drive.rabi().hertz());
+    assertEquals(one * two / (2 * detuning), drive.rabi().hertz(), 1e-5 * drive.rabi().hertz());
     int start = drive.ladder().start();
     double near = drive.startLightShift(0).hertz() - drive.ladder().farShiftHertz(start, 0);
-    assertEquals(one * one / (4 * detuning), near, 1e-4 * near);
+    assertEquals(one * one / (4 * detuning), near, 1e-5 * near);
     double q = two / one;
     double gamma = middle.decayPerSecond() / (2 * Math.PI);
     double tau = 1 / (2 * drive.rabi().hertz());
     double expected = Math.PI * gamma / (4 * detuning) * (q + 1 / q);
     assertEquals(expected, drive.meanScatteringPerSecond() * tau, 1e-4 * expected);
+  }
+
+  private static Ladder.State middle(Drive drive) {
+    return drive.ladder().states().stream().filter(s -> s.rung() == 1).findFirst().orElseThrow();
+  }
+
+  /** Detuning from the one intermediate sublevel, with the start where far-off light moves it. */
+  private static double shiftedDetuning(Drive drive) {
+    int start = drive.ladder().start();
+    return drive.ladder().farShiftHertz(start, 0)
+        + drive.ladder().farShiftHertz(start, 1)
+        - middle(drive).energyHertz();
+  }
+
+  /** What the first beam shifts the start by through the intermediate level alone. */
+  private static double nearShift(Drive drive) {
+    return drive.startLightShift(0).hertz()
+        - drive.ladder().farShiftHertz(drive.ladder().start(), 0);
   }
 
   /** Common practice: 10 cm/s against co-propagating 780 and 480 nm is a third of a megahertz. */
@@ -96,14 +113,10 @@ class DriveTest {
                 "60S1/2",
                 0.5)
             .resolve();
-    double expected = base.rabi().hertz() * Math.sqrt(first * second);
-    // the far-off-resonant shift of the start, linear in power, moves its detuning by 1e-4 of
-    // itself
-    assertEquals(expected, scaled.rabi().hertz(), 5e-4 * expected);
-    assertEquals(
-        base.startLightShift(0).hertz() * first,
-        scaled.startLightShift(0).hertz(),
-        5e-4 * Math.abs(scaled.startLightShift(0).hertz()));
+    double expected = base.rabi().hertz() * shiftedDetuning(base) * Math.sqrt(first * second);
+    assertEquals(expected, scaled.rabi().hertz() * shiftedDetuning(scaled), 1e-9 * expected);
+    double shift = nearShift(base) * shiftedDetuning(base) * first;
+    assertEquals(shift, nearShift(scaled) * shiftedDetuning(scaled), 1e-9 * shift);
   }
 
   /** Turning the whole apparatus about the field changes no rate. */

@@ -14,6 +14,7 @@ import static org.toprung.core.quantity.MagneticField.gauss;
 import static org.toprung.core.quantity.Power.milliwatts;
 
 import java.util.List;
+import net.jqwik.api.Assume;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.constraints.DoubleRange;
@@ -45,6 +46,16 @@ class SchemesTest {
         .from(Sublevel.hyperfine(species.groundLevel(), f, f))
         .step(Sublevel.fine(target, mJ), beam(50, 15, SIGMA_PLUS))
         .in(gauss(5));
+  }
+
+  /** By 420 and 1013 nm through 6P3/2, between stretched sublevels. */
+  private static DriveSetup blue() {
+    return Drive.of(Species.RUBIDIUM_87)
+        .from(Sublevel.hyperfine("5S1/2", 2, 2))
+        .step(Level.parse("6P3/2"), beam(2, 20, SIGMA_PLUS))
+        .step(Sublevel.fine("68S1/2", 0.5), beam(150, 25, SIGMA_MINUS))
+        .detuned(gigahertz(1.2))
+        .in(gauss(4));
   }
 
   private static DriveSetup infrared(double first, double second) {
@@ -143,17 +154,16 @@ class SchemesTest {
 
   /**
    * Exact: eigenvalues of the whole three-photon Hamiltonian (Commons Math) against the effective
-   * rate, also where the middle step is strong. Each of the dressed intermediate states adds its
-   * squared admixture to the error, so 1 % needs amplitudes below 0.04.
+   * rate, also where the middle step is strong: 1 % while the light mixes at most 0.05 (Ωi/Δ = 0.1)
+   * of an intermediate sublevel into start or target.
    */
   @Property(tries = 25, seed = "31")
   void agreesWithFullDiagonalizationForThreePhotons(
       @ForAll @DoubleRange(min = 1, max = 6) double first,
       @ForAll @DoubleRange(min = -4, max = 4) double second) {
     Drive drive = infrared(first, second).resolve();
-    if (drive.admixture() > 0.04) {
-      return; // outer steps too near a dressed intermediate state: the warning's case
-    }
+    // nearer to a dressed intermediate state is the warning's case
+    Assume.that(drive.admixture() <= 0.05);
     PulsePlan plan = drive.plan(Math.PI);
     double exact = splitting(drive.ladder(), plan.frequencyOffset().hertz());
     assertEquals(exact, plan.rabi().hertz(), 1e-5 * exact);
@@ -186,9 +196,7 @@ class SchemesTest {
       assertTrue(unreachable.getMessage().contains("rule"), unreachable.getMessage());
       return;
     }
-    if (drive.admixture() > 0.05) {
-      return;
-    }
+    Assume.that(drive.admixture() <= 0.05);
     PulsePlan plan = drive.plan(Math.PI);
     double exact = splitting(drive.ladder(), plan.frequencyOffset().hertz());
     assertEquals(exact, drive.rabi().hertz(), 0.01 * exact);
@@ -320,21 +328,18 @@ class SchemesTest {
 
   @Test
   void shiftsTheStartAsAGroundSublevelLikeAnyOther() {
-    Drive drive =
-        Drive.of(Species.RUBIDIUM_87)
-            .from(Sublevel.hyperfine("5S1/2", 2, 2))
-            .step(Level.parse("6P3/2"), beam(2, 20, SIGMA_PLUS))
-            .step(Sublevel.fine("68S1/2", 0.5), beam(150, 25, SIGMA_MINUS))
-            .detuned(gigahertz(1.2))
-            .in(gauss(4))
-            .resolve();
+    Drive drive = blue().resolve();
     GroundLight start = drive.groundLight(drive.start());
     double shift = drive.startLightShift().hertz();
-    assertEquals(shift, start.shift().hertz(), 1e-3 * shift);
+    assertEquals(shift, start.shift().hertz(), 1e-6 * shift);
     assertEquals(
         drive.startScattering().totalPerSecond(),
         start.scatteringPerSecond(),
-        2e-3 * start.scatteringPerSecond());
+        1e-6 * start.scatteringPerSecond());
+    assertEquals(
+        2 * drive.meanScatteringPerSecond(),
+        drive.startScattering().totalPerSecond() + drive.targetScattering().totalPerSecond(),
+        1e-9 * drive.meanScatteringPerSecond());
     // the idle clock state is 6.8 GHz farther away: Δ 1.1 → 8 GHz, and its coupling is not
     // stretched
     GroundLight idle = drive.groundLight(Sublevel.hyperfine("5S1/2", 1, 0));
@@ -434,13 +439,7 @@ class SchemesTest {
    */
   @Test
   void followsTheShiftsOfATrapThatStaysOn() {
-    DriveSetup setup =
-        Drive.of(Species.RUBIDIUM_87)
-            .from(Sublevel.hyperfine("5S1/2", 2, 2))
-            .step(Level.parse("6P3/2"), beam(2, 20, SIGMA_PLUS))
-            .step(Sublevel.fine("68S1/2", 0.5), beam(150, 25, SIGMA_MINUS))
-            .detuned(gigahertz(1.2))
-            .in(gauss(4));
+    DriveSetup setup = blue();
     Drive off = setup.resolve();
     Beam trap = Beam.gaussian(milliwatts(5), micrometres(1)).polarized(PI).along(1, 0, 0);
     Drive on = setup.trappedBy(trap, nanometres(1064)).resolve();
