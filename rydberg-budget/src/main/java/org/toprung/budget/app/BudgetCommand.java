@@ -27,8 +27,6 @@ import picocli.CommandLine.Spec;
     mixinStandardHelpOptions = true,
     versionProvider = Version.class)
 final class BudgetCommand implements Callable<Integer> {
-  private static final int FEWEST_SHOTS = 2;
-  private static final int MOST_SHOTS = 100_000_000;
 
   @Spec private CommandSpec spec;
 
@@ -48,6 +46,7 @@ final class BudgetCommand implements Callable<Integer> {
       names = "--shots",
       paramLabel = "N",
       defaultValue = "2000",
+      converter = ShotCount.class,
       description = "Shots of the simulation (default: ${DEFAULT-VALUE}).")
   private int shots;
 
@@ -98,11 +97,6 @@ final class BudgetCommand implements Callable<Integer> {
   }
 
   private void requireAllowed() {
-    if (!(shots >= FEWEST_SHOTS && shots <= MOST_SHOTS)) {
-      throw new ParameterException(
-          spec.commandLine(),
-          "--shots: given " + shots + "; allowed: " + FEWEST_SHOTS + " to " + MOST_SHOTS);
-    }
     if (chart != null && !chart.toLowerCase(Locale.ROOT).endsWith(".svg")) {
       throw new ParameterException(
           spec.commandLine(),

@@ -305,8 +305,8 @@ class BadInputTest {
 
   @ParameterizedTest
   @CsvSource({
-    "--shots 1, --shots, 2 to",
-    "--shots few, --shots, few",
+    "--shots 1, --shots, from 2 to",
+    "--shots few, --shots, given few; allowed: a whole number from 2 to",
     "--seed 1.5, --seed, 1.5",
     "--chart a.png, a.png, .svg",
     "--json, --json, FILE",
