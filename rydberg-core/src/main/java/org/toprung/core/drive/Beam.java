@@ -85,6 +85,21 @@ public final class Beam {
     return of(new Profile.FlatTop(intensity));
   }
 
+  /**
+   * Changes intensity and power, and nothing else.
+   *
+   * @param factor factor on both, positive
+   * @return a copy
+   * @throws IllegalArgumentException if the factor is not positive and finite
+   */
+  public Beam brightened(double factor) {
+    if (!(factor > 0 && factor < Double.POSITIVE_INFINITY)) {
+      throw new IllegalArgumentException(
+          "factor " + factor + " on the power of a beam must be positive and finite");
+    }
+    return new Beam(profile.brightened(factor), polarization, impurity, direction, focus);
+  }
+
   private static Beam of(Profile profile) {
     return new Beam(profile, null, Impurity.NONE, null, new double[3]);
   }

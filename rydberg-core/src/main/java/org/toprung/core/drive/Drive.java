@@ -299,6 +299,15 @@ public final class Drive {
   }
 
   /**
+   * What the drive was resolved from, for variations on it.
+   *
+   * @return the description
+   */
+  public DriveSetup setup() {
+    return setup;
+  }
+
+  /**
    * The atom.
    *
    * @return the species

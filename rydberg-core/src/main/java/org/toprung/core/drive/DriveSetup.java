@@ -3,6 +3,7 @@ package org.toprung.core.drive;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.UnaryOperator;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
@@ -158,6 +159,29 @@ public final class DriveSetup {
     List<Step> longer = new ArrayList<>(steps);
     longer.add(step);
     return new DriveSetup(species, start, List.copyOf(longer), detunings, site, trap, idle);
+  }
+
+  /**
+   * Changes the beam of one step, for variations on a drive.
+   *
+   * @param step index of the step, from 0
+   * @param change makes the new beam from the old one, as it was described
+   * @return a copy with the new beam
+   * @throws IllegalArgumentException if there is no such step or the new beam cannot have its
+   *     polarization
+   * @throws IllegalStateException if the new beam lacks polarization or direction
+   */
+  public DriveSetup withBeam(int step, UnaryOperator<Beam> change) {
+    if (step < 0 || step >= steps.size()) {
+      throw new IllegalArgumentException(
+          "there is no step " + step + " (counted from 0) among " + steps);
+    }
+    Step old = steps.get(step);
+    Beam changed = change.apply(old.beam());
+    changed.polarizationVector();
+    List<Step> copy = new ArrayList<>(steps);
+    copy.set(step, new Step(old.to(), old.target(), changed, old.quadrupole()));
+    return new DriveSetup(species, start, List.copyOf(copy), detunings, site, trap, idle);
   }
 
   /**

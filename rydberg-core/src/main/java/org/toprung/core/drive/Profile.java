@@ -54,6 +54,15 @@ public sealed interface Profile {
   double logFieldRatio(double x, double y, double z, double[] direction, double wavelengthMetres);
 
   /**
+   * The same shape at another intensity.
+   *
+   * @param factor factor on intensity and power, positive
+   * @return the profile
+   * @throws IllegalArgumentException if the factor is not positive and finite
+   */
+  Profile brightened(double factor);
+
+  /**
    * A round Gaussian beam: peak intensity I0 = 2P/(πw²); the field is w/w(ζ)·exp(−ρ²/w(ζ)²) of its
    * peak at the distance ρ from the axis and ζ along it from the focus, with w(ζ) = w√(1 + (ζ/zR)²)
    * and zR = πw²/λ. Paraxial: w must be long against λ/π. Reference: Siegman, Lasers (1986),
@@ -88,6 +97,11 @@ public sealed interface Profile {
     @Override
     public List<Length> waists() {
       return List.of(waist);
+    }
+
+    @Override
+    public Profile brightened(double factor) {
+      return new Gaussian(Power.ofWatts(factor * beamPower.watts()), waist);
     }
 
     @Override
@@ -167,6 +181,12 @@ public sealed interface Profile {
     }
 
     @Override
+    public Profile brightened(double factor) {
+      return new Elliptical(
+          Power.ofWatts(factor * beamPower.watts()), firstWaist, secondWaist, axisX, axisY, axisZ);
+    }
+
+    @Override
     public double logFieldRatio(
         double x, double y, double z, double[] direction, double wavelengthMetres) {
       double along = direction[0] * x + direction[1] * y + direction[2] * z;
@@ -232,6 +252,12 @@ public sealed interface Profile {
     @Override
     public List<Length> waists() {
       return List.of();
+    }
+
+    @Override
+    public Profile brightened(double factor) {
+      return new FlatTop(
+          Intensity.ofWattsPerSquareMetre(factor * peakIntensity.wattsPerSquareMetre()));
     }
 
     @Override

@@ -46,6 +46,20 @@ class BeamTest {
     assertEquals(Math.sqrt(2 * 376.730313), flat.peakFieldVoltsPerMetre(), 1e-5);
   }
 
+  /** Exact: the field goes with the square root of the power, whatever the profile. */
+  @Test
+  void brightensByTheSquareRootInField() {
+    for (Beam beam : List.of(round(), oval(), Beam.flatTop(Intensity.ofWattsPerSquareMetre(3)))) {
+      Beam brighter = beam.brightened(4);
+      double field = beam.peakFieldVoltsPerMetre();
+      assertEquals(2 * field, brighter.peakFieldVoltsPerMetre(), 1e-14 * field);
+      assertEquals(beam.profile().waists(), brighter.profile().waists());
+    }
+    for (double factor : new double[] {0, -1, Double.NaN, Double.POSITIVE_INFINITY}) {
+      assertThrows(IllegalArgumentException.class, () -> round().brightened(factor));
+    }
+  }
+
   /** Definition of the waist: 1/e² in intensity, 1/e in field, across the beam. */
   @Test
   void fallsToOneOverEInFieldAtTheWaist() {

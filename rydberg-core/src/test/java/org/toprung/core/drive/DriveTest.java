@@ -67,6 +67,18 @@ class DriveTest {
     assertEquals(expected, drive.meanScatteringPerSecond() * tau, 1e-4 * expected);
   }
 
+  /** Exact: four times the power of one beam doubles the Rabi frequency of its step alone. */
+  @Test
+  void isVariedByItsBeams() {
+    Drive drive = rubidium(LOWER, UPPER, "60S1/2", 0.5).resolve();
+    Drive brighter = drive.setup().withBeam(1, beam -> beam.brightened(4)).resolve();
+    double one = drive.steps().get(0).rabi().hertz();
+    double two = drive.steps().get(1).rabi().hertz();
+    assertEquals(one, brighter.steps().get(0).rabi().hertz(), 1e-12 * one);
+    assertEquals(2 * two, brighter.steps().get(1).rabi().hertz(), 1e-12 * two);
+    assertThrows(IllegalArgumentException.class, () -> drive.setup().withBeam(2, beam -> beam));
+  }
+
   private static Ladder.State middle(Drive drive) {
     return drive.ladder().states().stream().filter(s -> s.rung() == 1).findFirst().orElseThrow();
   }
