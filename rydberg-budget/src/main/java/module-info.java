@@ -3,6 +3,7 @@ module org.toprung.budget {
   requires transitive org.toprung.core;
   requires java.xml;
   requires org.apache.commons.math4.legacy;
+  requires org.apache.commons.numbers.gamma;
 
   // what only scenario files, reports and the command line need
   requires static com.fasterxml.jackson.core;

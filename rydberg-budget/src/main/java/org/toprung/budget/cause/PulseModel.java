@@ -70,7 +70,7 @@ public final class PulseModel {
     for (int k = 0; k < inputs.elements().length; k++) {
       ladder = ladder.withElementScaled(k, inputs.elements()[k]);
     }
-    this.plan = PulsePlanner.plan(ladder, pulse.areaRadians());
+    this.plan = PulsePlanner.plan(ladder, pulse.planAreaRadians());
     this.elimination = Elimination.of(ladder);
     double[] e = drive.electricFieldVoltsPerMetre();
     this.stark = StarkShift.of(drive.species(), drive.target()).about(e[0], e[1], e[2]);

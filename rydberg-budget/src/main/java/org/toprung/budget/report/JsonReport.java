@@ -170,7 +170,7 @@ public final class JsonReport {
   private void pulse(Budget budget) throws IOException {
     PulsePlan plan = budget.plan();
     json.writeObjectFieldStart("pulse");
-    number("area_rad", budget.pulse().areaRadians());
+    number("area_rad", budget.pulse().planAreaRadians());
     number("duration_s", plan.duration().seconds());
     number("rabi_Hz", plan.rabi().hertz());
     number("frequency_offset_Hz", plan.frequencyOffset().hertz());

@@ -65,7 +65,7 @@ class ScenarioTest {
     assertEquals(Length.micrometres(25), second.waist());
     assertEquals(Polarization.SIGMA_MINUS, second.polarization());
     assertArrayEquals(new double[] {0, 0, -1}, second.direction());
-    assertEquals(Math.PI, s.pulse().areaRadians());
+    assertEquals(Math.PI, s.pulse().planAreaRadians());
     assertEquals(Frequency.hertz(0), s.pulse().offset());
     assertEquals(Temperature.microkelvin(10), s.bench().temperature().orElseThrow());
     assertEquals(
