@@ -42,6 +42,9 @@ record Edges(double riseSeconds, double fallSeconds) {
   }
 
   private double seconds(double jump) {
+    if (jump == 0) {
+      return 0;
+    }
     return jump > 0 ? riseSeconds : fallSeconds;
   }
 

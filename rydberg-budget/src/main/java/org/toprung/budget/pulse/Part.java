@@ -28,8 +28,8 @@ record Part(
     return new Part(areaRadians, Double.NaN, shape, 1, Sweep.LINEAR, 0, 0, phaseRadians);
   }
 
-  static Part dark(double seconds) {
-    return slice(seconds, 0, 0, 0);
+  static Part dark(double seconds, double phaseRadians) {
+    return slice(seconds, 0, 0, phaseRadians);
   }
 
   static Part slice(double seconds, double level, double detuningHertz, double phaseRadians) {

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
+import java.util.Objects;
 import java.util.OptionalDouble;
 import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.Time;
@@ -140,6 +141,257 @@ public final class Pulse {
               + halfTurns
               + "π rad");
     }
+  }
+
+  /**
+   * Two square π/2 pulses, the second with another phase.
+   *
+   * <p>Without disturbance the atom ends in the target with probability cos²(phase/2): at phase 0
+   * the two add up to a π pulse. In the dark the phase changes half way, where edges do not reach.
+   *
+   * @param wait time without light between the two, at least 0
+   * @param phaseRadians phase of the second pulse relative to the first
+   * @return the pulse
+   * @throws IllegalArgumentException if the wait is negative or the phase not finite
+   */
+  public static Pulse ramsey(Time wait, double phaseRadians) {
+    requireAtLeastZero(wait, "wait");
+    requirePhase(phaseRadians);
+    double half = 0.5 * wait.seconds();
+    return timed(
+        "Ramsey pair " + wait + " apart",
+        Goal.COHERENCE,
+        List.of(
+            Part.turn(Shape.CONSTANT, 0.5 * Math.PI, 0),
+            Part.dark(half, 0),
+            Part.dark(half, phaseRadians),
+            Part.turn(Shape.CONSTANT, 0.5 * Math.PI, phaseRadians)));
+  }
+
+  /**
+   * Square π/2, π and π/2 pulses with equal waits between them; the π pulse turns slow detunings
+   * round. The last pulse has another phase.
+   *
+   * <p>Without disturbance the atom ends in the start with probability cos²(phase/2): at phase 0
+   * the three add up to a 2π pulse. In the dark the phase changes half way, where edges do not
+   * reach.
+   *
+   * @param halfWait time without light before the π pulse, and as long again after it, at least 0
+   * @param phaseRadians phase of the last pulse relative to the others
+   * @return the pulse
+   * @throws IllegalArgumentException if the wait is negative or the phase not finite
+   */
+  public static Pulse echo(Time halfWait, double phaseRadians) {
+    requireAtLeastZero(halfWait, "half wait");
+    requirePhase(phaseRadians);
+    double wait = halfWait.seconds();
+    return timed(
+        "echo of twice " + halfWait,
+        Goal.COHERENCE,
+        List.of(
+            Part.turn(Shape.CONSTANT, 0.5 * Math.PI, 0),
+            Part.dark(wait, 0),
+            Part.turn(Shape.CONSTANT, Math.PI, 0),
+            Part.dark(0.5 * wait, 0),
+            Part.dark(0.5 * wait, phaseRadians),
+            Part.turn(Shape.CONSTANT, 0.5 * Math.PI, phaseRadians)));
+  }
+
+  private static void requirePhase(double phaseRadians) {
+    if (!Double.isFinite(phaseRadians)) {
+      throw new IllegalArgumentException(
+          "phase " + phaseRadians + " rad: allowed is any finite number");
+    }
+  }
+
+  /**
+   * Adiabatic passage at full power with the detuning swept linearly from −sweep/2 to +sweep/2.
+   *
+   * <p>With ordinary frequencies the passage fails with probability exp(−π²Ω²·duration/|sweep|)
+   * (Zener, Proc. R. Soc. A 137, 696 (1932)) as long as |sweep| is much greater than Ω.
+   *
+   * @param duration length, more than 0
+   * @param sweep how far the detuning rises, negative if it falls, not 0
+   * @return the pulse
+   * @throws IllegalArgumentException if the duration is not positive or the sweep is 0
+   */
+  public static Pulse chirped(Time duration, Frequency sweep) {
+    return chirped("chirp", Shape.CONSTANT, Sweep.LINEAR, duration, sweep);
+  }
+
+  /**
+   * Adiabatic passage with amplitude sin² πx and detuning −(sweep/2) cos πx, x from 0 to 1.
+   *
+   * <p>The light rises and falls while the detuning is large and nearly still, so that start and
+   * target are the dressed states at the ends for any sweep.
+   *
+   * @param duration length, more than 0
+   * @param sweep how far the detuning rises, negative if it falls, not 0
+   * @return the pulse
+   * @throws IllegalArgumentException if the duration is not positive or the sweep is 0
+   */
+  public static Pulse chirpedSmoothly(Time duration, Frequency sweep) {
+    return chirped("smooth chirp", Shape.SINE_SQUARED, Sweep.SINE, duration, sweep);
+  }
+
+  private static Pulse chirped(
+      String kind, Shape shape, Sweep form, Time duration, Frequency sweep) {
+    requirePositive(duration, "duration of a chirp");
+    if (sweep.hertz() == 0) {
+      throw new IllegalArgumentException(
+          "a chirp over " + sweep + " crosses no resonance: allowed is any other sweep");
+    }
+    double half = 0.5 * sweep.hertz();
+    return timed(
+        kind + " of " + duration + " over " + sweep,
+        Goal.TRANSFER,
+        List.of(Part.timed(duration.seconds(), shape, form, -half, half)));
+  }
+
+  private static void requirePositive(Time time, String what) {
+    if (!(time.seconds() > 0)) {
+      throw new IllegalArgumentException(what + " " + time + ": allowed is more than 0 s");
+    }
+  }
+
+  /**
+   * Stimulated Raman adiabatic passage over an intermediate level on resonance: the field of the
+   * second step (Stokes) comes before that of the first (pump), each with the form sin² πx.
+   *
+   * <p>Bergmann, Theuer and Shore, Rev. Mod. Phys. 70, 1003 (1998). For drives of two steps only;
+   * the amplitude of the program is the product of both fields, as for any pulse.
+   *
+   * @param width length of each field from zero to zero, more than 0
+   * @param delay how much later the pump comes, more than 0 and less than the width
+   * @return the pulse
+   * @throws IllegalArgumentException if a time is out of range
+   */
+  public static Pulse stirap(Time width, Time delay) {
+    return stirap("STIRAP", Shape.SINE_SQUARED, width, delay);
+  }
+
+  /**
+   * {@link #stirap} with fields of the form that {@link #gaussian} gives the amplitude.
+   *
+   * @param width length of each field from zero to zero, 6.07 standard deviations, more than 0
+   * @param delay how much later the pump comes, more than 0 and less than the width
+   * @return the pulse
+   * @throws IllegalArgumentException if a time is out of range
+   */
+  public static Pulse gaussianStirap(Time width, Time delay) {
+    return stirap("Gaussian STIRAP", Shape.GAUSSIAN, width, delay);
+  }
+
+  private static Pulse stirap(String kind, Shape shape, Time width, Time delay) {
+    requirePositive(width, "width of the fields");
+    if (!(delay.seconds() > 0 && delay.seconds() < width.seconds())) {
+      throw new IllegalArgumentException(
+          "pump "
+              + delay
+              + " after Stokes: allowed is more than 0 s and less than the width of "
+              + width);
+    }
+    Part field = Part.timed(width.seconds(), shape, Sweep.LINEAR, 0, 0);
+    Part dark = Part.dark(delay.seconds(), 0);
+    return new Pulse(
+        kind + " of " + width + ", delay " + delay,
+        Goal.TRANSFER,
+        Double.NaN,
+        List.of(List.of(dark, field), List.of(field, dark)),
+        Options.NONE);
+  }
+
+  /**
+   * The composite BB1: a square pulse followed by π, 2π and π pulses of phases φ, 3φ and φ with cos
+   * φ = −area/4π, which take out errors of the amplitude up to the second order.
+   *
+   * <p>Wimperis, J. Magn. Reson. A 109, 221 (1994). A relative error ε of the amplitude costs ∝ ε⁶.
+   *
+   * @param areaRadians angle to turn by, more than 0 and at most 4π rad
+   * @return the pulse, of total area 4π more
+   * @throws IllegalArgumentException if the area is out of range
+   */
+  public static Pulse bb1(double areaRadians) {
+    requireArea(areaRadians, 4);
+    double phase = Math.acos(-areaRadians / (4 * Math.PI));
+    return ofArea(
+        named("BB1", areaRadians),
+        areaRadians,
+        List.of(
+            Part.turn(Shape.CONSTANT, areaRadians, 0),
+            Part.turn(Shape.CONSTANT, Math.PI, phase),
+            Part.turn(Shape.CONSTANT, 2 * Math.PI, 3 * phase),
+            Part.turn(Shape.CONSTANT, Math.PI, phase)));
+  }
+
+  /**
+   * The composite CORPSE: square pulses of areas 2π + θ/2 − k, 2π − 2k and θ/2 − k with phases 0, π
+   * and 0, θ being the area and sin k = ½ sin θ/2, which take out errors of the detuning in the
+   * first order.
+   *
+   * <p>Cummins, Llewellyn and Jones, Phys. Rev. A 67, 042308 (2003). A detuning δ costs ∝ δ⁴.
+   *
+   * @param areaRadians angle to turn by, more than 0 and at most 4π rad
+   * @return the pulse
+   * @throws IllegalArgumentException if the area is out of range
+   */
+  public static Pulse corpse(double areaRadians) {
+    requireArea(areaRadians, 4);
+    double half = 0.5 * areaRadians;
+    double k = Math.asin(0.5 * Math.sin(half));
+    return ofArea(
+        named("CORPSE", areaRadians),
+        areaRadians,
+        List.of(
+            Part.turn(Shape.CONSTANT, 2 * Math.PI + half - k, 0),
+            Part.turn(Shape.CONSTANT, 2 * Math.PI - 2 * k, Math.PI),
+            Part.turn(Shape.CONSTANT, half - k, 0)));
+  }
+
+  /**
+   * Own settings, each held for the same time, as a waveform generator plays them.
+   *
+   * @param spacing length of a slice, more than 0
+   * @param amplitude effective Rabi frequency over that at full power, 0 to 1, somewhere above 0
+   * @param detuningHertz laser minus resonance, Hz, as many
+   * @param phaseRadians phase of the ladder's light, rad, as many
+   * @param goal what success is
+   * @return the pulse; the arrays are copied
+   * @throws IllegalArgumentException if the spacing is not positive, the arrays are empty or of
+   *     different lengths, or a value is out of range
+   */
+  public static Pulse samples(
+      Time spacing, double[] amplitude, double[] detuningHertz, double[] phaseRadians, Goal goal) {
+    Objects.requireNonNull(goal, "goal");
+    requirePositive(spacing, "spacing of samples");
+    int n = amplitude.length;
+    if (n == 0 || detuningHertz.length != n || phaseRadians.length != n) {
+      throw new IllegalArgumentException(
+          String.format(
+              "%d amplitudes, %d detunings and %d phases: allowed are equal numbers, at least 1",
+              n, detuningHertz.length, phaseRadians.length));
+    }
+    List<Part> slices = new ArrayList<>(n);
+    boolean dark = true;
+    for (int i = 0; i < n; i++) {
+      if (!(amplitude[i] >= 0 && amplitude[i] <= 1)) {
+        throw new IllegalArgumentException(
+            "amplitude " + amplitude[i] + " of sample " + i + ": allowed is 0 to 1");
+      }
+      if (!(Double.isFinite(detuningHertz[i]) && Double.isFinite(phaseRadians[i]))) {
+        throw new IllegalArgumentException(
+            String.format(
+                "detuning %s Hz and phase %s rad of sample %d: allowed are finite numbers",
+                detuningHertz[i], phaseRadians[i], i));
+      }
+      dark &= amplitude[i] == 0;
+      slices.add(Part.slice(spacing.seconds(), amplitude[i], detuningHertz[i], phaseRadians[i]));
+    }
+    if (dark) {
+      throw new IllegalArgumentException(
+          "all " + n + " amplitudes are 0: allowed are 0 to 1 with at least one above 0");
+    }
+    return timed(n + " samples of " + spacing, goal, List.copyOf(slices));
   }
 
   /**
