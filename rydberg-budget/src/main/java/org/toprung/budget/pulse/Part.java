@@ -58,6 +58,11 @@ record Part(
     return shape == Shape.CONSTANT;
   }
 
+  /** Whether the amplitude stays constant into the next part. */
+  boolean goesOnAs(Part next) {
+    return isConstantAmplitude() && next.isConstantAmplitude() && level == next.level();
+  }
+
   /** Amplitude at the beginning and at the end. */
   double edgeLevel() {
     return isConstantAmplitude() ? level : 0;

@@ -401,6 +401,7 @@ public final class Pulse {
    * @return a copy with this offset
    */
   public Pulse offsetBy(Frequency newOffset) {
+    Objects.requireNonNull(newOffset, "offset");
     return with(new Options(newOffset, options.edges, options.shapingStep, options.holds));
   }
 

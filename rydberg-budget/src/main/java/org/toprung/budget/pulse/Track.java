@@ -1,6 +1,7 @@
 package org.toprung.budget.pulse;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /**
@@ -11,18 +12,35 @@ import java.util.List;
  * first edge. Immutable.
  */
 final class Track {
+  private static final int NONE = -1;
+
   private final List<Part> parts;
-  private final double[] starts; // s, with the end as the last
-  private final double[] bounds; // s, from where on each part's amplitude holds
+  private final double[] starts; // s, of the parts, with the end as the last
+  private final double[] bounds; // s, where the amplitude goes from part to part
+  private final double[] jumps; // of the field, at each bound
+  private final int[] lastJump; // by the number of bounds passed: index of the nearest jump
+  private final int[] nextJump;
   private final int root;
   private final Edges edges;
 
-  private Track(List<Part> parts, double[] starts, double[] bounds, int root, Edges edges) {
+  private Track(
+      List<Part> parts, double[] starts, double[] bounds, double[] jumps, int root, Edges edges) {
     this.parts = parts;
     this.starts = starts;
     this.bounds = bounds;
+    this.jumps = jumps;
     this.root = root;
     this.edges = edges;
+    int n = jumps.length;
+    this.lastJump = new int[n + 1];
+    this.nextJump = new int[n + 1];
+    lastJump[0] = NONE;
+    nextJump[n] = NONE;
+    for (int j = 0; j < n; j++) {
+      lastJump[j + 1] = jumps[j] == 0 ? lastJump[j] : j;
+      int k = n - 1 - j;
+      nextJump[k] = jumps[k] == 0 ? nextJump[k + 1] : k;
+    }
   }
 
   /** A beam that stays at full field. */
@@ -31,6 +49,7 @@ final class Track {
         List.of(Part.slice(1, 1, 0, 0)),
         new double[] {Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY},
         new double[] {Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY},
+        new double[2],
         1,
         Edges.ABRUPT);
   }
@@ -44,23 +63,35 @@ final class Track {
    * @param edges of the modulator
    */
   static Track of(List<Part> parts, double[] seconds, int root, Edges edges) {
-    int n = parts.size();
-    double[] starts = new double[n + 1];
-    for (int j = 0; j < n; j++) {
-      starts[j + 1] = starts[j] + seconds[j];
-    }
-    double[] bounds = starts.clone();
-    Track abrupt = new Track(parts, starts, starts, root, edges);
-    for (int j = 0; j <= n; j++) {
-      if (abrupt.jump(j) != 0) {
-        bounds[j] += edges.delay(abrupt.before(j), abrupt.after(j), root);
+    List<Part> joined = new ArrayList<>(); // a bound without a jump would not move with its edges
+    double[] starts = new double[parts.size() + 1];
+    double end = 0;
+    for (int j = 0; j < parts.size(); j++) {
+      if (j == 0 || !parts.get(j - 1).goesOnAs(parts.get(j))) {
+        starts[joined.size()] = end;
+        joined.add(parts.get(j));
       }
+      end += seconds[j];
     }
-    return new Track(parts, starts, bounds, root, edges);
+    int n = joined.size();
+    starts = Arrays.copyOf(starts, n + 1);
+    starts[n] = end;
+    double[] bounds = starts.clone();
+    double[] jumps = new double[n + 1];
+    double before = 0;
+    for (int j = 0; j <= n; j++) {
+      double after = j == n ? 0 : field(joined.get(j).edgeLevel(), root);
+      jumps[j] = after - before;
+      if (jumps[j] != 0) {
+        bounds[j] += edges.delay(before, after, root);
+      }
+      before = after;
+    }
+    return new Track(List.copyOf(joined), starts, bounds, jumps, root, edges);
   }
 
   Track delayedBy(double seconds) {
-    return new Track(parts, plus(starts, seconds), plus(bounds, seconds), root, edges);
+    return new Track(parts, plus(starts, seconds), plus(bounds, seconds), jumps, root, edges);
   }
 
   private static double[] plus(double[] times, double seconds) {
@@ -71,7 +102,7 @@ final class Track {
     return later;
   }
 
-  private double field(double amplitude) {
+  private static double field(double amplitude, int root) {
     switch (root) {
       case 1:
         return amplitude;
@@ -82,30 +113,21 @@ final class Track {
     }
   }
 
-  private double before(int bound) {
-    return bound == 0 ? 0 : field(parts.get(bound - 1).edgeLevel());
-  }
-
-  private double after(int bound) {
-    return bound == parts.size() ? 0 : field(parts.get(bound).edgeLevel());
-  }
-
-  private double jump(int bound) {
-    return after(bound) - before(bound);
-  }
-
   double end() {
     return starts[parts.size()];
   }
 
-  /** Shortest time between neighbouring jumps; infinite where there are fewer than two. */
+  /**
+   * Shortest time between neighbouring jumps, whether programmed or moved for their edges; infinite
+   * where there are fewer than two.
+   */
   double shortestSeconds() {
     double shortest = Double.POSITIVE_INFINITY;
-    double last = Double.NEGATIVE_INFINITY;
-    for (int j = 0; j < bounds.length; j++) {
-      if (jump(j) != 0) {
-        shortest = Math.min(shortest, bounds[j] - last);
-        last = bounds[j];
+    for (int j = 0; j < jumps.length; j++) {
+      int last = lastJump[j];
+      if (jumps[j] != 0 && last != NONE) {
+        double programmed = starts[j] - starts[last];
+        shortest = Math.min(shortest, Math.min(programmed, bounds[j] - bounds[last]));
       }
     }
     return shortest;
@@ -115,16 +137,16 @@ final class Track {
   double lead() {
     double earliest = 0;
     for (int j = 0; j < bounds.length; j++) {
-      earliest = Math.min(earliest, bounds[j] - edges.reach(jump(j)));
+      earliest = Math.min(earliest, bounds[j] - edges.reach(jumps[j]));
     }
-    return -earliest;
+    return 0 - earliest;
   }
 
   /** When the field has come to rest; at least the end of the last part. */
   double rest() {
     double latest = end();
     for (int j = 0; j < bounds.length; j++) {
-      latest = Math.max(latest, bounds[j] + edges.reach(jump(j)));
+      latest = Math.max(latest, bounds[j] + edges.reach(jumps[j]));
     }
     return latest;
   }
@@ -134,7 +156,7 @@ final class Track {
     List<Double> breaks = new ArrayList<>();
     for (int j = 0; j < bounds.length; j++) {
       boolean kink = isShaped(j - 1) || isShaped(j);
-      if (Double.isFinite(bounds[j]) && (kink || jump(j) != 0)) {
+      if (Double.isFinite(bounds[j]) && (kink || jumps[j] != 0)) {
         breaks.add(bounds[j]);
       }
     }
@@ -149,8 +171,8 @@ final class Track {
   List<Double> edgeBreaks() {
     List<Double> breaks = new ArrayList<>();
     for (int j = 0; j < bounds.length; j++) {
-      double reach = edges.reach(jump(j));
-      if (Double.isFinite(bounds[j]) && jump(j) != 0 && reach > 0) {
+      double reach = edges.reach(jumps[j]);
+      if (Double.isFinite(bounds[j]) && jumps[j] != 0 && reach > 0) {
         breaks.add(bounds[j] - reach);
         breaks.add(bounds[j] + reach);
       }
@@ -183,9 +205,9 @@ final class Track {
     }
     Part part = parts.get(passed - 1);
     if (part.isConstantAmplitude()) {
-      return field(part.level());
+      return field(part.level(), root);
     }
-    return field(part.level() * part.shape().at(relative(passed - 1, t)));
+    return field(part.level() * part.shape().at(relative(passed - 1, t)), root);
   }
 
   private double relative(int part, double t) {
@@ -200,32 +222,24 @@ final class Track {
       return field;
     }
     // jumps lie at least an edge's reach apart: only the nearest on either side count
-    for (int j = passed - 1; j >= 0; j--) {
-      if (jump(j) != 0) {
-        field += edges.excess(jump(j), t - bounds[j]);
-        break;
-      }
-    }
-    for (int j = passed; j < bounds.length; j++) {
-      if (jump(j) != 0) {
-        field += edges.excess(jump(j), t - bounds[j]);
-        break;
-      }
-    }
+    field += excess(lastJump[passed], t) + excess(nextJump[passed], t);
     return Math.max(0, field);
+  }
+
+  private double excess(int jump, double t) {
+    return jump == NONE ? 0 : edges.excess(jumps[jump], t - bounds[jump]);
+  }
+
+  private boolean isReachedBy(int jump, double t) {
+    return jump != NONE && Math.abs(t - bounds[jump]) < edges.reach(jumps[jump]);
   }
 
   /** Whether the field is constant around a time between breaks. */
   boolean isConstantAt(double t) {
-    if (!isProgramConstantAt(t)) {
-      return false;
-    }
-    for (int j = 0; j < bounds.length; j++) {
-      if (Math.abs(t - bounds[j]) < edges.reach(jump(j))) {
-        return false;
-      }
-    }
-    return true;
+    int passed = passed(t);
+    return isProgramConstantAt(t)
+        && !isReachedBy(lastJump[passed], t)
+        && !isReachedBy(nextJump[passed], t);
   }
 
   boolean isProgramConstantAt(double t) {
@@ -242,6 +256,6 @@ final class Track {
     double x1 = relative(passed - 1, from);
     double x2 = relative(passed - 1, to);
     double mean = (part.shape().integral(x2) - part.shape().integral(x1)) / (x2 - x1);
-    return field(part.level() * Math.max(0, mean));
+    return field(part.level() * Math.max(0, mean), root);
   }
 }

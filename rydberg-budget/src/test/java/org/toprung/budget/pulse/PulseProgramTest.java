@@ -8,6 +8,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.function.DoubleUnaryOperator;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
@@ -80,6 +81,31 @@ class PulseProgramTest {
     }
   }
 
+  /** CORPSE turns by 4π + θ − 4k in all, with sin k = ½ sin θ/2. */
+  @Test
+  void hasTheAreaOfAllItsParts() {
+    Time edge = Time.nanoseconds(4);
+    Time wait = Time.nanoseconds(700);
+    double k = Math.asin(0.5 * Math.sin(1));
+    Map<Pulse, Double> areas =
+        Map.of(
+            Pulse.ramsey(wait, 1),
+            Math.PI,
+            Pulse.echo(wait, 1),
+            2 * Math.PI,
+            Pulse.bb1(2),
+            2 + 4 * Math.PI,
+            Pulse.corpse(2),
+            2 + 4 * Math.PI - 4 * k);
+    areas.forEach(
+        (pulse, area) -> {
+          PulseProgram edged = pulse.withEdges(edge, edge).program(2, RABI);
+          PulseProgram plain = pulse.program(2, RABI);
+          assertEquals(area, Quadrature.areaRadians(edged, 2e6), 1e-9 * area);
+          assertEquals(area, Quadrature.areaRadians(plain, 2e6), 1e-12 * area);
+        });
+  }
+
   @Property(seed = "22", tries = 20)
   void keepsTheAreaUnderEdges(
       @ForAll @DoubleRange(min = 0, max = 0.249) @Scale(4) double rise,
@@ -123,6 +149,25 @@ class PulseProgramTest {
       double a = program.amplitude(program.seconds() * i / 1000);
       assertTrue(a >= 0 && a <= 1);
     }
+  }
+
+  /** Slices shorter than a step moves, where only the phase changes. */
+  @Test
+  void movesStepsAcrossChangesOfThePhase() {
+    int n = 300;
+    double[] amplitude = new double[n];
+    double[] phase = new double[n];
+    for (int i = 0; i < n; i++) {
+      amplitude[i] = i < 100 ? 1 : 0.3;
+      phase[i] = 0.01 * i;
+    }
+    Time edge = Time.nanoseconds(20);
+    PulseProgram program =
+        Pulse.samples(Time.nanoseconds(1), amplitude, new double[n], phase, Goal.ROTATION)
+            .withEdges(edge, edge)
+            .program(3, RABI);
+    double area = 2 * Math.PI * (0.2 + 0.3 * 0.4);
+    assertEquals(area, Quadrature.areaRadians(program, 2e6), 1e-9 * area);
   }
 
   @Test
