@@ -1,5 +1,8 @@
 package org.toprung.budget.pulse;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.math.RoundingMode;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -28,6 +31,7 @@ import org.toprung.core.quantity.Time;
 public final class Pulse {
   private static final int MOST_STEPS = 3;
   private static final double SAME_AREA = 1e-4; // rad
+  private static final double ROUNDING = 1e-9; // of lengths that are computed from an area
 
   private final String name;
   private final Goal goal;
@@ -614,7 +618,7 @@ public final class Pulse {
   private void requireTimeForEdges(Track track) {
     double shortest = track.shortestSeconds();
     double needed = options.edges.shortestSeconds();
-    if (!(shortest >= needed)) {
+    if (!(shortest * (1 + ROUNDING) >= needed)) {
       throw new IllegalArgumentException(
           String.format(
               Locale.ROOT,
@@ -624,9 +628,17 @@ public final class Pulse {
               Time.ofSeconds(options.edges.riseSeconds()),
               Time.ofSeconds(options.edges.fallSeconds()),
               name,
-              Time.ofSeconds(shortest),
-              Time.ofSeconds(0.5 * shortest)));
+              rounded(shortest),
+              rounded(0.5 * shortest)));
     }
+  }
+
+  /** Down to three digits. */
+  private static Time rounded(double seconds) {
+    return Time.ofSeconds(
+        new BigDecimal(seconds * (1 + ROUNDING))
+            .round(new MathContext(3, RoundingMode.FLOOR))
+            .doubleValue());
   }
 
   /**
