@@ -372,8 +372,11 @@ public final class Pulse {
     if (n == 0 || detuningHertz.length != n || phaseRadians.length != n) {
       throw new IllegalArgumentException(
           String.format(
+              Locale.ROOT,
               "%d amplitudes, %d detunings and %d phases: allowed are equal numbers, at least 1",
-              n, detuningHertz.length, phaseRadians.length));
+              n,
+              detuningHertz.length,
+              phaseRadians.length));
     }
     List<Part> slices = new ArrayList<>(n);
     boolean dark = true;
@@ -385,8 +388,11 @@ public final class Pulse {
       if (!(Double.isFinite(detuningHertz[i]) && Double.isFinite(phaseRadians[i]))) {
         throw new IllegalArgumentException(
             String.format(
+                Locale.ROOT,
                 "detuning %s Hz and phase %s rad of sample %d: allowed are finite numbers",
-                detuningHertz[i], phaseRadians[i], i));
+                detuningHertz[i],
+                phaseRadians[i],
+                i));
       }
       dark &= amplitude[i] == 0;
       slices.add(Part.slice(spacing.seconds(), amplitude[i], detuningHertz[i], phaseRadians[i]));
