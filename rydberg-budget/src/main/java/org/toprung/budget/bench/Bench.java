@@ -1,20 +1,28 @@
 package org.toprung.budget.bench;
 
+import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.EnumMap;
 import java.util.List;
-import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.TreeMap;
 import java.util.function.Consumer;
+import java.util.function.Function;
+import java.util.function.ToDoubleFunction;
 import org.toprung.core.quantity.ElectricField;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Length;
 import org.toprung.core.quantity.MagneticField;
 import org.toprung.core.quantity.Temperature;
 
 /**
  * The disturbances of one apparatus.
  *
- * <p>Spreads are root mean squares of Gaussian distributions from shot to shot; a linewidth is the
- * full width at half maximum of a Lorentzian line (white frequency noise). What is not given is not
+ * <p>Spreads are root mean squares of Gaussian distributions from shot to shot, or samples; a
+ * linewidth is the full width at half maximum of a Lorentzian line (white frequency noise). Any
+ * number may have a relative standard uncertainty: {@link #knownTo}. What is not given is not
  * assumed to be zero: the budget lists it as not assessed.
  *
  * <p>Immutable: each {@code with…} method gives a copy.
@@ -22,16 +30,24 @@ import org.toprung.core.quantity.Temperature;
 public final class Bench {
   private static final Bench UNKNOWN = new Bench(new Values());
 
-  /** What is known; null stands for what is not. Never changed once a bench holds it. */
+  /** What is known. Never changed once a bench holds it. */
   private static final class Values {
-    private Temperature temperature;
-    private List<Frequency> trapFrequencies;
-    private Temperature environment;
-    private MagneticField magneticNoise;
-    private ElectricField electricField;
-    private List<Frequency> linewidths;
-    private List<Frequency> drifts;
-    private List<Double> intensityNoise;
+    private final Map<BenchValue, double[]> numbers = new EnumMap<>(BenchValue.class);
+    private final Map<BenchValue, double[]> uncertainties = new EnumMap<>(BenchValue.class);
+    private final Map<BenchValue, Map<Integer, Spread>> samples = new EnumMap<>(BenchValue.class);
+    private final Map<BenchValue, Map<Integer, NoiseDensity>> densities =
+        new EnumMap<>(BenchValue.class);
+    private boolean motion;
+
+    Values copy() {
+      Values copy = new Values();
+      copy.numbers.putAll(numbers);
+      copy.uncertainties.putAll(uncertainties);
+      samples.forEach((value, map) -> copy.samples.put(value, new TreeMap<>(map)));
+      densities.forEach((value, map) -> copy.densities.put(value, new TreeMap<>(map)));
+      copy.motion = motion;
+      return copy;
+    }
   }
 
   private final Values values;
@@ -42,17 +58,30 @@ public final class Bench {
 
   /** A copy in which something is set. */
   private Bench with(Consumer<Values> change) {
-    Values copy = new Values();
-    copy.temperature = values.temperature;
-    copy.trapFrequencies = values.trapFrequencies;
-    copy.environment = values.environment;
-    copy.magneticNoise = values.magneticNoise;
-    copy.electricField = values.electricField;
-    copy.linewidths = values.linewidths;
-    copy.drifts = values.drifts;
-    copy.intensityNoise = values.intensityNoise;
+    Values copy = values.copy();
     change.accept(copy);
     return new Bench(copy);
+  }
+
+  /** A copy with new numbers, which replace samples and an uncertainty of the old ones. */
+  private Bench with(BenchValue value, double[] numbers, Object[] shown) {
+    for (int i = 0; i < numbers.length; i++) {
+      value.requireAllowed(numbers[i], shown[i]);
+    }
+    return with(
+        v -> {
+          v.numbers.put(value, numbers.clone());
+          v.uncertainties.remove(value);
+          v.samples.remove(value);
+        });
+  }
+
+  private <Q> Bench with(BenchValue value, ToDoubleFunction<Q> si, List<Q> quantities) {
+    return with(value, quantities.stream().mapToDouble(si).toArray(), quantities.toArray());
+  }
+
+  private Bench withRatios(BenchValue value, double... ratios) {
+    return with(value, ratios, Arrays.stream(ratios).boxed().toArray());
   }
 
   /**
@@ -72,8 +101,7 @@ public final class Bench {
    * @throws IllegalArgumentException if the temperature is not above zero
    */
   public Bench withTemperature(Temperature value) {
-    requirePositive(value.kelvin(), "temperature " + value);
-    return with(v -> v.temperature = value);
+    return with(BenchValue.TEMPERATURE, Temperature::kelvin, List.of(value));
   }
 
   /**
@@ -87,9 +115,7 @@ public final class Bench {
    * @throws IllegalArgumentException if a frequency is not positive
    */
   public Bench withTrapFrequencies(Frequency x, Frequency y, Frequency z) {
-    List<Frequency> three = List.of(x, y, z);
-    three.forEach(f -> requirePositive(f.hertz(), "trap frequency " + f));
-    return with(v -> v.trapFrequencies = three);
+    return with(BenchValue.TRAP_FREQUENCY, Frequency::hertz, List.of(x, y, z));
   }
 
   /**
@@ -100,8 +126,7 @@ public final class Bench {
    * @throws IllegalArgumentException if the temperature is not above zero
    */
   public Bench withEnvironment(Temperature value) {
-    requirePositive(value.kelvin(), "environment temperature " + value);
-    return with(v -> v.environment = value);
+    return with(BenchValue.ENVIRONMENT_TEMPERATURE, Temperature::kelvin, List.of(value));
   }
 
   /**
@@ -112,8 +137,18 @@ public final class Bench {
    * @throws IllegalArgumentException if the value is negative
    */
   public Bench withMagneticNoise(MagneticField rms) {
-    requireNotNegative(rms.tesla(), "magnetic noise " + rms);
-    return with(v -> v.magneticNoise = rms);
+    return with(BenchValue.MAGNETIC_NOISE, MagneticField::tesla, List.of(rms));
+  }
+
+  /**
+   * Sets the magnetic field by samples.
+   *
+   * @param deviations measured deviations from the calibrated field along the axis
+   * @return a copy
+   * @throws IllegalArgumentException if there is none
+   */
+  public Bench withMagneticSamples(MagneticField... deviations) {
+    return sampled(BenchValue.MAGNETIC_NOISE, 0, si(deviations, MagneticField::tesla));
   }
 
   /**
@@ -124,8 +159,18 @@ public final class Bench {
    * @throws IllegalArgumentException if the value is negative
    */
   public Bench withElectricField(ElectricField rms) {
-    requireNotNegative(rms.voltsPerMetre(), "electric field " + rms);
-    return with(v -> v.electricField = rms);
+    return with(BenchValue.ELECTRIC_FIELD, ElectricField::voltsPerMetre, List.of(rms));
+  }
+
+  /**
+   * Sets the residual electric field by samples of its length; its direction is random.
+   *
+   * @param lengths measured lengths
+   * @return a copy
+   * @throws IllegalArgumentException if there is none
+   */
+  public Bench withElectricSamples(ElectricField... lengths) {
+    return sampled(BenchValue.ELECTRIC_FIELD, 0, si(lengths, ElectricField::voltsPerMetre));
   }
 
   /**
@@ -136,9 +181,7 @@ public final class Bench {
    * @throws IllegalArgumentException if a width is negative
    */
   public Bench withLinewidths(Frequency... fwhm) {
-    List<Frequency> given = List.of(fwhm);
-    given.forEach(f -> requireNotNegative(f.hertz(), "linewidth " + f));
-    return with(v -> v.linewidths = given);
+    return with(BenchValue.LINEWIDTH, Frequency::hertz, List.of(fwhm));
   }
 
   /**
@@ -149,9 +192,19 @@ public final class Bench {
    * @throws IllegalArgumentException if a value is negative
    */
   public Bench withDrifts(Frequency... rms) {
-    List<Frequency> given = List.of(rms);
-    given.forEach(f -> requireNotNegative(f.hertz(), "drift " + f));
-    return with(v -> v.drifts = given);
+    return with(BenchValue.DRIFT, Frequency::hertz, List.of(rms));
+  }
+
+  /**
+   * Sets the slow frequency error of one laser by samples.
+   *
+   * @param step index of the step, from 0
+   * @param deviations measured deviations from the calibrated frequency
+   * @return a copy
+   * @throws IllegalArgumentException if there is none
+   */
+  public Bench withDriftSamples(int step, Frequency... deviations) {
+    return sampled(BenchValue.DRIFT, step, si(deviations, Frequency::hertz));
   }
 
   /**
@@ -163,27 +216,335 @@ public final class Bench {
    * @throws IllegalArgumentException if a value is out of range
    */
   public Bench withIntensityNoise(double... rms) {
-    for (double value : rms) {
-      if (!(value >= 0 && value <= 0.5)) {
+    return withRatios(BenchValue.INTENSITY_NOISE, rms);
+  }
+
+  /**
+   * Sets the intensity of one beam by samples.
+   *
+   * @param step index of the step, from 0
+   * @param relative measured relative deviations from the calibrated intensity, at least −1
+   * @return a copy
+   * @throws IllegalArgumentException if there is none or one is below −1
+   */
+  public Bench withIntensitySamples(int step, double... relative) {
+    for (double deviation : relative) {
+      if (!(deviation >= -1)) {
         throw new IllegalArgumentException(
-            String.format(
-                Locale.ROOT, "relative intensity noise %s must be between 0 and 0.5", value));
+            "relative intensity deviation " + deviation + " must be at least -1");
       }
     }
-    List<Double> given = Arrays.stream(rms).boxed().toList();
-    return with(v -> v.intensityNoise = given);
+    return sampled(BenchValue.INTENSITY_NOISE, step, relative);
   }
 
-  private static void requirePositive(double value, String what) {
-    if (!(value > 0 && value < Double.POSITIVE_INFINITY)) {
-      throw new IllegalArgumentException(what + " must be above zero and finite");
+  /**
+   * Sets the pointing jitter of the beams.
+   *
+   * @param rms root mean square displacement of each beam at the atom in each of the two directions
+   *     across it, one per step, at least 0
+   * @return a copy
+   * @throws IllegalArgumentException if a value is negative
+   */
+  public Bench withPointing(Length... rms) {
+    return with(BenchValue.POINTING, Length::metres, List.of(rms));
+  }
+
+  /**
+   * Sets how much light of the orthogonal polarization is in the beams, coherent with the wanted
+   * light and of unknown phase.
+   *
+   * @param fraction part of the intensity, one per step, from 0 to 0.5
+   * @return a copy
+   * @throws IllegalArgumentException if a value is out of range
+   */
+  public Bench withPolarizationImpurity(double... fraction) {
+    return withRatios(BenchValue.POLARIZATION_IMPURITY, fraction);
+  }
+
+  /**
+   * Sets how well the length of the pulse is calibrated.
+   *
+   * @param relativeRms relative root mean square error, from 0 to 0.5
+   * @return a copy
+   * @throws IllegalArgumentException if the value is out of range
+   */
+  public Bench withLengthError(double relativeRms) {
+    return withRatios(BenchValue.LENGTH_ERROR, relativeRms);
+  }
+
+  /**
+   * Sets how well the frequency of the lasers is calibrated.
+   *
+   * @param rms root mean square error of the summed frequency, at least 0
+   * @return a copy
+   * @throws IllegalArgumentException if the value is negative
+   */
+  public Bench withFrequencyError(Frequency rms) {
+    return with(BenchValue.FREQUENCY_ERROR, Frequency::hertz, List.of(rms));
+  }
+
+  /**
+   * Sets the intensity noise of a trap that stays on during the pulse.
+   *
+   * @param relativeRms relative root mean square from shot to shot, from 0 to 0.5
+   * @return a copy
+   * @throws IllegalArgumentException if the value is out of range
+   */
+  public Bench withTrapIntensityNoise(double relativeRms) {
+    return withRatios(BenchValue.TRAP_INTENSITY_NOISE, relativeRms);
+  }
+
+  /**
+   * Sets the probability that the atom does not begin in the start.
+   *
+   * @param probability from 0 to 0.5
+   * @return a copy
+   * @throws IllegalArgumentException if the value is out of range
+   */
+  public Bench withPreparationError(double probability) {
+    return withRatios(BenchValue.PREPARATION_ERROR, probability);
+  }
+
+  /**
+   * Sets the probability that the outcome is read wrongly.
+   *
+   * @param probability from 0 to 0.5
+   * @return a copy
+   * @throws IllegalArgumentException if the value is out of range
+   */
+  public Bench withDetectionError(double probability) {
+    return withRatios(BenchValue.DETECTION_ERROR, probability);
+  }
+
+  /**
+   * Sets the spectrum of the frequency noise of one laser.
+   *
+   * @param step index of the step, from 0
+   * @param density one-sided density, Hz²/Hz
+   * @return a copy
+   */
+  public Bench withFrequencyNoiseDensity(int step, NoiseDensity density) {
+    return with(BenchValue.FREQUENCY_NOISE_DENSITY, step, density);
+  }
+
+  /**
+   * Sets the spectrum of the relative intensity noise of one beam.
+   *
+   * @param step index of the step, from 0
+   * @param density one-sided density, 1/Hz
+   * @return a copy
+   */
+  public Bench withIntensityNoiseDensity(int step, NoiseDensity density) {
+    return with(BenchValue.INTENSITY_NOISE_DENSITY, step, density);
+  }
+
+  private Bench with(BenchValue value, int step, NoiseDensity density) {
+    requireIndex(value, step);
+    if (density == null) {
+      throw new IllegalArgumentException(value.words() + " must not be null");
+    }
+    return with(v -> v.densities.computeIfAbsent(value, k -> new TreeMap<>()).put(step, density));
+  }
+
+  /**
+   * Lets the atom fly through the beams during the pulse instead of standing still: for long
+   * pulses. Only the simulation follows it.
+   *
+   * @return a copy
+   */
+  public Bench withMotionDuringPulse() {
+    return with(v -> v.motion = true);
+  }
+
+  private static <Q> double[] si(Q[] quantities, ToDoubleFunction<Q> si) {
+    return Arrays.stream(quantities).mapToDouble(si).toArray();
+  }
+
+  private Bench sampled(BenchValue value, int index, double[] deviations) {
+    requireIndex(value, index);
+    Spread spread = Spread.of(deviations);
+    return with(v -> v.samples.computeIfAbsent(value, k -> new TreeMap<>()).put(index, spread));
+  }
+
+  /**
+   * States how well a number is known.
+   *
+   * @param value what it is
+   * @param index 0, or the axis, or the step, from 0
+   * @param relative standard uncertainty over the number, from 0 to 1
+   * @return a copy
+   * @throws IllegalArgumentException if the number is not known, or the uncertainty is out of range
+   */
+  public Bench knownTo(BenchValue value, int index, double relative) {
+    requireIndex(value, index);
+    if (!(relative >= 0 && relative <= 1)) {
+      throw new IllegalArgumentException(
+          "relative uncertainty " + relative + " of " + value.words() + " must be from 0 to 1");
+    }
+    if (value(value, index).isEmpty()) {
+      throw new IllegalArgumentException(
+          new BenchEntry(value, index).name() + " is not known, so it has no uncertainty");
+    }
+    return with(
+        v -> {
+          double[] old = v.uncertainties.getOrDefault(value, new double[0]);
+          double[] copy = Arrays.copyOf(old, Math.max(old.length, index + 1));
+          copy[index] = relative;
+          v.uncertainties.put(value, copy);
+        });
+  }
+
+  /**
+   * A number times a factor: what would be, were this disturbance stronger or weaker.
+   *
+   * @param value what it is
+   * @param index 0, or the axis, or the step, from 0
+   * @param factor factor on the number; on the amplitude of the noise of a density or of samples
+   * @return a copy
+   * @throws IllegalArgumentException if the number is not known or out of range after that
+   */
+  public Bench scaled(BenchValue value, int index, double factor) {
+    BenchEntry entry = new BenchEntry(value, index);
+    double old =
+        value(value, index)
+            .orElseThrow(() -> new IllegalArgumentException(entry.name() + " is not known"));
+    value.requireAllowed(factor * old, factor * old);
+    return with(
+        v -> {
+          if (v.samples.containsKey(value)) {
+            v.samples.get(value).computeIfPresent(index, (i, s) -> s.scaled(factor));
+          }
+          if (v.densities.containsKey(value)) {
+            v.densities.get(value).computeIfPresent(index, (i, d) -> d.scaled(factor * factor));
+          }
+          double[] numbers = v.numbers.get(value);
+          if (numbers != null && index < numbers.length) {
+            double[] copy = numbers.clone();
+            copy[index] *= factor;
+            v.numbers.put(value, copy);
+          }
+        });
+  }
+
+  /**
+   * One number of the bench.
+   *
+   * @param value what it is
+   * @param index 0, or the axis, or the step, from 0
+   * @return the number in the SI unit of the value, the root mean square of samples, 1 for a
+   *     density; empty if it is not known
+   */
+  public OptionalDouble value(BenchValue value, int index) {
+    requireIndex(value, index);
+    if (value == BenchValue.FREQUENCY_NOISE_DENSITY
+        || value == BenchValue.INTENSITY_NOISE_DENSITY) {
+      return density(value, index).isPresent() ? OptionalDouble.of(1) : OptionalDouble.empty();
+    }
+    Optional<Spread> sampled = samples(value, index);
+    if (sampled.isPresent()) {
+      return OptionalDouble.of(sampled.get().rms());
+    }
+    double[] numbers = values.numbers.get(value);
+    return numbers == null || index >= numbers.length
+        ? OptionalDouble.empty()
+        : OptionalDouble.of(numbers[index]);
+  }
+
+  private static void requireIndex(BenchValue value, int index) {
+    int most =
+        switch (value.arity()) {
+          case ONE -> 0;
+          case AXES -> 2;
+          case STEPS -> Integer.MAX_VALUE;
+        };
+    if (index < 0 || index > most) {
+      throw new IllegalArgumentException(
+          value.words() + " has no index " + index + "; allowed: 0 to " + most);
     }
   }
 
-  private static void requireNotNegative(double value, String what) {
-    if (!(value >= 0 && value < Double.POSITIVE_INFINITY)) {
-      throw new IllegalArgumentException(what + " must be at least zero and finite");
+  private Optional<Spread> samples(BenchValue value, int index) {
+    return Optional.ofNullable(values.samples.getOrDefault(value, Map.of()).get(index));
+  }
+
+  private Optional<NoiseDensity> density(BenchValue value, int step) {
+    return Optional.ofNullable(values.densities.getOrDefault(value, Map.of()).get(step));
+  }
+
+  /**
+   * Whether anything is known of a value.
+   *
+   * @param value what it is
+   * @return true if there is a number, a sample or a density, for any step
+   */
+  public boolean isKnown(BenchValue value) {
+    return entries().stream().anyMatch(e -> e.value() == value);
+  }
+
+  /**
+   * How a value differs from shot to shot.
+   *
+   * @param value what it is, a root mean square
+   * @param index 0, or the step, from 0
+   * @return the samples, or a Gaussian of the given root mean square; empty if neither is known
+   */
+  public Optional<Spread> spread(BenchValue value, int index) {
+    Optional<Spread> sampled = samples(value, index);
+    if (sampled.isPresent()) {
+      return sampled;
     }
+    OptionalDouble rms = value(value, index);
+    return rms.isPresent() ? Optional.of(Spread.gaussian(rms.getAsDouble())) : Optional.empty();
+  }
+
+  /**
+   * How well a number is known.
+   *
+   * @param value what it is
+   * @param index 0, or the axis, or the step, from 0
+   * @return standard uncertainty over the number; 0 where none was stated
+   */
+  public double relativeUncertainty(BenchValue value, int index) {
+    double[] stated = values.uncertainties.getOrDefault(value, new double[0]);
+    return index < stated.length ? stated[index] : 0;
+  }
+
+  /**
+   * Every number that is known.
+   *
+   * @return an immutable list in the order of {@link BenchValue}
+   */
+  public List<BenchEntry> entries() {
+    List<BenchEntry> known = new ArrayList<>();
+    for (BenchValue value : BenchValue.values()) {
+      int count = values.numbers.getOrDefault(value, new double[0]).length;
+      for (Map<Integer, ?> map :
+          List.of(
+              values.samples.getOrDefault(value, Map.of()),
+              values.densities.getOrDefault(value, Map.of()))) {
+        for (int index : map.keySet()) {
+          count = Math.max(count, index + 1);
+        }
+      }
+      for (int i = 0; i < count; i++) {
+        if (value(value, i).isPresent()) {
+          known.add(new BenchEntry(value, i));
+        }
+      }
+    }
+    return List.copyOf(known);
+  }
+
+  private <Q> Optional<Q> one(BenchValue value, Function<Double, Q> quantity) {
+    OptionalDouble number = value(value, 0);
+    return number.isPresent()
+        ? Optional.of(quantity.apply(number.getAsDouble()))
+        : Optional.empty();
+  }
+
+  private <Q> Optional<List<Q>> all(BenchValue value, Function<Double, Q> quantity) {
+    return Optional.ofNullable(values.numbers.get(value))
+        .map(n -> Arrays.stream(n).mapToObj(quantity::apply).toList());
   }
 
   /**
@@ -192,16 +553,16 @@ public final class Bench {
    * @return the temperature, if known
    */
   public Optional<Temperature> temperature() {
-    return Optional.ofNullable(values.temperature);
+    return one(BenchValue.TEMPERATURE, Temperature::ofKelvin);
   }
 
   /**
-   * Trap frequencies along lab x, y and z.
+   * Trap frequencies along x, y, z.
    *
    * @return a list of three frequencies, if known
    */
   public Optional<List<Frequency>> trapFrequencies() {
-    return Optional.ofNullable(values.trapFrequencies);
+    return all(BenchValue.TRAP_FREQUENCY, Frequency::ofHertz);
   }
 
   /**
@@ -210,7 +571,7 @@ public final class Bench {
    * @return the temperature, if known
    */
   public Optional<Temperature> environment() {
-    return Optional.ofNullable(values.environment);
+    return one(BenchValue.ENVIRONMENT_TEMPERATURE, Temperature::ofKelvin);
   }
 
   /**
@@ -219,7 +580,7 @@ public final class Bench {
    * @return the spread, if known
    */
   public Optional<MagneticField> magneticNoise() {
-    return Optional.ofNullable(values.magneticNoise);
+    return one(BenchValue.MAGNETIC_NOISE, MagneticField::ofTesla);
   }
 
   /**
@@ -228,7 +589,7 @@ public final class Bench {
    * @return the field, if known
    */
   public Optional<ElectricField> electricField() {
-    return Optional.ofNullable(values.electricField);
+    return one(BenchValue.ELECTRIC_FIELD, ElectricField::ofVoltsPerMetre);
   }
 
   /**
@@ -237,43 +598,93 @@ public final class Bench {
    * @return the full widths at half maximum, if known
    */
   public Optional<List<Frequency>> linewidths() {
-    return Optional.ofNullable(values.linewidths);
+    return all(BenchValue.LINEWIDTH, Frequency::ofHertz);
   }
 
   /**
    * Slow frequency errors, one per step.
    *
-   * @return the root mean squares, if known
+   * @return the root mean squares, if given as such
    */
   public Optional<List<Frequency>> drifts() {
-    return Optional.ofNullable(values.drifts);
+    return all(BenchValue.DRIFT, Frequency::ofHertz);
   }
 
   /**
    * Relative intensity noise, one per step.
    *
-   * @return the root mean squares, if known
+   * @return the root mean squares, if given as such
    */
   public Optional<List<Double>> intensityNoise() {
-    return Optional.ofNullable(values.intensityNoise);
+    return all(BenchValue.INTENSITY_NOISE, Double::valueOf);
   }
 
   /**
-   * Checks that every list has one value per step.
+   * Spectrum of the frequency noise of a laser.
    *
-   * @param steps number of steps of the drive
-   * @throws IllegalArgumentException if a list is shorter or longer; the message names it
+   * @param step index of the step, from 0
+   * @return one-sided density, Hz²/Hz, if known
    */
-  public void requireSteps(int steps) {
-    requireLength(values.linewidths, steps, "linewidth");
-    requireLength(values.drifts, steps, "drift");
-    requireLength(values.intensityNoise, steps, "intensity_noise");
+  public Optional<NoiseDensity> frequencyNoiseDensity(int step) {
+    return density(BenchValue.FREQUENCY_NOISE_DENSITY, step);
   }
 
-  private static void requireLength(List<?> values, int steps, String what) {
-    if (values != null && values.size() != steps) {
-      throw new IllegalArgumentException(
-          what + " has " + values.size() + " values, but the drive has " + steps + " steps");
+  /**
+   * Spectrum of the relative intensity noise of a beam.
+   *
+   * @param step index of the step, from 0
+   * @return one-sided density, 1/Hz, if known
+   */
+  public Optional<NoiseDensity> intensityNoiseDensity(int step) {
+    return density(BenchValue.INTENSITY_NOISE_DENSITY, step);
+  }
+
+  /**
+   * Whether the atom flies through the beams during the pulse.
+   *
+   * @return false if it is taken to stand still
+   */
+  public boolean movesDuringPulse() {
+    return values.motion;
+  }
+
+  /**
+   * Checks that every list has one value per step, and that no laser's white noise counts twice.
+   *
+   * @param steps number of steps of the drive
+   * @throws IllegalArgumentException if a list is shorter or longer, samples or a density belong to
+   *     no step, or a laser has a linewidth as well as a density; the message names it
+   */
+  public void requireSteps(int steps) {
+    values.numbers.forEach(
+        (value, numbers) -> {
+          if (value.arity() == BenchValue.Arity.STEPS && numbers.length != steps) {
+            throw new IllegalArgumentException(
+                value.key()
+                    + " has "
+                    + numbers.length
+                    + " values, but the drive has "
+                    + steps
+                    + " steps");
+          }
+        });
+    for (BenchEntry entry : entries()) {
+      if (entry.value().arity() == BenchValue.Arity.STEPS && entry.index() >= steps) {
+        throw new IllegalArgumentException(
+            entry.name() + " is given, but the drive has " + steps + " steps");
+      }
+    }
+    for (int k = 0; k < steps; k++) {
+      double linewidth = value(BenchValue.LINEWIDTH, k).orElse(0);
+      if (linewidth > 0 && frequencyNoiseDensity(k).isPresent()) {
+        throw new IllegalArgumentException(
+            "laser "
+                + (k + 1)
+                + " has a linewidth of "
+                + linewidth
+                + " Hz and a frequency noise density; allowed: one of them (or a linewidth of 0), as"
+                + " its white noise would count twice");
+      }
     }
   }
 }

@@ -1,0 +1,26 @@
+package org.toprung.budget.bench;
+
+/**
+ * One number of a bench.
+ *
+ * @param value what it is
+ * @param index 0, or the axis, or the step, from 0
+ */
+public record BenchEntry(BenchValue value, int index) {
+
+  /**
+   * Name for people.
+   *
+   * @return such as {@code linewidth, step 1} or {@code trap frequency, z}
+   */
+  public String name() {
+    switch (value.arity()) {
+      case AXES:
+        return value.words() + ", " + "xyz".charAt(index);
+      case STEPS:
+        return value.words() + ", step " + (index + 1);
+      default:
+        return value.words();
+    }
+  }
+}

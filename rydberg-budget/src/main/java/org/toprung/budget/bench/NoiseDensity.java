@@ -1,0 +1,274 @@
+package org.toprung.budget.bench;
+
+import java.io.IOException;
+import java.io.UncheckedIOException;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * A one-sided power spectral density of noise, tabulated: frequencies in Hz, and per Hz the square
+ * of what fluctuates, Hz²/Hz for the frequency of a laser and 1/Hz for relative intensity.
+ *
+ * <p>Between two entries it is a power law, a straight line on logarithmic axes (a straight line on
+ * linear axes where an entry is zero); outside the table it is zero.
+ *
+ * <p>Immutable and thread-safe.
+ */
+public final class NoiseDensity {
+  private final double[] hertz;
+  private final double[] perHertz;
+
+  private NoiseDensity(double[] hertz, double[] perHertz) {
+    this.hertz = hertz;
+    this.perHertz = perHertz;
+  }
+
+  /**
+   * A table.
+   *
+   * @param hertz frequencies, Hz, positive and rising, at least two; copied
+   * @param perHertz density at each, at least 0; copied
+   * @return the density
+   * @throws IllegalArgumentException if the table is shorter, unsorted, negative or not finite; the
+   *     message names the entry, counted from 1
+   */
+  public static NoiseDensity of(double[] hertz, double[] perHertz) {
+    if (hertz.length != perHertz.length) {
+      throw new IllegalArgumentException(
+          "noise density: given "
+              + hertz.length
+              + " frequencies and "
+              + perHertz.length
+              + " values; allowed: as many of each");
+    }
+    double[] f = hertz.clone();
+    double[] s = perHertz.clone();
+    for (int i = 0; i < f.length; i++) {
+      String problem = problem(i == 0 ? 0 : f[i - 1], f[i], s[i]);
+      if (problem != null) {
+        throw new IllegalArgumentException("noise density, entry " + (i + 1) + ": " + problem);
+      }
+    }
+    requireTwo(f.length, "noise density");
+    return new NoiseDensity(f, s);
+  }
+
+  private static void requireTwo(int rows, String name) {
+    if (rows < 2) {
+      throw new IllegalArgumentException(
+          name + ": given " + rows + " entries; allowed: at least 2");
+    }
+  }
+
+  private static String problem(double before, double f, double s) {
+    if (!(f > 0 && f < Double.POSITIVE_INFINITY)) {
+      return "given frequency " + f + " Hz; allowed: positive and finite";
+    }
+    if (!(f > before)) {
+      return "given frequency " + f + " Hz after " + before + " Hz; allowed: rising frequencies";
+    }
+    if (!(s >= 0 && s < Double.POSITIVE_INFINITY)) {
+      return "given density " + s + "; allowed: at least 0 and finite";
+    }
+    return null;
+  }
+
+  /**
+   * Reads a table of two columns from a file.
+   *
+   * @param file text in UTF-8: on each line a frequency in Hz and the density, separated by a
+   *     comma, a semicolon or blanks; empty lines and lines that begin with # are skipped
+   * @return the density
+   * @throws UncheckedIOException if the file cannot be read
+   * @throws IllegalArgumentException if a line is no such pair, or the table is no density; the
+   *     message names file and line
+   */
+  public static NoiseDensity read(Path file) {
+    try {
+      return parse(Files.readString(file, StandardCharsets.UTF_8), file.toString());
+    } catch (IOException e) {
+      throw new UncheckedIOException("cannot read the noise density " + file, e);
+    }
+  }
+
+  /**
+   * Reads a table of two columns from text.
+   *
+   * @param text as in {@link #read(Path)}
+   * @param name what messages call it
+   * @return the density
+   * @throws IllegalArgumentException if a line is no pair of numbers, or the table is no density;
+   *     the message names the line
+   */
+  public static NoiseDensity parse(String text, String name) {
+    List<double[]> rows = new ArrayList<>();
+    int line = 0;
+    for (String raw : text.split("\n", -1)) {
+      line++;
+      String content = raw.strip();
+      if (content.isEmpty() || content.startsWith("#")) {
+        continue;
+      }
+      double[] row = row(content, name + ", line " + line);
+      String problem = problem(rows.isEmpty() ? 0 : rows.get(rows.size() - 1)[0], row[0], row[1]);
+      if (problem != null) {
+        throw new IllegalArgumentException(name + ", line " + line + ": " + problem);
+      }
+      rows.add(row);
+    }
+    requireTwo(rows.size(), name);
+    return new NoiseDensity(
+        rows.stream().mapToDouble(r -> r[0]).toArray(),
+        rows.stream().mapToDouble(r -> r[1]).toArray());
+  }
+
+  private static double[] row(String content, String where) {
+    String[] parts = content.split("\\s*[,;]\\s*|\\s+");
+    try {
+      if (parts.length == 2) {
+        return new double[] {Double.parseDouble(parts[0]), Double.parseDouble(parts[1])};
+      }
+    } catch (NumberFormatException e) {
+      // said below
+    }
+    throw new IllegalArgumentException(
+        where
+            + ": given \""
+            + content
+            + "\"; allowed: a frequency in Hz and a density, two numbers");
+  }
+
+  /**
+   * The density at a frequency.
+   *
+   * @param frequency Hz
+   * @return the density; 0 outside the table
+   */
+  public double at(double frequency) {
+    int last = hertz.length - 1;
+    if (!(frequency >= hertz[0] && frequency <= hertz[last])) {
+      return 0;
+    }
+    int i = segment(frequency);
+    if (isLinear(i)) {
+      double part = (frequency - hertz[i]) / (hertz[i + 1] - hertz[i]);
+      return perHertz[i] + part * (perHertz[i + 1] - perHertz[i]);
+    }
+    return perHertz[i] * Math.pow(frequency / hertz[i], exponent(i));
+  }
+
+  private int segment(double frequency) {
+    int low = 0;
+    int high = hertz.length - 1;
+    while (high - low > 1) {
+      int middle = (low + high) >>> 1;
+      if (hertz[middle] <= frequency) {
+        low = middle;
+      } else {
+        high = middle;
+      }
+    }
+    return low;
+  }
+
+  private boolean isLinear(int i) {
+    return perHertz[i] == 0 || perHertz[i + 1] == 0;
+  }
+
+  private double exponent(int i) {
+    return Math.log(perHertz[i + 1] / perHertz[i]) / Math.log(hertz[i + 1] / hertz[i]);
+  }
+
+  /**
+   * Variance of the noise between two frequencies: the exact integral of the interpolated density.
+   *
+   * @param from lower frequency, Hz
+   * @param to upper frequency, Hz, at least the lower
+   * @return the integral
+   * @throws IllegalArgumentException if the frequencies are not in order
+   */
+  public double power(double from, double to) {
+    if (!(from <= to)) {
+      throw new IllegalArgumentException(
+          "frequencies from " + from + " Hz to " + to + " Hz must be in order");
+    }
+    double sum = 0;
+    for (int i = 0; i < hertz.length - 1; i++) {
+      double a = Math.max(from, hertz[i]);
+      double b = Math.min(to, hertz[i + 1]);
+      if (a < b) {
+        sum += area(i, a, b);
+      }
+    }
+    return sum;
+  }
+
+  private double area(int i, double a, double b) {
+    if (isLinear(i)) {
+      return 0.5 * (at(a) + at(b)) * (b - a);
+    }
+    double exponent = exponent(i) + 1;
+    double x = exponent * Math.log(b / a);
+    // a·S(a)·((b/a)^exponent − 1)/exponent, without loss where the exponent is near 0
+    double growth = x == 0 ? 1 : Math.expm1(x) / x;
+    return a * at(a) * Math.log(b / a) * growth;
+  }
+
+  /**
+   * Root mean square of the noise over the whole table.
+   *
+   * @return the root of the integral
+   */
+  public double rms() {
+    return Math.sqrt(power(lowestHertz(), highestHertz()));
+  }
+
+  /**
+   * The lowest frequency.
+   *
+   * @return Hz
+   */
+  public double lowestHertz() {
+    return hertz[0];
+  }
+
+  /**
+   * The highest frequency.
+   *
+   * @return Hz
+   */
+  public double highestHertz() {
+    return hertz[hertz.length - 1];
+  }
+
+  /**
+   * The tabulated frequencies.
+   *
+   * @return a copy, Hz, rising
+   */
+  public double[] frequencies() {
+    return hertz.clone();
+  }
+
+  /**
+   * Multiplies the density.
+   *
+   * @param factor at least 0
+   * @return a copy
+   * @throws IllegalArgumentException if the factor is negative or not finite
+   */
+  public NoiseDensity scaled(double factor) {
+    if (!(factor >= 0 && factor < Double.POSITIVE_INFINITY)) {
+      throw new IllegalArgumentException(
+          "factor " + factor + " on a noise density must be at least 0 and finite");
+    }
+    double[] scaled = perHertz.clone();
+    for (int i = 0; i < scaled.length; i++) {
+      scaled[i] *= factor;
+    }
+    return new NoiseDensity(hertz, scaled);
+  }
+}

@@ -1,0 +1,145 @@
+package org.toprung.budget.bench;
+
+import java.util.function.DoubleUnaryOperator;
+import java.util.random.RandomGenerator;
+import org.apache.commons.math4.legacy.analysis.integration.gauss.GaussIntegrator;
+import org.apache.commons.math4.legacy.analysis.integration.gauss.GaussIntegratorFactory;
+
+/**
+ * How a number differs from its calibrated value from shot to shot: a Gaussian of given root mean
+ * square about zero, or samples that are equally likely, for what has tails.
+ *
+ * <p>Immutable and thread-safe.
+ */
+public final class Spread {
+  private static final int ORDER = 21;
+  private static final double[] POINTS = new double[ORDER];
+  private static final double[] WEIGHTS = new double[ORDER];
+
+  static {
+    GaussIntegrator rule = new GaussIntegratorFactory().hermite(ORDER);
+    for (int i = 0; i < ORDER; i++) {
+      // the rule has weight exp(−x²), the normal distribution exp(−x²/2)/√2π
+      POINTS[i] = Math.sqrt(2) * rule.getPoint(i);
+      WEIGHTS[i] = rule.getWeight(i) / Math.sqrt(Math.PI);
+    }
+  }
+
+  private final double rms;
+  private final double[] samples; // null for a Gaussian
+
+  private Spread(double rms, double[] samples) {
+    this.rms = rms;
+    this.samples = samples;
+  }
+
+  /**
+   * A Gaussian about zero.
+   *
+   * @param rms root mean square; its sign is the sign of what is drawn
+   * @return the spread
+   * @throws IllegalArgumentException if the value is not finite
+   */
+  public static Spread gaussian(double rms) {
+    if (!(Math.abs(rms) < Double.POSITIVE_INFINITY)) {
+      throw new IllegalArgumentException("root mean square " + rms + " must be finite");
+    }
+    return new Spread(rms, null);
+  }
+
+  /**
+   * Samples.
+   *
+   * @param values deviations from the calibrated value, equally likely, at least one; copied
+   * @return the spread
+   * @throws IllegalArgumentException if there is none or one is not finite
+   */
+  public static Spread of(double... values) {
+    if (values.length == 0) {
+      throw new IllegalArgumentException("samples: given none; allowed: at least one");
+    }
+    double square = 0;
+    for (double value : values) {
+      if (!(Math.abs(value) < Double.POSITIVE_INFINITY)) {
+        throw new IllegalArgumentException("sample " + value + " must be finite");
+      }
+      square += value * value / values.length;
+    }
+    return new Spread(Math.sqrt(square), values.clone());
+  }
+
+  /**
+   * Root mean square about the calibrated value.
+   *
+   * @return the root mean square, at least 0
+   */
+  public double rms() {
+    return Math.abs(rms);
+  }
+
+  /**
+   * Whether this is a Gaussian.
+   *
+   * @return false for samples
+   */
+  public boolean isGaussian() {
+    return samples == null;
+  }
+
+  /**
+   * The samples.
+   *
+   * @return a copy; empty for a Gaussian
+   */
+  public double[] samples() {
+    return samples == null ? new double[0] : samples.clone();
+  }
+
+  /**
+   * The same spread in other units or of another size.
+   *
+   * @param factor what every deviation is multiplied by
+   * @return the spread
+   */
+  public Spread scaled(double factor) {
+    if (samples == null) {
+      return gaussian(factor * rms);
+    }
+    double[] multiplied = samples.clone();
+    for (int i = 0; i < multiplied.length; i++) {
+      multiplied[i] *= factor;
+    }
+    return of(multiplied);
+  }
+
+  /**
+   * Mean of a function of the deviation: 21 points of Gauss and Hermite, exact for polynomials to
+   * degree 41, or all samples.
+   *
+   * @param f the function
+   * @return its mean
+   */
+  public double average(DoubleUnaryOperator f) {
+    double sum = 0;
+    if (samples == null) {
+      for (int i = 0; i < ORDER; i++) {
+        sum += WEIGHTS[i] * f.applyAsDouble(rms * POINTS[i]);
+      }
+      return sum;
+    }
+    for (double sample : samples) {
+      sum += f.applyAsDouble(sample);
+    }
+    return sum / samples.length;
+  }
+
+  /**
+   * Draws a deviation.
+   *
+   * @param random source of random numbers
+   * @return a deviation
+   */
+  public double draw(RandomGenerator random) {
+    return samples == null ? rms * random.nextGaussian() : samples[random.nextInt(samples.length)];
+  }
+}
