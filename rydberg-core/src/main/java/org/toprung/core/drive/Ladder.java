@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import org.toprung.core.atom.Level;
+import org.toprung.core.linear.Decoupling;
 
 /**
  * The driven sublevels and their couplings in the frame that rotates with the lasers: the numbers
@@ -168,19 +169,7 @@ public final class Ladder {
     Arrays.fill(re, 0);
     Arrays.fill(im, 0);
     for (int i = 0; i < n; i++) {
-      State s = states.get(i);
-      double energy = s.energyHertz() + s.hertzPerTesla() * setting.magneticOffsetTesla();
-      for (int k = 0; k < steps; k++) {
-        double a = setting.fieldFactor(k);
-        energy += a * a * farShift[i][k];
-        if (k < s.rung()) {
-          energy -= setting.laserOffsetHertz(k);
-        }
-      }
-      if (s.rung() == steps) {
-        energy += setting.targetShiftHertz();
-      }
-      re[i * n + i] = energy;
+      re[i * n + i] = diagonalHertz(i, setting);
     }
     for (Coupling c : couplings) {
       double half = 0.5 * strength(c, setting);
@@ -188,6 +177,38 @@ public final class Ladder {
       im[c.upper() * n + c.lower()] += half * c.rabiImHertz();
       re[c.lower() * n + c.upper()] += half * c.rabiReHertz();
       im[c.lower() * n + c.upper()] -= half * c.rabiImHertz();
+    }
+  }
+
+  private double diagonalHertz(int i, LadderSetting setting) {
+    State s = states.get(i);
+    double energy = s.energyHertz() + s.hertzPerTesla() * setting.magneticOffsetTesla();
+    for (int k = 0; k < steps; k++) {
+      double a = setting.fieldFactor(k);
+      energy += a * a * farShift[i][k];
+      if (k < s.rung()) {
+        energy -= setting.laserOffsetHertz(k);
+      }
+    }
+    return s.rung() == steps ? energy + setting.targetShiftHertz() : energy;
+  }
+
+  /** A workspace to decouple some of the states from the others. */
+  Decoupling decoupling(int... populated) {
+    int[] lower = couplings.stream().mapToInt(Coupling::lower).toArray();
+    int[] upper = couplings.stream().mapToInt(Coupling::upper).toArray();
+    return Decoupling.of(size(), populated, lower, upper);
+  }
+
+  /** Writes the Hamiltonian over h without loss, Hz, into a workspace. */
+  void fill(LadderSetting setting, Decoupling out) {
+    for (int i = 0; i < size(); i++) {
+      out.setDiagonal(i, diagonalHertz(i, setting), 0);
+    }
+    for (int c = 0; c < couplings.size(); c++) {
+      Coupling coupling = couplings.get(c);
+      double half = 0.5 * strength(coupling, setting);
+      out.setCoupling(c, half * coupling.rabiReHertz(), half * coupling.rabiImHertz());
     }
   }
 
