@@ -21,10 +21,10 @@ import org.toprung.core.drive.DriveSetup;
 import org.toprung.core.quantity.ElectricField;
 
 /** Drives and benches that several tests share. */
-final class TestDrives {
+public final class TestDrives {
   private TestDrives() {}
 
-  static DriveSetup rubidium() {
+  public static DriveSetup rubidium() {
     return Drive.of(Species.RUBIDIUM_87)
         .from(Sublevel.hyperfine("5S1/2", 2, 2))
         .step(
@@ -41,7 +41,7 @@ final class TestDrives {
         .in(gauss(4));
   }
 
-  static DriveSetup caesium() {
+  public static DriveSetup caesium() {
     return Drive.of(Species.CAESIUM_133)
         .from(Sublevel.hyperfine("6S1/2", 4, 4))
         .step(
@@ -59,7 +59,7 @@ final class TestDrives {
   }
 
   /** Both beams across the field, with polarizations that reach more than one Rydberg sublevel. */
-  static DriveSetup impureRubidium() {
+  public static DriveSetup impureRubidium() {
     return Drive.of(Species.RUBIDIUM_87)
         .from(Sublevel.hyperfine("5S1/2", 2, 0))
         .step(
@@ -74,7 +74,7 @@ final class TestDrives {
         .in(gauss(12));
   }
 
-  static Bench bench() {
+  public static Bench bench() {
     return Bench.unknown()
         .withTemperature(microkelvin(10))
         .withTrapFrequencies(kilohertz(80), kilohertz(80), kilohertz(15))

@@ -200,6 +200,24 @@ public final class Decoupling {
   }
 
   /**
+   * Solves from a solution nearby and keeps the new one; the resolvents stay the old ones.
+   *
+   * @param near solution at a Hamiltonian that is not far away
+   * @return the solution at the present Hamiltonian
+   * @throws ArithmeticException if P and Q cannot be told apart; the message gives the number of
+   *     iterations
+   */
+  public Anchor anchor(Anchor near) {
+    System.arraycopy(near.xRe, 0, xRe, 0, xRe.length);
+    System.arraycopy(near.xIm, 0, xIm, 0, xIm.length);
+    if (!tryIterate(near.resolvents, ANCHOR_CLOSE, SLOW)) {
+      return anchor();
+    }
+    normalize();
+    return new Anchor(xRe.clone(), xIm.clone(), near.resolvents);
+  }
+
+  /**
    * Solves for the present Hamiltonian.
    *
    * @param near solution at a Hamiltonian that is not far away
