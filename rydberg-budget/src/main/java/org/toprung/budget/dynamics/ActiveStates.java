@@ -11,12 +11,14 @@ import org.toprung.core.linear.Decoupling;
  *
  * <p>They are the start, the wanted states and every ground or Rydberg state less than half as far
  * from the start's energy as the nearest intermediate state: the rest is as far off as the
- * intermediate level itself. Where these cannot be decoupled from the rest, an intermediate state
- * is near resonance, and all states below the first wide gap in |energy| that can be decoupled take
- * part; all of the ladder, if there is no such gap.
+ * intermediate level itself. Without an intermediate level they are the states within a gigahertz,
+ * since edges of a pulse last longer than its inverse. Where these cannot be decoupled from the
+ * rest, an intermediate state is near resonance, and all states below the first wide gap in
+ * |energy| that can be decoupled take part; all of the ladder, if there is no such gap.
  */
 final class ActiveStates {
   private static final double WIDE_GAP = 4; // ratio of neighbouring energies
+  private static final double FOLLOWS_ANY_EDGE = 1e9; // Hz
 
   private ActiveStates() {}
 
@@ -48,7 +50,7 @@ final class ActiveStates {
   }
 
   private static int[] natural(Ladder ladder) {
-    double nearest = Double.POSITIVE_INFINITY;
+    double nearest = ladder.steps() == 1 ? 2 * FOLLOWS_ANY_EDGE : Double.POSITIVE_INFINITY;
     for (int i = 0; i < ladder.size(); i++) {
       if (ladder.isIntermediate(i)) {
         nearest = Math.min(nearest, Math.abs(ladder.states().get(i).energyHertz()));

@@ -42,10 +42,12 @@ public final class CalibratedProgram {
   private final PulseProgram program;
   private final Curve curve;
   private final double bareOffset; // Hz
+  private final double rabiFactor;
 
   private CalibratedProgram(Ladder ladder, Pulse pulse, double rabiFactor) {
     this.ladder = ladder;
     this.pulse = pulse;
+    this.rabiFactor = rabiFactor;
     this.bareOffset = ladder.states().get(Elimination.of(ladder).strongestWanted()).energyHertz();
     Function<double[], LadderResonance> resonances = PulsePlanner.resonances(ladder);
     double[] ones = new double[ladder.steps()];
@@ -181,6 +183,15 @@ public final class CalibratedProgram {
    */
   public double rabiHertz() {
     return curve.full.rabiHertz();
+  }
+
+  /**
+   * Mean effective Rabi frequency of the shots over 2π with every beam at full power.
+   *
+   * @return the Rabi frequency, Hz
+   */
+  public double meanRabiHertz() {
+    return rabiFactor * curve.full.rabiHertz();
   }
 
   /**

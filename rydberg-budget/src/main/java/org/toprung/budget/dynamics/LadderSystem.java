@@ -108,18 +108,31 @@ public final class LadderSystem implements DrivenSystem {
     return amplitude / (2 * Math.PI * calibrated.program().seconds());
   }
 
+  /**
+   * Whether no intermediate state takes part, so that start and target are two levels.
+   *
+   * @return false where an intermediate state is nearly resonant
+   */
+  public boolean decouplesIntermediates() {
+    return Arrays.stream(plan.active()).noneMatch(calibrated.ladder()::isIntermediate);
+  }
+
   static Outcomes outcomes(CalibratedProgram calibrated, int[] active) {
-    int steps = calibrated.ladder().steps();
+    return outcomes(calibrated, calibrated.ladder(), active);
+  }
+
+  static Outcomes outcomes(CalibratedProgram calibrated, Ladder ladder, int[] active) {
+    int steps = ladder.steps();
     double[] ones = new double[steps];
     Arrays.fill(ones, 1);
-    LadderTerms terms = new LadderTerms(calibrated.ladder());
+    LadderTerms terms = new LadderTerms(ladder);
     Decoupling work = terms.decoupling(active);
     terms.fill(ones, calibrated.fullPowerOffsetHertz(), ShotSetting.nominal(steps), work);
     work.anchor();
     double[] re = new double[active.length * active.length];
     double[] im = new double[re.length];
     work.effective(re, im);
-    return Outcomes.of(calibrated, active, re, im);
+    return Outcomes.of(calibrated, ladder, active, re, im);
   }
 
   private static double difference(double[][] a, double[][] b) {

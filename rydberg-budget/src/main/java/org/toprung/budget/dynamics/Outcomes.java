@@ -27,12 +27,13 @@ final class Outcomes {
    * pulse gives it, and the one that the light shift gives it along the program.
    *
    * @param calibrated the program
+   * @param ladder the ladder, which may be another than it was calibrated on
    * @param active indices of the active states
    * @param re effective Hamiltonian at full power, real parts
    * @param im imaginary parts
    */
-  static Outcomes of(CalibratedProgram calibrated, int[] active, double[] re, double[] im) {
-    Ladder ladder = calibrated.ladder();
+  static Outcomes of(
+      CalibratedProgram calibrated, Ladder ladder, int[] active, double[] re, double[] im) {
     int p = active.length;
     int start = 0;
     while (active[start] != ladder.start()) {

@@ -245,6 +245,24 @@ public final class Ladder {
   }
 
   /**
+   * The same ladder with the field of one beam multiplied: couplings in proportion, light shifts by
+   * its square.
+   *
+   * @param step index of the step
+   * @param factor factor on the field, positive
+   * @return a new ladder
+   */
+  public Ladder withFieldScaled(int step, double factor) {
+    double[][] shifts = new double[farShift.length][];
+    for (int i = 0; i < shifts.length; i++) {
+      shifts[i] = farShift[i].clone();
+      shifts[i][step] *= factor * factor;
+    }
+    Ladder coupled = withElementScaled(step, factor);
+    return new Ladder(steps, states, coupled.couplings, shifts, start, wanted);
+  }
+
+  /**
    * The same ladder with the decay rate of the intermediate sublevels multiplied.
    *
    * @param factor factor, positive

@@ -1,0 +1,103 @@
+package org.toprung.budget.dynamics;
+
+import java.util.Arrays;
+import org.toprung.core.drive.Ladder;
+
+/**
+ * Error of a calibrated pulse on the whole ladder, without loss, when something stays wrong during
+ * the pulse.
+ *
+ * <p>Immutable and thread-safe.
+ */
+public final class LadderReaction {
+  private final CalibratedProgram calibrated;
+  private final LadderPlan plan;
+  private final Outcomes outcomes;
+  private final int start;
+
+  private LadderReaction(
+      CalibratedProgram calibrated, Ladder ladder, LadderPlan plan, Outcomes outcomes) {
+    this.calibrated = calibrated;
+    this.plan = plan;
+    this.outcomes = outcomes;
+    int first = 0;
+    while (plan.active()[first] != ladder.start()) {
+      first++;
+    }
+    this.start = first;
+  }
+
+  /**
+   * The reaction of a pulse.
+   *
+   * @param system the pulse on its ladder
+   * @return the reaction
+   */
+  public static LadderReaction of(LadderSystem system) {
+    return new LadderReaction(
+        system.calibrated(),
+        system.calibrated().ladder(),
+        system.plan(),
+        LadderSystem.outcomes(system.calibrated(), system.plan().active()));
+  }
+
+  /**
+   * The same program on another ladder.
+   *
+   * @param ladder the ladder
+   * @return the reaction
+   */
+  public LadderReaction on(Ladder ladder) {
+    double[] ones = new double[ladder.steps()];
+    Arrays.fill(ones, 1);
+    int[] active = ActiveStates.of(ladder, ones, calibrated.fullPowerOffsetHertz());
+    LadderPlan other =
+        LadderPlan.of(
+            calibrated,
+            ladder,
+            active,
+            plan.timeline(),
+            LadderSystem.accuracyHertz(calibrated, 1e-10));
+    return new LadderReaction(
+        calibrated, ladder, other, LadderSystem.outcomes(calibrated, ladder, active));
+  }
+
+  /**
+   * Error of the pulse as planned.
+   *
+   * @return the error by the goal of the pulse
+   */
+  public double error() {
+    double[] ones = new double[calibrated.ladder().steps()];
+    Arrays.fill(ones, 1);
+    return error(ones, 0, 1);
+  }
+
+  /**
+   * Error when the atom sees something else than planned.
+   *
+   * @param fieldFactor field of each beam over the planned one
+   * @param offsetHertz added to the frequency of the last laser, Hz
+   * @param stretch length of the pulse over the planned one
+   * @return the error by the goal of the pulse
+   */
+  public double error(double[] fieldFactor, double offsetHertz, double stretch) {
+    ShotSetting shot = ShotSetting.nominal(fieldFactor.length);
+    System.arraycopy(fieldFactor, 0, shot.fieldFactor, 0, fieldFactor.length);
+    shot.laserOffset[fieldFactor.length - 1] = offsetHertz;
+    EffectiveLadder effective = new EffectiveLadder(plan);
+    effective.load(shot);
+    int p = plan.size();
+    double[] re = new double[p];
+    double[] im = new double[p];
+    re[start] = 1;
+    double[] hRe = new double[p * p];
+    double[] hIm = new double[p * p];
+    Propagation propagation = new Propagation(p);
+    for (int m = 0; m < plan.timeline().segments(); m++) {
+      effective.segment(m, hRe, hIm);
+      propagation.advance(hRe, hIm, stretch * plan.timeline().seconds(m), re, im);
+    }
+    return outcomes.error(re, im);
+  }
+}
