@@ -7,6 +7,7 @@ import org.toprung.budget.bench.Bench;
 import org.toprung.budget.cause.Cause;
 import org.toprung.budget.cause.Causes;
 import org.toprung.budget.cause.PulseModel;
+import org.toprung.budget.dynamics.CalibratedProgram;
 import org.toprung.budget.dynamics.ShotSimulation;
 import org.toprung.budget.pulse.Pulse;
 import org.toprung.core.drive.Drive;
@@ -112,11 +113,11 @@ public final class Budget {
       throw new IllegalArgumentException(
           "a check takes 2 to " + MOST_SHOTS + " shots, not " + shots);
     }
-    double decay =
-        model.spontaneousPerSecond()
-            + bench.environment().map(model::blackbodyPerSecond).orElse(0.0);
     ShotSimulation.Result result =
-        new ShotSimulation(drive, model.setting(), model.seconds(), decay, bench)
+        ShotSimulation.of(drive, CalibratedProgram.of(drive.ladder(), pulse), bench)
+            .withDecay(
+                model.spontaneousPerSecond(),
+                bench.environment().map(model::blackbodyPerSecond).orElse(0.0))
             .run(shots, seed, progress);
     double difference = Math.abs(total - result.error());
     boolean agrees =

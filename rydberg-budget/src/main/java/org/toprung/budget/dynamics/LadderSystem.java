@@ -23,19 +23,22 @@ import org.toprung.core.linear.Decoupling;
  */
 public final class LadderSystem implements DrivenSystem {
   private static final double SETTLED = 3e-10;
-  private static final int FIRST_STEPS = 12;
+  private static final int FIRST_STEPS = 6;
   private static final int MOST_STEPS = 800;
 
   private final CalibratedProgram calibrated;
   private final LadderPlan plan;
   private final Outcomes outcomes;
+  private final int smoothSteps;
   private final int start;
   private final double[][] segmentRe;
   private final double[][] segmentIm;
   private final Map<List<Integer>, LadderDerivative> derivatives = new ConcurrentHashMap<>();
   private final Map<Integer, double[][]> dressed = new ConcurrentHashMap<>();
 
-  private LadderSystem(CalibratedProgram calibrated, LadderPlan plan, Outcomes outcomes) {
+  private LadderSystem(
+      CalibratedProgram calibrated, LadderPlan plan, Outcomes outcomes, int smoothSteps) {
+    this.smoothSteps = smoothSteps;
     this.calibrated = calibrated;
     this.plan = plan;
     this.outcomes = outcomes;
@@ -76,21 +79,30 @@ public final class LadderSystem implements DrivenSystem {
    *     program, though they can be at full power and in the dark
    */
   public static LadderSystem of(CalibratedProgram calibrated) {
-    int[] active = activeStates(calibrated);
+    return settled(calibrated, activeStates(calibrated), SETTLED);
+  }
+
+  /** Steps between breaks with which the final state is good to a figure. */
+  static int smoothSteps(CalibratedProgram calibrated, int[] active, double amplitude) {
+    LadderSystem system = settled(calibrated, active, amplitude);
+    return system.smoothSteps;
+  }
+
+  private static LadderSystem settled(
+      CalibratedProgram calibrated, int[] active, double amplitude) {
     Outcomes outcomes = outcomes(calibrated, active);
-    LadderSystem system = null;
+    double accuracy = accuracyHertz(calibrated, 0.3 * amplitude);
     double[][] last = null;
     for (int steps = FIRST_STEPS; ; steps *= 2) {
       Timeline timeline = Timeline.of(calibrated, steps, Double.POSITIVE_INFINITY);
-      LadderPlan plan =
-          LadderPlan.of(
-              calibrated, calibrated.ladder(), active, timeline, accuracyHertz(calibrated, 1e-10));
-      system = new LadderSystem(calibrated, plan, outcomes);
+      LadderPlan plan = LadderPlan.of(calibrated, calibrated.ladder(), active, timeline, accuracy);
+      LadderSystem system = new LadderSystem(calibrated, plan, outcomes, steps);
       if (timeline.samples().stream().allMatch(Timeline.Sample::isConstant)) {
         return system;
       }
       double[][] end = system.end();
-      if (last != null && difference(last, end) < SETTLED || 2 * steps > MOST_STEPS) {
+      // halving the steps of an integrator of order four leaves a fifteenth of the change
+      if (last != null && difference(last, end) < 15 * amplitude || 2 * steps > MOST_STEPS) {
         return system;
       }
       last = end;

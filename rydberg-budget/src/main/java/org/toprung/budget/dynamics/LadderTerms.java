@@ -31,7 +31,8 @@ final class LadderTerms {
       rung[i] = s.rung();
       energy[i] = s.energyHertz();
       decay[i] = s.decayPerSecond() / (4 * Math.PI);
-      hertzPerTesla[i] = s.hertzPerTesla();
+      // the start keeps its energy: only differences matter, to an idling atom too
+      hertzPerTesla[i] = s.hertzPerTesla() - ladder.states().get(ladder.start()).hertzPerTesla();
       for (int k = 0; k < steps; k++) {
         farShift[i * steps + k] = ladder.farShiftHertz(i, k);
       }

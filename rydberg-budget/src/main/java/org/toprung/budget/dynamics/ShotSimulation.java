@@ -1,124 +1,353 @@
 package org.toprung.budget.dynamics;
 
+import java.util.ArrayList;
 import java.util.List;
+import java.util.Set;
 import java.util.SplittableRandom;
+import java.util.concurrent.CancellationException;
+import java.util.concurrent.ExecutionException;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.ForkJoinPool;
+import java.util.concurrent.Future;
+import java.util.concurrent.atomic.AtomicBoolean;
 import java.util.concurrent.atomic.AtomicInteger;
 import java.util.function.IntConsumer;
-import java.util.stream.IntStream;
 import org.toprung.budget.bench.Bench;
+import org.toprung.budget.bench.BenchValue;
+import org.toprung.budget.bench.Disturbance;
+import org.toprung.budget.bench.Disturbance.Kind;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.Ladder;
-import org.toprung.core.drive.LadderSetting;
-import org.toprung.core.linear.ComplexMatrix;
-import org.toprung.core.linear.MatrixExponential;
 
 /**
  * Error of a pulse found by brute force: shots drawn from the disturbances of a bench, each
- * propagated on the full ladder.
+ * propagated on the ladder, whose far-off states are decoupled exactly for every shot.
  *
  * <p>Loss is non-Hermitian, −iΓ/4π on the diagonal (natural decay of the intermediate sublevels,
- * total decay of the Rydberg level): an atom that scattered or decayed counts as an error, even if
- * it comes back. White frequency noise of a Lorentzian line of full width Δν is a random walk of
- * the laser's phase with variance 2πΔν per second, applied as kicks between {@value #SEGMENTS}
- * equal segments whose propagator is computed once a shot.
+ * decay of the Rydberg level): an atom that scattered or decayed counts as an error, even if it
+ * comes back. White frequency noise of a Lorentzian line of full width Δν is a random walk of the
+ * laser's phase with variance 2πΔν per second. Tabulated densities are played as sums of tones. A
+ * phase turns the states above its laser's step, the small admixture of the other rungs being left
+ * out, which is a relative error of the order of the admixture's square. Intensity noise within a
+ * shot acts to first order in the intensity.
+ *
+ * <p>Atoms that do not begin in the start count as errors, and outcomes are read wrongly, with
+ * certainty in the mean: they move the mean by their probabilities and add no scatter.
  *
  * <p>Shot i of seed s uses its own generator, and partial sums are added in a fixed order, so that
- * the result does not depend on the number of threads.
+ * the result does not depend on the number of threads. Memory does not grow with the number of
+ * shots.
+ *
+ * <p>Immutable and thread-safe: each {@code with…} method gives a copy.
  */
 public final class ShotSimulation {
-  private static final int SEGMENTS = 64;
-  private static final int CHUNK = 50;
+  private static final int SMALLEST_CHUNK = 50;
+  private static final int MOST_CHUNKS = 4000;
   private static final long GOLDEN_GAMMA = 0x9E3779B97F4A7C15L;
 
-  private final Ladder ladder;
-  private final ShotNoise noise;
-  private final PulseFrame frame;
-  private final double rydbergDecay; // 1/s
-  private final double duration; // s
+  private final Drive drive;
+  private final CalibratedProgram calibrated;
+  private final Bench bench;
+  private final Options options;
+
+  private record Options(
+      Set<Disturbance> active,
+      double spontaneousPerSecond,
+      double blackbodyPerSecond,
+      double offsetHertz,
+      List<Ladder> variants) {}
 
   /**
    * Mean and spread of a set of shots.
    *
-   * @param error mean error, 1 − probability of the wanted outcome
+   * @param error mean error, 1 − success by the goal of the pulse
    * @param standardError standard error of the mean from the scatter of the shots
    */
   public record Result(double error, double standardError) {}
 
-  /**
-   * Prepares a simulation.
-   *
-   * @param drive the drive
-   * @param nominal setting of the pulse, with its frequency offset
-   * @param seconds duration of the pulse, s
-   * @param rydbergDecayPerSecond total decay rate of the Rydberg level, 1/s
-   * @param bench the disturbances; what is not given does not disturb
-   */
-  public ShotSimulation(
-      Drive drive,
-      LadderSetting nominal,
-      double seconds,
-      double rydbergDecayPerSecond,
-      Bench bench) {
-    this.ladder = drive.ladder();
-    this.noise = new ShotNoise(drive, nominal, bench);
-    this.frame = PulseFrame.of(ladder, nominal);
-    this.rydbergDecay = rydbergDecayPerSecond;
-    this.duration = seconds;
+  private ShotSimulation(Drive drive, CalibratedProgram calibrated, Bench bench, Options options) {
+    this.drive = drive;
+    this.calibrated = calibrated;
+    this.bench = bench;
+    this.options = options;
   }
 
   /**
-   * Runs the shots on the processors at hand.
+   * A simulation of everything on a bench but decay of the Rydberg level.
+   *
+   * @param drive the drive
+   * @param calibrated the pulse, calibrated on the drive's ladder
+   * @param bench the disturbances; what is not given does not disturb
+   * @return the simulation
+   * @throws IllegalArgumentException if the bench does not have one value per step of the drive
+   */
+  public static ShotSimulation of(Drive drive, CalibratedProgram calibrated, Bench bench) {
+    int steps = drive.steps().size();
+    bench.requireSteps(steps);
+    return new ShotSimulation(
+        drive, calibrated, bench, new Options(Disturbance.all(steps), 0, 0, 0, List.of()));
+  }
+
+  /**
+   * Restricts the disturbances.
+   *
+   * @param active the ones that disturb, if the bench knows them
+   * @return a copy
+   */
+  public ShotSimulation withDisturbances(Set<Disturbance> active) {
+    return with(
+        new Options(
+            Set.copyOf(active),
+            options.spontaneousPerSecond,
+            options.blackbodyPerSecond,
+            options.offsetHertz,
+            options.variants));
+  }
+
+  /**
+   * Sets the decay of the Rydberg level.
+   *
+   * @param spontaneousPerSecond rate of spontaneous decay, 1/s, at least 0
+   * @param blackbodyPerSecond rate of transitions and ionization by blackbody radiation, 1/s, at
+   *     least 0
+   * @return a copy
+   * @throws IllegalArgumentException if a rate is negative or not finite
+   */
+  public ShotSimulation withDecay(double spontaneousPerSecond, double blackbodyPerSecond) {
+    for (double rate : new double[] {spontaneousPerSecond, blackbodyPerSecond}) {
+      if (!(rate >= 0 && rate < Double.POSITIVE_INFINITY)) {
+        throw new IllegalArgumentException(
+            "decay rate " + rate + " 1/s must be at least 0 and finite");
+      }
+    }
+    return with(
+        new Options(
+            options.active,
+            spontaneousPerSecond,
+            blackbodyPerSecond,
+            options.offsetHertz,
+            options.variants));
+  }
+
+  /**
+   * Moves the last laser for all shots, for example to the mean of their resonances.
+   *
+   * @param hertz offset added to the calibrated frequency, Hz
+   * @return a copy
+   * @throws IllegalArgumentException if the offset is not finite
+   */
+  public ShotSimulation withLaserOffset(double hertz) {
+    if (!(Math.abs(hertz) < Double.POSITIVE_INFINITY)) {
+      throw new IllegalArgumentException("laser offset " + hertz + " Hz must be finite");
+    }
+    return with(
+        new Options(
+            options.active,
+            options.spontaneousPerSecond,
+            options.blackbodyPerSecond,
+            hertz,
+            options.variants));
+  }
+
+  /**
+   * Sets the ladders of impure light, one of which is drawn for each shot where {@link
+   * Kind#POLARIZATION} is active.
+   *
+   * @param variants ladders of the same states as the drive's, equally likely; none for pure light
+   * @return a copy
+   * @throws IllegalArgumentException if a ladder does not have the states of the drive's
+   */
+  public ShotSimulation withPolarizationVariants(List<Ladder> variants) {
+    for (Ladder variant : variants) {
+      if (!labels(variant).equals(labels(calibrated.ladder()))) {
+        throw new IllegalArgumentException(
+            "a ladder of impure light must have the states "
+                + labels(calibrated.ladder())
+                + ", given "
+                + labels(variant));
+      }
+    }
+    return with(
+        new Options(
+            options.active,
+            options.spontaneousPerSecond,
+            options.blackbodyPerSecond,
+            options.offsetHertz,
+            List.copyOf(variants)));
+  }
+
+  private static List<String> labels(Ladder ladder) {
+    return ladder.states().stream().map(Ladder.State::label).toList();
+  }
+
+  private ShotSimulation with(Options newOptions) {
+    return new ShotSimulation(drive, calibrated, bench, newOptions);
+  }
+
+  /**
+   * Runs the shots on the common pool.
    *
    * @param shots number of shots, at least 2
    * @param seed seed
    * @param progress told the number of shots done, from any thread, in rising order per thread
    * @return mean error and standard error
+   * @throws IllegalArgumentException if there are fewer than 2 shots
+   * @throws CancellationException if the waiting thread was interrupted; its interrupt flag is kept
+   * @throws ArithmeticException if a shot lies so far off that its dressed states cannot be told
+   *     apart
    */
   public Result run(int shots, long seed, IntConsumer progress) {
-    int chunks = (shots + CHUNK - 1) / CHUNK;
-    AtomicInteger done = new AtomicInteger();
-    List<double[]> sums =
-        IntStream.range(0, chunks)
-            .parallel()
-            .mapToObj(
-                c -> {
-                  int from = c * CHUNK;
-                  int to = Math.min(shots, from + CHUNK);
-                  double[] sum = chunk(from, to, seed);
-                  progress.accept(done.addAndGet(to - from));
-                  return sum;
-                })
-            .toList();
-    double mean = 0;
-    for (double[] s : sums) {
-      mean += s[0];
-    }
-    mean /= shots;
-    double variance = 0;
-    for (double[] s : sums) {
-      // second moments of a chunk about its own mean, moved to the common mean
-      double shift = s[0] / s[2] - mean;
-      variance += s[1] + s[2] * shift * shift;
-    }
-    variance /= shots - 1;
-    return new Result(mean, Math.sqrt(variance / shots));
+    return run(shots, seed, progress, ForkJoinPool.commonPool());
   }
 
-  private double[] chunk(int from, int to, long seed) {
-    int n = ladder.size();
-    Shot shot = new Shot(n);
-    double[] errors = new double[to - from];
-    double sum = 0;
-    for (int i = from; i < to; i++) {
-      errors[i - from] = shot.error(generator(seed, i));
-      sum += errors[i - from];
+  /**
+   * Runs the shots on an executor, in as many tasks as there are processors.
+   *
+   * @param shots number of shots, at least 2
+   * @param seed seed
+   * @param progress told the number of shots done, from any thread, in rising order per thread
+   * @param executor what runs the tasks; not one whose only thread is the caller
+   * @return mean error and standard error
+   * @throws IllegalArgumentException if there are fewer than 2 shots
+   * @throws CancellationException if the waiting thread was interrupted; its interrupt flag is kept
+   * @throws ArithmeticException if a shot lies so far off that its dressed states cannot be told
+   *     apart
+   */
+  public Result run(int shots, long seed, IntConsumer progress, ExecutorService executor) {
+    if (shots < 2) {
+      throw new IllegalArgumentException("a simulation takes at least 2 shots, not " + shots);
     }
-    double mean = sum / errors.length;
-    double square = 0;
-    for (double e : errors) {
-      square += (e - mean) * (e - mean);
+    Run run = new Run(shots, seed, progress);
+    int tasks = Math.min(run.sums.length, Runtime.getRuntime().availableProcessors());
+    List<Future<?>> futures = new ArrayList<>();
+    try {
+      for (int t = 0; t < tasks; t++) {
+        futures.add(executor.submit(run));
+      }
+      for (Future<?> future : futures) {
+        future.get();
+      }
+    } catch (InterruptedException e) {
+      Thread.currentThread().interrupt();
+      CancellationException cancelled =
+          new CancellationException("the simulation was interrupted while it was running");
+      cancelled.initCause(e);
+      throw cancelled;
+    } catch (ExecutionException e) {
+      throw unchecked(e.getCause());
+    } finally {
+      run.stopped.set(true);
     }
-    return new double[] {sum, square, errors.length};
+    return run.result();
+  }
+
+  private static RuntimeException unchecked(Throwable cause) {
+    if (cause instanceof Error) {
+      throw (Error) cause;
+    }
+    return cause instanceof RuntimeException
+        ? (RuntimeException) cause
+        : new IllegalStateException("a task of the simulation failed", cause);
+  }
+
+  /** The state of one run, shared by its tasks. */
+  private final class Run implements Runnable {
+    private final int shots;
+    private final int chunk;
+    private final long seed;
+    private final IntConsumer progress;
+    private final ShotShape shape;
+    private final ShotDraw draw;
+    private final double[][] sums; // by chunk: sum, squares about its mean, number
+    private final AtomicInteger next = new AtomicInteger();
+    private final AtomicInteger done = new AtomicInteger();
+    private final AtomicBoolean stopped = new AtomicBoolean();
+
+    Run(int shots, long seed, IntConsumer progress) {
+      this.shots = shots;
+      this.seed = seed;
+      this.progress = progress;
+      this.chunk = Math.max(SMALLEST_CHUNK, (int) Math.ceil((double) shots / MOST_CHUNKS));
+      this.sums = new double[(int) Math.ceil((double) shots / chunk)][];
+      this.draw =
+          new ShotDraw(
+              drive,
+              bench,
+              options.active,
+              options.spontaneousPerSecond,
+              options.blackbodyPerSecond,
+              options.offsetHertz,
+              options.variants.size());
+      boolean impure =
+          !options.variants.isEmpty()
+              && options.active.stream().anyMatch(d -> d.kind() == Kind.POLARIZATION);
+      List<Ladder> ladders = impure ? options.variants : List.of(calibrated.ladder());
+      this.shape = new ShotShape(calibrated, ladders, bench, options.active, draw.moves());
+    }
+
+    @Override
+    public void run() {
+      ShotPropagator propagator = new ShotPropagator(shape, draw);
+      double[] errors = new double[chunk];
+      int c;
+      while ((c = next.getAndIncrement()) < sums.length) {
+        int from = (int) ((long) c * chunk);
+        int count = Math.min(shots - from, chunk);
+        for (int i = 0; i < count; i++) {
+          if (stopped.get()) {
+            return;
+          }
+          try {
+            errors[i] = propagator.error(generator(seed, from + i));
+          } catch (RuntimeException | Error e) {
+            stopped.set(true);
+            throw e;
+          }
+        }
+        sums[c] = moments(errors, count);
+        progress.accept(done.addAndGet(count));
+      }
+    }
+
+    private double[] moments(double[] errors, int count) {
+      double sum = 0;
+      for (int i = 0; i < count; i++) {
+        sum += errors[i];
+      }
+      double mean = sum / count;
+      double squares = 0;
+      for (int i = 0; i < count; i++) {
+        squares += (errors[i] - mean) * (errors[i] - mean);
+      }
+      return new double[] {sum, squares, count};
+    }
+
+    Result result() {
+      double mean = 0;
+      for (double[] s : sums) {
+        mean += s[0];
+      }
+      mean /= shots;
+      double variance = 0;
+      for (double[] s : sums) {
+        // second moments of a chunk about its own mean, moved to the common mean
+        double shift = s[0] / s[2] - mean;
+        variance += s[1] + s[2] * shift * shift;
+      }
+      variance /= shots - 1;
+      double unprepared = probability(BenchValue.PREPARATION_ERROR, Kind.PREPARATION);
+      double misread = probability(BenchValue.DETECTION_ERROR, Kind.DETECTION);
+      double prepared = mean + unprepared * (1 - mean);
+      double read = prepared + misread * (1 - 2 * prepared);
+      double scale = (1 - unprepared) * Math.abs(1 - 2 * misread);
+      return new Result(read, scale * Math.sqrt(variance / shots));
+    }
+
+    private double probability(BenchValue value, Kind kind) {
+      return options.active.contains(new Disturbance(kind, Disturbance.COMMON))
+          ? bench.value(value, 0).orElse(0)
+          : 0;
+    }
   }
 
   /**
@@ -127,73 +356,5 @@ public final class ShotSimulation {
    */
   private static SplittableRandom generator(long seed, int shot) {
     return new SplittableRandom(new SplittableRandom(seed + shot * GOLDEN_GAMMA).nextLong());
-  }
-
-  /** Workspace of one thread. */
-  private final class Shot {
-    private final int n;
-    private final double[] hRe;
-    private final double[] hIm;
-    private final ComplexMatrix propagator;
-    private final MatrixExponential exponential;
-    private double[] re;
-    private double[] im;
-    private double[] nextRe;
-    private double[] nextIm;
-
-    Shot(int n) {
-      this.n = n;
-      this.hRe = new double[n * n];
-      this.hIm = new double[n * n];
-      this.propagator = ComplexMatrix.zeros(n, n);
-      this.exponential = MatrixExponential.ofSize(n);
-      this.re = new double[n];
-      this.im = new double[n];
-      this.nextRe = new double[n];
-      this.nextIm = new double[n];
-    }
-
-    double error(SplittableRandom random) {
-      ladder.hamiltonianHertz(noise.draw(random), hRe, hIm);
-      ladder.addLossHertz(rydbergDecay, hIm);
-      int segments = noise.isWhite() ? SEGMENTS : 1;
-      double dt = duration / segments;
-      Evolution.fill(propagator, n, hRe, hIm, dt);
-      exponential.compute(propagator, propagator);
-      frame.begin(re, im);
-      for (int s = 0; s < segments; s++) {
-        propagator.multiply(re, im, nextRe, nextIm);
-        swap();
-        if (noise.isWhite()) {
-          kick(random, dt);
-        }
-      }
-      return 1 - frame.probability(PulseFrame.Outcome.WANTED, re, im);
-    }
-
-    private void swap() {
-      double[] r = re;
-      double[] i = im;
-      re = nextRe;
-      im = nextIm;
-      nextRe = r;
-      nextIm = i;
-    }
-
-    private void kick(SplittableRandom random, double dt) {
-      double phase = 0;
-      for (int k = 0; k < ladder.steps(); k++) {
-        phase += Math.sqrt(2 * Math.PI * noise.linewidthHertz(k) * dt) * random.nextGaussian();
-        double cos = Math.cos(phase);
-        double sin = Math.sin(phase);
-        for (int i = 0; i < n; i++) {
-          if (ladder.states().get(i).rung() == k + 1) {
-            double r = re[i];
-            re[i] = r * cos - im[i] * sin;
-            im[i] = r * sin + im[i] * cos;
-          }
-        }
-      }
-    }
   }
 }
