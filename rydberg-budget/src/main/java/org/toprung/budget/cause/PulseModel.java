@@ -3,6 +3,7 @@ package org.toprung.budget.cause;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import org.toprung.budget.dynamics.CalibratedProgram;
 import org.toprung.budget.dynamics.NoiseFreePulse;
 import org.toprung.budget.pulse.Pulse;
 import org.toprung.core.atom.Level;
@@ -12,6 +13,7 @@ import org.toprung.core.drive.Ladder;
 import org.toprung.core.drive.LadderSetting;
 import org.toprung.core.drive.PulsePlan;
 import org.toprung.core.drive.PulsePlanner;
+import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.Temperature;
 import org.toprung.core.structure.Lifetimes;
 import org.toprung.core.structure.StarkShift;
@@ -74,7 +76,8 @@ public final class PulseModel {
     this.elimination = Elimination.of(ladder);
     double[] e = drive.electricFieldVoltsPerMetre();
     this.stark = StarkShift.of(drive.species(), drive.target()).about(e[0], e[1], e[2]);
-    this.noiseFree = NoiseFreePulse.of(ladder, setting(plan.frequencyOffset().hertz()), seconds());
+    this.noiseFree =
+        NoiseFreePulse.of(CalibratedProgram.of(ladder, pulse.offsetBy(Frequency.ofHertz(0))));
   }
 
   /**

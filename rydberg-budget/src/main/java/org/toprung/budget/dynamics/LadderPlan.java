@@ -25,7 +25,7 @@ final class LadderPlan {
   private static final int FEWEST_NODES = 3;
   private static final int MOST_NODES = 14;
   private static final int TESTS = 7;
-  private static final double ROUNDING = 1e-14; // of the largest energy
+  private static final double ROUNDING = 2e-15; // of the largest energy
   private static final double SAME_HERTZ = 1e-5;
 
   private final CalibratedProgram calibrated;
@@ -167,15 +167,13 @@ final class LadderPlan {
       work.decouple(base);
       work.effective(directRe, directIm);
       combine(s, re, im, -before, sumRe, sumIm);
-      double largest = 0;
       double difference = 0;
       for (int e = 0; e < p * p; e++) {
-        largest = Math.max(largest, Math.abs(directRe[e]));
         difference =
             Math.max(
                 difference, Math.abs(sumRe[e] - directRe[e]) + Math.abs(sumIm[e] - directIm[e]));
       }
-      if (!(difference <= Math.max(accuracyHertz, ROUNDING * largest))) {
+      if (!(difference <= Math.max(accuracyHertz, ROUNDING * terms.largestHertz()))) {
         return false;
       }
     }

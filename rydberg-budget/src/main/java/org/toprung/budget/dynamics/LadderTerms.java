@@ -56,6 +56,15 @@ final class LadderTerms {
     return rung[state];
   }
 
+  /** The largest energy by modulus, Hz: what rounding is relative to. */
+  double largestHertz() {
+    double largest = 0;
+    for (double e : energy) {
+      largest = Math.max(largest, Math.abs(e));
+    }
+    return largest;
+  }
+
   Decoupling decoupling(int[] populated) {
     return Decoupling.of(n, populated, lower, upper);
   }

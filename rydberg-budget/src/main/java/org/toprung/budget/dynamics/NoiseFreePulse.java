@@ -1,15 +1,12 @@
 package org.toprung.budget.dynamics;
 
 import org.toprung.core.drive.Ladder;
-import org.toprung.core.drive.LadderSetting;
-import org.toprung.core.linear.ComplexMatrix;
-import org.toprung.core.linear.MatrixExponential;
 
 /**
- * Outcome of a pulse on the full ladder without noise and without loss.
+ * Outcome of a pulse on the ladder without noise and without loss.
  *
- * @param missed probability of any outcome that the other two do not count: the atom stayed in the
- *     start, or sits in the intermediate level
+ * @param missed error by the goal of the pulse that the other two do not count: the atom stayed in
+ *     the start, sits in the intermediate level, or has the wrong phase
  * @param otherRydberg probability of another sublevel of the Rydberg level
  * @param otherGround probability of another sublevel of the ground level
  */
@@ -18,28 +15,26 @@ public record NoiseFreePulse(double missed, double otherRydberg, double otherGro
   /**
    * Propagates a pulse.
    *
-   * @param ladder the ladder
-   * @param setting nominal setting of the pulse, with its frequency offset
-   * @param seconds duration, s
+   * @param calibrated the pulse, calibrated on its ladder
    * @return where the atom ends
    */
-  public static NoiseFreePulse of(Ladder ladder, LadderSetting setting, double seconds) {
-    int n = ladder.size();
-    PulseFrame frame = PulseFrame.of(ladder, setting);
-    double[] re = new double[n * n];
-    double[] im = new double[n * n];
-    ladder.hamiltonianHertz(setting, re, im);
-    ComplexMatrix propagator =
-        Evolution.propagator(MatrixExponential.ofSize(n), n, re, im, seconds);
-    double[] beginRe = new double[n];
-    double[] beginIm = new double[n];
-    frame.begin(beginRe, beginIm);
-    double[] endRe = new double[n];
-    double[] endIm = new double[n];
-    propagator.multiply(beginRe, beginIm, endRe, endIm);
-    double wanted = frame.probability(PulseFrame.Outcome.WANTED, endRe, endIm);
-    double rydberg = frame.probability(PulseFrame.Outcome.OTHER_RYDBERG, endRe, endIm);
-    double ground = frame.probability(PulseFrame.Outcome.OTHER_GROUND, endRe, endIm);
-    return new NoiseFreePulse(Math.max(0, 1 - wanted - rydberg - ground), rydberg, ground);
+  public static NoiseFreePulse of(CalibratedProgram calibrated) {
+    LadderSystem system = LadderSystem.of(calibrated);
+    Ladder ladder = calibrated.ladder();
+    double[][] end = system.end();
+    int[] active = system.plan().active();
+    double rydberg = 0;
+    double ground = 0;
+    for (int i = 0; i < active.length; i++) {
+      double population = end[0][i] * end[0][i] + end[1][i] * end[1][i];
+      int rung = ladder.states().get(active[i]).rung();
+      if (rung == 0 && active[i] != ladder.start()) {
+        ground += population;
+      } else if (rung == ladder.steps() && !ladder.isWanted(active[i])) {
+        rydberg += population;
+      }
+    }
+    double error = system.error(end[0], end[1]);
+    return new NoiseFreePulse(Math.max(0, error - rydberg - ground), rydberg, ground);
   }
 }

@@ -30,7 +30,7 @@ final class ShotShape {
   private static final int MOST_SEGMENTS = 400;
   private static final double FASTEST = 12;
   private static final double SEGMENTS_PER_PERIOD = 8;
-  private static final double ACCURACY = 1e-6; // of an amplitude
+  private static final double ACCURACY = 1e-5; // of an amplitude
 
   private final Timeline timeline;
   private final List<LadderPlan> plans;
