@@ -13,9 +13,9 @@ import org.toprung.core.linear.MatrixExponential;
  * <p>Holds workspace: one instance per thread.
  */
 final class Propagation {
-  private static final double SUBSTEP = 1.0;
+  private static final double SUBSTEP = 3.0;
   private static final int MOST_SUBSTEPS = 40;
-  private static final double NEGLIGIBLE = 1e-34; // squared norm of the last term
+  private static final double NEGLIGIBLE = 1e-30; // squared norm of the last term
 
   private final int n;
   private final double[] termRe;
