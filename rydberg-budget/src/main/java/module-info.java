@@ -15,6 +15,7 @@ module org.toprung.budget {
   exports org.toprung.budget.bench;
   exports org.toprung.budget.pulse;
   exports org.toprung.budget.report;
+  exports org.toprung.budget.response;
   exports org.toprung.budget.scenario;
 
   opens org.toprung.budget.app to

@@ -43,6 +43,8 @@ class ArchitectureTest {
         .definedBy("org.toprung.budget.pulse")
         .layer("dynamics")
         .definedBy("org.toprung.budget.dynamics")
+        .layer("response")
+        .definedBy("org.toprung.budget.response")
         .layer("cause")
         .definedBy("org.toprung.budget.cause")
         .layer("budget")
@@ -78,6 +80,8 @@ class ArchitectureTest {
         .whereLayer("dynamics")
         .mayOnlyAccessLayers(
             "quantity", "angular", "atom", "structure", "drive", "linear", "bench", "pulse")
+        .whereLayer("response")
+        .mayOnlyAccessLayers("quantity", "drive", "linear", "bench", "pulse", "dynamics")
         .whereLayer("cause")
         .mayOnlyBeAccessedByLayers("budget")
         .whereLayer("budget")

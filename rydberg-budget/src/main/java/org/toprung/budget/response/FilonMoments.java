@@ -86,9 +86,7 @@ final class FilonMoments {
     }
   }
 
-  /**
-   * ∫ u^a e^{iθu} = Σ (iθ)^k / (k! (a+k+1)); ∫∫ u^a v^b (u−v)^k = k! b! / ((k+b+1)! (a+b+k+2)).
-   */
+  /** ∫ u^a e^{iθu} = Σ (iθ)^k / (k! (a+k+1)); ∫∫ u^a v^b (u−v)^k = k! b! / ((k+b+1)! (a+b+k+2)). */
   private void series(double theta) {
     for (int a = 0; a < NODES; a++) {
       double term = 1; // θ^k/k!

@@ -100,7 +100,8 @@ final class FilterIntegral {
     double high = table[table.length - 1];
     double halfLobe = 0.5 / seconds;
     int affordable = Math.max(200, PANEL_SWEEPS / (sweep * POINTS));
-    int halfLobes = (int) Math.min(Math.ceil(high / halfLobe), Math.min(MOST_HALF_LOBES, affordable));
+    int halfLobes =
+        (int) Math.min(Math.ceil(high / halfLobe), Math.min(MOST_HALF_LOBES, affordable));
     Sums fine = sums(panels(filter, halfLobe, halfLobes, high, seconds), constant, density, table);
     Sums coarse =
         sums(

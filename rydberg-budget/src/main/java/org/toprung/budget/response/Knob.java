@@ -12,7 +12,9 @@ public record Knob(Kind kind, int step) {
 
   /** What can be turned. */
   public enum Kind {
-    /** Effective Rabi frequency, relative change, light shifts unchanged. Two-level systems only. */
+    /**
+     * Effective Rabi frequency, relative change, light shifts unchanged. Two-level systems only.
+     */
     AMPLITUDE,
     /** Frequency of a laser, Hz. */
     FREQUENCY,

@@ -12,8 +12,9 @@ import org.toprung.core.linear.ComplexMatrix;
  * <p>F(f) = (2π)² s · ½ Σ<sub>±f</sub> [ Σ<sub>v</sub> |⟨v|y⟩|² − 2 Re N ],
  *
  * <p>y = ∫ U(τ,t) V b(t) e<sup>∓2πift</sup> dt, N = ∫dt ∫<sub>t′&lt;t</sub> dt′ ⟨χ(t)|V U(t,t′)
- * V|b(t′)⟩ e<sup>±2πif(t−t′)</sup>. Both are run through the panels in one sweep: y is carried along
- * in the frame of each panel's start, so that decaying states need no inverse of a long propagator.
+ * V|b(t′)⟩ e<sup>±2πif(t−t′)</sup>. Both are run through the panels in one sweep: y is carried
+ * along in the frame of each panel's start, so that decaying states need no inverse of a long
+ * propagator.
  *
  * <p>Filled by {@link PulsePath} before anybody else sees it, not changed afterwards.
  */
@@ -136,7 +137,12 @@ final class PerturbedPath {
    * of it between different panels.
    */
   private double sweep(
-      double hertz, int side, FilonMoments[] moments, double[] re, double[] im, PerturbedPath later) {
+      double hertz,
+      int side,
+      FilonMoments[] moments,
+      double[] re,
+      double[] im,
+      PerturbedPath later) {
     double[] workRe = new double[n];
     double[] workIm = new double[n];
     double nested = 0;

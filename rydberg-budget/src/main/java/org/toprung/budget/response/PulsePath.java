@@ -159,7 +159,8 @@ final class PulsePath {
     double limit = 1e-13 * h.norm();
     for (int i = 0; i < h.rows(); i++) {
       for (int j = 0; j <= i; j++) {
-        if (Math.abs(h.re(i, j) - h.re(j, i)) > limit || Math.abs(h.im(i, j) + h.im(j, i)) > limit) {
+        if (Math.abs(h.re(i, j) - h.re(j, i)) > limit
+            || Math.abs(h.im(i, j) + h.im(j, i)) > limit) {
           return false;
         }
       }

@@ -24,8 +24,8 @@ import org.toprung.core.quantity.Frequency;
  * F(f) the filter function of the frequency of a laser (1/Hz²) or the intensity of a beam (no
  * unit). F follows from second-order time-dependent perturbation about the noise-free course,
  * including the second-order amplitude, so that pulses that are not perfect without noise are
- * treated right; there F may be negative. Square π pulse: F = (2π)² |½∫ sin(Ωt)
- * e<sup>2πift</sup> dt|². Good while the added error is well below 1.
+ * treated right; there F may be negative. Square π pulse: F = (2π)² |½∫ sin(Ωt) e<sup>2πift</sup>
+ * dt|². Good while the added error is well below 1.
  *
  * <p>Loss (in a ladder) is kept in the noise-free course and in everything derived from it.
  *
@@ -106,11 +106,12 @@ public final class PulseResponse {
     this.leakage = Collections.unmodifiableMap(left);
   }
 
-  /** What the bend of the Hamiltonian itself adds: a coupling goes with the root of an intensity. */
+  /**
+   * What the bend of the Hamiltonian itself adds: a coupling goes with the root of an intensity.
+   */
   private static double bend(PulsePath path, DrivenSystem system, Knob a, Knob b) {
     if (a.kind() == Knob.Kind.INTENSITY && b.kind() == Knob.Kind.INTENSITY) {
-      return path.slope(
-          (m, re, im) -> system.intensityCurvature(a.step(), b.step(), m, re, im));
+      return path.slope((m, re, im) -> system.intensityCurvature(a.step(), b.step(), m, re, im));
     }
     if (a.kind() == Knob.Kind.INTENSITY && b.kind() == Knob.Kind.AMPLITUDE
         || a.kind() == Knob.Kind.AMPLITUDE && b.kind() == Knob.Kind.INTENSITY) {
@@ -278,8 +279,8 @@ public final class PulseResponse {
   }
 
   /**
-   * Filter function of noise on the ladder's sum frequency: of the last laser, whose frequency moves
-   * the target alone.
+   * Filter function of noise on the ladder's sum frequency: of the last laser, whose frequency
+   * moves the target alone.
    *
    * @param hertz frequency f of the noise, at least 0
    * @return F<sub>ν</sub>(f), 1/Hz²
