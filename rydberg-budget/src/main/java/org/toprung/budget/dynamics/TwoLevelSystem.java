@@ -30,9 +30,9 @@ import org.toprung.core.quantity.Frequency;
  * <p>Immutable and thread-safe.
  */
 public final class TwoLevelSystem implements DrivenSystem {
-  private static final double ACCURACY = 1e-10;
+  private static final double ACCURACY = 1e-9;
   private static final int FIRST_STEPS = 4;
-  private static final int MOST_STEPS = 1 << 15;
+  private static final int MOST_STEPS = 1 << 17;
   private static final double GAUSS = Math.sqrt(3) / 6;
 
   /** −(√3 π/6)·h B₁×B₂ is what two points do to each other in the mean field of a step. */

@@ -20,7 +20,7 @@ package org.toprung.budget.response;
 final class FilonMoments {
   static final int DEGREE = 4;
   static final int NODES = DEGREE + 1;
-  private static final double SERIES_BELOW = 4;
+  private static final double SERIES_BELOW = 3;
   private static final double[][] LAGRANGE = lagrange();
 
   /** Parts of the single integrals, for every node. */

@@ -113,8 +113,13 @@ final class FilterIntegral {
     return new NoiseError(
         fine.error(),
         Math.abs(fine.error() - coarse.error()),
-        area > 0 ? Math.max(0, fine.below() / area) : 0,
-        area > 0 ? Math.max(0, above / area) : 0);
+        share(fine.below(), area),
+        share(above, area));
+  }
+
+  /** Positive even where the filter is not, past the lobes of an imperfect pulse. */
+  private static double share(double part, double area) {
+    return area == 0 ? 0 : Math.abs(part / area);
   }
 
   private static List<Panel> panels(
