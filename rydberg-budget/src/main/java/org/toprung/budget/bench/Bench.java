@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.TreeMap;
@@ -48,6 +49,19 @@ public final class Bench {
       copy.motion = motion;
       return copy;
     }
+
+    /** What was said of an older number does not hold for what replaces it. */
+    void forgetUncertainty(BenchValue value, int index) {
+      uncertainties.computeIfPresent(
+          value,
+          (k, old) -> {
+            double[] rest = old.clone();
+            if (index < rest.length) {
+              rest[index] = 0;
+            }
+            return rest;
+          });
+    }
   }
 
   private final Values values;
@@ -65,6 +79,7 @@ public final class Bench {
 
   /** A copy with new numbers, which replace samples and an uncertainty of the old ones. */
   private Bench with(BenchValue value, double[] numbers, Object[] shown) {
+    value.requireCount(numbers.length);
     for (int i = 0; i < numbers.length; i++) {
       value.requireAllowed(numbers[i], shown[i]);
     }
@@ -165,11 +180,17 @@ public final class Bench {
   /**
    * Sets the residual electric field by samples of its length; its direction is random.
    *
-   * @param lengths measured lengths
+   * @param lengths measured lengths, at least 0
    * @return a copy
-   * @throws IllegalArgumentException if there is none
+   * @throws IllegalArgumentException if there is none or one is negative
    */
   public Bench withElectricSamples(ElectricField... lengths) {
+    for (ElectricField length : lengths) {
+      if (!(length.voltsPerMetre() >= 0)) {
+        throw new IllegalArgumentException(
+            "length " + length + " of an electric field must be at least zero");
+      }
+    }
     return sampled(BenchValue.ELECTRIC_FIELD, 0, si(lengths, ElectricField::voltsPerMetre));
   }
 
@@ -178,7 +199,7 @@ public final class Bench {
    *
    * @param fwhm Lorentzian full width at half maximum of each laser, one per step, at least 0
    * @return a copy
-   * @throws IllegalArgumentException if a width is negative
+   * @throws IllegalArgumentException if a width is negative, or there are not 1 to 3
    */
   public Bench withLinewidths(Frequency... fwhm) {
     return with(BenchValue.LINEWIDTH, Frequency::hertz, List.of(fwhm));
@@ -223,9 +244,10 @@ public final class Bench {
    * Sets the intensity of one beam by samples.
    *
    * @param step index of the step, from 0
-   * @param relative measured relative deviations from the calibrated intensity, at least −1
+   * @param relative measured relative deviations from the calibrated intensity, at least −1, with a
+   *     root mean square up to 0.5
    * @return a copy
-   * @throws IllegalArgumentException if there is none or one is below −1
+   * @throws IllegalArgumentException if there is none, one is below −1, or they spread further
    */
   public Bench withIntensitySamples(int step, double... relative) {
     for (double deviation : relative) {
@@ -322,6 +344,7 @@ public final class Bench {
    * @param step index of the step, from 0
    * @param density one-sided density, Hz²/Hz
    * @return a copy
+   * @throws IllegalArgumentException if no drive has such a step
    */
   public Bench withFrequencyNoiseDensity(int step, NoiseDensity density) {
     return with(BenchValue.FREQUENCY_NOISE_DENSITY, step, density);
@@ -333,17 +356,20 @@ public final class Bench {
    * @param step index of the step, from 0
    * @param density one-sided density, 1/Hz
    * @return a copy
+   * @throws IllegalArgumentException if no drive has such a step
    */
   public Bench withIntensityNoiseDensity(int step, NoiseDensity density) {
     return with(BenchValue.INTENSITY_NOISE_DENSITY, step, density);
   }
 
   private Bench with(BenchValue value, int step, NoiseDensity density) {
-    requireIndex(value, step);
-    if (density == null) {
-      throw new IllegalArgumentException(value.words() + " must not be null");
-    }
-    return with(v -> v.densities.computeIfAbsent(value, k -> new TreeMap<>()).put(step, density));
+    value.requireIndex(step);
+    Objects.requireNonNull(density, value.words());
+    return with(
+        v -> {
+          v.densities.computeIfAbsent(value, k -> new TreeMap<>()).put(step, density);
+          v.forgetUncertainty(value, step);
+        });
   }
 
   /**
@@ -361,9 +387,14 @@ public final class Bench {
   }
 
   private Bench sampled(BenchValue value, int index, double[] deviations) {
-    requireIndex(value, index);
+    value.requireIndex(index);
     Spread spread = Spread.of(deviations);
-    return with(v -> v.samples.computeIfAbsent(value, k -> new TreeMap<>()).put(index, spread));
+    value.requireAllowed(spread.rms(), spread.rms() + " (root mean square of samples)");
+    return with(
+        v -> {
+          v.samples.computeIfAbsent(value, k -> new TreeMap<>()).put(index, spread);
+          v.forgetUncertainty(value, index);
+        });
   }
 
   /**
@@ -371,19 +402,26 @@ public final class Bench {
    *
    * @param value what it is
    * @param index 0, or the axis, or the step, from 0
-   * @param relative standard uncertainty over the number, from 0 to 1
+   * @param relative standard uncertainty over the number, from 0 to 1; below 1 for temperatures and
+   *     trap frequencies, which cannot be 0
    * @return a copy
-   * @throws IllegalArgumentException if the number is not known, or the uncertainty is out of range
+   * @throws IllegalArgumentException if the number is not known, if it is 0 and the uncertainty is
+   *     not, or if the uncertainty is out of range
    */
   public Bench knownTo(BenchValue value, int index, double relative) {
-    requireIndex(value, index);
-    if (!(relative >= 0 && relative <= 1)) {
+    BenchEntry entry = new BenchEntry(value, index);
+    if (!(relative >= 0 && (value.isPositive() ? relative < 1 : relative <= 1))) {
       throw new IllegalArgumentException(
-          "relative uncertainty " + relative + " of " + value.words() + " must be from 0 to 1");
+          "relative uncertainty "
+              + relative
+              + " of "
+              + entry.name()
+              + (value.isPositive() ? " must be at least 0 and below 1" : " must be from 0 to 1"));
     }
-    if (value(value, index).isEmpty()) {
+    double number = known(entry);
+    if (number == 0 && relative > 0) {
       throw new IllegalArgumentException(
-          new BenchEntry(value, index).name() + " is not known, so it has no uncertainty");
+          entry.name() + " is 0, so it has no relative uncertainty; allowed: 0");
     }
     return with(
         v -> {
@@ -395,20 +433,18 @@ public final class Bench {
   }
 
   /**
-   * A number times a factor: what would be, were this disturbance stronger or weaker.
+   * A number times a factor: what would be, were this disturbance stronger or weaker. A ratio may
+   * become twice as large as can be given. What is known of its uncertainty stays.
    *
    * @param value what it is
    * @param index 0, or the axis, or the step, from 0
    * @param factor factor on the number; on the amplitude of the noise of a density or of samples
    * @return a copy
-   * @throws IllegalArgumentException if the number is not known or out of range after that
+   * @throws IllegalArgumentException if the number is not known or impossible after that
    */
   public Bench scaled(BenchValue value, int index, double factor) {
     BenchEntry entry = new BenchEntry(value, index);
-    double old =
-        value(value, index)
-            .orElseThrow(() -> new IllegalArgumentException(entry.name() + " is not known"));
-    value.requireAllowed(factor * old, factor * old);
+    value.requireImaginable(factor * known(entry));
     return with(
         v -> {
           if (v.samples.containsKey(value)) {
@@ -426,6 +462,11 @@ public final class Bench {
         });
   }
 
+  private double known(BenchEntry entry) {
+    return value(entry.value(), entry.index())
+        .orElseThrow(() -> new IllegalArgumentException(entry.name() + " is not known"));
+  }
+
   /**
    * One number of the bench.
    *
@@ -433,11 +474,11 @@ public final class Bench {
    * @param index 0, or the axis, or the step, from 0
    * @return the number in the SI unit of the value, the root mean square of samples, 1 for a
    *     density; empty if it is not known
+   * @throws IllegalArgumentException if there is no such index
    */
   public OptionalDouble value(BenchValue value, int index) {
-    requireIndex(value, index);
-    if (value == BenchValue.FREQUENCY_NOISE_DENSITY
-        || value == BenchValue.INTENSITY_NOISE_DENSITY) {
+    value.requireIndex(index);
+    if (value.isDensity()) {
       return density(value, index).isPresent() ? OptionalDouble.of(1) : OptionalDouble.empty();
     }
     Optional<Spread> sampled = samples(value, index);
@@ -448,19 +489,6 @@ public final class Bench {
     return numbers == null || index >= numbers.length
         ? OptionalDouble.empty()
         : OptionalDouble.of(numbers[index]);
-  }
-
-  private static void requireIndex(BenchValue value, int index) {
-    int most =
-        switch (value.arity()) {
-          case ONE -> 0;
-          case AXES -> 2;
-          case STEPS -> Integer.MAX_VALUE;
-        };
-    if (index < 0 || index > most) {
-      throw new IllegalArgumentException(
-          value.words() + " has no index " + index + "; allowed: 0 to " + most);
-    }
   }
 
   private Optional<Spread> samples(BenchValue value, int index) {
@@ -484,11 +512,18 @@ public final class Bench {
   /**
    * How a value differs from shot to shot.
    *
-   * @param value what it is, a root mean square
+   * @param value what it is, a root mean square; for the electric field it is that of the length of
+   *     a vector, whose components are Gaussian where there are no samples
    * @param index 0, or the step, from 0
    * @return the samples, or a Gaussian of the given root mean square; empty if neither is known
+   * @throws IllegalArgumentException if the value is no root mean square, or has no such index
    */
   public Optional<Spread> spread(BenchValue value, int index) {
+    if (!value.isSpread()) {
+      throw new IllegalArgumentException(
+          value.words() + " is no deviation from shot to shot, so it has no spread");
+    }
+    value.requireIndex(index);
     Optional<Spread> sampled = samples(value, index);
     if (sampled.isPresent()) {
       return sampled;
@@ -503,8 +538,10 @@ public final class Bench {
    * @param value what it is
    * @param index 0, or the axis, or the step, from 0
    * @return standard uncertainty over the number; 0 where none was stated
+   * @throws IllegalArgumentException if there is no such index
    */
   public double relativeUncertainty(BenchValue value, int index) {
+    value.requireIndex(index);
     double[] stated = values.uncertainties.getOrDefault(value, new double[0]);
     return index < stated.length ? stated[index] : 0;
   }
@@ -543,8 +580,11 @@ public final class Bench {
   }
 
   private <Q> Optional<List<Q>> all(BenchValue value, Function<Double, Q> quantity) {
-    return Optional.ofNullable(values.numbers.get(value))
-        .map(n -> Arrays.stream(n).mapToObj(quantity::apply).toList());
+    List<BenchEntry> known = entries().stream().filter(e -> e.value() == value).toList();
+    boolean complete = !known.isEmpty() && known.get(known.size() - 1).index() == known.size() - 1;
+    return complete
+        ? Optional.of(known.stream().map(e -> quantity.apply(known(e))).toList())
+        : Optional.empty();
   }
 
   /**
@@ -604,7 +644,7 @@ public final class Bench {
   /**
    * Slow frequency errors, one per step.
    *
-   * @return the root mean squares, if given as such
+   * @return the root mean squares, of samples too, if each is known up to the last one given
    */
   public Optional<List<Frequency>> drifts() {
     return all(BenchValue.DRIFT, Frequency::ofHertz);
@@ -613,7 +653,7 @@ public final class Bench {
   /**
    * Relative intensity noise, one per step.
    *
-   * @return the root mean squares, if given as such
+   * @return the root mean squares, of samples too, if each is known up to the last one given
    */
   public Optional<List<Double>> intensityNoise() {
     return all(BenchValue.INTENSITY_NOISE, Double::valueOf);
@@ -681,8 +721,8 @@ public final class Bench {
             "laser "
                 + (k + 1)
                 + " has a linewidth of "
-                + linewidth
-                + " Hz and a frequency noise density; allowed: one of them (or a linewidth of 0), as"
+                + Frequency.ofHertz(linewidth)
+                + " and a frequency noise density; allowed: one of them (or a linewidth of 0), as"
                 + " its white noise would count twice");
       }
     }

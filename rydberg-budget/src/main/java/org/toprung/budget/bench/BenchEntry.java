@@ -1,5 +1,7 @@
 package org.toprung.budget.bench;
 
+import java.util.Objects;
+
 /**
  * One number of a bench.
  *
@@ -7,6 +9,18 @@ package org.toprung.budget.bench;
  * @param index 0, or the axis, or the step, from 0
  */
 public record BenchEntry(BenchValue value, int index) {
+
+  /**
+   * Checks that there can be such a number.
+   *
+   * @param value what it is
+   * @param index 0, or the axis, or the step, from 0
+   * @throws IllegalArgumentException if the value has no number of that index
+   */
+  public BenchEntry {
+    Objects.requireNonNull(value, "value");
+    value.requireIndex(index);
+  }
 
   /**
    * Name for people.

@@ -81,7 +81,7 @@ public record Disturbance(Kind kind, int step) {
    * @throws IllegalArgumentException if the kind needs a step and none is given, or the reverse
    */
   public Disturbance {
-    if (kind == null || kind.isPerStep() != (step >= 0)) {
+    if (kind == null || (kind.isPerStep() ? step < 0 : step != COMMON)) {
       throw new IllegalArgumentException(
           "disturbance "
               + kind
@@ -95,10 +95,15 @@ public record Disturbance(Kind kind, int step) {
   /**
    * Every disturbance there is.
    *
-   * @param steps number of steps of the drive
+   * @param steps number of steps of the drive, at least 1
    * @return an immutable set
+   * @throws IllegalArgumentException if there is no step
    */
   public static Set<Disturbance> all(int steps) {
+    if (!(steps >= 1)) {
+      throw new IllegalArgumentException(
+          "disturbances of " + steps + " steps; allowed: at least 1 step");
+    }
     Set<Disturbance> all = new HashSet<>();
     for (Kind kind : Kind.values()) {
       if (kind.isPerStep()) {

@@ -7,6 +7,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.regex.Pattern;
 
 /**
  * A one-sided power spectral density of noise, tabulated: frequencies in Hz, and per Hz the square
@@ -18,6 +19,10 @@ import java.util.List;
  * <p>Immutable and thread-safe.
  */
 public final class NoiseDensity {
+  private static final Pattern NUMBER =
+      Pattern.compile("[+-]?(\\d+\\.?\\d*|\\.\\d+)([eE][+-]?\\d+)?");
+  private static final int LONGEST = 60; // characters of a line in a message
+
   private final double[] hertz;
   private final double[] perHertz;
 
@@ -106,7 +111,7 @@ public final class NoiseDensity {
   public static NoiseDensity parse(String text, String name) {
     List<double[]> rows = new ArrayList<>();
     int line = 0;
-    for (String raw : text.split("\n", -1)) {
+    for (String raw : withoutByteOrderMark(text).split("\n", -1)) {
       line++;
       String content = raw.strip();
       if (content.isEmpty() || content.startsWith("#")) {
@@ -125,19 +130,24 @@ public final class NoiseDensity {
         rows.stream().mapToDouble(r -> r[1]).toArray());
   }
 
+  private static String withoutByteOrderMark(String text) {
+    return text.startsWith("\uFEFF") ? text.substring(1) : text;
+  }
+
+  /** Java's own parser takes more than people write: suffixes, hexadecimal digits. */
+  private static boolean isNumber(String text) {
+    return NUMBER.matcher(text).matches();
+  }
+
   private static double[] row(String content, String where) {
     String[] parts = content.split("\\s*[,;]\\s*|\\s+");
-    try {
-      if (parts.length == 2) {
-        return new double[] {Double.parseDouble(parts[0]), Double.parseDouble(parts[1])};
-      }
-    } catch (NumberFormatException e) {
-      // said below
+    if (parts.length == 2 && isNumber(parts[0]) && isNumber(parts[1])) {
+      return new double[] {Double.parseDouble(parts[0]), Double.parseDouble(parts[1])};
     }
     throw new IllegalArgumentException(
         where
             + ": given \""
-            + content
+            + (content.length() > LONGEST ? content.substring(0, LONGEST) + "..." : content)
             + "\"; allowed: a frequency in Hz and a density, two numbers");
   }
 
@@ -157,7 +167,12 @@ public final class NoiseDensity {
       double part = (frequency - hertz[i]) / (hertz[i + 1] - hertz[i]);
       return perHertz[i] + part * (perHertz[i + 1] - perHertz[i]);
     }
-    return perHertz[i] * Math.pow(frequency / hertz[i], exponent(i));
+    // from the nearer entry and by halves, so that no factor overflows where the density does not
+    double fromLow = Math.log(frequency / hertz[i]);
+    double fromHigh = Math.log(frequency / hertz[i + 1]);
+    boolean low = fromLow < -fromHigh;
+    double half = Math.exp(0.5 * exponent(i) * (low ? fromLow : fromHigh));
+    return perHertz[low ? i : i + 1] * half * half;
   }
 
   private int segment(double frequency) {
@@ -179,7 +194,9 @@ public final class NoiseDensity {
   }
 
   private double exponent(int i) {
-    return Math.log(perHertz[i + 1] / perHertz[i]) / Math.log(hertz[i + 1] / hertz[i]);
+    // logarithms before the differences: a quotient of densities may overflow
+    return (Math.log(perHertz[i + 1]) - Math.log(perHertz[i]))
+        / (Math.log(hertz[i + 1]) - Math.log(hertz[i]));
   }
 
   /**
@@ -210,11 +227,13 @@ public final class NoiseDensity {
     if (isLinear(i)) {
       return 0.5 * (at(a) + at(b)) * (b - a);
     }
-    double exponent = exponent(i) + 1;
-    double x = exponent * Math.log(b / a);
-    // a·S(a)·((b/a)^exponent − 1)/exponent, without loss where the exponent is near 0
-    double growth = x == 0 ? 1 : Math.expm1(x) / x;
-    return a * at(a) * Math.log(b / a) * growth;
+    double decades = Math.log(b / a);
+    double x = (exponent(i) + 1) * decades;
+    // a·S(a)·((b/a)^(x/ln(b/a)) − 1)/x·ln(b/a), without loss where x is near 0, and from the end
+    // where f·S is larger, so that nothing overflows
+    double top = x > 0 ? b * at(b) : a * at(a);
+    double fall = x == 0 ? 1 : -Math.expm1(-Math.abs(x)) / Math.abs(x);
+    return top * decades * fall;
   }
 
   /**
@@ -258,7 +277,7 @@ public final class NoiseDensity {
    *
    * @param factor at least 0
    * @return a copy
-   * @throws IllegalArgumentException if the factor is negative or not finite
+   * @throws IllegalArgumentException if the factor is negative, or a result is not finite
    */
   public NoiseDensity scaled(double factor) {
     if (!(factor >= 0 && factor < Double.POSITIVE_INFINITY)) {
@@ -268,6 +287,10 @@ public final class NoiseDensity {
     double[] scaled = perHertz.clone();
     for (int i = 0; i < scaled.length; i++) {
       scaled[i] *= factor;
+      if (!(scaled[i] < Double.POSITIVE_INFINITY)) {
+        throw new IllegalArgumentException(
+            "factor " + factor + " takes the noise density " + perHertz[i] + " beyond all numbers");
+      }
     }
     return new NoiseDensity(hertz, scaled);
   }

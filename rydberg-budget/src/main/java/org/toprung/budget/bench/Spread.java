@@ -58,14 +58,19 @@ public final class Spread {
     if (values.length == 0) {
       throw new IllegalArgumentException("samples: given none; allowed: at least one");
     }
-    double square = 0;
+    double largest = 0;
     for (double value : values) {
       if (!(Math.abs(value) < Double.POSITIVE_INFINITY)) {
         throw new IllegalArgumentException("sample " + value + " must be finite");
       }
-      square += value * value / values.length;
+      largest = Math.max(largest, Math.abs(value));
     }
-    return new Spread(Math.sqrt(square), values.clone());
+    double square = 0; // over that of the largest, so that nothing overflows
+    for (double value : values) {
+      double part = largest > 0 ? value / largest : 0;
+      square += part * part / values.length;
+    }
+    return new Spread(largest * Math.sqrt(square), values.clone());
   }
 
   /**
@@ -100,6 +105,7 @@ public final class Spread {
    *
    * @param factor what every deviation is multiplied by
    * @return the spread
+   * @throws IllegalArgumentException if the result is not finite
    */
   public Spread scaled(double factor) {
     if (samples == null) {
