@@ -25,6 +25,8 @@ public record Knob(Kind kind, int step) {
   /**
    * Checks the index.
    *
+   * @param kind what is turned
+   * @param step index of the laser or beam from 0
    * @throws IllegalArgumentException if the index is negative
    */
   public Knob {
