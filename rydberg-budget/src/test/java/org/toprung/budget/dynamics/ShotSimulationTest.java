@@ -142,6 +142,48 @@ class ShotSimulationTest {
     assertEquals(expected, Arrays.stream(kicks).sum(), 1e-9 * Math.abs(expected));
   }
 
+  /** Noise much slower than the pulse is the same as a wrong value for the whole shot. */
+  @Test
+  void takesSlowSpectraForSpreads() {
+    double hertz = 6e4;
+    double relative = 0.03;
+    NoiseDensity slow = NoiseDensity.of(new double[] {1, 10}, new double[] {1.0 / 9, 1.0 / 9});
+    Bench bench =
+        Bench.unknown()
+            .withDrifts(Frequency.ofHertz(hertz), Frequency.ofHertz(0))
+            .withIntensityNoise(0, relative)
+            .withFrequencyNoiseDensity(0, slow.scaled(hertz * hertz))
+            .withIntensityNoiseDensity(1, slow.scaled(relative * relative));
+    for (Pulse pulse : List.of(Pulse.pi(), Pulse.blackman(Math.PI), Pulse.bb1(0.5 * Math.PI))) {
+      ShotSimulation all = simulation(pulse, bench);
+      compare(all, new Disturbance(Kind.DRIFT, 0), new Disturbance(Kind.FREQUENCY_SPECTRUM, 0));
+      compare(all, new Disturbance(Kind.INTENSITY, 1), new Disturbance(Kind.INTENSITY_SPECTRUM, 1));
+    }
+  }
+
+  private static void compare(ShotSimulation all, Disturbance spread, Disturbance spectrum) {
+    ShotSimulation.Result slow = run(all.withDisturbances(Set.of(spread)), 2, 6000);
+    ShotSimulation.Result trace = run(all.withDisturbances(Set.of(spectrum)), 2, 6000);
+    double allowed = 4 * Math.hypot(slow.standardError(), trace.standardError());
+    // an intensity trace acts to first order: a relative difference of the order of the spread
+    assertEquals(slow.error(), trace.error(), allowed + 0.03 * slow.error(), spread.toString());
+    assertTrue(slow.error() > 1e-7, "something happens");
+  }
+
+  /** An atom that flies through wide beams during a short pulse meets hardly any other field. */
+  @Test
+  void letsASlowAtomMoveWithoutHarm() {
+    Bench still = TestDrives.bench();
+    Set<Disturbance> where =
+        Set.of(
+            new Disturbance(Kind.POSITION, Disturbance.COMMON),
+            new Disturbance(Kind.DOPPLER, Disturbance.COMMON));
+    double standing = run(simulation(Pulse.pi(), still).withDisturbances(where), 2, 2000).error();
+    ShotSimulation.Result moving =
+        run(simulation(Pulse.pi(), still.withMotionDuringPulse()).withDisturbances(where), 2, 2000);
+    assertEquals(standing, moving.error(), 0.02 * standing);
+  }
+
   @Test
   void stopsSoonWhenTheWaitingThreadIsInterrupted() throws InterruptedException {
     ShotSimulation simulation = simulation(Pulse.pi(), TestDrives.bench());
