@@ -1,15 +1,21 @@
 package org.toprung.budget;
 
 import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.HashSet;
 import java.util.List;
+import java.util.Set;
+import java.util.concurrent.ExecutorService;
 import java.util.function.IntConsumer;
+import java.util.stream.Stream;
 import org.toprung.budget.bench.Bench;
+import org.toprung.budget.bench.Disturbance;
 import org.toprung.budget.cause.Cause;
-import org.toprung.budget.cause.Causes;
-import org.toprung.budget.cause.PulseModel;
-import org.toprung.budget.dynamics.CalibratedProgram;
 import org.toprung.budget.dynamics.ShotSimulation;
 import org.toprung.budget.pulse.Pulse;
+import org.toprung.budget.pulse.PulseProgram;
+import org.toprung.budget.response.Fate;
+import org.toprung.budget.response.PulseResponse;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.PulsePlan;
 
@@ -21,58 +27,50 @@ import org.toprung.core.drive.PulsePlan;
  * Check check = budget.check(2000, 1L);
  * }</pre>
  *
- * <p>The causes are independent disturbances, so that to lowest order their errors add; the sum is
- * the total. Good while the total is small (below about 5 %); {@link #check} tells.
+ * <p>Disturbances that enter through several doors (a beam's intensity through Rabi frequency and
+ * light shift, the position of the atom through all beams) are averaged jointly, so that their
+ * covariance counts; different disturbances are independent and composed. {@link #check} tells how
+ * good that is.
  *
  * <p>Immutable and thread-safe.
  */
 public final class Budget {
   private static final double ALLOWED_DIFFERENCE = 0.1; // of the simulated total
   private static final double ALLOWED_STANDARD_ERRORS = 3;
-  private static final int MOST_SHOTS = 100_000_000;
 
   private final Drive drive;
   private final Pulse pulse;
   private final Bench bench;
-  private final PulseModel model;
+  private final Assessment assessment;
   private final List<CauseEntry> causes;
-  private final List<String> notAssessed;
-  private final double total;
-  private final double uncertainty;
+  private final double atomicUncertainty;
+  private final double benchUncertainty;
 
   Budget(Drive drive, Pulse pulse, Bench bench) {
     bench.requireSteps(drive.steps().size());
     this.drive = drive;
     this.pulse = pulse;
     this.bench = bench;
-    this.model = PulseModel.of(drive, pulse);
-    Causes found = Causes.of(drive, bench);
-    List<PulseModel> variations = model.variations();
-    double[] totalChange = new double[variations.size()];
+    this.assessment = Assessment.of(drive, pulse, bench);
+    Uncertainties atomic = Uncertainties.atomic(assessment);
+    Uncertainties stated = Uncertainties.ofBench(assessment);
     List<CauseEntry> entries = new ArrayList<>();
-    double sum = 0;
-    for (Cause cause : found.assessed()) {
-      double error = cause.error(model);
-      double squares = 0;
-      for (int v = 0; v < totalChange.length; v++) {
-        double change = cause.error(variations.get(v)) - error;
-        totalChange[v] += change;
-        squares += change * change;
-      }
+    for (int i = 0; i < assessment.causes().size(); i++) {
+      Cause cause = assessment.causes().get(i);
       entries.add(
           new CauseEntry(
-              cause.name(), error, Math.sqrt(squares), cause.lever(model), cause.source()));
-      sum += error;
+              cause.name(),
+              assessment.errors()[i],
+              atomic.ofCause(i),
+              stated.ofCause(i),
+              new Fate(cause.kind(), cause.place(assessment.model())),
+              cause.lever(assessment.model()),
+              cause.source()));
     }
-    double squares = 0;
-    for (double change : totalChange) {
-      squares += change * change;
-    }
-    entries.sort((a, b) -> Double.compare(b.error(), a.error()));
+    entries.sort(Comparator.comparingDouble(CauseEntry::error).reversed());
     this.causes = List.copyOf(entries);
-    this.notAssessed = found.notAssessed();
-    this.total = Math.min(1, sum);
-    this.uncertainty = Math.sqrt(squares);
+    this.atomicUncertainty = atomic.ofTotal();
+    this.benchUncertainty = stated.ofTotal();
   }
 
   /**
@@ -87,43 +85,81 @@ public final class Budget {
   }
 
   /**
-   * Re-derives the total by simulation.
+   * Re-derives the total and every cause by simulation.
    *
-   * @param shots number of shots, 2 to 100 million
-   * @param seed seed of the drawn disturbances; the same seed gives the same result on any machine
-   *     with the same arithmetic, whatever its number of processors
+   * @param shots number of shots of each simulation, 2 to 100 million
+   * @param seed seed of the drawn disturbances; the same seed gives the same bits on any number of
+   *     threads
    * @return the simulated total and whether this budget agrees with it
    * @throws IllegalArgumentException if the number of shots is out of range
    */
   public Check check(int shots, long seed) {
-    return check(shots, seed, done -> {});
+    return checking().shots(shots).seed(seed).run();
   }
 
   /**
-   * Re-derives the total by simulation and reports progress.
+   * Begins a check with more choices: progress, an executor, the total only.
    *
-   * @param shots number of shots, 2 to 100 million
-   * @param seed seed of the drawn disturbances
-   * @param progress told the number of shots done so far, from any thread
-   * @return the simulated total and whether this budget agrees with it
-   * @throws IllegalArgumentException if the number of shots is out of range
+   * @return a setup of 2000 shots
    */
-  public Check check(int shots, long seed, IntConsumer progress) {
-    if (shots < 2 || shots > MOST_SHOTS) {
-      throw new IllegalArgumentException(
-          "a check takes 2 to " + MOST_SHOTS + " shots, not " + shots);
+  public CheckSetup checking() {
+    return CheckSetup.of(this);
+  }
+
+  /** Number of simulations a check takes. */
+  int simulations(boolean alone) {
+    return alone ? 1 + (int) disturbing().count() : 1;
+  }
+
+  private Stream<Cause> disturbing() {
+    return assessment.causes().stream().filter(c -> !c.disturbances().isEmpty());
+  }
+
+  Check check(int shots, long seed, boolean alone, IntConsumer progress, ExecutorService executor) {
+    Simulator simulator = new Simulator(assessment, shots, seed, progress, executor);
+    Set<Disturbance> all = new HashSet<>();
+    assessment.causes().forEach(c -> all.addAll(c.disturbances()));
+    ShotSimulation.Result together = simulator.run(all);
+    List<CauseCheck> checks = new ArrayList<>();
+    if (alone) {
+      double quiet = simulator.quiet();
+      double undisturbed = 0;
+      for (CauseEntry entry : causes) {
+        Cause cause = assessment.cause(entry.cause());
+        if (cause.disturbances().isEmpty()) {
+          undisturbed += entry.error();
+        } else {
+          ShotSimulation.Result result = simulator.run(cause.disturbances());
+          checks.add(
+              compared(
+                  entry.cause(),
+                  entry.error(),
+                  result.error() - quiet,
+                  result.standardError(),
+                  together.error()));
+        }
+      }
+      checks.add(compared("Undisturbed pulse", undisturbed, quiet, 0, together.error()));
     }
-    ShotSimulation.Result result =
-        ShotSimulation.of(drive, CalibratedProgram.of(drive.ladder(), pulse), bench)
-            .withDecay(
-                model.spontaneousPerSecond(),
-                bench.environment().map(model::blackbodyPerSecond).orElse(0.0))
-            .run(shots, seed, progress);
-    double difference = Math.abs(total - result.error());
-    boolean agrees =
-        difference <= ALLOWED_DIFFERENCE * result.error()
-            || difference <= ALLOWED_STANDARD_ERRORS * result.standardError();
-    return new Check(result.error(), result.standardError(), agrees, shots, seed);
+    boolean agrees = agree(total(), together.error(), together.standardError(), together.error());
+    return new Check(together.error(), together.standardError(), agrees, shots, seed, checks);
+  }
+
+  private static CauseCheck compared(
+      String cause, double composed, double simulated, double standardError, double total) {
+    return new CauseCheck(
+        cause,
+        composed,
+        simulated,
+        standardError,
+        agree(composed, simulated, standardError, total));
+  }
+
+  private static boolean agree(
+      double composed, double simulated, double standardError, double total) {
+    double difference = Math.abs(composed - simulated);
+    return difference <= ALLOWED_DIFFERENCE * total
+        || difference <= ALLOWED_STANDARD_ERRORS * standardError;
   }
 
   /**
@@ -154,12 +190,32 @@ public final class Budget {
   }
 
   /**
-   * Length of the pulse and where to set the laser; the pulse's own offset comes on top.
+   * Length of the pulse and where to set the laser, for the atom as warm as it is; the pulse's own
+   * offset comes on top.
    *
    * @return the plan
    */
   public PulsePlan plan() {
-    return model.plan();
+    return assessment.model().plan();
+  }
+
+  /**
+   * What to play: fields, detuning and phase over time.
+   *
+   * @return the program
+   */
+  public PulseProgram program() {
+    return assessment.model().program();
+  }
+
+  /**
+   * How the pulse reacts to disturbances: filter functions, second-order response, time spent in
+   * each level.
+   *
+   * @return the response that the causes were computed with
+   */
+  public PulseResponse response() {
+    return assessment.model().response();
   }
 
   /**
@@ -168,7 +224,7 @@ public final class Budget {
    * @return the probability
    */
   public double scatteringPerPulse() {
-    return model.scatteringPerPulse();
+    return assessment.model().scatteringPerPulse();
   }
 
   /**
@@ -177,7 +233,30 @@ public final class Budget {
    * @return 1 − probability of the wanted outcome, at most 1
    */
   public double total() {
-    return total;
+    return assessment.total();
+  }
+
+  /**
+   * What the total differs by from the sum of all causes, because an atom can be lost only once and
+   * disturbances can undo each other.
+   *
+   * @return total minus sum, small and negative where errors are small
+   */
+  public double overlap() {
+    double sum = 0;
+    for (double error : assessment.errors()) {
+      sum += error;
+    }
+    return assessment.total() - sum;
+  }
+
+  /**
+   * Standard uncertainty of the total, atomic values and stated bench values together.
+   *
+   * @return the uncertainty
+   */
+  public double uncertainty() {
+    return Math.hypot(atomicUncertainty, benchUncertainty);
   }
 
   /**
@@ -185,8 +264,17 @@ public final class Budget {
    *
    * @return the uncertainty
    */
-  public double uncertainty() {
-    return uncertainty;
+  public double atomicUncertainty() {
+    return atomicUncertainty;
+  }
+
+  /**
+   * Standard uncertainty of the total from the stated uncertainties of bench values.
+   *
+   * @return the uncertainty; 0 where none is stated
+   */
+  public double benchUncertainty() {
+    return benchUncertainty;
   }
 
   /**
@@ -204,6 +292,16 @@ public final class Budget {
    * @return an immutable list of sentences
    */
   public List<String> notAssessed() {
-    return notAssessed;
+    return assessment.notAssessed();
+  }
+
+  /**
+   * How the total reacts to every bench value, every power and every detuning, with the pulse
+   * planned anew. Computed when asked for: some ten budgets.
+   *
+   * @return the sensitivities, the most rewarding first
+   */
+  public List<Sensitivity> sensitivities() {
+    return Sensitivities.of(assessment);
   }
 }

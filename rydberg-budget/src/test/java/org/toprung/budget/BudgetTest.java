@@ -289,7 +289,9 @@ class BudgetTest {
   void addsItsCausesToTheTotal() {
     Budget budget = budget(CAESIUM, TestDrives.bench());
     double sum = budget.causes().stream().mapToDouble(CauseEntry::error).sum();
-    assertEquals(sum, budget.total(), 1e-15);
+    assertEquals(sum, budget.total() - budget.overlap(), 1e-15);
+    // second order in the total: at most half its square
+    assertTrue(budget.overlap() <= 0 && budget.overlap() > -sum * sum, "" + budget.overlap());
     for (int i = 1; i < budget.causes().size(); i++) {
       assertTrue(budget.causes().get(i - 1).error() >= budget.causes().get(i).error());
     }
@@ -353,7 +355,9 @@ class BudgetTest {
     double ratio = offset.hertz() / budget.plan().rabi().hertz();
     double error = error(budget, "Offset from resonance");
     assertEquals(ratio * ratio, error, 0.05 * error);
-    assertEquals(0, error(budget(RUBIDIUM, Bench.unknown()), "Offset from resonance"), 1e-15);
+    assertTrue(
+        budget(RUBIDIUM, Bench.unknown()).causes().stream()
+            .noneMatch(c -> c.cause().equals("Offset from resonance")));
   }
 
   /** The seed decides, not the machine: one thread or many, the same shots give the same sum. */
@@ -438,7 +442,12 @@ class BudgetTest {
   void reportsProgressToTheLastShot() {
     AtomicInteger most = new AtomicInteger();
     budget(RUBIDIUM, TestDrives.bench())
-        .check(120, 3, done -> most.accumulateAndGet(done, Math::max));
+        .checking()
+        .shots(120)
+        .seed(3)
+        .totalOnly()
+        .reporting(done -> most.accumulateAndGet(done, Math::max))
+        .run();
     assertEquals(120, most.get());
   }
 

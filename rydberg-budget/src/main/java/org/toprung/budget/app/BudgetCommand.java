@@ -138,7 +138,7 @@ final class BudgetCommand implements Callable<Integer> {
 
   private Check check(Budget budget) {
     try (Progress progress = new Progress(err, Progress.isTerminal(), shots, System::nanoTime)) {
-      return budget.check(shots, seed, progress);
+      return budget.checking().shots(shots).seed(seed).reporting(progress).run();
     }
   }
 }

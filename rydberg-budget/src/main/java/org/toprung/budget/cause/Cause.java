@@ -1,5 +1,9 @@
 package org.toprung.budget.cause;
 
+import java.util.Set;
+import org.toprung.budget.bench.Disturbance;
+import org.toprung.budget.response.Fate;
+
 /** One cause of error of a pulse. Implementations are immutable. */
 public interface Cause {
   /**
@@ -17,6 +21,14 @@ public interface Cause {
   String source();
 
   /**
+   * What a simulation has to switch on to see this cause; empty for a property of the undisturbed
+   * pulse.
+   *
+   * @return an immutable set
+   */
+  Set<Disturbance> disturbances();
+
+  /**
    * What the cause adds to the error of the pulse.
    *
    * @param model the pulse
@@ -24,6 +36,21 @@ public interface Cause {
    *     undo an intended offset
    */
   double error(PulseModel model);
+
+  /**
+   * What sort of error it is.
+   *
+   * @return the kind
+   */
+  Fate.Kind kind();
+
+  /**
+   * Where the atom is when it went wrong this way.
+   *
+   * @param model the pulse
+   * @return levels or sublevels, for people
+   */
+  String place(PulseModel model);
 
   /**
    * What to change, and what it buys.

@@ -1,23 +1,28 @@
 package org.toprung.budget.cause;
 
-import java.util.function.ToDoubleFunction;
+import java.util.function.Function;
+import org.toprung.budget.bench.Disturbance;
+import org.toprung.budget.bench.Spread;
 
 /**
- * A Gaussian quasi-static error of the detuning alone. To lowest order 1 − P = δ²/Ω² for a π pulse.
+ * A quasi-static error of the detuning alone, averaged over its distribution. To lowest order 1 − P
+ * = δ²/Ω² for a square π pulse.
  */
-final class DetuningNoise extends Disturbance {
-  private final ToDoubleFunction<PulseModel> spreadHertz;
+final class DetuningNoise extends Halvable {
+  private final Function<PulseModel, Spread> hertz;
 
   DetuningNoise(
-      String name, String strength, String source, ToDoubleFunction<PulseModel> spreadHertz) {
-    super(name, strength, source);
-    this.spreadHertz = spreadHertz;
+      String name,
+      String strength,
+      String source,
+      Disturbance disturbance,
+      Function<PulseModel, Spread> hertz) {
+    super(name, strength, source, disturbance);
+    this.hertz = hertz;
   }
 
   @Override
   double error(PulseModel model, double scale) {
-    double spread = scale * spreadHertz.applyAsDouble(model);
-    return NormalAverage.of(x -> model.twoLevelError(1, model.offsetHertz() + spread * x))
-        - model.baseline();
+    return hertz.apply(model).scaled(scale).average(model.reaction()::detuned) - model.baseline();
   }
 }

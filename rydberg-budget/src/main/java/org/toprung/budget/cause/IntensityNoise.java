@@ -1,31 +1,32 @@
 package org.toprung.budget.cause;
 
-/**
- * Shot-to-shot noise of one beam's intensity: the Rabi frequency follows its square root, the light
- * shift of start and target follows it in proportion, both in the same shot.
- */
-final class IntensityNoise extends Disturbance {
-  private final int step;
-  private final double relative;
+import org.toprung.budget.bench.Disturbance;
+import org.toprung.budget.bench.Spread;
 
-  IntensityNoise(int step, double relative) {
+/**
+ * Intensity of one beam that differs from shot to shot. The Rabi frequency follows its square root
+ * and the light shift by that beam follows it in proportion, both in the same shot.
+ */
+final class IntensityNoise extends Halvable {
+  private final int step;
+  private final Spread relative;
+
+  IntensityNoise(int step, Spread relative) {
     super(
         "Intensity noise, step " + (step + 1),
         "the rms intensity noise of step " + (step + 1),
-        "exact square-pulse response, Rabi frequency and light shift jointly");
+        "response of the pulse to Rabi frequency and light shift jointly, averaged exactly;"
+            + " (πσ/4)² + (σ·shift/Ω)² for a weak disturbance of a square π pulse",
+        new Disturbance(Disturbance.Kind.INTENSITY, step));
     this.step = step;
     this.relative = relative;
   }
 
   @Override
   double error(PulseModel model, double scale) {
-    double shift = model.resonanceShiftHertz(step);
-    return NormalAverage.of(
-            x -> {
-              double intensity = Math.max(0, 1 + scale * relative * x);
-              return model.twoLevelError(
-                  Math.sqrt(intensity), model.offsetHertz() - (intensity - 1) * shift);
-            })
+    return relative
+            .scaled(scale)
+            .average(x -> model.reaction().brightened(step, Math.max(0, 1 + x)))
         - model.baseline();
   }
 }

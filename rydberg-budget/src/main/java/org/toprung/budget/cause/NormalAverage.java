@@ -1,29 +1,23 @@
 package org.toprung.budget.cause;
 
-import java.util.function.DoubleUnaryOperator;
+import java.util.function.ToDoubleFunction;
 import org.apache.commons.math4.legacy.analysis.integration.gauss.GaussIntegrator;
 import org.apache.commons.math4.legacy.analysis.integration.gauss.GaussIntegratorFactory;
 
 /**
- * Averages over independent standard normal variables by Gauss-Hermite quadrature, exact for
- * polynomials to degree 41 in one variable and 17 in each of three.
+ * Averages over several independent standard normal variables by a product of Gauss-Hermite rules:
+ * 9 points each in up to three dimensions (exact to degree 17), 5 in up to five (degree 9), 3 above
+ * (degree 5).
  *
  * <p>Immutable and thread-safe.
  */
 final class NormalAverage {
-  private static final NormalAverage LINE = new NormalAverage(21);
-  private static final NormalAverage SPACE = new NormalAverage(9);
-
+  private final int dimensions;
   private final double[] points;
   private final double[] weights;
 
-  /** A function of three variables. */
-  @FunctionalInterface
-  interface SpaceFunction {
-    double value(double x, double y, double z);
-  }
-
-  private NormalAverage(int order) {
+  private NormalAverage(int dimensions, int order) {
+    this.dimensions = dimensions;
     GaussIntegrator rule = new GaussIntegratorFactory().hermite(order);
     points = new double[order];
     weights = new double[order];
@@ -34,24 +28,29 @@ final class NormalAverage {
     }
   }
 
-  static double of(DoubleUnaryOperator f) {
-    double sum = 0;
-    for (int i = 0; i < LINE.points.length; i++) {
-      sum += LINE.weights[i] * f.applyAsDouble(LINE.points[i]);
+  static NormalAverage ofDimensions(int dimensions) {
+    int order = 3;
+    if (dimensions <= 3) {
+      order = 9;
+    } else if (dimensions <= 5) {
+      order = 5;
     }
-    return sum;
+    return new NormalAverage(dimensions, order);
   }
 
-  static double of(SpaceFunction f) {
-    double[] x = SPACE.points;
-    double[] w = SPACE.weights;
+  /** Mean of a function of a point; the array it is given is used again for the next point. */
+  double of(ToDoubleFunction<double[]> f) {
+    return nested(f, new double[dimensions], 0);
+  }
+
+  private double nested(ToDoubleFunction<double[]> f, double[] x, int dimension) {
+    if (dimension == dimensions) {
+      return f.applyAsDouble(x);
+    }
     double sum = 0;
-    for (int i = 0; i < x.length; i++) {
-      for (int j = 0; j < x.length; j++) {
-        for (int k = 0; k < x.length; k++) {
-          sum += w[i] * w[j] * w[k] * f.value(x[i], x[j], x[k]);
-        }
-      }
+    for (int i = 0; i < points.length; i++) {
+      x[dimension] = points[i];
+      sum += weights[i] * nested(f, x, dimension + 1);
     }
     return sum;
   }

@@ -1,45 +1,31 @@
 package org.toprung.budget.cause;
 
-import org.toprung.budget.bench.ThermalMotion;
-import org.toprung.core.drive.Drive;
+import org.toprung.budget.bench.Disturbance;
 
 /**
- * Thermal position of the atom, which changes the field of all beams, and with it Rabi frequency
- * and light shifts, in the same shot. The pulse is planned for an atom in the middle of the beams,
- * so that the mean loss of field counts too.
+ * Where the atom is in the beams, from its temperature and from the pointing of the beams, which
+ * changes the field of all beams, and with it Rabi frequency and light shifts, in the same shot.
+ *
+ * <p>Length and frequency of the pulse are calibrated with the atom as it is, so that the mean loss
+ * of field is part of the plan and only the spread counts: for an atom in the middle of a Gaussian
+ * beam of waist w, ε = −Σ(x² − σ²)/w² over both directions across, of variance 4σ⁴/w⁴.
  */
-final class PositionInBeams extends Disturbance {
-  private final ThermalMotion motion;
+final class PositionInBeams extends Halvable {
+  private final BeamFields fields;
 
-  PositionInBeams(ThermalMotion motion) {
+  PositionInBeams(BeamFields fields) {
     super(
         "Position in the beams",
-        "the spread of the position (a quarter of the temperature, or twice the trap frequency)",
-        "exact square-pulse response over the thermal position, all beams jointly");
-    this.motion = motion;
+        "the spread of the position (a quarter of the temperature, or twice the trap frequency) and"
+            + " the pointing jitter",
+        "response of the pulse over the whole beam profiles, all beams jointly, mean loss of field"
+            + " calibrated out",
+        new Disturbance(Disturbance.Kind.POSITION, -1));
+    this.fields = fields;
   }
 
   @Override
   double error(PulseModel model, double scale) {
-    Drive drive = model.drive();
-    return NormalAverage.of(
-            (x, y, z) -> {
-              double rabi = 1;
-              double detuning = model.offsetHertz();
-              for (int k = 0; k < drive.steps().size(); k++) {
-                double field =
-                    drive
-                        .steps()
-                        .get(k)
-                        .fieldFactorAt(
-                            scale * motion.positionMetres(0) * x,
-                            scale * motion.positionMetres(1) * y,
-                            scale * motion.positionMetres(2) * z);
-                rabi *= field;
-                detuning -= (field * field - 1) * model.resonanceShiftHertz(k);
-              }
-              return model.twoLevelError(rabi, detuning);
-            })
-        - model.baseline();
+    return model.reaction().over(fields.scaled(scale)) - model.baseline();
   }
 }

@@ -121,6 +121,29 @@ public final class LadderSystem implements DrivenSystem {
   }
 
   /**
+   * Time spent in every state of the ladder, the eliminated ones too.
+   *
+   * @return time-integrated populations, s, in the order of the ladder's states
+   */
+  public double[] secondsInStates() {
+    return TimeInStates.of(this);
+  }
+
+  /**
+   * Populations after the pulse.
+   *
+   * @return by state of the ladder; 0 for states that are eliminated
+   */
+  public double[] finalPopulations() {
+    double[][] end = end();
+    double[] populations = new double[calibrated.ladder().size()];
+    for (int i = 0; i < size(); i++) {
+      populations[plan.active()[i]] = end[0][i] * end[0][i] + end[1][i] * end[1][i];
+    }
+    return populations;
+  }
+
+  /**
    * Whether no intermediate state takes part, so that start and target are two levels.
    *
    * @return false where an intermediate state is nearly resonant

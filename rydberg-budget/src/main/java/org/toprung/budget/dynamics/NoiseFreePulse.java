@@ -15,26 +15,23 @@ public record NoiseFreePulse(double missed, double otherRydberg, double otherGro
   /**
    * Propagates a pulse.
    *
-   * @param calibrated the pulse, calibrated on its ladder
+   * @param system the pulse on its ladder
    * @return where the atom ends
    */
-  public static NoiseFreePulse of(CalibratedProgram calibrated) {
-    LadderSystem system = LadderSystem.of(calibrated);
-    Ladder ladder = calibrated.ladder();
-    double[][] end = system.end();
-    int[] active = system.plan().active();
+  public static NoiseFreePulse of(LadderSystem system) {
+    Ladder ladder = system.calibrated().ladder();
+    double[] populations = system.finalPopulations();
     double rydberg = 0;
     double ground = 0;
-    for (int i = 0; i < active.length; i++) {
-      double population = end[0][i] * end[0][i] + end[1][i] * end[1][i];
-      int rung = ladder.states().get(active[i]).rung();
-      if (rung == 0 && active[i] != ladder.start()) {
-        ground += population;
-      } else if (rung == ladder.steps() && !ladder.isWanted(active[i])) {
-        rydberg += population;
+    for (int i = 0; i < populations.length; i++) {
+      int rung = ladder.states().get(i).rung();
+      if (rung == 0 && i != ladder.start()) {
+        ground += populations[i];
+      } else if (rung == ladder.steps() && !ladder.isWanted(i)) {
+        rydberg += populations[i];
       }
     }
-    double error = system.error(end[0], end[1]);
+    double error = system.noiseFreeError();
     return new NoiseFreePulse(Math.max(0, error - rydberg - ground), rydberg, ground);
   }
 }

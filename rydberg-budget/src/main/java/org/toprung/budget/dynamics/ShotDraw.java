@@ -39,7 +39,7 @@ final class ShotDraw {
   private final List<Drive.Step> steps;
   private final double[][] waveVector; // 1/m
   private final double[][][] across; // two directions across each beam
-  private final double extraOffset; // Hz
+  private final double[] meanField; // over nominal
   private final double rydbergDecay; // 1/s
   private final boolean scatters;
   private final Optional<ThermalMotion> motion;
@@ -63,11 +63,11 @@ final class ShotDraw {
       Set<Disturbance> active,
       double spontaneousPerSecond,
       double blackbodyPerSecond,
-      double extraOffsetHertz,
+      double[] meanFields,
       int variants) {
     int n = drive.steps().size();
     this.steps = drive.steps();
-    this.extraOffset = extraOffsetHertz;
+    this.meanField = meanFields;
     this.waveVector = new double[n][];
     this.across = new double[n][][];
     for (int k = 0; k < n; k++) {
@@ -176,7 +176,6 @@ final class ShotDraw {
       setting.fieldFactor[k] = Math.sqrt(relative) * fieldFactor(k, shot, 0);
     }
     int last = steps.size() - 1;
-    setting.laserOffset[last] += extraOffset;
     if (frequencyError != null) {
       setting.laserOffset[last] += frequencyError.draw(random);
     }
@@ -214,18 +213,21 @@ final class ShotDraw {
     }
   }
 
-  /** Field of a beam at the atom, over nominal; time counts from the middle of the pulse. */
+  /**
+   * Field of a beam at the atom, over the calibrated one; time counts from the middle of the pulse.
+   */
   private double fieldFactor(int step, Shot shot, double seconds) {
     if (!displaced) {
       return 1;
     }
     double[] at = shot.pointing[step];
     return steps
-        .get(step)
-        .fieldFactorAt(
-            shot.position[0] + shot.velocity[0] * seconds - at[0],
-            shot.position[1] + shot.velocity[1] * seconds - at[1],
-            shot.position[2] + shot.velocity[2] * seconds - at[2]);
+            .get(step)
+            .fieldFactorAt(
+                shot.position[0] + shot.velocity[0] * seconds - at[0],
+                shot.position[1] + shot.velocity[1] * seconds - at[1],
+                shot.position[2] + shot.velocity[2] * seconds - at[2])
+        / meanField[step];
   }
 
   /** Intensity at a time over that in the middle of the pulse, less one. */

@@ -1,6 +1,7 @@
 package org.toprung.budget.dynamics;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Set;
 import java.util.SplittableRandom;
@@ -54,7 +55,7 @@ public final class ShotSimulation {
       Set<Disturbance> active,
       double spontaneousPerSecond,
       double blackbodyPerSecond,
-      double offsetHertz,
+      double[] meanFields,
       List<Ladder> variants) {}
 
   /**
@@ -85,7 +86,16 @@ public final class ShotSimulation {
     int steps = drive.steps().size();
     bench.requireSteps(steps);
     return new ShotSimulation(
-        drive, calibrated, bench, new Options(Disturbance.all(steps), 0, 0, 0, List.of()));
+        drive,
+        calibrated,
+        bench,
+        new Options(Disturbance.all(steps), 0, 0, ones(steps), List.of()));
+  }
+
+  private static double[] ones(int steps) {
+    double[] ones = new double[steps];
+    Arrays.fill(ones, 1);
+    return ones;
   }
 
   /**
@@ -100,7 +110,7 @@ public final class ShotSimulation {
             Set.copyOf(active),
             options.spontaneousPerSecond,
             options.blackbodyPerSecond,
-            options.offsetHertz,
+            options.meanFields,
             options.variants));
   }
 
@@ -125,27 +135,25 @@ public final class ShotSimulation {
             options.active,
             spontaneousPerSecond,
             blackbodyPerSecond,
-            options.offsetHertz,
+            options.meanFields,
             options.variants));
   }
 
   /**
-   * Moves the last laser for all shots, for example to the mean of their resonances.
+   * Sets the fields that the pulse is calibrated for, where they are not the nominal ones because
+   * the atom is warm: field factors of a shot count from them.
    *
-   * @param hertz offset added to the calibrated frequency, Hz
+   * @param overNominal field of each beam that the ladder of the calibrated pulse has, over the
+   *     drive's nominal field; copied
    * @return a copy
-   * @throws IllegalArgumentException if the offset is not finite
    */
-  public ShotSimulation withLaserOffset(double hertz) {
-    if (!(Math.abs(hertz) < Double.POSITIVE_INFINITY)) {
-      throw new IllegalArgumentException("laser offset " + hertz + " Hz must be finite");
-    }
+  public ShotSimulation withMeanFields(double[] overNominal) {
     return with(
         new Options(
             options.active,
             options.spontaneousPerSecond,
             options.blackbodyPerSecond,
-            hertz,
+            overNominal.clone(),
             options.variants));
   }
 
@@ -172,7 +180,7 @@ public final class ShotSimulation {
             options.active,
             options.spontaneousPerSecond,
             options.blackbodyPerSecond,
-            options.offsetHertz,
+            options.meanFields,
             List.copyOf(variants)));
   }
 
@@ -276,7 +284,7 @@ public final class ShotSimulation {
               options.active,
               options.spontaneousPerSecond,
               options.blackbodyPerSecond,
-              options.offsetHertz,
+              options.meanFields,
               options.variants.size());
       boolean impure =
           !options.variants.isEmpty()

@@ -13,6 +13,7 @@ import org.toprung.budget.dynamics.LadderSystem;
 import org.toprung.budget.dynamics.TwoLevelSystem;
 import org.toprung.budget.pulse.Pulse;
 import org.toprung.core.drive.Drive;
+import org.toprung.core.drive.Ladder;
 import org.toprung.core.quantity.Frequency;
 
 /**
@@ -176,7 +177,20 @@ public final class PulseResponse {
    *     program
    */
   public static PulseResponse ladder(Drive drive, Pulse pulse) {
-    CalibratedProgram calibrated = CalibratedProgram.of(drive.ladder(), pulse);
+    return ladder(drive.ladder(), pulse);
+  }
+
+  /**
+   * Response of a pulse on a variation of a drive's ladder, as {@link #ladder(Drive, Pulse)}.
+   *
+   * @param ladder the ladder
+   * @param pulse the pulse
+   * @return the response
+   * @throws IllegalArgumentException as there
+   * @throws ArithmeticException as there
+   */
+  public static PulseResponse ladder(Ladder ladder, Pulse pulse) {
+    CalibratedProgram calibrated = CalibratedProgram.of(ladder, pulse);
     return new PulseResponse(LadderSystem.of(calibrated), Optional.empty());
   }
 

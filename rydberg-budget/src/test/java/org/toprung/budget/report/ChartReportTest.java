@@ -15,13 +15,15 @@ import org.toprung.budget.CauseEntry;
 import org.toprung.budget.Check;
 import org.toprung.budget.report.ChartContent.Kind;
 import org.toprung.budget.report.ChartContent.Row;
+import org.toprung.budget.response.Fate;
 import org.w3c.dom.Element;
 
 class ChartReportTest {
-  private static final Check CHECK = new Check(0.02, 0.0004, true, 400, 3);
+  private static final Check CHECK = new Check(0.02, 0.0004, true, 400, 3, List.of());
 
   private static CauseEntry cause(String name, double error, double uncertainty) {
-    return new CauseEntry(name, error, uncertainty, "lever", "source");
+    return new CauseEntry(
+        name, error, uncertainty, 0, new Fate(Fate.Kind.PHASE, "place"), "lever", "source");
   }
 
   private static ChartContent content(String title, double total, CauseEntry... causes) {
@@ -203,7 +205,7 @@ class ChartReportTest {
   @Test
   void neverHidesADisagreement() {
     ReportContent sample = SampleReport.reference();
-    Check bad = new Check(0.5, 0.001, false, 40, 1);
+    Check bad = new Check(0.5, 0.001, false, 40, 1, List.of());
     ReportContent report = new ReportContent("title", sample.budget(), bad);
     String text = ChartDocument.of(ChartReport.render(report)).joinedText();
     assertTrue(text.contains("DISAGREES with the total"), text);
@@ -212,7 +214,7 @@ class ChartReportTest {
   @Test
   void refusesWhatIsNotFinite() {
     ReportContent sample = SampleReport.reference();
-    Check broken = new Check(0.1, Double.NaN, true, 40, 1);
+    Check broken = new Check(0.1, Double.NaN, true, 40, 1, List.of());
     ReportContent report = new ReportContent("title", sample.budget(), broken);
     IllegalStateException e =
         assertThrows(IllegalStateException.class, () -> ChartReport.render(report));

@@ -149,7 +149,7 @@ class JsonReportTest {
   @Test
   void neverWritesWhatIsNotANumber() {
     ReportContent sample = SampleReport.reference();
-    Check broken = new Check(0.1, Double.NaN, true, 40, 1);
+    Check broken = new Check(0.1, Double.NaN, true, 40, 1, List.of());
     ReportContent content = new ReportContent("title", sample.budget(), broken);
     IllegalStateException e =
         assertThrows(IllegalStateException.class, () -> JsonReport.render(content));

@@ -47,7 +47,7 @@ class TextReportTest {
   @Test
   void neverHidesADisagreement() {
     ReportContent sample = SampleReport.reference();
-    Check bad = new Check(0.5, 0.001, false, 40, 1);
+    Check bad = new Check(0.5, 0.001, false, 40, 1, List.of());
     String text = TextReport.render(new ReportContent("title", sample.budget(), bad));
     assertTrue(text.contains("DISAGREES"), text);
     assertTrue(text.contains("the simulation disagrees"), text);

@@ -263,6 +263,44 @@ public final class Ladder {
   }
 
   /**
+   * The same ladder with states beside it that another one has and nothing here couples to, so that
+   * both can be described in one basis.
+   *
+   * @param other a ladder of the same steps that has all states of this one, by their labels
+   * @return a new ladder with the states of the other in its order
+   * @throws IllegalArgumentException if the other lacks a state of this one
+   */
+  public Ladder withStatesOf(Ladder other) {
+    int[] place = new int[states.size()];
+    List<State> all = new ArrayList<>(other.states);
+    double[][] shifts = new double[all.size()][];
+    for (int i = 0; i < shifts.length; i++) {
+      shifts[i] = other.farShift[i].clone();
+    }
+    for (int i = 0; i < place.length; i++) {
+      place[i] = other.indexOf(states.get(i).label());
+      all.set(place[i], states.get(i));
+      shifts[place[i]] = farShift[i].clone();
+    }
+    List<Coupling> moved = new ArrayList<>();
+    for (Coupling c : couplings) {
+      moved.add(
+          new Coupling(place[c.lower()], place[c.upper()], c.rabiReHertz(), c.rabiImHertz()));
+    }
+    int[] targets = Arrays.stream(wanted).map(w -> place[w]).toArray();
+    return new Ladder(steps, all, moved, shifts, place[start], targets);
+  }
+
+  private int indexOf(String label) {
+    for (int i = 0; i < states.size(); i++) {
+      if (states.get(i).label().equals(label)) {
+        return i;
+      }
+    }
+    throw new IllegalArgumentException("no state " + label + " among " + states);
+  }
+
+  /**
    * The same ladder with the decay rate of the intermediate sublevels multiplied.
    *
    * @param factor factor, positive
