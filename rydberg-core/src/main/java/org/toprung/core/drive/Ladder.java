@@ -284,8 +284,7 @@ public final class Ladder {
     }
     List<Coupling> moved = new ArrayList<>();
     for (Coupling c : couplings) {
-      moved.add(
-          new Coupling(place[c.lower()], place[c.upper()], c.rabiReHertz(), c.rabiImHertz()));
+      moved.add(new Coupling(place[c.lower()], place[c.upper()], c.rabiReHertz(), c.rabiImHertz()));
     }
     int[] targets = Arrays.stream(wanted).map(w -> place[w]).toArray();
     return new Ladder(steps, all, moved, shifts, place[start], targets);
