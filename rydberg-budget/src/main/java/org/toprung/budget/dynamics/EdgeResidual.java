@@ -26,7 +26,7 @@ public final class EdgeResidual {
   private static final double RISE_OVER_SIGMA = 2 * Math.sqrt(2) * InverseErf.value(0.8);
   private static final int SAMPLES_PER_PERIOD = 24;
   private static final int FEWEST_SAMPLES = 400;
-  private static final int MOST_SAMPLES = 400_000;
+  private static final int MOST_SAMPLES = 240_000;
 
   private EdgeResidual() {}
 

@@ -16,8 +16,9 @@ import org.toprung.core.linear.Decoupling;
  * that are slow against the intermediate detuning make of them.
  *
  * <p>Changes of the program are followed with steps halved until the final state has settled to
- * {@value #SETTLED}. Operators are derivatives of the effective Hamiltonian, the change of the
- * dressed basis included.
+ * {@value #SETTLED}, or there are more than half of {@value #MOST_STEPS} between two breaks, where
+ * what was reached is taken. Operators are derivatives of the effective Hamiltonian, the change of
+ * the dressed basis included.
  *
  * <p>Immutable and thread-safe.
  */
