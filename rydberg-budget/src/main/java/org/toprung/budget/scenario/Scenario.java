@@ -62,7 +62,7 @@ public final class Scenario {
 
   private Scenario(Path file, String text) {
     this.file = file;
-    Table root = Table.root(file, TomlFile.tree(file, text), KEYS);
+    Table root = TomlFile.root(file, text).of(KEYS);
     this.title = root.optional("title").map(Scenario::title).orElseGet(() -> nameOf(file));
     Species species = species(root.table("atom", List.of("species", "values")));
     DriveSetup inField =
@@ -76,9 +76,11 @@ public final class Scenario {
             .orElse(driven);
     this.setup =
         root.optionalTable("trap", TRAP_KEYS).map(table -> trap(table, qubit)).orElse(qubit);
-    this.pulse = pulse(root.table("pulse", List.of("kind", "offset")));
-    this.bench = Benches.read(root.optionalTable("bench", Benches.KEYS), steps.size());
+    Table played = root.table("pulse", Pulses.KEYS);
+    this.pulse = Pulses.read(file, played, steps.size());
+    this.bench = Benches.read(file, root.optionalTable("bench", Benches.KEYS), steps.size());
     this.drive = root.guarded("step", setup::resolve);
+    Pulses.requirePlayable(played, pulse, steps.size(), drive.rabi());
   }
 
   /**
@@ -232,17 +234,6 @@ public final class Scenario {
       return kind.equals("E2");
     }
     throw multipole.refused(allowed);
-  }
-
-  private static Pulse pulse(Table table) {
-    Value kind = table.required("kind", "\"pi\"");
-    if (!kind.text("\"pi\"").equals("pi")) {
-      throw kind.refused("\"pi\"");
-    }
-    return table
-        .optional("offset")
-        .map(v -> Pulse.pi().offsetBy(v.parsed(Frequency::parse, "10 kHz")))
-        .orElse(Pulse.pi());
   }
 
   /**

@@ -2,10 +2,11 @@ package org.toprung.budget.scenario;
 
 import java.nio.file.Path;
 import java.util.Optional;
+import java.util.OptionalInt;
 
 /**
- * A scenario that was refused. The message is one line: file, key, what was given and what is
- * allowed.
+ * A scenario that was refused. The message is one line, {@code FILE:LINE: KEY: …}, with what was
+ * given and what is allowed; what is missing stands on no line.
  */
 public final class ScenarioException extends IllegalArgumentException {
   private static final long serialVersionUID = 1L;
@@ -13,27 +14,35 @@ public final class ScenarioException extends IllegalArgumentException {
   /** Name of the file as the caller gave it. */
   private final String file;
 
+  /** Line in the file from 1, or 0 where no line is to blame. */
+  private final int line;
+
   /** Dotted key, or null where no single key is to blame. */
   private final String key;
 
-  private ScenarioException(String file, String key, String message, Throwable cause) {
+  private ScenarioException(Path file, int line, String key, String message, Throwable cause) {
     super(Shown.onOneLine(message), cause);
-    this.file = file;
+    this.file = file.toString();
+    this.line = line;
     this.key = key;
   }
 
   static ScenarioException ofFile(Path file, String problem, Throwable cause) {
-    return new ScenarioException(file.toString(), null, file + ": " + problem, cause);
+    return ofLine(file, Place.NO_LINE, problem, cause);
   }
 
-  static ScenarioException ofKey(Path file, String key, String problem) {
-    return ofKey(file, key, problem, null);
+  static ScenarioException ofLine(Path file, int line, String problem, Throwable cause) {
+    return new ScenarioException(file, line, null, located(file, line) + ": " + problem, cause);
   }
 
-  static ScenarioException ofKey(Path file, String key, String problem, Throwable cause) {
+  static ScenarioException ofKey(Path file, int line, String key, String problem, Throwable cause) {
     String counted = key.startsWith("step[") ? key + " (steps count from 1)" : key;
     return new ScenarioException(
-        file.toString(), key, file + ": " + counted + ": " + problem, cause);
+        file, line, key, located(file, line) + ": " + counted + ": " + problem, cause);
+  }
+
+  private static String located(Path file, int line) {
+    return line == Place.NO_LINE ? file.toString() : file + ":" + line;
   }
 
   /**
@@ -43,6 +52,16 @@ public final class ScenarioException extends IllegalArgumentException {
    */
   public String file() {
     return file;
+  }
+
+  /**
+   * The line that was refused: that of the key, or of the item of a list, or of the header of a
+   * table.
+   *
+   * @return the line, counted from 1, or nothing where none is to blame
+   */
+  public OptionalInt line() {
+    return line == Place.NO_LINE ? OptionalInt.empty() : OptionalInt.of(line);
   }
 
   /**

@@ -7,22 +7,24 @@ import java.util.List;
 import java.util.function.Function;
 import java.util.function.Supplier;
 
-/** One value of a scenario, which knows its file and key and refuses what it cannot be. */
+/** One value of a scenario, which knows its file, line and key and refuses what it cannot be. */
 final class Value {
   private final Path file;
   private final String key;
   private final JsonNode node;
+  private final Place place;
 
-  Value(Path file, String key, JsonNode node) {
+  Value(Path file, String key, JsonNode node, Place place) {
     this.file = file;
     this.key = key;
     this.node = node;
+    this.place = place;
   }
 
   /** The exception that says what was given and what is allowed. */
   ScenarioException refused(String allowed) {
     return ScenarioException.ofKey(
-        file, key, "given " + Shown.value(node) + "; allowed: " + allowed);
+        file, place.line(), key, "given " + Shown.value(node) + "; allowed: " + allowed, null);
   }
 
   boolean isText() {
@@ -35,6 +37,13 @@ final class Value {
 
   boolean isNumber() {
     return node.isNumber();
+  }
+
+  boolean flag() {
+    if (!node.isBoolean()) {
+      throw refused("true or false");
+    }
+    return node.booleanValue();
   }
 
   String text(String allowed) {
@@ -58,7 +67,7 @@ final class Value {
     }
     List<Value> items = new ArrayList<>();
     for (int i = 0; i < length; i++) {
-      items.add(new Value(file, key + "[" + (i + 1) + "]", node.get(i)));
+      items.add(new Value(file, key + "[" + (i + 1) + "]", node.get(i), place.item(i)));
     }
     return items;
   }
@@ -70,7 +79,8 @@ final class Value {
   }
 
   /**
-   * Runs something that refuses this value by an IllegalArgumentException, and names file and key.
+   * Runs something that refuses this value by an IllegalArgumentException, and names file, line and
+   * key.
    */
   <T> T guarded(Supplier<T> action) {
     try {
@@ -78,7 +88,7 @@ final class Value {
     } catch (ScenarioException e) {
       throw e;
     } catch (IllegalArgumentException e) {
-      throw ScenarioException.ofKey(file, key, withGiven(e.getMessage()), e);
+      throw ScenarioException.ofKey(file, place.line(), key, withGiven(e.getMessage()), e);
     }
   }
 
@@ -86,5 +96,11 @@ final class Value {
   private String withGiven(String complaint) {
     boolean repeated = node.isObject() || node.isValueNode() && complaint.contains(node.asText());
     return repeated ? complaint : "given " + Shown.value(node) + "; " + complaint;
+  }
+
+  /** The value as in a message. */
+  @Override
+  public String toString() {
+    return Shown.value(node);
   }
 }
