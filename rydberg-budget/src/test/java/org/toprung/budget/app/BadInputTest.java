@@ -141,14 +141,24 @@ class BadInputTest {
           "5 mV/cm"                | "-5 mV/cm"          | bench.electric_field | -5 mV/cm       | at least zero
           linewidth = ["500 Hz",   | linewidth = [       | bench.linewidth   | ["500 Hz"]        | 2 texts
           linewidth = ["500 Hz",   | linewidth = [500,   | bench.linewidth[1] | 500              | "500 Hz"
-          drift = ["2 kHz",        | drift = ["-2 kHz",  | bench.drift       | "-2 kHz"          | at least zero
+          drift = ["2 kHz",        | drift = ["-2 kHz",  | bench.drift[1]    | -2 kHz            | at least zero
           [0.005, 0.005]           | [0.005]             | bench.intensity_noise | [0.005]       | 2 numbers
           [0.005, 0.005]           | [0.005, 0.7]        | bench.intensity_noise | 0.7           | between 0 and 0.5
           [0.005, 0.005]           | [0.005, "1 %"]      | bench.intensity_noise[2] | 1 %        | 0 to 0.5
           """)
   void refusesImpossibleValues(String old, String instead, String key, String given, String allowed)
       throws IOException {
-    refuses(ReferenceScenario.with(lines(old), lines(instead)), key, given, allowed);
+    String text = ReferenceScenario.with(lines(old), lines(instead));
+    refuses(text, key, given, allowed);
+    // of what replaces one line the line is known
+    String name = key.substring(key.lastIndexOf('.') + 1).replaceAll("\\[.*", "");
+    boolean isOneLine = instead.startsWith(name + " =") && !instead.contains("\\n");
+    refuses(text, "lab.toml:" + (isOneLine ? lineOf(lines(old)) + ": " : ""));
+  }
+
+  private static long lineOf(String part) {
+    String text = ReferenceScenario.text();
+    return text.substring(0, text.indexOf(part)).lines().count() + 1;
   }
 
   private static String lines(String text) {
@@ -199,13 +209,15 @@ class BadInputTest {
           species =    | isotope =               | atom.isotope        | species
           waist = "20  | radius = "20            | step[1].radius      | to, detuning, power, waist
           mJ = 0.5     | detuning = "1 GHz"      | step[2].detuning    | to, mJ, multipole
-          kind =       | shape =                 | pulse.shape         | kind, offset
+          kind =       | form =                  | pulse.form          | kind, offset
+          kind = "pi"  | kind = "pi"\\narea_rad = 3 | pulse.area_rad | kind, offset, rise
           drift =      | drifts =                | bench.drifts        | linewidth, drift, intensity_noise
           [bench]      | [lab]                   | lab                 | pulse, bench
           """)
   void refusesUnknownKeys(String old, String instead, String key, String allowed)
       throws IOException {
-    refuses(ReferenceScenario.with(old, instead), key, "unknown key", "allowed: ", allowed);
+    String text = ReferenceScenario.with(old, lines(instead));
+    refuses(text, "lab.toml:", ": " + key, "key", "allowed: ", allowed);
   }
 
   @Test
@@ -244,13 +256,16 @@ class BadInputTest {
           """
           kind = "pi" | kind = "pi"\\nkind = "pi" | Duplicate
           [bench]     | [atom]                    | redefined
-          [atom]      | [atom                     | line 2
-          F = 2       | F =                       | line 8
+          [atom]      | [atom                     | .toml:
+          F = 2       | F =                       | .toml:8:
           """)
   void refusesOverlappingOrUnreadableToml(String old, String instead, String complaint)
       throws IOException {
     refuses(
-        ReferenceScenario.with(old, instead.replace("\\n", "\n")), "line ", complaint, "allowed: ");
+        ReferenceScenario.with(old, instead.replace("\\n", "\n")),
+        "lab.toml:",
+        complaint,
+        "allowed: ");
   }
 
   @Test

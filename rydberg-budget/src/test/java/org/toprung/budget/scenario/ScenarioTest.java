@@ -391,6 +391,10 @@ class ScenarioTest {
             () -> parse(ReferenceScenario.with("waist = \"25 um\"", "waist = \"25 ly\"")));
     assertEquals("some.toml", e.file());
     assertEquals(Optional.of("step[2].waist"), e.key());
+    long line =
+        ReferenceScenario.text().lines().takeWhile(l -> !l.startsWith("waist = \"25")).count() + 1;
+    assertEquals(line, e.line().orElseThrow());
+    assertTrue(e.getMessage().startsWith("some.toml:" + line + ": step[2].waist "), e.getMessage());
   }
 
   @Test
@@ -398,7 +402,8 @@ class ScenarioTest {
     ScenarioException e =
         assertThrows(ScenarioException.class, () -> parse("title = \"a\"\nnot toml\n"));
     assertEquals(Optional.empty(), e.key());
-    assertTrue(e.getMessage().startsWith("some.toml: line 2: "), e.getMessage());
+    assertEquals(2, e.line().orElseThrow());
+    assertTrue(e.getMessage().startsWith("some.toml:2: "), e.getMessage());
   }
 
   @Test
