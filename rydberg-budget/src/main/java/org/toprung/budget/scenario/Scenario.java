@@ -41,6 +41,28 @@ import org.toprung.core.quantity.MagneticField;
  * of the focus from the atom, and an {@code impurity} of the polarization with its {@code
  * impurity_phase_deg}.
  *
+ * <p>{@code pulse.kind} is one of {@code pi}; {@code square}, {@code gaussian}, {@code blackman},
+ * {@code sine-squared}, {@code bb1} and {@code corpse} (with {@code area_rad}, π if left out);
+ * {@code ramsey} ({@code wait}, {@code phase_rad}); {@code echo} ({@code half_wait}, {@code
+ * phase_rad}); {@code chirp} ({@code duration}, {@code sweep}, {@code smooth = true}); {@code
+ * stirap} ({@code width}, {@code delay}, {@code shape} {@code sine-squared} or {@code gaussian});
+ * {@code samples} ({@code spacing}, {@code goal}, and a {@code file} whose lines are amplitude,
+ * detuning in Hz and phase in rad). All may have {@code offset}, {@code rise} and {@code fall}
+ * together, {@code shaped_step} (from 1) and {@code hold_frequency = true}; see {@link Pulse}.
+ *
+ * <p>The keys of {@code bench} are those of {@link org.toprung.budget.bench.BenchValue#key()}: a
+ * text with a unit, or a plain number from 0 to 0.5 for a ratio, one per step or axis in a list.
+ * Either may have a standard uncertainty, {@code "6 ± 1 uK"} or {@code "0.004 +- 0.001"}. The
+ * densities list one file per step or {@code "none"}; see {@link
+ * org.toprung.budget.bench.NoiseDensity#parse}. Instead of a root mean square {@code
+ * magnetic_noise_samples} and {@code electric_field_samples} name a file, {@code drift_samples} and
+ * {@code intensity_noise_samples} one per step or {@code "none"}: on each line a deviation with its
+ * unit, or a plain number for the intensity; in the list beside it such a step has 0. With {@code
+ * motion_during_pulse = true} the atom flies through the beams.
+ *
+ * <p>Files are named relative to the scenario, in UTF-8; in each, empty lines and lines that begin
+ * with # are skipped.
+ *
  * <p>Immutable and thread-safe.
  */
 public final class Scenario {
@@ -89,7 +111,7 @@ public final class Scenario {
    * @param file a TOML file in UTF-8
    * @return the scenario
    * @throws ScenarioException if the file cannot be read, is not TOML, or says something unknown or
-   *     impossible; the message gives file, key, what was given and what is allowed
+   *     impossible; the message gives file, line, key, what was given and what is allowed
    */
   public static Scenario read(Path file) {
     return new Scenario(file, TomlFile.text(file));

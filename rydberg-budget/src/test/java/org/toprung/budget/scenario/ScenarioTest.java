@@ -22,6 +22,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 import org.toprung.angular.Polarization;
 import org.toprung.budget.Budget;
 import org.toprung.budget.ReferenceScenario;
+import org.toprung.budget.bench.BenchValue;
 import org.toprung.budget.report.JsonReport;
 import org.toprung.budget.report.ReportContent;
 import org.toprung.budget.report.TextReport;
@@ -321,8 +322,9 @@ class ScenarioTest {
     String text =
         Files.readString(Path.of("examples", "rubidium-two-photon.toml"))
             .replaceFirst("waist = \"25 um\"", "")
-            .replaceAll("(?m)^# (?!intensity|values)(?=[a-zF]+[_a-zF]* = |\\[)", "");
-    Drive drive = parse(text).drive();
+            .replaceAll("(?m)^# (?!intensity|values|.*(csv|txt))(?=[a-zF]+[_a-zF]* = |\\[)", "");
+    Scenario scenario = parse(text);
+    Drive drive = scenario.drive();
     Beam beam = drive.steps().get(0).beam();
     assertEquals(2, beam.profile().waists().size());
     assertEquals(0.01, beam.impurity());
@@ -332,6 +334,32 @@ class ScenarioTest {
     assertTrue(text.contains("# intensity = \"2 W/cm2\""));
     assertEquals(Sublevel.hyperfine("5S1/2", 1, 0), drive.idle().orElseThrow().sublevel());
     assertEquals(Power.milliwatts(3), drive.trap().orElseThrow().beam().power());
+    assertEquals(
+        "pi, rise 20 ns, fall 20 ns, shaping step 0, holding the frequency",
+        scenario.pulse().toString());
+    assertTrue(scenario.bench().movesDuringPulse());
+    for (BenchValue value : BenchValue.values()) {
+      assertEquals(!value.key().endsWith("density"), scenario.bench().isKnown(value), value.key());
+    }
+  }
+
+  /** Each kind is listed with its keys, in words that can be copied. */
+  @Test
+  void readsTheOtherPulsesOfTheExample(@TempDir Path folder) throws Exception {
+    String text = Files.readString(Path.of("examples", "rubidium-two-photon.toml"));
+    Files.writeString(folder.resolve("own-pulse.csv"), "0.5, 2e3, 0\n");
+    List<String> kinds =
+        text.lines().filter(l -> l.startsWith("#   kind = ")).map(l -> l.substring(4)).toList();
+    assertEquals(11, kinds.size());
+    for (String kind : kinds) {
+      String keys = kind.replaceAll(" \\(.*", "").replaceFirst("\" +", "\"\n").replace(", ", "\n");
+      Path file =
+          Files.writeString(
+              folder.resolve("s.toml"), text.replaceFirst("(?m)^kind = \"pi\"", keys + " "));
+      String name = kind.split("\"")[1];
+      String said = Scenario.read(file).pulse().name().toLowerCase(Locale.ROOT);
+      assertTrue(said.contains(name), said);
+    }
   }
 
   @Test
@@ -413,7 +441,8 @@ class ScenarioTest {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"rubidium-two-photon.toml", "caesium-two-photon.toml"})
+  @ValueSource(
+      strings = {"rubidium-two-photon.toml", "caesium-two-photon.toml", "caesium-blackman.toml"})
   void readsTheShippedExamples(String name) {
     Scenario s = Scenario.read(Path.of("examples", name));
     assertTrue(s.drive().rabi().hertz() > 1e5, String.format(Locale.ROOT, "%s", s.drive().rabi()));
