@@ -86,6 +86,17 @@ final class Figures {
     return number(100 * fraction, 3) + " %";
   }
 
+  /** A part of a whole, to a tenth of a percent. */
+  static String share(double fraction) {
+    return String.format(Locale.ROOT, "%.1f %%", 100 * fraction + 0.0);
+  }
+
+  /** A relative change with its sign, to a percent. */
+  static String change(double fraction) {
+    double percent = Math.rint(100 * fraction);
+    return percent == 0 ? "0 %" : String.format(Locale.ROOT, "%+.0f %%", percent);
+  }
+
   static String number(double value, int digits) {
     BigDecimal rounded = new BigDecimal(value).round(new MathContext(digits));
     return rounded.signum() == 0 ? "0" : rounded.stripTrailingZeros().toPlainString();

@@ -140,7 +140,7 @@ public final class JsonReport {
     number(
         "reduced_" + kind + "_uncertainty_" + unit,
         element.modulus() * element.relativeUncertainty());
-    json.writeStringField(kind + "_origin", TextReport.origin(step));
+    json.writeStringField(kind + "_origin", DriveSections.origin(step));
     json.writeStringField(kind + "_source", element.source());
     number("start_light_shift_Hz", drive.startLightShift(k).hertz());
     number("target_light_shift_Hz", drive.targetLightShift(k).hertz());

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import org.toprung.budget.Budget;
 import org.toprung.budget.Check;
+import org.toprung.budget.Sensitivity;
 
 /**
  * What a report tells about.
@@ -11,8 +12,10 @@ import org.toprung.budget.Check;
  * @param title one line that names the scenario
  * @param budget the budget
  * @param check its check by simulation
+ * @param sensitivities how the total reacts to single values, the most rewarding first
  */
-public record ReportContent(String title, Budget budget, Check check) {
+public record ReportContent(
+    String title, Budget budget, Check check, List<Sensitivity> sensitivities) {
   private static final double LARGE_TOTAL = 0.05;
 
   /**
@@ -21,12 +24,37 @@ public record ReportContent(String title, Budget budget, Check check) {
    * @param title one line that names the scenario
    * @param budget the budget
    * @param check its check by simulation
+   * @param sensitivities how the total reacts to single values; copied
    * @throws IllegalArgumentException if a part is missing
    */
   public ReportContent {
-    if (title == null || budget == null || check == null) {
-      throw new IllegalArgumentException("a report needs a title, a budget and a check, not null");
+    if (title == null || budget == null || check == null || sensitivities == null) {
+      throw new IllegalArgumentException(
+          "a report needs a title, a budget, a check and sensitivities, not null");
     }
+    sensitivities = List.copyOf(sensitivities);
+  }
+
+  /**
+   * Computes the sensitivities, which takes some ten budgets, once for all reports.
+   *
+   * @param title one line that names the scenario
+   * @param budget the budget
+   * @param check its check by simulation
+   * @throws IllegalArgumentException if a part is missing
+   */
+  public ReportContent(String title, Budget budget, Check check) {
+    this(title, budget, check, budget == null ? null : budget.sensitivities());
+  }
+
+  /** Whether the simulation confirms the budget, in a few words. */
+  String verdict() {
+    int objections = check.disagreements().size();
+    String alone =
+        objections == 0
+            ? ""
+            : ", DISAGREES with " + objections + (objections == 1 ? " cause" : " causes") + " alone";
+    return (check.agrees() ? "agrees with the total" : "DISAGREES with the total") + alone;
   }
 
   /**
@@ -50,6 +78,13 @@ public record ReportContent(String title, Budget budget, Check check) {
       warnings.add(
           "the simulation disagrees with the composed total: at least one cause is not described"
               + " well by adding it to the others");
+    }
+    int objections = check.disagreements().size();
+    if (objections > 0) {
+      warnings.add(
+          "the simulation disagrees with "
+              + (objections == 1 ? "one cause" : objections + " causes")
+              + " taken alone: see the top of the report");
     }
     return List.copyOf(warnings);
   }
