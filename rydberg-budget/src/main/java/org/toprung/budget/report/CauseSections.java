@@ -64,6 +64,7 @@ final class CauseSections {
       out.fact(String.format(Locale.ROOT, "below %.0e each", NEGLIGIBLE), negligible.toString());
     }
     out.section("Levers of the causes above 1 % of their sum");
-    out.table(List.of(Column.left("cause"), Column.left("what to change, and what remains")), levers);
+    out.table(
+        List.of(Column.left("cause"), Column.left("what to change, and what remains")), levers);
   }
 }

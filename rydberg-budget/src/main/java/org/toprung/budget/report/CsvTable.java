@@ -3,7 +3,9 @@ package org.toprung.budget.report;
 import java.util.List;
 import java.util.stream.Collectors;
 
-/** Rows of comma-separated values by RFC 4180: lines end in CR LF, cells are quoted where needed. */
+/**
+ * Rows of comma-separated values by RFC 4180: lines end in CR LF, cells are quoted where needed.
+ */
 final class CsvTable {
   private final StringBuilder text = new StringBuilder();
   private final int columns;

@@ -1,36 +1,57 @@
 package org.toprung.budget.report;
 
-import com.fasterxml.jackson.core.JsonFactory;
-import com.fasterxml.jackson.core.JsonGenerator;
-import com.fasterxml.jackson.core.util.DefaultIndenter;
-import com.fasterxml.jackson.core.util.DefaultPrettyPrinter;
-import com.fasterxml.jackson.core.util.Separators;
 import java.io.IOException;
-import java.io.StringWriter;
-import java.io.UncheckedIOException;
+import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import org.toprung.budget.Budget;
+import org.toprung.budget.CauseCheck;
 import org.toprung.budget.CauseEntry;
 import org.toprung.budget.Check;
+import org.toprung.budget.Sensitivity;
+import org.toprung.budget.pulse.PulseProgram;
 import org.toprung.core.atom.Level;
-import org.toprung.core.drive.Beam;
-import org.toprung.core.drive.Drive;
-import org.toprung.core.drive.GroundLight;
-import org.toprung.core.drive.Profile;
 import org.toprung.core.drive.PulsePlan;
-import org.toprung.core.structure.DipoleElement;
-import org.toprung.core.structure.ReducedElement;
 
 /**
  * The report for programs: JSON with SI units in the key names. A value that is not finite is never
  * written. Reduced dipole elements are given by their size, since the sign of a single one means
  * nothing without the phases of both wavefunctions.
+ *
+ * <p>The document is an object with these keys; within a version keys may come but not go, nor
+ * change their meaning:
+ *
+ * <ul>
+ *   <li>{@code format}, {@code version}: {@value #FORMAT}, {@value #VERSION}
+ *   <li>{@code title}, {@code species}, {@code start}, {@code intermediates}, {@code target}: texts
+ *   <li>{@code drive}: field, steps with beams and elements, Rabi frequency, light shifts, other
+ *       targets
+ *   <li>{@code pulse}: name, goal (transfer, rotation, return or coherence), duration, offsets,
+ *       what detunings count from (following, full_power or bare)
+ *   <li>{@code response}: {@code undisturbed_error}; {@code knobs}, each with slope and curvature
+ *       of the error; {@code seconds_in_states} and {@code leakage} by state; {@code filter}, the
+ *       filter functions of each laser's frequency and each beam's relative intensity over {@code
+ *       frequency_Hz}, a logarithmic grid about the inverse duration
+ *   <li>{@code budget}: {@code total}, its uncertainty, whole and from atomic data and bench values
+ *       apart; {@code overlap}, the total minus the sum of all causes; {@code causes}, each with
+ *       error, uncertainties, share, {@code fate} (phase, leak, loss or recoverable), {@code
+ *       place}, lever and source; {@code not_assessed}; {@code sensitivities}, each with {@code
+ *       slope} dE/d(ln value) and what half and twice the value save
+ *   <li>{@code check}: simulated total, whether it agrees, and {@code causes}, each alone; empty
+ *       where only the total was simulated
+ *   <li>{@code warnings}, {@code cautions}: sentences
+ * </ul>
  */
 public final class JsonReport {
-  private final JsonGenerator json;
+  private static final String FORMAT = "toprung-report";
+  private static final int VERSION = 1;
 
-  private JsonReport(JsonGenerator json) {
-    this.json = json;
+  private final ReportContent content;
+  private final Budget budget;
+
+  private JsonReport(ReportContent content) {
+    this.content = content;
+    this.budget = content.budget();
   }
 
   /**
@@ -41,199 +62,99 @@ public final class JsonReport {
    * @throws IllegalStateException if a number of the budget is not finite
    */
   public static String render(ReportContent content) {
-    StringWriter text = new StringWriter();
-    DefaultPrettyPrinter printer =
-        new DefaultPrettyPrinter(
-            Separators.createDefaultInstance()
-                .withObjectFieldValueSpacing(Separators.Spacing.AFTER)
-                .withRootSeparator(""));
-    printer.indentObjectsWith(new DefaultIndenter("  ", "\n"));
-    try (JsonGenerator json = new JsonFactory().createGenerator(text)) {
-      json.setPrettyPrinter(printer);
-      new JsonReport(json).write(content);
-    } catch (IOException e) {
-      throw new UncheckedIOException(e);
-    }
-    return text.append('\n').toString();
+    return JsonOutput.document(new JsonReport(content)::write);
   }
 
-  private void write(ReportContent content) throws IOException {
-    Budget budget = content.budget();
-    json.writeStartObject();
-    json.writeStringField("title", content.title());
-    json.writeStringField("species", budget.drive().species().name());
-    json.writeStringField("start", budget.drive().start().toString());
-    strings("intermediates", budget.drive().intermediates().stream().map(Level::toString).toList());
-    json.writeStringField("target", budget.drive().target().toString());
-    drive(budget);
-    pulse(budget);
-    budget(content);
-    check(content.check());
-    strings("warnings", content.warnings());
-    strings("cautions", content.cautions());
-    json.writeEndObject();
+  private void write(JsonOutput out) throws IOException {
+    out.text("format", FORMAT);
+    out.integer("version", VERSION);
+    out.text("title", content.title());
+    out.text("species", budget.drive().species().name());
+    out.text("start", budget.drive().start().toString());
+    out.texts(
+        "intermediates", budget.drive().intermediates().stream().map(Level::toString).toList());
+    out.text("target", budget.drive().target().toString());
+    out.object("drive", new JsonDrive(budget));
+    out.object("pulse", this::pulse);
+    out.object("response", new JsonResponse(budget.response()));
+    out.object("budget", this::budget);
+    out.object("check", this::check);
+    out.texts("warnings", content.warnings());
+    out.texts("cautions", content.cautions());
   }
 
-  private void drive(Budget budget) throws IOException {
-    Drive drive = budget.drive();
-    json.writeObjectFieldStart("drive");
-    number("magnetic_field_T", drive.field().tesla());
-    vector("electric_field_V_per_m", drive.electricFieldVoltsPerMetre());
-    number("stark_shift_Hz", drive.starkShift().hertz());
-    number("rabi_Hz", drive.rabi().hertz());
-    number("relative_uncertainty", drive.relativeUncertainty());
-    json.writeArrayFieldStart("steps");
-    for (int k = 0; k < drive.steps().size(); k++) {
-      step(drive, k);
-    }
-    json.writeEndArray();
-    number("start_light_shift_Hz", drive.startLightShift().hertz());
-    number("target_light_shift_Hz", drive.targetLightShift().hertz());
-    if (drive.idle().isPresent()) {
-      GroundLight idle = drive.idle().get();
-      json.writeObjectFieldStart("idle");
-      json.writeStringField("sublevel", idle.sublevel().toString());
-      number("light_shift_Hz", idle.shift().hertz());
-      number("scattering_per_s", idle.scatteringPerSecond());
-      json.writeEndObject();
-    }
-    if (drive.trap().isPresent()) {
-      Drive.TrapLight trap = drive.trap().get();
-      json.writeObjectFieldStart("trap");
-      number("wavelength_m", trap.wavelength().metres());
-      number("start_light_shift_Hz", trap.startShift().hertz());
-      number("target_light_shift_Hz", trap.targetShift().hertz());
-      json.writeEndObject();
-    }
-    number("far_light_shift_relative_uncertainty", drive.farShiftRelativeUncertainty());
-    number("intermediate_admixture", drive.admixture());
-    number("intermediate_scattering_per_pulse", budget.scatteringPerPulse());
-    vector("wave_vector_per_m", drive.waveVectorPerMetre());
-    number("recoil_shift_Hz", drive.recoilShift().hertz());
-    number("magnetic_sensitivity_Hz_per_T", drive.magneticSensitivityHertzPerTesla());
-    json.writeArrayFieldStart("other_targets");
-    for (Drive.OtherTarget other : drive.otherTargets()) {
-      json.writeStartObject();
-      json.writeStringField("sublevel", other.sublevel());
-      number("rabi_Hz", other.rabi().hertz());
-      number("detuning_Hz", other.detuning().hertz());
-      json.writeEndObject();
-    }
-    json.writeEndArray();
-    json.writeEndObject();
-  }
-
-  private void step(Drive drive, int k) throws IOException {
-    Drive.Step step = drive.steps().get(k);
-    ReducedElement element = step.element();
-    String kind = element instanceof DipoleElement ? "dipole" : "quadrupole";
-    String unit = element instanceof DipoleElement ? "ea0" : "ea02";
-    json.writeStartObject();
-    json.writeStringField("to", step.to());
-    number("wavelength_m", step.wavelength().metres());
-    if (k < drive.intermediates().size()) {
-      number("detuning_Hz", drive.detuning(k).hertz());
-    }
-    beam(step);
-    number("rabi_Hz", step.rabi().hertz());
-    number("reduced_" + kind + "_" + unit, element.modulus());
-    number(
-        "reduced_" + kind + "_uncertainty_" + unit,
-        element.modulus() * element.relativeUncertainty());
-    json.writeStringField(kind + "_origin", DriveSections.origin(step));
-    json.writeStringField(kind + "_source", element.source());
-    number("start_light_shift_Hz", drive.startLightShift(k).hertz());
-    number("target_light_shift_Hz", drive.targetLightShift(k).hertz());
-    json.writeEndObject();
-  }
-
-  private void beam(Drive.Step step) throws IOException {
-    Beam beam = step.beam();
-    if (beam.profile() instanceof Profile.Gaussian round) {
-      number("power_W", round.beamPower().watts());
-      number("waist_m", round.waist().metres());
-    }
-    if (beam.profile() instanceof Profile.Elliptical e) {
-      number("power_W", e.beamPower().watts());
-      vector("waists_m", new double[] {e.firstWaist().metres(), e.secondWaist().metres()});
-      vector("waist_axis", new double[] {e.axisX(), e.axisY(), e.axisZ()});
-    }
-    number("peak_intensity_W_per_m2", beam.profile().peakIntensity().wattsPerSquareMetre());
-    vector("focus_m", beam.focusMetres());
-    number("field_V_per_m", step.fieldVoltsPerMetre());
-    json.writeStringField("polarization", beam.polarization().toString());
-    number("impurity", beam.impurity());
-    number("impurity_phase_deg", beam.impurityPhaseDegrees());
-    vector("direction", beam.direction());
-  }
-
-  private void pulse(Budget budget) throws IOException {
+  private void pulse(JsonOutput out) throws IOException {
     PulsePlan plan = budget.plan();
-    json.writeObjectFieldStart("pulse");
-    number("area_rad", budget.pulse().planAreaRadians());
-    number("duration_s", plan.duration().seconds());
-    number("rabi_Hz", plan.rabi().hertz());
-    number("frequency_offset_Hz", plan.frequencyOffset().hertz());
-    number("deliberate_offset_Hz", budget.pulse().offset().hertz());
-    json.writeEndObject();
+    PulseProgram program = budget.program();
+    out.text("name", budget.pulse().name());
+    out.text("description", budget.pulse().toString());
+    out.text("goal", word(budget.pulse().goal()));
+    out.number("area_rad", budget.pulse().planAreaRadians());
+    out.number("duration_s", program.seconds());
+    out.number("rabi_Hz", plan.rabi().hertz());
+    out.number("frequency_offset_Hz", plan.frequencyOffset().hertz());
+    out.number("deliberate_offset_Hz", budget.pulse().offset().hertz());
+    out.text("detuning_reference", word(program.reference()));
+    out.numbers("breaks_s", program.breaks());
   }
 
-  private void budget(ReportContent content) throws IOException {
-    Budget budget = content.budget();
-    json.writeObjectFieldStart("budget");
-    number("total", budget.total());
-    number("uncertainty", budget.uncertainty());
-    json.writeArrayFieldStart("causes");
-    for (CauseEntry cause : budget.causes()) {
-      json.writeStartObject();
-      json.writeStringField("cause", cause.cause());
-      number("error", cause.error());
-      number("uncertainty", cause.uncertainty());
-      number("share", content.share(cause.error()));
-      json.writeStringField("lever", cause.lever());
-      json.writeStringField("source", cause.source());
-      json.writeEndObject();
+  private static String word(Enum<?> constant) {
+    return constant.name().toLowerCase(Locale.ROOT);
+  }
+
+  private void budget(JsonOutput out) throws IOException {
+    out.number("total", budget.total());
+    out.number("uncertainty", budget.uncertainty());
+    out.number("atomic_uncertainty", budget.atomicUncertainty());
+    out.number("bench_uncertainty", budget.benchUncertainty());
+    out.number("overlap", budget.overlap());
+    List<JsonOutput.Part> causes = new ArrayList<>();
+    budget.causes().forEach(c -> causes.add(o -> cause(o, c)));
+    out.objects("causes", causes);
+    out.texts("not_assessed", budget.notAssessed());
+    List<JsonOutput.Part> sensitivities = new ArrayList<>();
+    content.sensitivities().forEach(s -> sensitivities.add(o -> sensitivity(o, s)));
+    out.objects("sensitivities", sensitivities);
+  }
+
+  private void cause(JsonOutput out, CauseEntry cause) throws IOException {
+    out.text("cause", cause.cause());
+    out.number("error", cause.error());
+    out.number("uncertainty", cause.uncertainty());
+    out.number("atomic_uncertainty", cause.atomicUncertainty());
+    out.number("bench_uncertainty", cause.benchUncertainty());
+    out.number("share", content.share(cause.error()));
+    out.text("fate", cause.fate().kind().word());
+    out.text("place", cause.fate().place());
+    out.text("lever", cause.lever());
+    out.text("source", cause.source());
+  }
+
+  private static void sensitivity(JsonOutput out, Sensitivity s) throws IOException {
+    out.text("value", s.value());
+    out.number("slope", s.slope());
+    out.number("saved_by_halving", s.savedByHalving());
+    out.number("saved_by_doubling", s.savedByDoubling());
+  }
+
+  private void check(JsonOutput out) throws IOException {
+    Check check = content.check();
+    out.number("total", check.total());
+    out.number("standard_error", check.standardError());
+    out.truth("agrees", check.agrees());
+    out.integer("shots", check.shots());
+    out.integer("seed", check.seed());
+    List<JsonOutput.Part> causes = new ArrayList<>();
+    for (CauseCheck c : check.causes()) {
+      causes.add(
+          o -> {
+            o.text("cause", c.cause());
+            o.number("composed", c.composed());
+            o.number("simulated", c.simulated());
+            o.number("standard_error", c.standardError());
+            o.truth("agrees", c.agrees());
+          });
     }
-    json.writeEndArray();
-    strings("not_assessed", budget.notAssessed());
-    json.writeEndObject();
-  }
-
-  private void check(Check check) throws IOException {
-    json.writeObjectFieldStart("check");
-    number("total", check.total());
-    number("standard_error", check.standardError());
-    json.writeBooleanField("agrees", check.agrees());
-    json.writeNumberField("shots", check.shots());
-    json.writeNumberField("seed", check.seed());
-    json.writeEndObject();
-  }
-
-  private void number(String key, double value) throws IOException {
-    json.writeFieldName(key);
-    json.writeNumber(finite(key, value));
-  }
-
-  private void vector(String key, double[] values) throws IOException {
-    json.writeArrayFieldStart(key);
-    for (double value : values) {
-      json.writeNumber(finite(key, value));
-    }
-    json.writeEndArray();
-  }
-
-  private void strings(String key, List<String> values) throws IOException {
-    json.writeArrayFieldStart(key);
-    for (String value : values) {
-      json.writeString(value);
-    }
-    json.writeEndArray();
-  }
-
-  private static double finite(String key, double value) {
-    if (!(Math.abs(value) <= Double.MAX_VALUE)) {
-      throw new IllegalStateException("the value of " + key + " is " + value + ", not finite");
-    }
-    return value + 0.0; // no negative zero
+    out.objects("causes", causes);
   }
 }

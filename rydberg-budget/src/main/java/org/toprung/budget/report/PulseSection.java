@@ -127,14 +127,14 @@ final class PulseSection {
         List.of(
             Column.right("played from"),
             Column.right("for"),
-            Column.left(program.steps() == 1 ? "field (1 is full)" : "field of each beam (1 is full)"),
+            Column.left(
+                program.steps() == 1 ? "field (1 is full)" : "field of each beam (1 is full)"),
             Column.left("detuning"),
             Column.left("phase")),
         rows);
     if (stretches.size() > MOST_STRETCHES) {
       out.sentence(
-          String.format(
-              Locale.ROOT, "and %d more stretches", stretches.size() - MOST_STRETCHES));
+          String.format(Locale.ROOT, "and %d more stretches", stretches.size() - MOST_STRETCHES));
     }
   }
 }

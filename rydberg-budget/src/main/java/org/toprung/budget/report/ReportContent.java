@@ -53,7 +53,10 @@ public record ReportContent(
     String alone =
         objections == 0
             ? ""
-            : ", DISAGREES with " + objections + (objections == 1 ? " cause" : " causes") + " alone";
+            : ", DISAGREES with "
+                + objections
+                + (objections == 1 ? " cause" : " causes")
+                + " alone";
     return (check.agrees() ? "agrees with the total" : "DISAGREES with the total") + alone;
   }
 

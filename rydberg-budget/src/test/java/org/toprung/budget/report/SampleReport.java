@@ -8,7 +8,7 @@ import org.toprung.budget.scenario.Scenario;
 final class SampleReport {
   private SampleReport() {}
 
-  static new ReportContent(String scenarioText) {
+  static ReportContent of(String scenarioText) {
     Scenario s = Scenario.parse(scenarioText, "sample.toml");
     Budget budget = s.budget();
     return new ReportContent(s.title(), budget, budget.check(40, 1));
