@@ -59,6 +59,7 @@ public final class Main implements Runnable {
   static int run(String[] args, PrintStream out, PrintStream err) {
     return new CommandLine(new Main())
         .addSubcommand(new BudgetCommand(err))
+        .addSubcommand(new CompareCommand())
         .addSubcommand(new AuditCommand())
         .setOut(new PrintWriter(out, true, StandardCharsets.UTF_8))
         .setErr(new PrintWriter(err, true, StandardCharsets.UTF_8))

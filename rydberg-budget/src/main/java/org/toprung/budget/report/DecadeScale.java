@@ -2,7 +2,7 @@ package org.toprung.budget.report;
 
 import java.util.stream.DoubleStream;
 
-/** A logarithmic axis for probabilities that begins and ends at powers of ten. */
+/** A logarithmic scale that begins and ends at powers of ten. */
 final class DecadeScale {
   private static final int FEWEST = 3; // decades
   private static final int MOST = 5;
@@ -16,9 +16,16 @@ final class DecadeScale {
     this.last = last;
   }
 
+  /** The decades from a low to a high positive value; at most so many, the low ones left out. */
+  static DecadeScale spanning(double low, double high, int most) {
+    int last = (int) Math.ceil(Math.log10(high) - 1e-9);
+    int first = (int) Math.floor(Math.log10(low) + 1e-9);
+    return new DecadeScale(Math.min(last - 1, Math.max(first, last - most)), last);
+  }
+
   /**
-   * An axis on which the largest value ends, at most at probability 1, and on which as many of the
-   * small ones begin as five decades hold.
+   * An axis for probabilities on which the largest value ends, at most at probability 1, and on
+   * which as many of the small ones begin as five decades hold.
    */
   static DecadeScale covering(double... values) {
     double largest = DoubleStream.of(values).reduce(NOTHING, Math::max);

@@ -107,7 +107,7 @@ final class Figures {
     return DECIMAL.matcher(text).replaceAll(m -> number(Double.parseDouble(m.group()), DIGITS));
   }
 
-  private static double rounded(double value) {
+  static double rounded(double value) {
     return new BigDecimal(value).round(new MathContext(DIGITS)).doubleValue();
   }
 }
