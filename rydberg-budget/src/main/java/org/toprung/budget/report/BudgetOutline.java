@@ -2,7 +2,6 @@ package org.toprung.budget.report;
 
 import java.util.Arrays;
 import java.util.Comparator;
-import java.util.Locale;
 import java.util.stream.Collectors;
 import org.toprung.budget.Budget;
 import org.toprung.budget.CauseEntry;
@@ -50,13 +49,11 @@ final class BudgetOutline {
             + PulseSection.meaning(budget.pulse().goal()));
     out.fact(
         "uncertainty",
-        String.format(
-            Locale.ROOT,
-            "%s from atomic data, %s",
-            Figures.uncertainty(budget.atomicUncertainty()),
-            budget.benchUncertainty() > 0
-                ? Figures.uncertainty(budget.benchUncertainty()) + " from bench values"
-                : "none from bench values, of which no stated uncertainty counts"));
+        percent(budget.atomicUncertainty())
+            + " from atomic data, "
+            + (budget.benchUncertainty() > 0
+                ? percent(budget.benchUncertainty()) + " from stated bench values"
+                : "none from bench values: no stated uncertainty counts"));
     CauseEntry largest = budget.causes().get(0);
     out.fact(
         "largest cause",
@@ -69,6 +66,11 @@ final class BudgetOutline {
     if (!content.warnings().isEmpty()) {
       out.fact("warnings", content.warnings().size() + ", see below");
     }
+  }
+
+  /** An uncertainty to two digits. */
+  private static String percent(double probability) {
+    return Figures.number(100 * probability, 2) + " %";
   }
 
   /** The sum of the causes by what becomes of the atom, most first. */

@@ -131,7 +131,7 @@ public final class ComparisonReport {
             Column.left("which is")),
         rows);
     if (still.length() > 0) {
-      out.fact("moved by less than 0.1 %", "of the total: " + still);
+      out.fact("hardly moved", still + " (each by less than 0.1 % of the total)");
     }
   }
 

@@ -197,18 +197,28 @@ public final class FilterChart {
         DecadeScale.spanning(empty ? 0.1 : low, empty ? 1 : high, MOST_DECADES), bottom, top);
   }
 
-  /** Along the curve, and along the lower edge where it falls below; off where it is zero. */
+  /** Along the curve where it lies above the lower edge. */
   private String path(Curve curve, LogAxis values) {
     StringBuilder path = new StringBuilder();
+    double[] hertz = curve.hertz();
+    double[] value = curve.values();
     boolean on = false;
-    for (int i = 0; i < curve.hertz().length; i++) {
-      double value = curve.values()[i];
-      if (value > 0) {
-        path.append(SvgPage.to(on ? 'L' : 'M', frequencies.at(curve.hertz()[i]), values.at(value)));
+    for (int i = 0; i < hertz.length; i++) {
+      boolean above = values.scale().reaches(value[i]);
+      if (above && !on && i > 0 && value[i - 1] > 0) {
+        path.append(to('M', hertz[i - 1], value[i - 1], values));
+        on = true;
       }
-      on = value > 0;
+      if (above || on && value[i] > 0) {
+        path.append(to(on ? 'L' : 'M', hertz[i], value[i], values));
+      }
+      on = above;
     }
     return path.toString();
+  }
+
+  private String to(char command, double hertz, double value, LogAxis values) {
+    return SvgPage.to(command, frequencies.at(hertz), values.at(value));
   }
 
   private static String power(double decade) {

@@ -93,7 +93,7 @@ record FilterContent(
   private static DecadeScale scale(PulseResponse response, List<NoiseDensity> densities) {
     double unit = 1 / response.seconds();
     double low = densities.isEmpty() ? 0.01 * unit : 0.1 * unit;
-    double high = densities.isEmpty() ? 100 * unit : 10 * unit;
+    double high = 10 * unit;
     for (NoiseDensity density : densities) {
       low = Math.min(low, density.lowestHertz());
       high = Math.max(high, density.highestHertz());

@@ -10,11 +10,14 @@ final class Lines {
 
   private Lines() {}
 
-  /** Breaks at spaces, or inside a word that is wider than a whole line. */
+  /**
+   * Breaks at spaces, but not before a percent sign, or inside a word that is wider than a whole
+   * line.
+   */
   static List<String> wrapped(String text, double room, ToDoubleFunction<String> width) {
     List<String> lines = new ArrayList<>();
     String line = "";
-    for (String word : text.strip().split(" +")) {
+    for (String word : text.strip().split(" +(?![ %])")) {
       String longer = line.isEmpty() ? word : line + " " + word;
       if (width.applyAsDouble(longer) <= room) {
         line = longer;

@@ -21,7 +21,7 @@ final class SensitivitySection {
                     Math.max(Math.abs(s.savedByHalving()), Math.abs(s.savedByDoubling()))
                         >= WORTH_A_ROW * total)
             .toList();
-    out.section("What to improve first (one value changed, the pulse planned anew; best first)");
+    out.section("What to improve first (the total with one value halved or doubled, the pulse planned anew)");
     List<List<String>> rows = new ArrayList<>();
     for (Sensitivity s : worth.subList(0, Math.min(MOST_ROWS, worth.size()))) {
       rows.add(
@@ -36,7 +36,7 @@ final class SensitivitySection {
     out.table(
         List.of(
             Column.left("value"),
-            Column.right("total if halved"),
+            Column.right("if halved"),
             Column.right("change"),
             Column.right("if doubled"),
             Column.right("change"),

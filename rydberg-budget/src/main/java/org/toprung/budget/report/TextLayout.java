@@ -1,6 +1,7 @@
 package org.toprung.budget.report;
 
 import java.util.List;
+import java.util.StringJoiner;
 import org.toprung.budget.report.Outline.Column;
 
 /** An outline as a page of text that fits {@value Page#WIDTH} columns. */
@@ -36,7 +37,7 @@ final class TextLayout {
     }
   }
 
-  /** Cells as wide as the widest of their column; the last one is wrapped. */
+  /** Cells as wide as the widest of their column; the last one is wrapped where it is long. */
   private void table(Outline.Table table) {
     List<Column> columns = table.columns();
     List<String> names = columns.stream().map(Column::name).toList();
@@ -49,11 +50,24 @@ final class TextLayout {
       }
       room -= widths[i] + GAP;
     }
-    if (room < NARROWEST) {
-      throw new IllegalStateException("the table " + names + " is too wide for the page");
+    int lastWidth = lastWidth(table);
+    if (room < Math.min(NARROWEST, lastWidth)) {
+      table.rows().forEach(row -> page.value(row.get(0), named(names, row)));
+      return;
     }
-    row(columns, widths, names, lastWidth(table));
-    table.rows().forEach(row -> row(columns, widths, row, lastWidth(table)));
+    row(columns, widths, names, lastWidth);
+    table.rows().forEach(row -> row(columns, widths, row, lastWidth));
+  }
+
+  /** A row that is too wide for a table: its cells one after the other, with their names. */
+  private static String named(List<String> names, List<String> row) {
+    StringJoiner text = new StringJoiner("; ");
+    for (int i = 1; i < row.size(); i++) {
+      if (!row.get(i).isEmpty()) {
+        text.add(names.get(i) + " " + row.get(i));
+      }
+    }
+    return text.toString();
   }
 
   private static int lastWidth(Outline.Table table) {

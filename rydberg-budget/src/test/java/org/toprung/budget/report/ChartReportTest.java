@@ -206,7 +206,7 @@ class ChartReportTest {
   void neverHidesADisagreement() {
     ReportContent sample = SampleReport.reference();
     Check bad = new Check(0.5, 0.001, false, 40, 1, List.of());
-    ReportContent report = new ReportContent("title", sample.budget(), bad);
+    ReportContent report = SampleReport.with(sample, bad);
     String text = ChartDocument.of(ChartReport.render(report)).joinedText();
     assertTrue(text.contains("DISAGREES with the total"), text);
   }
@@ -215,7 +215,7 @@ class ChartReportTest {
   void refusesWhatIsNotFinite() {
     ReportContent sample = SampleReport.reference();
     Check broken = new Check(0.1, Double.NaN, true, 40, 1, List.of());
-    ReportContent report = new ReportContent("title", sample.budget(), broken);
+    ReportContent report = SampleReport.with(sample, broken);
     IllegalStateException e =
         assertThrows(IllegalStateException.class, () -> ChartReport.render(report));
     assertTrue(e.getMessage().contains("Simulated total is 0.1 ± NaN"), e.getMessage());

@@ -150,7 +150,7 @@ class JsonReportTest {
   void neverWritesWhatIsNotANumber() {
     ReportContent sample = SampleReport.reference();
     Check broken = new Check(0.1, Double.NaN, true, 40, 1, List.of());
-    ReportContent content = new ReportContent("title", sample.budget(), broken);
+    ReportContent content = SampleReport.with(sample, broken);
     IllegalStateException e =
         assertThrows(IllegalStateException.class, () -> JsonReport.render(content));
     assertTrue(e.getMessage().contains("standard_error"), e.getMessage());

@@ -5,17 +5,26 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
+import org.toprung.budget.Budget;
 import org.toprung.budget.CauseEntry;
 import org.toprung.budget.Check;
 import org.toprung.budget.ReferenceScenario;
+import org.toprung.budget.Sensitivity;
 
 class TextReportTest {
 
   @Test
   void fitsAHundredColumnsWhateverTheScenario() {
     for (ReportContent content :
-        List.of(SampleReport.reference(), SampleReport.wide(), SampleReport.shaped())) {
+        Stream.concat(
+                SampleReport.all().stream(),
+                SampleReport.all().stream()
+                    .map(c -> SampleReport.checked(c, false, "Doppler shift", "Undisturbed pulse")))
+            .toList()) {
       for (String line : TextReport.render(content).lines().toList()) {
         assertTrue(line.codePointCount(0, line.length()) <= 100, line);
         assertEquals(line.stripTrailing(), line);
@@ -48,14 +57,14 @@ class TextReportTest {
   void neverHidesADisagreement() {
     ReportContent sample = SampleReport.reference();
     Check bad = new Check(0.5, 0.001, false, 40, 1, List.of());
-    String text = TextReport.render(new ReportContent("title", sample.budget(), bad));
+    String text = TextReport.render(SampleReport.with(sample, bad));
     assertTrue(text.contains("DISAGREES"), text);
     assertTrue(text.contains("the simulation disagrees"), text);
   }
 
   @Test
   void saysFirstHowLargeTheErrorIsAndWhatCausesIt() {
-    ReportContent content = SampleReport.reference();
+    ReportContent content = SampleReport.checked(SampleReport.reference(), true);
     List<String> lines = TextReport.render(content).lines().toList();
     double percent = 100 * content.budget().total();
     String error = lines.stream().filter(l -> l.contains("error of one pulse")).findFirst().get();
@@ -95,5 +104,131 @@ class TextReportTest {
     }
     String plain = TextReport.render(SampleReport.reference());
     assertFalse(plain.contains("focus at") || plain.contains("orthogonal"), plain);
+  }
+
+  private static List<String> headings(String text) {
+    List<String> lines = text.lines().toList();
+    return lines.stream()
+        .filter(l -> !l.isEmpty() && !l.startsWith(" ") && !l.startsWith("="))
+        .skip(1)
+        .toList();
+  }
+
+  @Test
+  void beginsWithWhatTheSimulationObjectsTo() {
+    ReportContent sample = SampleReport.reference();
+    for (ReportContent content :
+        List.of(
+            SampleReport.checked(sample, false),
+            SampleReport.checked(sample, true, "Doppler shift"),
+            SampleReport.checked(sample, false, "Doppler shift", "Electric field"))) {
+      String text = TextReport.render(content);
+      assertTrue(headings(text).get(0).startsWith("DISAGREEMENT"), text);
+      String section = text.substring(text.indexOf("DISAGREEMENT"), text.indexOf("\nResult"));
+      assertEquals(!content.check().agrees(), section.contains("  TOTAL "), section);
+      content
+          .check()
+          .causes()
+          .forEach(c -> assertEquals(!c.agrees(), section.contains(c.cause()), section));
+      assertTrue(text.substring(text.indexOf("\nWARNINGS")).contains("disagrees"), text);
+    }
+    String text = TextReport.render(SampleReport.checked(sample, true));
+    assertEquals("Result", headings(text).get(0));
+    assertFalse(text.contains("DISAGREE"), text);
+  }
+
+  /** The rows of the table, read back, are the total but for the overlap that has its own row. */
+  @Test
+  void showsRowsThatAddUpToTheTotal() {
+    ReportContent content = SampleReport.reference();
+    List<String> lines = TextReport.render(content).lines().toList();
+    int from = 0;
+    while (!lines.get(from).startsWith("Error budget")) {
+      from++;
+    }
+    double sum = 0;
+    for (String line : lines.subList(from + 2, lines.size())) {
+      if (line.startsWith("  TOTAL")) {
+        double total = Double.parseDouble(line.strip().split(" +")[1]);
+        assertEquals(total, sum, 0.006 * total);
+        assertEquals(content.budget().total(), total, 0.006 * total);
+        return;
+      }
+      Matcher error = Pattern.compile("-?\\d\\.\\d\\de-\\d\\d").matcher(line);
+      sum += error.find() ? Double.parseDouble(error.group()) : 0;
+    }
+    throw new AssertionError("no total");
+  }
+
+  @Test
+  void splitsTheUncertaintyIntoAtomAndBench() {
+    String none = TextReport.render(SampleReport.reference());
+    assertTrue(none.contains("none from bench values"), none);
+    Budget budget = SampleReport.noisy().budget();
+    assertTrue(budget.benchUncertainty() > 0);
+    String text = TextReport.render(SampleReport.noisy());
+    for (double part : List.of(budget.atomicUncertainty(), budget.benchUncertainty())) {
+      assertTrue(text.contains(Figures.number(100 * part, 2) + " % from "), text);
+    }
+  }
+
+  @Test
+  void tellsWhereEveryLargeCauseGoes() {
+    ReportContent content = SampleReport.reference();
+    String joined = TextReport.render(content).replaceAll("\\s+", "");
+    for (CauseEntry cause : content.budget().causes()) {
+      if (content.share(cause.error()) > 0.01) {
+        String where = cause.fate().kind().word() + ": " + cause.fate().place();
+        assertTrue(joined.contains(where.replaceAll("\\s+", "")), where);
+      }
+    }
+  }
+
+  /** The best value is the first, and its row says which way to turn it. */
+  @Test
+  void ranksWhatToImprove() {
+    ReportContent content = SampleReport.reference();
+    Sensitivity best = content.sensitivities().get(0);
+    List<String> lines = TextReport.render(content).lines().toList();
+    int from = 0;
+    while (!lines.get(from).startsWith("What to improve first")) {
+      from++;
+    }
+    String row = lines.get(from + 2);
+    assertTrue(row.startsWith("  " + best.value()), row);
+    assertTrue(
+        row.endsWith(best.savedByHalving() > best.savedByDoubling() ? "halve it" : "double it"),
+        row);
+    double total = content.budget().total();
+    assertTrue(row.contains(Figures.probability(total - best.savedByHalving())), row);
+    assertTrue(row.contains(Figures.probability(total - best.savedByDoubling())), row);
+  }
+
+  @Test
+  void comparesEachCauseAloneOrSaysThatItWasNot() {
+    ReportContent each = SampleReport.checked(SampleReport.reference(), true);
+    String text = TextReport.render(each);
+    assertTrue(text.contains("each cause alone  "), text);
+    assertTrue(text.substring(text.indexOf("Check by")).contains("Doppler shift"), text);
+    Check check = new Check(0.005, 1e-4, true, 40, 1, List.of());
+    String total = TextReport.render(SampleReport.with(SampleReport.reference(), check));
+    assertTrue(total.contains("not simulated"), total);
+  }
+
+  @Test
+  void tellsWhatIsPlayed() {
+    String plain = TextReport.render(SampleReport.reference());
+    assertTrue(plain.contains("every beam at full field for the whole duration"), plain);
+    String smooth = TextReport.render(SampleReport.noisy());
+    assertTrue(smooth.contains("played from"), smooth);
+    assertTrue(smooth.contains("0 to 1"), smooth);
+    assertTrue(smooth.contains("at the fields of the moment"), smooth);
+  }
+
+  /** 1 % of Rabi frequency costs (π/2 × 0.01)² with a square π pulse, exact to second order. */
+  @Test
+  void tellsWhatAnErrorOfTheRabiFrequencyCosts() {
+    String text = TextReport.render(SampleReport.reference());
+    assertTrue(text.contains("2.47e-04 for 1 % of Rabi frequency"), text);
   }
 }
