@@ -9,6 +9,8 @@ import org.toprung.budget.response.Fate;
 
 /** The report of a checked budget in words and tables, what matters most first. */
 final class BudgetOutline {
+  private static final double WORTH_A_WORD = 5e-4; // share of the sum
+
   private final Outline.Writer out;
   private final ReportContent content;
   private final Budget budget;
@@ -76,7 +78,7 @@ final class BudgetOutline {
   /** The sum of the causes by what becomes of the atom, most first. */
   private String fates() {
     return Arrays.stream(Fate.Kind.values())
-        .filter(kind -> sum(kind) != 0)
+        .filter(kind -> Math.abs(content.share(sum(kind))) >= WORTH_A_WORD)
         .sorted(Comparator.comparingDouble(this::sum).reversed())
         .map(kind -> kind.word() + " " + Figures.share(content.share(sum(kind))))
         .collect(Collectors.joining(", "));

@@ -21,7 +21,8 @@ final class SensitivitySection {
                     Math.max(Math.abs(s.savedByHalving()), Math.abs(s.savedByDoubling()))
                         >= WORTH_A_ROW * total)
             .toList();
-    out.section("What to improve first (the total with one value halved or doubled, the pulse planned anew)");
+    out.section(
+        "What to improve first (the total with one value halved or doubled, the pulse planned anew)");
     List<List<String>> rows = new ArrayList<>();
     for (Sensitivity s : worth.subList(0, Math.min(MOST_ROWS, worth.size()))) {
       rows.add(

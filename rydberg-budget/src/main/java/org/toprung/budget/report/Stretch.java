@@ -57,7 +57,7 @@ record Stretch(
 
   /** Points that keep off the ends, where a program may jump. */
   private static double inside(double from, double seconds, int i) {
-    return from + seconds * (1e-6 + (1 - 2e-6) * i / (SAMPLES - 1));
+    return from + seconds * (1e-9 + (1 - 2e-9) * i / (SAMPLES - 1));
   }
 
   boolean isAtFullPower() {

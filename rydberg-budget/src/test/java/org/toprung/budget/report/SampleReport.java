@@ -64,7 +64,8 @@ final class SampleReport {
   static ReportContent checked(ReportContent content, boolean agrees, String... objections) {
     List<CauseCheck> causes =
         Stream.concat(
-                content.budget().causes().stream().map(c -> c.cause()), Stream.of("Undisturbed pulse"))
+                content.budget().causes().stream().map(c -> c.cause()),
+                Stream.of("Undisturbed pulse"))
             .map(c -> checked(content.budget(), c, List.of(objections).contains(c)))
             .collect(Collectors.toList());
     double total = content.budget().total() * (agrees ? 1.01 : 2);

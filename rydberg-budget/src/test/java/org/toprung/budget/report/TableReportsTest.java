@@ -21,8 +21,7 @@ class TableReportsTest {
 
   @Test
   void hasOneRowForEachCauseWithAllItsValues() {
-    ReportContent content =
-        SampleReport.checked(SampleReport.noisy(), true, "Doppler shift");
+    ReportContent content = SampleReport.checked(SampleReport.noisy(), true, "Doppler shift");
     List<List<String>> rows = causes(content);
     List<CauseEntry> causes = content.budget().causes();
     assertEquals(causes.size() + 1, rows.size());
@@ -48,8 +47,10 @@ class TableReportsTest {
   void namesAUnitInEveryColumnOfNumbers() {
     List<List<String>> rows = causes(SampleReport.checked(SampleReport.reference(), true));
     for (int i = 0; i < rows.get(0).size(); i++) {
-      boolean number = rows.get(1).get(i).matches("-?\\d.*\\d") && !rows.get(1).get(i).contains(" ");
-      assertEquals(number, rows.get(0).get(i).matches(".*\\((probability|fraction)\\)"), rows.get(0).get(i));
+      boolean number =
+          rows.get(1).get(i).matches("-?\\d.*\\d") && !rows.get(1).get(i).contains(" ");
+      assertEquals(
+          number, rows.get(0).get(i).matches(".*\\((probability|fraction)\\)"), rows.get(0).get(i));
     }
   }
 
