@@ -307,15 +307,79 @@ class BadInputTest {
     assertEquals(ReferenceScenario.text(), Files.readString(scenario));
   }
 
-  @Test
-  void refusesTheSameFileForBothOutputs() throws IOException {
+  @ParameterizedTest
+  @CsvSource({
+    "--json, --chart, a.svg",
+    "--markdown, --csv, a",
+    "--chart, --filter-chart, a.svg",
+    "--csv, --program, a.csv",
+    "--json, --markdown, a",
+  })
+  void refusesTheSameFileForTwoOutputs(String first, String second, String name)
+      throws IOException {
     Path scenario = Files.writeString(folder.resolve("lab.toml"), ReferenceScenario.text());
-    String output = folder.resolve("out.svg").toString();
+    String output = folder.resolve(name).toString();
     CommandLineRun run =
-        CommandLineRun.of("budget", scenario.toString(), "--json", output, "--chart", output);
+        CommandLineRun.of("budget", scenario.toString(), first, output, second, output);
     assertEquals(2, run.status());
+    assertEquals("", run.out());
     assertEquals(1, run.errLines().size(), run.err());
+    assertTrue(run.err().contains(first) && run.err().contains(second), run.err());
     assertFalse(Files.exists(Path.of(output)));
+  }
+
+  @ParameterizedTest
+  @ValueSource(strings = {"--json", "--markdown", "--csv"})
+  void refusesToReplaceTheScenario(String option) throws IOException {
+    Path scenario = Files.writeString(folder.resolve("lab.toml"), ReferenceScenario.text());
+    CommandLineRun run =
+        CommandLineRun.of("budget", scenario.toString(), option, scenario.toString());
+    assertEquals(2, run.status());
+    assertTrue(run.err().contains("the scenario itself"), run.err());
+    assertEquals(ReferenceScenario.text(), Files.readString(scenario));
+  }
+
+  @ParameterizedTest
+  @ValueSource(strings = {"0 s", "-1 ns", "1e-15 s"})
+  void refusesSlicesThatDoNotFitThePulse(String slice) throws IOException {
+    Path scenario = Files.writeString(folder.resolve("lab.toml"), ReferenceScenario.text());
+    String output = folder.resolve("out.csv").toString();
+    CommandLineRun run =
+        CommandLineRun.of("budget", scenario.toString(), "--program", output, "--slice", slice);
+    assertEquals(2, run.status());
+    assertEquals("", run.out());
+    assertEquals(1, run.errLines().size(), run.err());
+    assertTrue(run.err().contains("--slice") && run.err().contains("allowed"), run.err());
+    assertFalse(Files.exists(Path.of(output)));
+  }
+
+  @Test
+  void refusesToCompareWithWhatIsNoScenario() throws IOException {
+    Path good = Files.writeString(folder.resolve("lab.toml"), ReferenceScenario.text());
+    Path bad = Files.writeString(folder.resolve("bad.toml"), ReferenceScenario.with("Rb-87", "X"));
+    for (String[] files :
+        new String[][] {{good.toString(), bad.toString()}, {bad.toString(), good.toString()}}) {
+      CommandLineRun run = CommandLineRun.of("compare", files[0], files[1]);
+      assertEquals(2, run.status());
+      assertEquals("", run.out());
+      assertEquals(1, run.errLines().size(), run.err());
+      assertTrue(run.err().contains("bad.toml"), run.err());
+    }
+    assertEquals(2, CommandLineRun.of("compare", good.toString()).status());
+    for (Path taken : List.of(good, bad)) {
+      CommandLineRun run =
+          CommandLineRun.of(
+              "compare", good.toString(), good.toString(), "--markdown", folder.toString());
+      assertEquals(2, run.status());
+      assertTrue(run.err().contains("--markdown: given"), run.err());
+      assertTrue(Files.size(taken) > 0);
+    }
+    CommandLineRun over =
+        CommandLineRun.of(
+            "compare", good.toString(), good.toString(), "--markdown", good.toString());
+    assertEquals(2, over.status());
+    assertTrue(over.err().contains("the scenario itself"), over.err());
+    assertEquals(ReferenceScenario.text(), Files.readString(good));
   }
 
   @ParameterizedTest
@@ -324,6 +388,11 @@ class BadInputTest {
     "--shots few, --shots, given few; allowed: a whole number from 2 to",
     "--seed 1.5, --seed, 1.5",
     "--chart a.png, a.png, .svg",
+    "--filter-chart a.png, a.png, .svg",
+    "--program a.txt, a.txt, .csv",
+    "--slice 2 --program a.csv, given 2, its unit",
+    "--slice 2ns, --slice, --program",
+    "--total-only=maybe, --total-only, maybe",
     "--json, --json, FILE",
     "--colour, --colour, --help",
   })

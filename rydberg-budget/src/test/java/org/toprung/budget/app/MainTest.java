@@ -112,7 +112,19 @@ class MainTest {
     assertEquals(0, help.status());
     for (String word :
         new String[] {
-          "SCENARIO", "--json", "--chart", "--shots", "--seed", "--derivation", "2000"
+          "SCENARIO",
+          "--json",
+          "--markdown",
+          "--csv",
+          "--chart",
+          "--filter-chart",
+          "--program",
+          "--slice",
+          "--total-only",
+          "--shots",
+          "--seed",
+          "--derivation",
+          "2000"
         }) {
       assertTrue(help.out().contains(word), word);
     }
@@ -126,5 +138,50 @@ class MainTest {
     assertEquals(0, version.status());
     assertTrue(version.out().strip().matches("Toprung \\d+\\.\\d+\\.\\d+.*"), version.out());
     assertEquals(version.out(), CommandLineRun.of("budget", "--version").out());
+  }
+
+  @Test
+  void writesEveryOtherFileToo() throws IOException {
+    Path markdown = folder.resolve("out.md");
+    Path csv = folder.resolve("out.csv");
+    Path filter = folder.resolve("filter.svg");
+    Path program = folder.resolve("program.csv");
+    CommandLineRun run =
+        budget(
+            "--total-only",
+            "--markdown",
+            markdown.toString(),
+            "--csv",
+            csv.toString(),
+            "--filter-chart",
+            filter.toString(),
+            "--program",
+            program.toString(),
+            "--slice",
+            "10 ns");
+    assertEquals(0, run.status(), run.err());
+    assertTrue(Files.readString(markdown).startsWith("# Rubidium reference drive\n"));
+    assertTrue(Files.readString(csv).startsWith("cause,error (probability),"));
+    assertTrue(Files.readString(filter).contains("<svg"));
+    assertTrue(Files.readString(program).startsWith("begin (s),length (s),field of beam 1"));
+    for (Path file : new Path[] {markdown, csv, filter, program}) {
+      assertTrue(run.out().contains(" written to " + file.toRealPath()), run.out());
+    }
+    assertTrue(run.out().contains("not simulated"), run.out());
+  }
+
+  @Test
+  void comparesTwoScenarios() throws IOException {
+    Path after =
+        Files.writeString(
+            folder.resolve("after.toml"), ReferenceScenario.with("\"10 uK\"", "\"20 uK\""));
+    Path markdown = folder.resolve("out.md");
+    CommandLineRun run =
+        CommandLineRun.of("compare", scenario, after.toString(), "--markdown", markdown.toString());
+    assertEquals(0, run.status(), run.err());
+    assertEquals("", run.err());
+    assertTrue(run.out().startsWith("Two budgets compared\n"), run.out());
+    assertTrue(run.out().contains("Doppler shift"), run.out());
+    assertTrue(Files.readString(markdown).contains("| Doppler shift |"));
   }
 }

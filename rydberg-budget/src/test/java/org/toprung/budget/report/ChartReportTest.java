@@ -220,4 +220,56 @@ class ChartReportTest {
         assertThrows(IllegalStateException.class, () -> ChartReport.render(report));
     assertTrue(e.getMessage().contains("Simulated total is 0.1 ± NaN"), e.getMessage());
   }
+
+  @Test
+  void marksWhatTheSimulationFindsForACauseAlone() {
+    ReportContent content = SampleReport.checked(SampleReport.reference(), true, "Doppler shift");
+    ChartDocument svg = ChartDocument.of(ChartReport.render(content));
+    List<Element> marks = svg.all("alone");
+    assertEquals(svg.all("cause").size(), marks.size());
+    long black = marks.stream().filter(m -> m.getAttribute("fill").equals(Look.INK)).count();
+    assertEquals(1, black);
+    String text = svg.joinedText();
+    assertTrue(text.contains("DISAGREES with these causes alone: Doppler shift."), text);
+    assertTrue(text.contains("Diamonds:"), text);
+  }
+
+  /** What becomes of the atom can be told without colour. */
+  @Test
+  void hatchesBarsByWhatBecomesOfTheAtom() {
+    CauseEntry[] causes = new CauseEntry[Fate.Kind.values().length];
+    for (Fate.Kind kind : Fate.Kind.values()) {
+      causes[kind.ordinal()] =
+          new CauseEntry(kind.word(), 0.01, 0, 0, new Fate(kind, "place"), "lever", "source");
+    }
+    ChartDocument svg = drawn(content("t", 0.04, causes));
+    assertEquals(4, svg.all("cause").size());
+    assertEquals(4, svg.all("hatch").size()); // none, one, one and two
+    String text = svg.joinedText();
+    for (Fate.Kind kind : Fate.Kind.values()) {
+      assertTrue(
+          text.contains("lines: " + kind.word()) || text.contains("plain: " + kind.word()), text);
+    }
+  }
+
+  /** Every line of a hatching lies in its rectangle, at 45 degrees. */
+  @Test
+  void hatchesWithinTheBar() {
+    for (Hatch hatch : Hatch.values()) {
+      String path = hatch.path(10, 20, 37, 14, 6);
+      List<double[]> points = new ArrayList<>();
+      for (String command : path.substring(1).split("[ML]")) {
+        String[] xy = command.split(" ");
+        points.add(new double[] {Double.parseDouble(xy[0]), Double.parseDouble(xy[1])});
+      }
+      assertTrue(points.size() > 10);
+      for (int i = 0; i < points.size(); i += 2) {
+        double[] a = points.get(i);
+        double[] b = points.get(i + 1);
+        assertTrue(a[0] >= 10 && b[0] <= 47 && a[0] < b[0]);
+        assertTrue(Math.min(a[1], b[1]) >= 20 && Math.max(a[1], b[1]) <= 34);
+        assertEquals(b[0] - a[0], (hatch == Hatch.RISING ? -1 : 1) * (b[1] - a[1]), 0.011);
+      }
+    }
+  }
 }

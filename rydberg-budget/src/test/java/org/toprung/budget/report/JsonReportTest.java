@@ -41,7 +41,27 @@ class JsonReportTest {
         "/pulse/duration_s",
         "/pulse/frequency_offset_Hz",
         "/budget/total",
+        "/version",
+        "/pulse/breaks_s/1",
+        "/response/undisturbed_error",
+        "/response/knobs/0/curvature",
+        "/response/knobs/1/curvature_per_Hz2",
+        "/response/seconds_in_states/target",
+        "/response/filter/frequency_Hz/80",
+        "/response/filter/laser_frequency_2_per_Hz2/80",
+        "/response/filter/beam_intensity_1/80",
         "/budget/uncertainty",
+        "/budget/atomic_uncertainty",
+        "/budget/bench_uncertainty",
+        "/budget/overlap",
+        "/budget/causes/0/atomic_uncertainty",
+        "/budget/causes/0/bench_uncertainty",
+        "/budget/sensitivities/0/slope",
+        "/budget/sensitivities/0/saved_by_halving",
+        "/budget/sensitivities/0/saved_by_doubling",
+        "/check/causes/0/composed",
+        "/check/causes/0/simulated",
+        "/check/causes/0/standard_error",
         "/budget/causes/0/error",
         "/budget/causes/0/uncertainty",
         "/check/total",
@@ -57,7 +77,15 @@ class JsonReportTest {
   @ParameterizedTest
   @ValueSource(
       strings = {
+        "/format",
         "/title",
+        "/pulse/name",
+        "/pulse/goal",
+        "/pulse/detuning_reference",
+        "/budget/causes/0/fate",
+        "/budget/causes/0/place",
+        "/budget/sensitivities/0/value",
+        "/check/causes/0/cause",
         "/species",
         "/start",
         "/target",
@@ -154,5 +182,29 @@ class JsonReportTest {
     IllegalStateException e =
         assertThrows(IllegalStateException.class, () -> JsonReport.render(content));
     assertTrue(e.getMessage().contains("standard_error"), e.getMessage());
+  }
+
+  /** At low frequencies the filter of a resonance is half its curvature: exact. */
+  @Test
+  void writesFiltersThatEndInTheStaticResponse() throws IOException {
+    JsonNode response = parsed(SampleReport.reference()).at("/response");
+    double filter = response.at("/filter/laser_frequency_1_per_Hz2/0").doubleValue();
+    double curvature = response.at("/knobs/1/curvature_per_Hz2").doubleValue();
+    assertEquals(0.5 * curvature, filter, 1e-3 * filter);
+    assertEquals(81, response.at("/filter/frequency_Hz").size());
+  }
+
+  @Test
+  void carriesSensitivitiesAndChecksOfSingleCauses() throws IOException {
+    ReportContent content = SampleReport.checked(SampleReport.noisy(), true, "Doppler shift");
+    JsonNode json = parsed(content);
+    assertEquals(content.sensitivities().size(), json.at("/budget/sensitivities").size());
+    assertEquals(content.budget().causes().size() + 1, json.at("/check/causes").size());
+    for (JsonNode cause : json.at("/check/causes")) {
+      boolean objects = cause.at("/cause").textValue().equals("Doppler shift");
+      assertEquals(!objects, cause.at("/agrees").booleanValue(), cause.toString());
+    }
+    assertEquals("Gaussian 3.1416 rad", json.at("/pulse/name").textValue());
+    assertEquals(content.budget().overlap(), json.at("/budget/overlap").doubleValue());
   }
 }
