@@ -36,6 +36,7 @@ record FilterContent(
   private static final int POINTS = 800;
   private static final int MOST_DECADES = 10;
   private static final double OUTSIDE = 0.1; // of the error, beyond either end of a band
+  private static final double WORTH_TELLING = 0.005; // share of the area of a filter
   private static final String FREQUENCY_UNIT = "1/Hz²";
 
   static FilterContent of(ReportContent content) {
@@ -89,11 +90,11 @@ record FilterContent(
         notes(densities.isEmpty()));
   }
 
-  /** Frequencies of all tables, and a decade about the inverse duration at least. */
+  /** Frequencies of all tables, and those about the inverse duration at least. */
   private static DecadeScale scale(PulseResponse response, List<NoiseDensity> densities) {
     double unit = 1 / response.seconds();
     double low = densities.isEmpty() ? 0.01 * unit : 0.1 * unit;
-    double high = 10 * unit;
+    double high = densities.isEmpty() ? 10 * unit : 3 * unit;
     for (NoiseDensity density : densities) {
       low = Math.min(low, density.lowestHertz());
       high = Math.max(high, density.highestHertz());
@@ -133,7 +134,10 @@ record FilterContent(
                 .append(Figures.of(Frequency.ofHertz(b.fromHertz())))
                 .append(" to ")
                 .append(Figures.of(Frequency.ofHertz(b.toHertz()))));
-    return text.append("; of white noise the table would miss ")
+    if (Math.max(error.shareBelow(), error.shareAbove()) < WORTH_TELLING) {
+      return text.append("; the table covers what the pulse reacts to.").toString();
+    }
+    return text.append("; of what the pulse reacts to the table leaves out ")
         .append(Figures.share(error.shareBelow()))
         .append(" below and ")
         .append(Figures.share(error.shareAbove()))

@@ -128,7 +128,7 @@ final class PulseSection {
             Column.right("played from"),
             Column.right("for"),
             Column.left(
-                program.steps() == 1 ? "field (1 is full)" : "field of each beam (1 is full)"),
+                program.steps() == 1 ? "field (lowest to highest)" : "fields (lowest to highest)"),
             Column.left("detuning"),
             Column.left("phase")),
         rows);
