@@ -1,2 +1,2 @@
-/** The command line: one scenario file in, one report out. */
+/** The command line: a scenario file in and its report out, or two scenarios compared. */
 package org.toprung.budget.app;

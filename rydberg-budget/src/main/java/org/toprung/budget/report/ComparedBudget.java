@@ -12,6 +12,8 @@ public record ComparedBudget(String title, Budget budget) {
   /**
    * Checks the parts.
    *
+   * @param title one line that names the scenario
+   * @param budget the budget
    * @throws IllegalArgumentException if a part is missing
    */
   public ComparedBudget {
