@@ -22,7 +22,7 @@ import org.toprung.core.drive.Drive;
 final class BeamFields {
   private final Drive drive;
   private final List<Push> pushes;
-  private final NormalAverage average;
+  private final Points points; // field factors
   private final double[] meanSquare;
   private final double meanProduct;
 
@@ -42,7 +42,7 @@ final class BeamFields {
   private BeamFields(Drive drive, List<Push> pushes) {
     this.drive = drive;
     this.pushes = pushes;
-    this.average = NormalAverage.ofDimensions(pushes.size());
+    this.points = Points.of(pushes.size(), this::fields);
     this.meanSquare = new double[drive.steps().size()];
     for (int k = 0; k < meanSquare.length; k++) {
       int step = k;
@@ -114,30 +114,31 @@ final class BeamFields {
     return new double[] {v[0] / length, v[1] / length, v[2] / length};
   }
 
+  private double[] fields(double[] normal) {
+    double[] fields = new double[drive.steps().size()];
+    for (int k = 0; k < fields.length; k++) {
+      double x = 0;
+      double y = 0;
+      double z = 0;
+      for (int j = 0; j < normal.length; j++) {
+        Push push = pushes.get(j);
+        if (push.moves(k)) {
+          x += push.x() * normal[j];
+          y += push.y() * normal[j];
+          z += push.z() * normal[j];
+        }
+      }
+      fields[k] = drive.steps().get(k).fieldFactorAt(x, y, z);
+    }
+    return fields;
+  }
+
   /**
-   * Mean of a function of the field factors of all beams over their nominal fields; the array it is
-   * given is used again.
+   * Mean of a function of the field factors of all beams over their nominal fields; it must not
+   * change or keep the array it is given.
    */
   double average(ToDoubleFunction<double[]> f) {
-    double[] fields = new double[drive.steps().size()];
-    return average.of(
-        normal -> {
-          for (int k = 0; k < fields.length; k++) {
-            double x = 0;
-            double y = 0;
-            double z = 0;
-            for (int j = 0; j < normal.length; j++) {
-              Push push = pushes.get(j);
-              if (push.moves(k)) {
-                x += push.x() * normal[j];
-                y += push.y() * normal[j];
-                z += push.z() * normal[j];
-              }
-            }
-            fields[k] = drive.steps().get(k).fieldFactorAt(x, y, z);
-          }
-          return f.applyAsDouble(fields);
-        });
+    return points.average(f);
   }
 
   static double product(double[] fields) {

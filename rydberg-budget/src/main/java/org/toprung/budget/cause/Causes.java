@@ -94,7 +94,7 @@ public final class Causes {
             "natural decay times the time spent in the intermediate sublevels; (πγ/4|Δ|)(q + 1/q)"
                 + " for a two-photon π pulse (Saffman and Walker, Phys. Rev. A 72, 022347 (2005))",
             only(SCATTERING),
-            PulseModel::scatteringPerPulse,
+            PulseModel::scatteringError,
             Fate.Kind.LOSS,
             m -> Destinations.ofScattering(drive),
             m -> levels == 1 ? moreDetuning(m) : MORE_DETUNINGS));
@@ -109,7 +109,7 @@ public final class Causes {
         Locale.ROOT,
         "double the detuning at twice the power in both beams: about %.2g remains at the same Rabi"
             + " frequency; bring the step Rabi frequencies closer",
-        0.5 * model.scatteringPerPulse());
+        0.5 * model.scatteringError());
   }
 
   private void addLoss() {
@@ -119,14 +119,14 @@ public final class Causes {
             "decay rate by sum over states times the time spent in the Rydberg level; Γτ/2 for a π"
                 + " pulse",
             only(SPONTANEOUS_DECAY),
-            m -> m.lost(m.spontaneousPerSecond()),
+            m -> m.decayError(m.spontaneousPerSecond()),
             Fate.Kind.LOSS,
             m -> Destinations.ofDecay(drive),
             m ->
                 String.format(
                     Locale.ROOT,
                     "double the Rabi frequency: %.2g remains; or a higher level",
-                    0.5 * m.lost(m.spontaneousPerSecond()))));
+                    0.5 * m.decayError(m.spontaneousPerSecond()))));
     if (bench.environment().isEmpty()) {
       notAssessed.add("Rydberg decay, blackbody: no environment temperature");
       return;
@@ -140,7 +140,7 @@ public final class Causes {
                 + t
                 + " times the time spent in the Rydberg level",
             only(BLACKBODY),
-            m -> m.lost(m.blackbodyPerSecond(t)),
+            m -> m.decayError(m.blackbodyPerSecond(t)),
             Fate.Kind.LOSS,
             m -> Destinations.ofBlackbody(drive, t),
             m ->
@@ -148,7 +148,7 @@ public final class Causes {
                     Locale.ROOT,
                     "cool the surroundings to %s: %.2g remains",
                     half,
-                    m.lost(m.blackbodyPerSecond(half)))));
+                    m.decayError(m.blackbodyPerSecond(half)))));
   }
 
   private void addMotion() {

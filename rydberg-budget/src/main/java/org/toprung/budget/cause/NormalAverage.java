@@ -1,13 +1,12 @@
 package org.toprung.budget.cause;
 
-import java.util.function.ToDoubleFunction;
 import org.apache.commons.math4.legacy.analysis.integration.gauss.GaussIntegrator;
 import org.apache.commons.math4.legacy.analysis.integration.gauss.GaussIntegratorFactory;
 
 /**
- * Averages over several independent standard normal variables by a product of Gauss-Hermite rules:
- * 9 points each in up to three dimensions (exact to degree 17), 5 in up to five (degree 9), 3 above
- * (degree 5).
+ * Points for averages over several independent standard normal variables: a product of
+ * Gauss-Hermite rules: 9 points each in up to three dimensions (exact to degree 17), 5 in up to
+ * five (degree 9), 3 above (degree 5).
  *
  * <p>Immutable and thread-safe.
  */
@@ -38,20 +37,26 @@ final class NormalAverage {
     return new NormalAverage(dimensions, order);
   }
 
-  /** Mean of a function of a point; the array it is given is used again for the next point. */
-  double of(ToDoubleFunction<double[]> f) {
-    return nested(f, new double[dimensions], 0);
+  /** What is done with a point of the rule. */
+  @FunctionalInterface
+  interface Visitor {
+    /** The array is used again for the next point. */
+    void visit(double[] point, double weight);
   }
 
-  private double nested(ToDoubleFunction<double[]> f, double[] x, int dimension) {
+  /** Goes through all points; their weights add up to 1. */
+  void forEach(Visitor visitor) {
+    nested(visitor, new double[dimensions], 0, 1);
+  }
+
+  private void nested(Visitor visitor, double[] x, int dimension, double weight) {
     if (dimension == dimensions) {
-      return f.applyAsDouble(x);
+      visitor.visit(x, weight);
+      return;
     }
-    double sum = 0;
     for (int i = 0; i < points.length; i++) {
       x[dimension] = points[i];
-      sum += weights[i] * nested(f, x, dimension + 1);
+      nested(visitor, x, dimension + 1, weight * weights[i]);
     }
-    return sum;
   }
 }

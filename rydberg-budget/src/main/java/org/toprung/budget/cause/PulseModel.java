@@ -6,18 +6,13 @@ import java.util.List;
 import java.util.OptionalDouble;
 import org.toprung.budget.bench.Bench;
 import org.toprung.budget.dynamics.CalibratedProgram;
-import org.toprung.budget.dynamics.EdgeResidual;
-import org.toprung.budget.dynamics.LadderReaction;
-import org.toprung.budget.dynamics.LadderSystem;
 import org.toprung.budget.dynamics.NoiseFreePulse;
-import org.toprung.budget.dynamics.TwoLevelSystem;
 import org.toprung.budget.pulse.Goal;
 import org.toprung.budget.pulse.Pulse;
 import org.toprung.budget.pulse.PulseProgram;
 import org.toprung.budget.response.PulseResponse;
 import org.toprung.core.atom.Level;
 import org.toprung.core.drive.Drive;
-import org.toprung.core.drive.Elimination;
 import org.toprung.core.drive.Ladder;
 import org.toprung.core.drive.PulsePlan;
 import org.toprung.core.quantity.Frequency;
@@ -38,124 +33,69 @@ import org.toprung.core.structure.StarkShift;
  */
 public final class PulseModel {
 
-  /** Factors on the atomic inputs; 1 is the catalogue's value. */
-  private record Inputs(
-      double[] elements,
-      double intermediateDecay,
-      double spontaneous,
-      double blackbody,
-      double polarizability,
-      double farShift) {
-
-    static Inputs nominal(int steps) {
+  /** Factors on the atomic inputs that the ladder is made of; 1 is the catalogue's value. */
+  private record Couplings(double[] elements, double farShift) {
+    static Couplings nominal(int steps) {
       double[] ones = new double[steps];
       Arrays.fill(ones, 1);
-      return new Inputs(ones, 1, 1, 1, 1, 1);
+      return new Couplings(ones, 1);
     }
 
-    Inputs withElement(int step, double factor) {
+    Couplings withElement(int step, double factor) {
       double[] varied = elements.clone();
       varied[step] = factor;
-      return new Inputs(varied, 1, 1, 1, 1, 1);
+      return new Couplings(varied, farShift);
     }
+  }
+
+  /** Factors on the atomic inputs that the ladder does not know. */
+  private record Rates(
+      double intermediateDecay, double spontaneous, double blackbody, double polarizability) {
+    static final Rates NOMINAL = new Rates(1, 1, 1, 1);
   }
 
   private final Drive drive;
-  private final Pulse pulse;
   private final BeamFields fields;
-  private final Inputs inputs;
-  private final CalibratedProgram calibrated;
-  private final LadderSystem system;
-  private final NoiseFreePulse noiseFree;
+  private final Couplings couplings;
+  private final Rates rates;
+  private final PulseCore core;
   private final StarkShift stark;
-  private final boolean twoLevel;
-  private final Reaction reaction;
-  private final double baseline;
-  private final double baselineWithoutOffset;
-  private final Lazy<PulseResponse> response;
-  private final Lazy<double[]> seconds; // by state of the ladder
 
-  private PulseModel(Drive drive, Pulse pulse, BeamFields fields, Inputs inputs) {
+  private PulseModel(
+      Drive drive,
+      BeamFields fields,
+      Couplings couplings,
+      Rates rates,
+      PulseCore core,
+      StarkShift stark) {
     this.drive = drive;
-    this.pulse = pulse;
     this.fields = fields;
-    this.inputs = inputs;
-    Ladder ladder = adjusted(drive.ladder());
-    Pulse centred = pulse.offsetBy(Frequency.ofHertz(0));
-    this.calibrated = calibrated(ladder, pulse);
-    CalibratedProgram onResonance = calibrated(ladder, centred);
-    this.system = LadderSystem.of(onResonance);
-    this.noiseFree = NoiseFreePulse.of(system);
-    double[] e = drive.electricFieldVoltsPerMetre();
-    this.stark = StarkShift.of(drive.species(), drive.target()).about(e[0], e[1], e[2]);
-    this.twoLevel = pulse.isTwoLevel() && system.decouplesIntermediates();
-    this.reaction = reaction(calibrated);
-    this.baseline = reaction.detuned(0);
-    this.baselineWithoutOffset =
-        pulse.offset().hertz() == 0 ? baseline : reaction(onResonance).detuned(0);
-    this.response =
-        new Lazy<>(() -> twoLevel ? effectiveResponse() : PulseResponse.ladder(ladder, pulse));
-    this.seconds = new Lazy<>(system::secondsInStates);
+    this.couplings = couplings;
+    this.rates = rates;
+    this.core = core;
+    this.stark = stark;
   }
 
-  private CalibratedProgram calibrated(Ladder ladder, Pulse played) {
-    double product = fields.meanProduct();
+  private static PulseModel of(
+      Drive drive, Pulse pulse, BeamFields fields, Couplings couplings, StarkShift stark) {
+    double meanRabi = fields.meanProduct();
     for (int k = 0; k < drive.steps().size(); k++) {
-      product /= Math.sqrt(fields.meanIntensity(k));
+      meanRabi /= Math.sqrt(fields.meanIntensity(k));
     }
-    return CalibratedProgram.of(ladder, played, product);
+    Ladder ladder = adjusted(drive.ladder(), fields, couplings);
+    PulseCore core = new PulseCore(ladder, pulse, meanRabi);
+    return new PulseModel(drive, fields, couplings, Rates.NOMINAL, core, stark);
   }
 
-  /**
-   * A variation of the drive's ladder with the atomic inputs of this model, at the mean field of
-   * each beam.
-   *
-   * @param given the ladder
-   * @return the ladder as the mean atom sees it
-   */
-  public Ladder adjusted(Ladder given) {
-    Ladder ladder =
-        given
-            .withIntermediateDecayScaled(inputs.intermediateDecay())
-            .withFarShiftsScaled(inputs.farShift());
-    for (int k = 0; k < inputs.elements().length; k++) {
+  private static Ladder adjusted(Ladder given, BeamFields fields, Couplings couplings) {
+    Ladder ladder = given.withFarShiftsScaled(couplings.farShift());
+    for (int k = 0; k < couplings.elements().length; k++) {
       ladder =
           ladder
-              .withElementScaled(k, inputs.elements()[k])
+              .withElementScaled(k, couplings.elements()[k])
               .withFieldScaled(k, Math.sqrt(fields.meanIntensity(k)));
     }
     return ladder;
-  }
-
-  private Reaction reaction(CalibratedProgram program) {
-    return twoLevel
-        ? new TwoLevelReaction(TwoLevelSystem.of(program.pulse(), steps(), rabiHertz(), shifts()))
-        : new WholeLadderReaction(LadderReaction.of(LadderSystem.of(program)), steps());
-  }
-
-  private PulseResponse effectiveResponse() {
-    Frequency[] shifts =
-        Arrays.stream(shifts()).mapToObj(Frequency::ofHertz).toArray(Frequency[]::new);
-    return PulseResponse.twoLevel(pulse, steps(), Frequency.ofHertz(rabiHertz()), shifts);
-  }
-
-  /** Moves of the resonance by each beam, Hz. */
-  private double[] shifts() {
-    Elimination elimination = Elimination.of(calibrated.ladder());
-    double[] shifts = new double[steps()];
-    for (int k = 0; k < shifts.length; k++) {
-      shifts[k] = elimination.targetShiftHertz(k) - elimination.startShiftHertz(k);
-    }
-    return shifts;
-  }
-
-  private int steps() {
-    return drive.steps().size();
-  }
-
-  /** Rabi frequency that the area-based lengths of the program follow from. */
-  private double rabiHertz() {
-    return calibrated.meanRabiHertz();
   }
 
   /**
@@ -168,8 +108,10 @@ public final class PulseModel {
    * @throws IllegalArgumentException if the pulse cannot be played on the drive
    */
   public static PulseModel of(Drive drive, Pulse pulse, Bench bench) {
-    return new PulseModel(
-        drive, pulse, BeamFields.of(drive, bench), Inputs.nominal(drive.steps().size()));
+    double[] e = drive.electricFieldVoltsPerMetre();
+    StarkShift stark = StarkShift.of(drive.species(), drive.target()).about(e[0], e[1], e[2]);
+    Couplings nominal = Couplings.nominal(drive.steps().size());
+    return of(drive, pulse, BeamFields.of(drive, bench), nominal, stark);
   }
 
   /**
@@ -180,7 +122,7 @@ public final class PulseModel {
    */
   public PulseModel on(Bench bench) {
     BeamFields other = BeamFields.of(drive, bench);
-    return other.sameAs(fields) ? this : new PulseModel(drive, pulse, other, inputs);
+    return other.sameAs(fields) ? this : of(drive, pulse(), other, couplings, stark);
   }
 
   /**
@@ -189,8 +131,7 @@ public final class PulseModel {
    * @return one model per input
    */
   public List<PulseModel> variations() {
-    Inputs nominal = Inputs.nominal(drive.steps().size());
-    double[] ones = nominal.elements();
+    Couplings nominal = Couplings.nominal(steps());
     Lifetimes lifetimes = Lifetimes.of(drive.species());
     double decay = 0;
     for (Level level : drive.intermediates()) {
@@ -199,16 +140,26 @@ public final class PulseModel {
     double spontaneous = lifetimes.spontaneousRatePerSecond(target()).relative();
     double blackbody =
         lifetimes.blackbodyRatePerSecond(target(), Temperature.ofKelvin(300)).relative();
-    List<Inputs> varied = new ArrayList<>();
-    for (int k = 0; k < ones.length; k++) {
-      varied.add(nominal.withElement(k, 1 + drive.steps().get(k).relativeUncertainty()));
+    List<PulseModel> varied = new ArrayList<>();
+    for (int k = 0; k < steps(); k++) {
+      double factor = 1 + drive.steps().get(k).relativeUncertainty();
+      varied.add(of(drive, pulse(), fields, nominal.withElement(k, factor), stark));
     }
-    varied.add(new Inputs(ones, 1 + decay, 1, 1, 1, 1));
-    varied.add(new Inputs(ones, 1, 1 + spontaneous, 1, 1, 1));
-    varied.add(new Inputs(ones, 1, 1, 1 + blackbody, 1, 1));
-    varied.add(new Inputs(ones, 1, 1, 1, 1 + stark.relativeUncertainty(), 1));
-    varied.add(new Inputs(ones, 1, 1, 1, 1, 1 + drive.farShiftRelativeUncertainty()));
-    return varied.stream().map(v -> new PulseModel(drive, pulse, fields, v)).toList();
+    double farShift = 1 + drive.farShiftRelativeUncertainty();
+    varied.add(of(drive, pulse(), fields, new Couplings(nominal.elements(), farShift), stark));
+    varied.add(with(new Rates(1 + decay, 1, 1, 1)));
+    varied.add(with(new Rates(1, 1 + spontaneous, 1, 1)));
+    varied.add(with(new Rates(1, 1, 1 + blackbody, 1)));
+    varied.add(with(new Rates(1, 1, 1, 1 + stark.relativeUncertainty())));
+    return varied;
+  }
+
+  private PulseModel with(Rates other) {
+    return new PulseModel(drive, fields, couplings, other, core, stark);
+  }
+
+  private int steps() {
+    return drive.steps().size();
   }
 
   private Level target() {
@@ -230,7 +181,7 @@ public final class PulseModel {
    * @return the pulse
    */
   public Pulse pulse() {
-    return pulse;
+    return core.pulse();
   }
 
   /**
@@ -239,16 +190,18 @@ public final class PulseModel {
    * @return the calibrated program
    */
   public CalibratedProgram calibrated() {
-    return calibrated;
+    return core.calibrated();
   }
 
   /**
-   * What is played.
+   * A variation of the drive's ladder with the atomic inputs of this model, at the mean field of
+   * each beam.
    *
-   * @return the program
+   * @param given the ladder
+   * @return the ladder as the mean atom sees it
    */
-  public PulseProgram program() {
-    return calibrated.program();
+  public Ladder adjusted(Ladder given) {
+    return adjusted(given, fields, couplings);
   }
 
   /**
@@ -258,7 +211,16 @@ public final class PulseModel {
    * @return the calibrated program
    */
   public CalibratedProgram calibratedAmong(Ladder variation) {
-    return calibrated(calibrated.ladder().withStatesOf(variation), pulse);
+    return core.calibratedOn(calibrated().ladder().withStatesOf(variation));
+  }
+
+  /**
+   * What is played.
+   *
+   * @return the program
+   */
+  public PulseProgram program() {
+    return calibrated().program();
   }
 
   /**
@@ -282,8 +244,8 @@ public final class PulseModel {
   public PulsePlan plan() {
     return new PulsePlan(
         Time.ofSeconds(seconds()),
-        Frequency.ofHertz(calibrated.fullPowerOffsetHertz()),
-        Frequency.ofHertz(rabiHertz()));
+        Frequency.ofHertz(calibrated().fullPowerOffsetHertz()),
+        Frequency.ofHertz(calibrated().meanRabiHertz()));
   }
 
   double seconds() {
@@ -293,26 +255,26 @@ public final class PulseModel {
   /** Whether this is a square π pulse at resonance, for which there are closed forms. */
   boolean isPlainTransfer() {
     PulseProgram program = program();
-    return twoLevel
-        && pulse.goal() == Goal.TRANSFER
-        && pulse.areaRadians().isPresent()
+    return core.isTwoLevel()
+        && pulse().goal() == Goal.TRANSFER
+        && pulse().areaRadians().isPresent()
         && program.breaks().length == 2
         && program.isConstant(0)
-        && pulse.offset().hertz() == 0;
+        && pulse().offset().hertz() == 0;
   }
 
   Reaction reaction() {
-    return reaction;
+    return core.reaction();
   }
 
   /** Error of the undisturbed pulse in the system that reactions are computed in. */
   double baseline() {
-    return baseline;
+    return core.baseline();
   }
 
   /** What the pulse's own offset costs. */
   double offsetError() {
-    return baseline - baselineWithoutOffset;
+    return core.offsetError();
   }
 
   /**
@@ -321,16 +283,16 @@ public final class PulseModel {
    * @return the response of the effective two-level system, of the whole ladder where there is none
    */
   public PulseResponse response() {
-    return response.get();
+    return core.response();
   }
 
   NoiseFreePulse noiseFree() {
-    return noiseFree;
+    return core.noiseFree();
   }
 
   /** Error of the planned pulse without noise on a variation of the drive's ladder. */
   double noiseFreeErrorOf(Ladder ladder) {
-    return LadderReaction.of(system).on(adjusted(ladder)).error();
+    return core.noiseFreeErrorOn(adjusted(ladder));
   }
 
   /** An unwanted sublevel after the pulse. */
@@ -339,8 +301,8 @@ public final class PulseModel {
   /** Unwanted sublevels of a rung after the undisturbed pulse. */
   List<Leak> leaks(int rung) {
     List<Leak> leaks = new ArrayList<>();
-    Ladder ladder = system.calibrated().ladder();
-    double[] populations = system.finalPopulations();
+    Ladder ladder = calibrated().ladder();
+    double[] populations = core.system().finalPopulations();
     for (int i = 0; i < populations.length; i++) {
       Ladder.State state = ladder.states().get(i);
       boolean wanted = i == ladder.start() || ladder.isWanted(i);
@@ -353,7 +315,7 @@ public final class PulseModel {
 
   /** What the edges leave in the intermediate level; empty without the rise time of the edges. */
   OptionalDouble residualIntermediate() {
-    return EdgeResidual.of(system);
+    return core.residualIntermediate();
   }
 
   /**
@@ -362,22 +324,44 @@ public final class PulseModel {
    * @return the probability
    */
   public double scatteringPerPulse() {
-    double photons = 0;
-    List<Ladder.State> states = calibrated.ladder().states();
-    for (int i = 0; i < states.size(); i++) {
-      photons += states.get(i).decayPerSecond() * seconds.get()[i];
-    }
-    return -Math.expm1(-photons);
+    return -Math.expm1(-scatteredPhotons());
   }
 
-  /** Probability that a loss of the Rydberg level at some rate happens during the pulse. */
-  double lost(double ratePerSecond) {
-    double spent = 0;
-    List<Ladder.State> states = calibrated.ladder().states();
+  private double scatteredPhotons() {
+    double photons = 0;
+    List<Ladder.State> states = calibrated().ladder().states();
     for (int i = 0; i < states.size(); i++) {
-      spent += states.get(i).rung() == steps() ? seconds.get()[i] : 0;
+      photons += states.get(i).decayPerSecond() * core.seconds()[i];
     }
-    return -Math.expm1(-ratePerSecond * spent);
+    return rates.intermediateDecay() * photons;
+  }
+
+  /** What scattering by the intermediate level adds to the error. */
+  double scatteringError() {
+    return lossError(scatteredPhotons());
+  }
+
+  /** What a loss of the Rydberg level at some rate, 1/s, adds to the error. */
+  double decayError(double ratePerSecond) {
+    double spent = 0;
+    List<Ladder.State> states = calibrated().ladder().states();
+    for (int i = 0; i < states.size(); i++) {
+      spent += states.get(i).rung() == steps() ? core.seconds()[i] : 0;
+    }
+    return lossError(ratePerSecond * spent);
+  }
+
+  /**
+   * Error of a pulse that loses the atom with the expected number n of losses: 1 − e^(−n), but a
+   * pulse that has to return is compared with an idling state, which holds half the atom: 1 − ¼(1 +
+   * e^(−n/2))².
+   */
+  private double lossError(double losses) {
+    if (pulse().goal() != Goal.RETURN) {
+      return -Math.expm1(-losses);
+    }
+    double missing = -Math.expm1(-0.5 * losses);
+    return missing - 0.25 * missing * missing;
   }
 
   /**
@@ -386,7 +370,7 @@ public final class PulseModel {
    * @return the rate, 1/s
    */
   public double spontaneousPerSecond() {
-    return inputs.spontaneous()
+    return rates.spontaneous()
         * Lifetimes.of(drive.species()).spontaneousRatePerSecond(target()).value();
   }
 
@@ -398,13 +382,13 @@ public final class PulseModel {
    */
   public double blackbodyPerSecond(Temperature environment) {
     Lifetimes lifetimes = Lifetimes.of(drive.species());
-    return inputs.blackbody()
+    return rates.blackbody()
         * (lifetimes.blackbodyRatePerSecond(target(), environment).value()
             + lifetimes.blackbodyIonizationRatePerSecond(target(), environment).value());
   }
 
   /** Stark shift of the target when these components are added to the static field, Hz. */
   double starkShiftHertz(double ex, double ey, double ez) {
-    return inputs.polarizability() * stark.hertz(ex, ey, ez);
+    return rates.polarizability() * stark.hertz(ex, ey, ez);
   }
 }

@@ -1,5 +1,7 @@
 package org.toprung.budget.cause;
 
+import java.util.ArrayList;
+import java.util.List;
 import org.toprung.budget.bench.Disturbance;
 import org.toprung.budget.bench.Spread;
 
@@ -8,7 +10,18 @@ import org.toprung.budget.bench.Spread;
  * nobody calibrated, counts as well as its spread.
  */
 final class StrayElectricField extends Halvable {
-  private static final NormalAverage SPACE = NormalAverage.ofDimensions(3);
+  private static final int AROUND = 8;
+  // Abramowitz and Stegun, table 25.4, n = 5
+  private static final double[] COSINE = {
+    0, 0.5384693101056831, -0.5384693101056831, 0.9061798459386640, -0.9061798459386640
+  };
+  private static final double[] WEIGHT = {
+    0.5688888888888889,
+    0.4786286704993665,
+    0.4786286704993665,
+    0.2369268850561891,
+    0.2369268850561891
+  };
 
   private final Spread length; // V/m
 
@@ -24,44 +37,36 @@ final class StrayElectricField extends Halvable {
 
   @Override
   double error(PulseModel model, double scale) {
-    if (length.isGaussian()) {
-      double e = scale * length.rms() / Math.sqrt(3);
-      return SPACE.of(x -> shifted(model, e * x[0], e * x[1], e * x[2])) - model.baseline();
-    }
-    return length.scaled(scale).average(e -> overDirections(model, e)) - model.baseline();
+    Spread scaled = length.scaled(scale);
+    Points shifts = scaled.isGaussian() ? gaussian(model, scaled.rms()) : sampled(model, scaled);
+    return shifts.average(hertz -> model.reaction().detuned(-hertz[0])) - model.baseline();
+  }
+
+  private static Points gaussian(PulseModel model, double rms) {
+    double e = rms / Math.sqrt(3);
+    return Points.of(3, x -> new double[] {model.starkShiftHertz(e * x[0], e * x[1], e * x[2])});
   }
 
   /**
-   * Mean over the directions of a field of given length by the product rule of Gauss and the
-   * trapezoid, five by eight points: exact to degree 7 in the direction cosines.
+   * Every sample in all directions, by the product rule of Gauss and the trapezoid, five by eight
+   * points: exact to degree 7 in the direction cosines.
    */
-  private static double overDirections(PulseModel model, double e) {
-    double[] cosine = {
-      0, 0.5384693101056831, -0.5384693101056831, 0.9061798459386640, -0.9061798459386640
-    };
-    double[] weight = {
-      0.5688888888888889,
-      0.4786286704993665,
-      0.4786286704993665,
-      0.2369268850561891,
-      0.2369268850561891
-    };
-    int around = 8;
-    double sum = 0;
-    for (int i = 0; i < cosine.length; i++) {
-      double across = e * Math.sqrt(1 - cosine[i] * cosine[i]);
-      for (int k = 0; k < around; k++) {
-        double angle = 2 * Math.PI * k / around;
-        sum +=
-            weight[i]
-                / (2 * around)
-                * shifted(model, across * Math.cos(angle), across * Math.sin(angle), e * cosine[i]);
+  private static Points sampled(PulseModel model, Spread lengths) {
+    double[] samples = lengths.samples();
+    List<double[]> shifts = new ArrayList<>();
+    List<Double> weights = new ArrayList<>();
+    for (double e : samples) {
+      for (int i = 0; i < COSINE.length; i++) {
+        double across = e * Math.sqrt(1 - COSINE[i] * COSINE[i]);
+        for (int k = 0; k < AROUND; k++) {
+          double angle = 2 * Math.PI * k / AROUND;
+          double x = across * Math.cos(angle);
+          double y = across * Math.sin(angle);
+          shifts.add(new double[] {model.starkShiftHertz(x, y, e * COSINE[i])});
+          weights.add(WEIGHT[i] / (2 * AROUND * samples.length));
+        }
       }
     }
-    return sum;
-  }
-
-  private static double shifted(PulseModel model, double ex, double ey, double ez) {
-    return model.reaction().detuned(-model.starkShiftHertz(ex, ey, ez));
+    return Points.merged(shifts, weights);
   }
 }
