@@ -29,7 +29,7 @@ final class Assessment {
     this.found = found;
     this.causes = found.assessed();
     this.errors = errors(causes, model);
-    this.total = total(causes, model, errors);
+    this.total = total(causes, errors);
   }
 
   static Assessment of(Drive drive, Pulse pulse, Bench bench) {
@@ -54,7 +54,7 @@ final class Assessment {
     return causes.stream().mapToDouble(c -> c.error(model)).toArray();
   }
 
-  static double total(List<Cause> causes, PulseModel model, double[] errors) {
+  static double total(List<Cause> causes, double[] errors) {
     List<Composition.Part> parts = new ArrayList<>();
     for (int i = 0; i < errors.length; i++) {
       parts.add(new Composition.Part(causes.get(i).kind(), errors[i]));

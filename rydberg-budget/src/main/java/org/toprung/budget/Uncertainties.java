@@ -4,7 +4,6 @@ import java.util.List;
 import org.toprung.budget.bench.Bench;
 import org.toprung.budget.bench.BenchEntry;
 import org.toprung.budget.cause.Cause;
-import org.toprung.budget.cause.PulseModel;
 
 /**
  * Standard uncertainties of causes and total from independent inputs: the change with each input
@@ -24,9 +23,12 @@ final class Uncertainties {
     List<Cause> causes = nominal.causes();
     Uncertainties found = new Uncertainties(causes.size());
     double[] errors = nominal.errors();
-    for (PulseModel varied : nominal.model().variations()) {
-      double[] moved = Assessment.errors(causes, varied);
-      double change = Assessment.total(causes, varied, moved) - nominal.total();
+    List<double[]> variations =
+        nominal.model().variations().parallelStream()
+            .map(varied -> Assessment.errors(causes, varied))
+            .toList();
+    for (double[] moved : variations) {
+      double change = Assessment.total(causes, moved) - nominal.total();
       for (int i = 0; i < moved.length; i++) {
         moved[i] -= errors[i];
       }

@@ -34,6 +34,7 @@ final class PulseCore {
   private final Lazy<PulseResponse> response;
   private final Lazy<double[]> seconds;
   private final Lazy<OptionalDouble> residual;
+  private final Lazy<LadderReaction> whole; // without the pulse's own offset
 
   PulseCore(Ladder ladder, Pulse pulse, double meanRabi) {
     this.ladder = ladder;
@@ -54,6 +55,7 @@ final class PulseCore {
     this.response =
         new Lazy<>(() -> twoLevel ? effectiveResponse() : PulseResponse.ladder(ladder, pulse));
     this.seconds = new Lazy<>(system::secondsInStates);
+    this.whole = new Lazy<>(() -> LadderReaction.of(onResonance));
     this.residual = new Lazy<>(() -> EdgeResidual.of(system));
   }
 
@@ -62,7 +64,7 @@ final class PulseCore {
         ? new TwoLevelReaction(
             TwoLevelSystem.of(
                 program.pulse(), ladder.steps(), calibrated.meanRabiHertz(), shifts()))
-        : new WholeLadderReaction(LadderReaction.of(LadderSystem.of(program)), ladder.steps());
+        : new WholeLadderReaction(LadderReaction.of(program), ladder.steps());
   }
 
   private PulseResponse effectiveResponse() {
@@ -89,7 +91,18 @@ final class PulseCore {
 
   /** Error of the planned pulse without noise on another ladder. */
   double noiseFreeErrorOn(Ladder other) {
-    return LadderReaction.of(system).on(other).error();
+    return whole.get().on(other).error();
+  }
+
+  /** What decay of the intermediate levels, multiplied by a factor, adds to the error. */
+  double intermediateLoss(double factor) {
+    LadderReaction decaying = whole.get().on(ladder.withIntermediateDecayScaled(factor));
+    return decaying.errorWithLoss(true, 0) - decaying.error();
+  }
+
+  /** What decay of the Rydberg level adds to the error. */
+  double rydbergLoss(double perSecond) {
+    return whole.get().errorWithLoss(false, perSecond) - whole.get().error();
   }
 
   CalibratedProgram calibrated() {

@@ -338,11 +338,16 @@ public final class PulseModel {
 
   /** What scattering by the intermediate level adds to the error. */
   double scatteringError() {
-    return lossError(scatteredPhotons());
+    return core.isTwoLevel()
+        ? lossError(scatteredPhotons())
+        : core.intermediateLoss(rates.intermediateDecay());
   }
 
   /** What a loss of the Rydberg level at some rate, 1/s, adds to the error. */
   double decayError(double ratePerSecond) {
+    if (!core.isTwoLevel()) {
+      return core.rydbergLoss(ratePerSecond);
+    }
     double spent = 0;
     List<Ladder.State> states = calibrated().ladder().states();
     for (int i = 0; i < states.size(); i++) {

@@ -1,7 +1,6 @@
 package org.toprung.budget.dynamics;
 
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import org.toprung.core.drive.Ladder;
 import org.toprung.core.linear.Decoupling;
@@ -83,9 +82,15 @@ final class ActiveStates {
   private static boolean isSeparable(
       LadderTerms terms, int[] populated, double[] fields, double lastOffset) {
     Decoupling decoupling = terms.decoupling(populated);
-    double[] dark = new double[fields.length];
+    List<double[]> settings = new ArrayList<>(List.of(fields, new double[fields.length]));
+    for (int k = 0; k < fields.length; k++) {
+      // each beam alone, as in the wings of pulses that follow each other
+      double[] alone = new double[fields.length];
+      alone[k] = fields[k];
+      settings.add(alone);
+    }
     try {
-      for (double[] f : Arrays.asList(fields, dark)) {
+      for (double[] f : settings) {
         terms.fill(f, lastOffset, ShotSetting.nominal(fields.length), decoupling);
         decoupling.anchor();
       }

@@ -4,12 +4,15 @@ import java.util.Arrays;
 import org.toprung.core.drive.Ladder;
 
 /**
- * Error of a calibrated pulse on the whole ladder, without loss, when something stays wrong during
- * the pulse.
+ * Error of a calibrated pulse on the whole ladder when something stays wrong during the pulse. The
+ * steps are those with which amplitudes are good to {@value #ACCURACY}; what is wanted are
+ * differences, which are better.
  *
  * <p>Immutable and thread-safe.
  */
 public final class LadderReaction {
+  private static final double ACCURACY = 1e-6;
+
   private final CalibratedProgram calibrated;
   private final LadderPlan plan;
   private final Outcomes outcomes;
@@ -30,15 +33,24 @@ public final class LadderReaction {
   /**
    * The reaction of a pulse.
    *
-   * @param system the pulse on its ladder
+   * @param calibrated the pulse on its ladder
    * @return the reaction
    */
-  public static LadderReaction of(LadderSystem system) {
+  public static LadderReaction of(CalibratedProgram calibrated) {
+    int[] active = LadderSystem.activeStates(calibrated);
+    int steps = LadderSystem.smoothSteps(calibrated, active, ACCURACY);
+    Timeline timeline = Timeline.of(calibrated, steps, Double.POSITIVE_INFINITY);
+    return of(calibrated, calibrated.ladder(), active, timeline);
+  }
+
+  private static LadderReaction of(
+      CalibratedProgram calibrated, Ladder ladder, int[] active, Timeline timeline) {
+    double accuracy = LadderSystem.accuracyHertz(calibrated, 0.1 * ACCURACY);
     return new LadderReaction(
-        system.calibrated(),
-        system.calibrated().ladder(),
-        system.plan(),
-        LadderSystem.outcomes(system.calibrated(), system.plan().active()));
+        calibrated,
+        ladder,
+        LadderPlan.of(calibrated, ladder, active, timeline, accuracy),
+        LadderSystem.outcomes(calibrated, ladder, active));
   }
 
   /**
@@ -51,15 +63,7 @@ public final class LadderReaction {
     double[] ones = new double[ladder.steps()];
     Arrays.fill(ones, 1);
     int[] active = ActiveStates.of(ladder, ones, calibrated.fullPowerOffsetHertz());
-    LadderPlan other =
-        LadderPlan.of(
-            calibrated,
-            ladder,
-            active,
-            plan.timeline(),
-            LadderSystem.accuracyHertz(calibrated, 1e-10));
-    return new LadderReaction(
-        calibrated, ladder, other, LadderSystem.outcomes(calibrated, ladder, active));
+    return of(calibrated, ladder, active, plan.timeline());
   }
 
   /**
@@ -85,6 +89,24 @@ public final class LadderReaction {
     ShotSetting shot = ShotSetting.nominal(fieldFactor.length);
     System.arraycopy(fieldFactor, 0, shot.fieldFactor, 0, fieldFactor.length);
     shot.laserOffset[fieldFactor.length - 1] = offsetHertz;
+    return error(shot, stretch);
+  }
+
+  /**
+   * Error of the pulse as planned when levels decay and what has decayed is lost.
+   *
+   * @param intermediateDecays whether the intermediate levels decay
+   * @param rydbergPerSecond decay rate of the Rydberg level, 1/s
+   * @return the error by the goal of the pulse
+   */
+  public double errorWithLoss(boolean intermediateDecays, double rydbergPerSecond) {
+    ShotSetting shot = ShotSetting.nominal(calibrated.ladder().steps());
+    shot.intermediateDecays = intermediateDecays;
+    shot.rydbergDecayPerSecond = rydbergPerSecond;
+    return error(shot, 1);
+  }
+
+  private double error(ShotSetting shot, double stretch) {
     EffectiveLadder effective = new EffectiveLadder(plan);
     effective.load(shot);
     int p = plan.size();
