@@ -88,7 +88,8 @@ final class Figures {
 
   /** A part of a whole, to a tenth of a percent. */
   static String share(double fraction) {
-    return String.format(Locale.ROOT, "%.1f %%", 100 * fraction + 0.0);
+    double percent = Math.rint(1000 * fraction) / 10 + 0.0; // no negative zero
+    return String.format(Locale.ROOT, "%.1f %%", percent);
   }
 
   /** A relative change with its sign, to a percent. */

@@ -3,6 +3,7 @@ package org.toprung.budget.report;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.StringJoiner;
 import org.toprung.budget.Budget;
 import org.toprung.budget.pulse.FrequencyReference;
 import org.toprung.budget.pulse.Goal;
@@ -18,6 +19,8 @@ import org.toprung.core.quantity.Time;
 final class PulseSection {
   private static final int MOST_STRETCHES = 12;
   private static final double AMPLITUDE_STEP = 0.01;
+  private static final double ONE_SIDED = 0.01; // slope against curvature, worth telling
+  private static final double NEGLIGIBLE = 1e-9; // error not worth telling
   private static final double DETUNING_STEP = 0.01; // of the Rabi frequency
 
   private PulseSection() {}
@@ -85,20 +88,35 @@ final class PulseSection {
 
   private static void reaction(Outline.Writer out, Budget budget) {
     PulseResponse response = budget.response();
-    double hertz = rounded(DETUNING_STEP * budget.plan().rabi().hertz());
-    String detuning =
-        Figures.probability(response.errorPerSquaredHertz() * hertz * hertz)
-            + " for "
-            + Figures.of(Frequency.ofHertz(hertz))
-            + " of detuning";
-    String amplitude =
-        response.knobs().contains(Knob.amplitude())
-            ? ", "
-                + Figures.probability(
-                    response.errorPerSquaredAmplitude() * AMPLITUDE_STEP * AMPLITUDE_STEP)
-                + " for 1 % of Rabi frequency"
-            : "";
-    out.fact("costs in error", detuning + amplitude + "; both grow with the square");
+    Frequency detuning = Frequency.ofHertz(rounded(DETUNING_STEP * budget.plan().rabi().hertz()));
+    Knob laser = Knob.frequency(response.steps() - 1);
+    StringJoiner costs = new StringJoiner(", ");
+    costs.add(cost(response, laser, detuning.hertz(), Figures.of(detuning) + " of detuning"));
+    if (response.knobs().contains(Knob.amplitude())) {
+      costs.add(
+          cost(
+              response,
+              Knob.amplitude(),
+              AMPLITUDE_STEP,
+              Figures.percent(AMPLITUDE_STEP) + " of Rabi frequency"));
+    }
+    out.fact("costs in error", costs + ", to second order");
+  }
+
+  /** What a step of a knob adds to the error; either way where the ways differ. */
+  private static String cost(PulseResponse response, Knob knob, double step, String what) {
+    double linear = response.slope(knob) * step;
+    double square = 0.5 * response.curvature(knob, knob) * step * step;
+    if (Math.abs(linear) <= Math.max(ONE_SIDED * Math.abs(square), NEGLIGIBLE)) {
+      return Figures.probability(square) + " for " + what;
+    }
+    return String.format(
+        Locale.ROOT,
+        "%s for +%s and %s for -%s",
+        Figures.probability(square + linear),
+        what,
+        Figures.probability(square - linear),
+        what);
   }
 
   /** To one digit. */
@@ -109,7 +127,7 @@ final class PulseSection {
 
   private static void played(Outline.Writer out, PulseProgram program) {
     List<Stretch> stretches = Stretch.of(program);
-    if (stretches.size() == 1 && isSteady(program)) {
+    if (stretches.size() == 1 && stretches.get(0).isPlain()) {
       out.fact("what is played", "every beam at full field for the whole duration");
       return;
     }
@@ -128,7 +146,9 @@ final class PulseSection {
             Column.right("played from"),
             Column.right("for"),
             Column.left(
-                program.steps() == 1 ? "field (lowest to highest)" : "fields (lowest to highest)"),
+                program.steps() == 1
+                    ? "programmed field (lowest to highest)"
+                    : "programmed fields (lowest to highest)"),
             Column.left("detuning"),
             Column.left("phase")),
         rows);

@@ -64,6 +64,11 @@ record Stretch(
     return ranges.stream().allMatch(r -> r[0] > 1 - SAME && r[1] < 1 + SAME);
   }
 
+  /** Whether every beam is at full power, with one frequency and one phase. */
+  boolean isPlain() {
+    return isAtFullPower() && detunings[0] == detunings[1] && radians[0] == radians[1];
+  }
+
   String fields() {
     List<String> shown = ranges.stream().map(Stretch::field).toList();
     if (shown.stream().allMatch(shown.get(0)::equals)) {

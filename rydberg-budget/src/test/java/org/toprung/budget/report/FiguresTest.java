@@ -25,4 +25,16 @@ class FiguresTest {
   void showsTwoDigitsOfAnUncertainty(double value, String expected) {
     assertEquals(expected, Figures.uncertainty(value));
   }
+
+  @ParameterizedTest
+  @CsvSource({"0.7284, 72.8 %", "-0.0002, 0.0 %", "-0.012, -1.2 %", "1, 100.0 %"})
+  void showsATenthOfAPercentOfAShare(double fraction, String expected) {
+    assertEquals(expected, Figures.share(fraction));
+  }
+
+  @ParameterizedTest
+  @CsvSource({"0.634, +63 %", "-0.274, -27 %", "-0.002, 0 %"})
+  void showsAChangeWithItsSign(double fraction, String expected) {
+    assertEquals(expected, Figures.change(fraction));
+  }
 }

@@ -231,4 +231,31 @@ class TextReportTest {
     String text = TextReport.render(SampleReport.reference());
     assertTrue(text.contains("2.47e-04 for 1 % of Rabi frequency"), text);
   }
+
+  /** A chirp is not at its best Rabi frequency, so that more and less differ in cost. */
+  @Test
+  void tellsWhatIsSweptAndCostsEitherWayWhereTheyDiffer() {
+    String chirp = "kind = \"chirp\"\nduration = \"2 us\"\nsweep = \"10 MHz\"";
+    String text =
+        TextReport.render(SampleReport.of(ReferenceScenario.with("kind = \"pi\"", chirp)));
+    assertTrue(text.contains("-5 MHz to +5 MHz"), text);
+    assertTrue(text.contains("for +1 % of Rabi frequency and "), text);
+    assertFalse(text.contains("for the whole duration"), text);
+  }
+
+  @Test
+  void laysOutPulsesOfEveryKind() {
+    for (String pulse :
+        List.of(
+            "kind = \"ramsey\"\nwait = \"1 us\"\nphase_rad = 1.5",
+            "kind = \"bb1\"",
+            "kind = \"square\"\narea_rad = 6.283185307179586\nrise = \"20 ns\"\nfall = \"20 ns\"")) {
+      ReportContent content = SampleReport.of(ReferenceScenario.with("kind = \"pi\"", pulse));
+      String text = TextReport.render(content);
+      assertTrue(text.contains(content.budget().pulse().name()), text);
+      assertTrue(text.contains("programmed fields"), text);
+      assertTrue(text.lines().allMatch(l -> l.codePointCount(0, l.length()) <= 100), text);
+      assertFalse(FilterChart.render(content).contains("NaN"));
+    }
+  }
 }
