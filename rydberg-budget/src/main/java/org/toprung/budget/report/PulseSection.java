@@ -33,13 +33,9 @@ final class PulseSection {
     out.fact("success", success(budget.pulse().goal()));
     out.fact("duration", Figures.of(Time.ofSeconds(program.seconds())));
     out.fact("Rabi frequency", Figures.of(plan.rabi()) + " at full power, in the pulse");
-    out.fact(
-        "frequency offset",
-        Figures.signed(plan.frequencyOffset())
-            + " added to the last laser puts the ladder on its light-shifted resonance"
-            + (program.reference() == FrequencyReference.FULL_POWER || isSteady(program)
-                ? ""
-                : " at full power"));
+    if (program.reference() != FrequencyReference.BARE) {
+      out.fact("frequency offset", offset(plan, program));
+    }
     if (!isSteady(program)) {
       out.fact("laser frequency", "counts from " + reference(program));
     }
@@ -49,6 +45,13 @@ final class PulseSection {
     }
     reaction(out, budget);
     played(out, program);
+  }
+
+  private static String offset(PulsePlan plan, PulseProgram program) {
+    boolean always = program.reference() == FrequencyReference.FULL_POWER || isSteady(program);
+    return Figures.signed(plan.frequencyOffset())
+        + " added to the last laser puts the ladder on its light-shifted resonance"
+        + (always ? "" : " at full power");
   }
 
   /** Whether there is nothing to follow: every beam is at full power all the time. */

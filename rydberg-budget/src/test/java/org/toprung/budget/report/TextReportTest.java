@@ -267,4 +267,15 @@ class TextReportTest {
       assertFalse(FilterChart.render(content).contains("NaN"));
     }
   }
+
+  /** STIRAP sits on the bare resonance, where no light shift is added. */
+  @Test
+  void givesNoOffsetToAPulseOnTheBareResonance() {
+    Pulse pulse = Pulse.stirap(Time.microseconds(1), Time.nanoseconds(700));
+    String text = TextReport.render(quiet(pulse));
+    assertFalse(text.contains("frequency offset"), text);
+    assertTrue(text.contains("counts from the resonance of the atom without light"), text);
+    assertTrue(text.contains("0 to 1; 0"), text);
+    assertFalse(text.contains("of Rabi frequency,"), text);
+  }
 }
