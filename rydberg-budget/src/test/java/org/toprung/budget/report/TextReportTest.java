@@ -273,7 +273,7 @@ class TextReportTest {
   void givesNoOffsetToAPulseOnTheBareResonance() {
     Pulse pulse = Pulse.stirap(Time.microseconds(1), Time.nanoseconds(700));
     String text = TextReport.render(quiet(pulse));
-    assertFalse(text.contains("frequency offset"), text);
+    assertFalse(text.contains("\n  frequency offset"), text);
     assertTrue(text.contains("counts from the resonance of the atom without light"), text);
     assertTrue(text.contains("0 to 1; 0"), text);
     assertFalse(text.contains("of Rabi frequency,"), text);
