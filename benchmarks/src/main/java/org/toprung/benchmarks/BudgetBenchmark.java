@@ -15,9 +15,11 @@ import org.openjdk.jmh.annotations.Warmup;
 import org.toprung.budget.Budget;
 import org.toprung.budget.Check;
 import org.toprung.budget.pulse.Pulse;
+import org.toprung.budget.response.PulseResponse;
 import org.toprung.core.drive.Drive;
+import org.toprung.core.quantity.Frequency;
 
-/** Composing a budget, and checking it with 1000 shots on all processors. */
+/** Response of a pulse, composing its budget, and checking the total on all processors. */
 @State(Scope.Benchmark)
 @BenchmarkMode(Mode.AverageTime)
 @OutputTimeUnit(TimeUnit.MILLISECONDS)
@@ -25,20 +27,37 @@ import org.toprung.core.drive.Drive;
 @Warmup(iterations = 3, time = 1)
 @Measurement(iterations = 5, time = 1)
 public class BudgetBenchmark {
-  private static final int SHOTS = 1000;
 
   /** Whether every sublevel takes part, or only three. */
   @Param({"false", "true"})
   public boolean everySublevel;
 
+  /** Shape of the pulse. */
+  @Param({"pi", "blackman"})
+  public String shape;
+
   private Drive drive;
+  private Pulse pulse;
   private Budget budget;
+  private Frequency rabi;
 
   /** Resolves the drive and composes once. */
   @Setup
   public void composeOnce() {
     drive = Scenes.drive(everySublevel).resolve();
+    pulse = shape.equals("pi") ? Pulse.pi() : Pulse.blackman(Math.PI);
     budget = compose();
+    rabi = budget.plan().rabi();
+  }
+
+  /**
+   * Responds in the effective two-level system: static response and preparation of the filters.
+   *
+   * @return the response
+   */
+  @Benchmark
+  public PulseResponse response() {
+    return PulseResponse.twoLevel(pulse, 2, rabi);
   }
 
   /**
@@ -48,16 +67,26 @@ public class BudgetBenchmark {
    */
   @Benchmark
   public Budget compose() {
-    return Budget.of(drive, Pulse.pi()).on(Scenes.bench()).compose();
+    return Budget.of(drive, pulse).on(Scenes.bench()).compose();
   }
 
   /**
-   * Simulates 1000 shots.
+   * Simulates 1000 shots with all disturbances.
    *
    * @return the check
    */
   @Benchmark
-  public Check check() {
-    return budget.check(SHOTS, 1);
+  public Check check1000() {
+    return budget.checking().shots(1000).totalOnly().run();
+  }
+
+  /**
+   * Simulates 10000 shots with all disturbances.
+   *
+   * @return the check
+   */
+  @Benchmark
+  public Check check10000() {
+    return budget.checking().shots(10_000).totalOnly().run();
   }
 }
