@@ -17,8 +17,11 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.concurrent.CompletableFuture;
 import org.junit.jupiter.api.Test;
 import org.toprung.budget.bench.Bench;
+import org.toprung.budget.bench.BenchValue;
+import org.toprung.budget.bench.NoiseDensity;
 import org.toprung.budget.pulse.Pulse;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
@@ -56,6 +59,19 @@ class ReadmeTest {
     Check check = budget.check(2000, 1);
     // end of snippet
     // snippet
+    Pulse smooth = Pulse.blackman(Math.PI).shapingStep(0);
+    NoiseDensity servo = NoiseDensity.parse("1e4 2e3\n5e5 4e4\n5e6 1e3", "laser 1, Hz and Hz^2/Hz");
+    Bench noisy =
+        bench
+            .withFrequencyNoiseDensity(0, servo)
+            .withIntensityNoise(0.005, 0.005)
+            .knownTo(BenchValue.INTENSITY_NOISE, 0, 0.3);
+    Budget after = Budget.of(drive, smooth).on(noisy).compose();
+    List<Sensitivity> first = after.sensitivities();
+    BudgetComparison moved = BudgetComparison.between(budget, after);
+    CompletableFuture<Check> later = after.checking().shots(500).start();
+    // end of snippet
+    // snippet
     DriveKernel kernel = drive.kernel();
     KernelResult result = kernel.newResult();
     kernel.evaluate(new double[] {0.0021, 0.149}, 1.2e9, new double[] {1, 1}, result);
@@ -65,13 +81,18 @@ class ReadmeTest {
     assertEquals(3.02e6, drive.rabi().hertz(), 0.06e6);
     assertTrue(budget.plan().duration().seconds() < 1e-6);
     assertTrue(check.agrees());
+    assertEquals(
+        first.get(0).best(), first.stream().mapToDouble(Sensitivity::best).max().orElse(0));
+    assertEquals(after.total(), moved.after());
+    assertTrue(after.benchUncertainty() > 0);
+    assertTrue(later.join().agrees());
   }
 
   @Test
   void holdsTheSnippetsOfTheReadme() throws IOException {
     List<String> shown = parts(README, "```java\n", "```");
     List<String> run = parts(SELF, "    // snippet\n", "    // end of snippet");
-    assertEquals(2, shown.size());
+    assertEquals(3, shown.size());
     assertEquals(shown, run);
   }
 
