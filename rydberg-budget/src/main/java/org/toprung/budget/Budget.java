@@ -18,6 +18,8 @@ import org.toprung.budget.response.Fate;
 import org.toprung.budget.response.PulseResponse;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.PulsePlan;
+import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Time;
 
 /**
  * Where the error of a pulse comes from.
@@ -206,6 +208,17 @@ public final class Budget {
    */
   public PulseProgram program() {
     return assessment.model().program();
+  }
+
+  /**
+   * Where to set the last laser at a time of the program: the light-shifted resonance that the
+   * program counts from plus its detuning.
+   *
+   * @param time within the program and not on one of its breaks
+   * @return what is added to the frequency on bare resonance of the whole ladder
+   */
+  public Frequency laserOffset(Time time) {
+    return Frequency.ofHertz(assessment.model().calibrated().laserOffsetHertz(time.seconds()));
   }
 
   /**

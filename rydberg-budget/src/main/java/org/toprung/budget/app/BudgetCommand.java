@@ -162,9 +162,7 @@ final class BudgetCommand implements Callable<Integer> {
   }
 
   private String played(Budget budget) {
-    return slice == null
-        ? ProgramReport.render(budget.program())
-        : ProgramReport.render(budget.program(), slice);
+    return slice == null ? ProgramReport.render(budget) : ProgramReport.render(budget, slice);
   }
 
   /** Refuses slices that do not fit the pulse before the simulation begins. */

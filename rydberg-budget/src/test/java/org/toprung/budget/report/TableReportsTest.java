@@ -6,10 +6,11 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
 import org.junit.jupiter.api.Test;
+import org.toprung.budget.Budget;
 import org.toprung.budget.CauseEntry;
+import org.toprung.budget.TestDrives;
 import org.toprung.budget.pulse.Pulse;
 import org.toprung.budget.pulse.PulseProgram;
-import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.Time;
 
 /** Causes and programs as comma-separated values, and the report in Markdown. */
@@ -68,9 +69,9 @@ class TableReportsTest {
   /** The area of the rows is that of the pulse: 2π Ω ∫a dt = π for a π pulse. */
   @Test
   void writesWhatTheSequencerPlays() {
-    Frequency rabi = Frequency.ofHertz(1e6);
-    PulseProgram program = Pulse.gaussian(Math.PI).program(2, rabi);
-    List<List<String>> rows = CsvText.parsed(ProgramReport.render(program));
+    Budget budget = played(Pulse.gaussian(Math.PI));
+    PulseProgram program = budget.program();
+    List<List<String>> rows = CsvText.parsed(ProgramReport.render(budget));
     assertEquals("begin (s)", rows.get(0).get(0));
     assertTrue(rows.get(0).get(4).matches("detuning from .* \\(Hz\\)"), rows.get(0).get(4));
     assertEquals(501, rows.size());
@@ -81,21 +82,32 @@ class TableReportsTest {
       assertEquals(end, v[0], 1e-15);
       end = v[0] + v[1];
       // both beams carry the root of the amplitude, of which each plays its mean
-      area += 2 * Math.PI * rabi.hertz() * v[2] * v[3] * v[1];
+      area += 2 * Math.PI * budget.plan().rabi().hertz() * v[2] * v[3] * v[1];
+      // between bare resonance, where it is dark, and the light-shifted one at full power
+      double most = budget.plan().frequencyOffset().hertz();
+      assertTrue(v[5] / most > -1e-6 && v[5] / most < 1 + 1e-6, v[5] + " of " + most);
     }
     assertEquals(program.seconds(), end, 1e-12 * end);
-    assertEquals(Math.PI, area, 1e-3);
+    // the dressing that full power costs 0.2 % of the Rabi frequency is weaker below it
+    assertEquals(Math.PI, area, 3e-3 * Math.PI);
   }
 
   @Test
   void cutsAsFinelyAsAsked() {
-    PulseProgram program = Pulse.gaussian(Math.PI).program(1, Frequency.ofHertz(1e6));
-    Time third = Time.ofSeconds(program.seconds() / 3);
-    assertEquals(4, CsvText.parsed(ProgramReport.render(program, third)).size());
+    Budget budget = played(Pulse.gaussian(Math.PI));
+    Time third = Time.ofSeconds(budget.program().seconds() / 3);
+    assertEquals(4, CsvText.parsed(ProgramReport.render(budget, third)).size());
     assertThrows(
-        IllegalArgumentException.class, () -> ProgramReport.render(program, Time.ofSeconds(0)));
-    PulseProgram square = Pulse.pi().program(3, Frequency.ofHertz(1e6));
-    assertEquals(2, CsvText.parsed(ProgramReport.render(square)).size());
+        IllegalArgumentException.class, () -> ProgramReport.render(budget, Time.ofSeconds(0)));
+    Budget square = played(Pulse.pi());
+    List<List<String>> rows = CsvText.parsed(ProgramReport.render(square));
+    assertEquals(2, rows.size());
+    double offset = Double.parseDouble(rows.get(1).get(5));
+    assertEquals(square.plan().frequencyOffset().hertz(), offset, 1e-6 * Math.abs(offset));
+  }
+
+  private static Budget played(Pulse pulse) {
+    return Budget.of(TestDrives.rubidium().resolve(), pulse).compose();
   }
 
   @Test
