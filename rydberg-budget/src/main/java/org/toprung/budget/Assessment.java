@@ -1,8 +1,10 @@
 package org.toprung.budget;
 
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.List;
 import org.toprung.budget.bench.Bench;
+import org.toprung.budget.bench.BenchEntry;
 import org.toprung.budget.cause.Cause;
 import org.toprung.budget.cause.Causes;
 import org.toprung.budget.cause.PulseModel;
@@ -23,12 +25,12 @@ final class Assessment {
   private final double[] errors;
   private final double total;
 
-  private Assessment(PulseModel model, Bench bench, Causes found) {
+  private Assessment(PulseModel model, Bench bench, Causes found, double[] errors) {
     this.model = model;
     this.bench = bench;
     this.found = found;
     this.causes = found.assessed();
-    this.errors = errors(causes, model);
+    this.errors = errors;
     this.total = total(causes, errors);
   }
 
@@ -37,12 +39,29 @@ final class Assessment {
   }
 
   private static Assessment of(PulseModel model, Bench bench) {
-    return new Assessment(model, bench, Causes.of(model, bench));
+    Causes found = Causes.of(model, bench);
+    return new Assessment(model, bench, found, errors(found.assessed(), model));
   }
 
-  /** The same pulse and drive on another bench. */
-  Assessment on(Bench other) {
-    return of(model.on(other), other);
+  /**
+   * The same pulse and drive with one number of the bench multiplied. What that number does not
+   * enter is not computed again.
+   */
+  Assessment scaled(BenchEntry entry, double factor) {
+    Bench other = bench.scaled(entry.value(), entry.index(), factor);
+    PulseModel moved = model.on(other);
+    if (moved != model) {
+      return of(moved, other);
+    }
+    Causes refound = Causes.of(model, other);
+    double[] changed = errors.clone();
+    for (int i = 0; i < changed.length; i++) {
+      Cause cause = refound.assessed().get(i);
+      if (!Collections.disjoint(cause.disturbances(), entry.disturbances())) {
+        changed[i] = cause.error(model);
+      }
+    }
+    return new Assessment(model, other, refound, changed);
   }
 
   /** The same pulse on another drive and the same bench. */

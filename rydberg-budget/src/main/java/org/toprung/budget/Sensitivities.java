@@ -4,9 +4,8 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.function.DoubleFunction;
-import java.util.function.Supplier;
-import org.toprung.budget.bench.Bench;
 import org.toprung.budget.bench.BenchEntry;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.DriveSetup;
@@ -16,44 +15,40 @@ import org.toprung.core.quantity.Frequency;
 final class Sensitivities {
   private static final double SMALL = 0.01; // relative step of the slope
 
-  private final Assessment nominal;
-  private final List<Sensitivity> found = new ArrayList<>();
+  /** A value, and the total when it is multiplied. */
+  private record Question(String value, DoubleFunction<Assessment> multiplied) {}
 
-  private Sensitivities(Assessment nominal) {
-    this.nominal = nominal;
-  }
+  private Sensitivities() {}
 
   static List<Sensitivity> of(Assessment nominal) {
-    Sensitivities all = new Sensitivities(nominal);
-    Bench bench = nominal.bench();
-    for (BenchEntry entry : bench.entries()) {
-      all.add(
-          entry.name(),
-          f -> total(() -> nominal.on(bench.scaled(entry.value(), entry.index(), f))));
+    List<Question> questions = new ArrayList<>();
+    for (BenchEntry entry : nominal.bench().entries()) {
+      questions.add(new Question(entry.name(), f -> nominal.scaled(entry, f)));
     }
     Drive drive = nominal.model().drive();
     int steps = drive.steps().size();
     for (int k = 0; k < steps; k++) {
       int step = k;
-      all.add(
-          "power, step " + (k + 1),
-          f ->
-              total(
-                  () ->
-                      nominal.on(
-                          drive.setup().withBeam(step, beam -> beam.brightened(f)).resolve())));
+      questions.add(
+          new Question(
+              "power, step " + (k + 1),
+              f -> nominal.on(drive.setup().withBeam(step, b -> b.brightened(f)).resolve())));
     }
     for (int k = 0; k < steps - 1; k++) {
       int step = k;
-      all.add(
-          "detuning, step " + (k + 1),
-          f -> total(() -> nominal.on(detuned(drive, steps - 1, step, f).resolve())));
+      questions.add(
+          new Question(
+              "detuning, step " + (k + 1),
+              f -> nominal.on(detuned(drive, steps - 1, step, f).resolve())));
     }
-    all.found.sort(
-        Comparator.comparingDouble(Sensitivity::best)
-            .thenComparing(s -> Math.abs(s.slope()))
-            .reversed());
-    return List.copyOf(all.found);
+    return questions.parallelStream()
+        .map(question -> answer(question, nominal.total()))
+        .flatMap(Optional::stream)
+        .sorted(
+            Comparator.comparingDouble(Sensitivity::best)
+                .thenComparing(s -> Math.abs(s.slope()))
+                .reversed())
+        .toList();
   }
 
   private static DriveSetup detuned(Drive drive, int count, int step, double factor) {
@@ -65,30 +60,32 @@ final class Sensitivities {
     return drive.setup().detuned(detunings);
   }
 
+  /** Nothing where one of the variations cannot be had. */
+  private static Optional<Sensitivity> answer(Question question, double total) {
+    OptionalDouble half = total(question, 0.5);
+    OptionalDouble twice = total(question, 2);
+    OptionalDouble more = total(question, 1 + SMALL);
+    OptionalDouble less = total(question, 1 - SMALL);
+    if (half.isEmpty() || twice.isEmpty() || more.isEmpty() || less.isEmpty()) {
+      return Optional.empty();
+    }
+    return Optional.of(
+        new Sensitivity(
+            question.value(),
+            (more.getAsDouble() - less.getAsDouble()) / (2 * SMALL),
+            total - half.getAsDouble(),
+            total - twice.getAsDouble()));
+  }
+
   /**
    * The total of a variation, if there is one: a probability above its limit is refused, and light
    * must not meet a resonance.
    */
-  private static Optional<Double> total(Supplier<Assessment> variation) {
+  private static OptionalDouble total(Question question, double factor) {
     try {
-      return Optional.of(variation.get().total());
+      return OptionalDouble.of(question.multiplied().apply(factor).total());
     } catch (IllegalArgumentException | ArithmeticException impossible) {
-      return Optional.empty();
-    }
-  }
-
-  private void add(String value, DoubleFunction<Optional<Double>> total) {
-    Optional<Double> half = total.apply(0.5);
-    Optional<Double> twice = total.apply(2);
-    Optional<Double> more = total.apply(1 + SMALL);
-    Optional<Double> less = total.apply(1 - SMALL);
-    if (half.isPresent() && twice.isPresent() && more.isPresent() && less.isPresent()) {
-      found.add(
-          new Sensitivity(
-              value,
-              (more.get() - less.get()) / (2 * SMALL),
-              nominal.total() - half.get(),
-              nominal.total() - twice.get()));
+      return OptionalDouble.empty();
     }
   }
 }

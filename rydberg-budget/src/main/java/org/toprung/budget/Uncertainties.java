@@ -44,9 +44,8 @@ final class Uncertainties {
     for (BenchEntry entry : bench.entries()) {
       double relative = bench.relativeUncertainty(entry.value(), entry.index());
       if (relative > 0) {
-        Assessment more = nominal.on(bench.scaled(entry.value(), entry.index(), 1 + relative));
-        Assessment less =
-            nominal.on(bench.scaled(entry.value(), entry.index(), Math.max(0, 1 - relative)));
+        Assessment more = nominal.scaled(entry, 1 + relative);
+        Assessment less = nominal.scaled(entry, Math.max(0, 1 - relative));
         double[] change = more.errors();
         for (int i = 0; i < change.length; i++) {
           change[i] = 0.5 * (change[i] - less.errors()[i]);

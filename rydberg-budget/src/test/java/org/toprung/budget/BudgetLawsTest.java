@@ -203,6 +203,32 @@ class BudgetLawsTest {
     };
   }
 
+  /** Exact: what is promised for half and double a value is what a budget then says. */
+  @Property(tries = 2, seed = "68")
+  void keepsThePromisesOfItsSensitivities(@ForAll("pulses") Pulse pulse) {
+    Bench bench = TestDrives.bench().withPointing(micrometres(2), micrometres(1));
+    Budget budget = Budget.of(CAESIUM, pulse).on(bench).compose();
+    List<Sensitivity> found = budget.sensitivities();
+    for (BenchEntry entry : bench.entries()) {
+      Sensitivity said =
+          found.stream().filter(s -> s.value().equals(entry.name())).findFirst().orElseThrow();
+      for (double factor : new double[] {0.5, 2}) {
+        Bench changed = bench.scaled(entry.value(), entry.index(), factor);
+        double saved = budget.total() - Budget.of(CAESIUM, pulse).on(changed).compose().total();
+        double promised = factor < 1 ? said.savedByHalving() : said.savedByDoubling();
+        assertEquals(saved, promised, 1e-13, entry.name());
+      }
+    }
+    for (String value : new String[] {"power, step 1", "power, step 2", "detuning, step 1"}) {
+      assertTrue(found.stream().anyMatch(s -> s.value().equals(value) && s.slope() != 0), value);
+    }
+    Drive brighter = CAESIUM.setup().withBeam(1, b -> b.brightened(2)).resolve();
+    double saved = budget.total() - Budget.of(brighter, pulse).on(bench).compose().total();
+    Sensitivity power =
+        found.stream().filter(s -> s.value().equals("power, step 2")).findFirst().orElseThrow();
+    assertEquals(saved, power.savedByDoubling(), 1e-13);
+  }
+
   /** Exact: the total does not know the order of its causes, and no cause lowers it. */
   @Property(tries = 200, seed = "65")
   void composesInAnyOrder(

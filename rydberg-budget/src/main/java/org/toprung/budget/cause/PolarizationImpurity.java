@@ -18,14 +18,15 @@ import org.toprung.core.drive.Ladder;
 final class PolarizationImpurity implements Cause {
   private final int step;
   private final double fraction;
-  private final List<Ladder> impure;
-  private final List<Ladder> halfAsImpure;
+  private final Lazy<List<Ladder>> impure;
+  private final Lazy<List<Ladder>> halfAsImpure;
 
   PolarizationImpurity(Drive drive, int step, double fraction) {
     this.step = step;
     this.fraction = fraction;
-    this.impure = ImpureLadders.of(drive, Set.of(step), k -> fraction);
-    this.halfAsImpure = ImpureLadders.of(drive, Set.of(step), k -> 0.5 * fraction);
+    this.impure = new Lazy<>(() -> ImpureLadders.of(drive, Set.of(step), k -> fraction));
+    this.halfAsImpure =
+        new Lazy<>(() -> ImpureLadders.of(drive, Set.of(step), k -> 0.5 * fraction));
   }
 
   @Override
@@ -46,7 +47,7 @@ final class PolarizationImpurity implements Cause {
 
   @Override
   public double error(PulseModel model) {
-    return error(model, impure);
+    return error(model, impure.get());
   }
 
   private static double error(PulseModel model, List<Ladder> ladders) {
@@ -72,6 +73,6 @@ final class PolarizationImpurity implements Cause {
         Locale.ROOT,
         "halve the impurity of %.2g: %.2g remains; a larger field moves other sublevels away",
         fraction,
-        error(model, halfAsImpure));
+        error(model, halfAsImpure.get()));
   }
 }
