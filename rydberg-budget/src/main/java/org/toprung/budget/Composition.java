@@ -13,21 +13,26 @@ import org.toprung.budget.response.Fate;
  * detuning), and each way of losing the atom leaves 1 − E<sub>i</sub>:
  *
  * <pre>1 − E = (½ + ½ Π(1 − 2E<sub>i</sub>)) · Π(1 − E<sub>j</sub>)</pre>
+ *
+ * <p>What turns the state beyond ½ is not made better by noise on top of it: the first factor is at
+ * most 1 − E<sub>i</sub> of the worst of them.
  */
 final class Composition {
   private Composition() {}
 
   static double total(List<Part> parts) {
     double contrast = 1;
+    double largest = 0;
     double kept = 1;
     for (Part part : parts) {
       if (isTurn(part.kind())) {
         contrast *= Math.max(0, 1 - 2 * part.error());
+        largest = Math.max(largest, part.error());
       } else {
         kept *= Math.max(0, 1 - part.error());
       }
     }
-    return 1 - (0.5 + 0.5 * contrast) * kept;
+    return 1 - Math.min(0.5 + 0.5 * contrast, 1 - Math.min(1, largest)) * kept;
   }
 
   /** One cause. */

@@ -1,6 +1,7 @@
 package org.toprung.budget.cause;
 
 import java.util.Arrays;
+import java.util.List;
 import java.util.OptionalDouble;
 import org.toprung.budget.dynamics.CalibratedProgram;
 import org.toprung.budget.dynamics.EdgeResidual;
@@ -34,7 +35,7 @@ final class PulseCore {
   private final Lazy<PulseResponse> response;
   private final Lazy<double[]> seconds;
   private final Lazy<OptionalDouble> residual;
-  private final Lazy<LadderReaction> whole; // without the pulse's own offset
+  private final Lazy<LadderReaction> whole;
 
   PulseCore(Ladder ladder, Pulse pulse, double meanRabi) {
     this.ladder = ladder;
@@ -54,8 +55,9 @@ final class PulseCore {
     this.baselineWithoutOffset = offset ? reaction(onResonance).detuned(0) : baseline;
     this.response =
         new Lazy<>(() -> twoLevel ? effectiveResponse() : PulseResponse.ladder(ladder, pulse));
-    this.seconds = new Lazy<>(system::secondsInStates);
-    this.whole = new Lazy<>(() -> LadderReaction.of(onResonance));
+    LadderSystem played = offset ? LadderSystem.of(calibrated) : system;
+    this.seconds = new Lazy<>(played::secondsInStates);
+    this.whole = new Lazy<>(() -> LadderReaction.of(calibrated));
     this.residual = new Lazy<>(() -> EdgeResidual.of(system));
   }
 
@@ -63,15 +65,24 @@ final class PulseCore {
     return twoLevel
         ? new TwoLevelReaction(
             TwoLevelSystem.of(
-                program.pulse(), ladder.steps(), calibrated.meanRabiHertz(), shifts()))
+                program.pulse(),
+                ladder.steps(),
+                calibrated.meanRabiHertz(),
+                shifts(),
+                startShifts()))
         : new WholeLadderReaction(LadderReaction.of(program), ladder.steps());
   }
 
   private PulseResponse effectiveResponse() {
-    Frequency[] shifts =
-        Arrays.stream(shifts()).mapToObj(Frequency::ofHertz).toArray(Frequency[]::new);
-    Frequency rabi = Frequency.ofHertz(calibrated.meanRabiHertz());
-    return PulseResponse.twoLevel(pulse, ladder.steps(), rabi, shifts);
+    return PulseResponse.twoLevel(
+        pulse,
+        Frequency.ofHertz(calibrated.meanRabiHertz()),
+        frequencies(shifts()),
+        frequencies(startShifts()));
+  }
+
+  private static List<Frequency> frequencies(double[] hertz) {
+    return Arrays.stream(hertz).mapToObj(Frequency::ofHertz).toList();
   }
 
   /** Moves of the resonance by each beam, Hz. */
@@ -80,6 +91,16 @@ final class PulseCore {
     double[] shifts = new double[ladder.steps()];
     for (int k = 0; k < shifts.length; k++) {
       shifts[k] = elimination.targetShiftHertz(k) - elimination.startShiftHertz(k);
+    }
+    return shifts;
+  }
+
+  /** Moves of the start by each beam, Hz. */
+  private double[] startShifts() {
+    Elimination elimination = Elimination.of(ladder);
+    double[] shifts = new double[ladder.steps()];
+    for (int k = 0; k < shifts.length; k++) {
+      shifts[k] = elimination.startShiftHertz(k);
     }
     return shifts;
   }

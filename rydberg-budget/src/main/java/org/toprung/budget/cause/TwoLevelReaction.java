@@ -31,7 +31,7 @@ final class TwoLevelReaction implements Reaction {
 
   @Override
   public double stretched(double factor) {
-    return system.error(factor, 0, ones);
+    return system.stretchedError(factor);
   }
 
   @Override
@@ -40,7 +40,7 @@ final class TwoLevelReaction implements Reaction {
     return positions.average(
         fields -> {
           for (int k = 0; k < intensities.length; k++) {
-            intensities[k] = 1 + fields[k] * fields[k] - positions.meanIntensity(k);
+            intensities[k] = fields[k] * fields[k] / positions.meanIntensity(k);
           }
           double rabi = BeamFields.product(fields) / positions.meanProduct();
           return system.error(rabi, 0, intensities);

@@ -19,6 +19,10 @@ import org.toprung.core.quantity.Frequency;
  * for a laser that follows the shifted resonance, stays on the one at full power, or on the bare
  * one.
  *
+ * <p>The energy that the beams give to both levels alike, as they do to the start, turns the phase
+ * of a returning start against an idling state; what the beams do at their nominal intensity and in
+ * the planned time is part of the plan, so that only the rest counts.
+ *
  * <p>A stretch without change is one segment and exact; what changes smoothly is cut into steps of
  * the fourth-order Magnus expansion at two Gauss points, doubled in number until the final state is
  * good to {@value #ACCURACY}, at the nominal setting and at one well away from it. The propagators
@@ -43,6 +47,8 @@ public final class TwoLevelSystem implements DrivenSystem {
   private final int steps;
   private final double rabi; // Hz
   private final double[] shift; // Hz at full power, by step
+  private final double[] startShift; // of the start alone, Hz at full power, by step
+  private final double[] startTurns; // ∫ a² dt times the shift of the start, by step
   private final double[] seconds; // by segment
   private final boolean[] constant; // by segment
   private final double[] nominal; // relative intensities of 1
@@ -57,11 +63,16 @@ public final class TwoLevelSystem implements DrivenSystem {
   private final double wRe1;
   private final double wIm1;
 
+  /** How far each beam at full power moves the resonance, and the start alone, Hz. */
+  private record Shifts(double[] resonance, double[] start) {}
+
   private TwoLevelSystem(
-      PulseProgram program, double rabi, double[] shift, int cuts, Goal goal, double[] wanted) {
+      PulseProgram program, double rabi, Shifts shifts, int cuts, Goal goal, double[] wanted) {
     this.steps = program.steps();
     this.rabi = rabi;
-    this.shift = shift;
+    this.shift = shifts.resonance();
+    this.startShift = shifts.start();
+    this.startTurns = new double[steps];
     this.goal = goal;
     this.wRe0 = wanted[0];
     this.wIm0 = wanted[1];
@@ -91,6 +102,9 @@ public final class TwoLevelSystem implements DrivenSystem {
         double middle = breaks[i] + (c + 0.5) * h;
         sample(program, 2 * m, still ? middle : middle - GAUSS * h);
         sample(program, 2 * m + 1, still ? middle : middle + GAUSS * h);
+        for (int k = 0; k < steps; k++) {
+          startTurns[k] += h * meanIntensity(m, k) * startShift[k];
+        }
         m++;
       }
     }
@@ -110,6 +124,11 @@ public final class TwoLevelSystem implements DrivenSystem {
     detuning[at] = sum;
   }
 
+  private double meanIntensity(int segment, int step) {
+    return 0.5
+        * (intensity[2 * segment * steps + step] + intensity[(2 * segment + 1) * steps + step]);
+  }
+
   private static double reference(PulseProgram program, int step, double t) {
     if (program.reference() == FrequencyReference.FOLLOWING) {
       double field = program.programmedFieldFactor(step, t);
@@ -119,7 +138,7 @@ public final class TwoLevelSystem implements DrivenSystem {
   }
 
   /**
-   * Prepares a pulse.
+   * Prepares a pulse whose start the light does not shift.
    *
    * @param pulse the pulse
    * @param steps number of lasers, 1 to 3
@@ -133,6 +152,27 @@ public final class TwoLevelSystem implements DrivenSystem {
    *     #MOST_STEPS} steps between two breaks
    */
   public static TwoLevelSystem of(Pulse pulse, int steps, double rabiHertz, double[] shiftHertz) {
+    return of(pulse, steps, rabiHertz, shiftHertz, new double[shiftHertz.length]);
+  }
+
+  /**
+   * Prepares a pulse.
+   *
+   * @param pulse the pulse
+   * @param steps number of lasers, 1 to 3
+   * @param rabiHertz effective Rabi frequency at full power over 2π, positive, Hz
+   * @param shiftHertz how far each beam at full power moves the resonance (target minus start), one
+   *     for each step, Hz
+   * @param startShiftHertz how far each beam at full power moves the start alone, one for each
+   *     step, Hz; it matters only to a pulse that has to return with a phase
+   * @return the system
+   * @throws IllegalArgumentException if the pulse needs more than two levels, the Rabi frequency is
+   *     not positive and finite, or the shifts are not one finite number for each step
+   * @throws ArithmeticException if the program changes too fast to be followed in {@value
+   *     #MOST_STEPS} steps between two breaks
+   */
+  public static TwoLevelSystem of(
+      Pulse pulse, int steps, double rabiHertz, double[] shiftHertz, double[] startShiftHertz) {
     if (!pulse.isTwoLevel()) {
       throw new IllegalArgumentException(
           pulse.name() + " drives more than two levels: it needs the ladder");
@@ -141,17 +181,23 @@ public final class TwoLevelSystem implements DrivenSystem {
       throw new IllegalArgumentException(
           "the Rabi frequency must be positive and finite, not " + rabiHertz + " Hz");
     }
-    if (shiftHertz.length != steps || !Arrays.stream(shiftHertz).allMatch(Double::isFinite)) {
+    requireShifts(steps, shiftHertz);
+    requireShifts(steps, startShiftHertz);
+    double[] wanted = wanted(pulse, steps, rabiHertz);
+    PulseProgram program = pulse.program(steps, Frequency.ofHertz(rabiHertz));
+    Shifts shifts = new Shifts(shiftHertz.clone(), startShiftHertz.clone());
+    return refined(program, rabiHertz, shifts, pulse.goal(), wanted);
+  }
+
+  private static void requireShifts(int steps, double[] hertz) {
+    if (hertz.length != steps || !Arrays.stream(hertz).allMatch(Double::isFinite)) {
       throw new IllegalArgumentException(
           "one finite light shift for each of "
               + steps
               + " steps is needed, not "
-              + Arrays.toString(shiftHertz)
+              + Arrays.toString(hertz)
               + " Hz");
     }
-    double[] wanted = wanted(pulse, steps, rabiHertz);
-    PulseProgram program = pulse.program(steps, Frequency.ofHertz(rabiHertz));
-    return refined(program, rabiHertz, shiftHertz.clone(), pulse.goal(), wanted);
   }
 
   /** What the pulse's goal projects on. */
@@ -161,8 +207,13 @@ public final class TwoLevelSystem implements DrivenSystem {
     }
     PulseProgram ideal = pulse.ideal().program(steps, Frequency.ofHertz(rabiHertz));
     double[] end =
-        refined(ideal, rabiHertz, new double[steps], pulse.goal(), new double[4])
-            .end(1, 0, ones(steps));
+        refined(
+                ideal,
+                rabiHertz,
+                new Shifts(new double[steps], new double[steps]),
+                pulse.goal(),
+                new double[4])
+            .end(1, 0, ones(steps), 1);
     if (pulse.goal() == Goal.RETURN) {
       double size = 2 * Math.hypot(end[0], end[1]);
       return new double[] {end[0] / size, end[1] / size, 0, 0};
@@ -171,14 +222,14 @@ public final class TwoLevelSystem implements DrivenSystem {
   }
 
   private static TwoLevelSystem refined(
-      PulseProgram program, double rabiHertz, double[] shift, Goal goal, double[] wanted) {
+      PulseProgram program, double rabiHertz, Shifts shifts, Goal goal, double[] wanted) {
     TwoLevelSystem coarse =
-        new TwoLevelSystem(program, rabiHertz, shift, FIRST_STEPS, goal, wanted);
+        new TwoLevelSystem(program, rabiHertz, shifts, FIRST_STEPS, goal, wanted);
     if (allConstant(program)) {
       return coarse;
     }
     for (int cuts = 2 * FIRST_STEPS; cuts <= MOST_STEPS; cuts *= 2) {
-      TwoLevelSystem fine = new TwoLevelSystem(program, rabiHertz, shift, cuts, goal, wanted);
+      TwoLevelSystem fine = new TwoLevelSystem(program, rabiHertz, shifts, cuts, goal, wanted);
       // the error of the finer one is a sixteenth of what separates them
       if (coarse.distance(fine) < 16 * ACCURACY) {
         return fine;
@@ -206,8 +257,8 @@ public final class TwoLevelSystem implements DrivenSystem {
     double[] full = ones(steps);
     double[] off = Arrays.stream(full).map(x -> 1.1 * x).toArray();
     double largest = 0;
-    double[][] mine = {end(1, 0, full), end(1.1, 0.3 * rabi, off)};
-    double[][] theirs = {finer.end(1, 0, full), finer.end(1.1, 0.3 * rabi, off)};
+    double[][] mine = {end(1, 0, full, 1), end(1.1, 0.3 * rabi, off, 1)};
+    double[][] theirs = {finer.end(1, 0, full, 1), finer.end(1.1, 0.3 * rabi, off, 1)};
     for (int c = 0; c < mine.length; c++) {
       for (int i = 0; i < 4; i++) {
         largest = Math.max(largest, Math.abs(mine[c][i] - theirs[c][i]));
@@ -233,7 +284,20 @@ public final class TwoLevelSystem implements DrivenSystem {
    * @return 1 − success by the pulse's goal
    */
   public double error(double rabiFactor, double detuningHertz, double[] relativeIntensity) {
-    double[] psi = end(rabiFactor, detuningHertz, relativeIntensity);
+    return error(end(rabiFactor, detuningHertz, relativeIntensity, 1));
+  }
+
+  /**
+   * Error of the pulse when it takes longer than planned, with everything that is programmed.
+   *
+   * @param factor length over the planned one, at least 0
+   * @return 1 − success by the pulse's goal
+   */
+  public double stretchedError(double factor) {
+    return error(end(1, 0, nominal, factor));
+  }
+
+  private double error(double[] psi) {
     double sRe = psi[0];
     double sIm = psi[1];
     double tRe = psi[2];
@@ -252,8 +316,12 @@ public final class TwoLevelSystem implements DrivenSystem {
     return re * re + im * im;
   }
 
-  /** The state at the end, {start re, start im, target re, target im}. */
-  private double[] end(double rabiFactor, double detuningHertz, double[] relativeIntensity) {
+  /**
+   * The state at the end, {start re, start im, target re, target im}, with all times multiplied by
+   * a factor.
+   */
+  private double[] end(
+      double rabiFactor, double detuningHertz, double[] relativeIntensity, double stretch) {
     double[] early = new double[3];
     double[] late = new double[3];
     double sRe = 1;
@@ -262,8 +330,8 @@ public final class TwoLevelSystem implements DrivenSystem {
     double tIm = 0;
     double turns = 0; // ∫ δ dt
     for (int m = 0; m < seconds.length; m++) {
-      double h = seconds[m];
-      turns += h * field(m, rabiFactor, detuningHertz, relativeIntensity, early, late);
+      double h = stretch * seconds[m];
+      turns += h * field(m, h, rabiFactor, detuningHertz, relativeIntensity, early, late);
       double size = Math.sqrt(early[0] * early[0] + early[1] * early[1] + early[2] * early[2]);
       double angle = Math.PI * size * h;
       double cos = Math.cos(angle);
@@ -281,7 +349,10 @@ public final class TwoLevelSystem implements DrivenSystem {
       tRe = bRe;
       tIm = bIm;
     }
-    // the mean energy −δ/2 of both states
+    // the mean energy −δ/2 of both states, and what moves them alike beyond the plan
+    for (int k = 0; k < steps; k++) {
+      turns -= 2 * (stretch * relativeIntensity[k] - 1) * startTurns[k];
+    }
     double cos = Math.cos(Math.PI * turns);
     double sin = Math.sin(Math.PI * turns);
     return new double[] {
@@ -296,6 +367,7 @@ public final class TwoLevelSystem implements DrivenSystem {
    */
   private double field(
       int m,
+      double h,
       double rabiFactor,
       double detuningHertz,
       double[] relativeIntensity,
@@ -306,7 +378,7 @@ public final class TwoLevelSystem implements DrivenSystem {
       return early[2];
     }
     point(2 * m + 1, rabiFactor, detuningHertz, relativeIntensity, late);
-    double k = MAGNUS * seconds[m];
+    double k = MAGNUS * h;
     double x = early[1] * late[2] - early[2] * late[1];
     double y = early[2] * late[0] - early[0] * late[2];
     double z = early[0] * late[1] - early[1] * late[0];
@@ -352,7 +424,7 @@ public final class TwoLevelSystem implements DrivenSystem {
   @Override
   public void hamiltonianHertz(int segment, double[] re, double[] im) {
     double[] b = new double[3];
-    double mean = field(segment, 1, 0, nominal, b, new double[3]);
+    double mean = field(segment, seconds[segment], 1, 0, nominal, b, new double[3]);
     write(b, mean, re, im);
   }
 
@@ -408,6 +480,9 @@ public final class TwoLevelSystem implements DrivenSystem {
         -intensity[(2 * segment + 1) * steps + step] * shift[step],
         re,
         im);
+    double common = meanIntensity(segment, step) * startShift[step];
+    re[0] += common;
+    re[3] += common;
   }
 
   @Override

@@ -164,6 +164,33 @@ public final class PulseResponse {
   }
 
   /**
+   * Response of a pulse of the effective two-level system whose start is moved by the light too:
+   * the phase of a start that has to return knows it, other goals do not.
+   *
+   * @param pulse the pulse
+   * @param rabi effective Rabi frequency at full power, positive
+   * @param shiftPerStep how far each beam at full power moves the resonance
+   * @param startShiftPerStep how far each beam at full power moves the start
+   * @return the response
+   * @throws IllegalArgumentException if the pulse needs more than two levels, the Rabi frequency is
+   *     not positive and finite, or the two lists differ in length
+   */
+  public static PulseResponse twoLevel(
+      Pulse pulse,
+      Frequency rabi,
+      List<Frequency> shiftPerStep,
+      List<Frequency> startShiftPerStep) {
+    TwoLevelSystem system =
+        TwoLevelSystem.of(
+            pulse,
+            shiftPerStep.size(),
+            rabi.hertz(),
+            shiftPerStep.stream().mapToDouble(Frequency::hertz).toArray(),
+            startShiftPerStep.stream().mapToDouble(Frequency::hertz).toArray());
+    return new PulseResponse(system, Optional.of(system));
+  }
+
+  /**
    * Response of a pulse on a resolved ladder, with every sublevel, calibrated there: its length and
    * laser frequency are the ones that suit the dressed ladder. Without loss, which acts in
    * proportion to {@link #secondsInStates()}.
