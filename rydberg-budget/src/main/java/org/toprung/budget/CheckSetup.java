@@ -83,7 +83,7 @@ public final class CheckSetup {
    * Reports progress.
    *
    * @param newProgress told the number of shots done so far of {@link #plannedShots()}, from any
-   *     thread
+   *     thread, one call at a time and in rising order
    * @return a copy
    */
   public CheckSetup reporting(IntConsumer newProgress) {
@@ -91,7 +91,7 @@ public final class CheckSetup {
   }
 
   /**
-   * Sets who does the work; otherwise the processors at hand.
+   * Sets who does the work beside the thread that waits for it; otherwise the processors at hand.
    *
    * @param newExecutor an executor
    * @return a copy
@@ -120,7 +120,8 @@ public final class CheckSetup {
   }
 
   /**
-   * Simulates in the background. Cancelling the future stops the simulation soon.
+   * Simulates in the background. Cancelling the future stops the simulation soon, and so does
+   * whatever else completes it before the check does, such as a timeout.
    *
    * @return the check to come
    */
@@ -139,7 +140,8 @@ public final class CheckSetup {
     coordinator.setDaemon(true);
     result.whenComplete(
         (check, failure) -> {
-          if (result.isCancelled()) {
+          // cancelled, timed out, or completed by somebody else: nobody waits for the check
+          if (Thread.currentThread() != coordinator) {
             coordinator.interrupt();
           }
         });

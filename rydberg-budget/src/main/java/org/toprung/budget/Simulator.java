@@ -21,7 +21,7 @@ final class Simulator {
   private final long seed;
   private final IntConsumer progress;
   private final ExecutorService executor;
-  private int done;
+  private long done;
 
   Simulator(
       Assessment assessment, int shots, long seed, IntConsumer progress, ExecutorService executor) {
@@ -39,9 +39,14 @@ final class Simulator {
   }
 
   ShotSimulation.Result run(Set<Disturbance> active) {
-    int before = done;
+    long before = done;
     ShotSimulation.Result result =
-        simulation(active).run(shots, seed, shot -> progress.accept(before + shot), executor);
+        simulation(active)
+            .run(
+                shots,
+                seed,
+                shot -> progress.accept((int) Math.min(Integer.MAX_VALUE, before + shot)),
+                executor);
     done += shots;
     return result;
   }

@@ -1,5 +1,6 @@
 package org.toprung.budget.dynamics;
 
+import org.toprung.budget.pulse.Goal;
 import org.toprung.core.drive.Ladder;
 
 /**
@@ -7,8 +8,9 @@ import org.toprung.core.drive.Ladder;
  *
  * @param missed error by the goal of the pulse that the other two do not count: the atom stayed in
  *     the start, sits in the intermediate level, or has the wrong phase
- * @param otherRydberg probability of another sublevel of the Rydberg level
- * @param otherGround probability of another sublevel of the ground level
+ * @param otherRydberg error by another sublevel of the Rydberg level: its probability, about half
+ *     of that for a pulse that has to return
+ * @param otherGround error by another sublevel of the ground level, likewise
  */
 public record NoiseFreePulse(double missed, double otherRydberg, double otherGround) {
 
@@ -32,6 +34,21 @@ public record NoiseFreePulse(double missed, double otherRydberg, double otherGro
       }
     }
     double error = system.noiseFreeError();
-    return new NoiseFreePulse(Math.max(0, error - rydberg - ground), rydberg, ground);
+    double leaked = rydberg + ground;
+    double lost = Math.min(error, cost(leaked, system.calibrated().pulse().goal()));
+    double share = leaked > 0 ? lost / leaked : 0;
+    return new NoiseFreePulse(Math.max(0, error - lost), share * rydberg, share * ground);
+  }
+
+  /**
+   * Error of a pulse that leaves a population elsewhere and is right otherwise: 1 − ¼(1 + √(1 −
+   * p))² where half the atom idles.
+   */
+  private static double cost(double leaked, Goal goal) {
+    if (goal != Goal.RETURN) {
+      return leaked;
+    }
+    double missing = 1 - Math.sqrt(Math.max(0, 1 - leaked));
+    return missing - 0.25 * missing * missing;
   }
 }

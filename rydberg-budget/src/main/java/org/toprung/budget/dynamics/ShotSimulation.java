@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Set;
 import java.util.SplittableRandom;
 import java.util.concurrent.CancellationException;
+import java.util.concurrent.CompletableFuture;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.ForkJoinPool;
@@ -197,7 +198,8 @@ public final class ShotSimulation {
    *
    * @param shots number of shots, at least 2
    * @param seed seed
-   * @param progress told the number of shots done, from any thread, in rising order per thread
+   * @param progress told the number of shots done, from any thread, one call at a time, in rising
+   *     order
    * @return mean error and standard error
    * @throws IllegalArgumentException if there are fewer than 2 shots
    * @throws CancellationException if the waiting thread was interrupted; its interrupt flag is kept
@@ -209,12 +211,14 @@ public final class ShotSimulation {
   }
 
   /**
-   * Runs the shots on an executor, in as many tasks as there are processors.
+   * Runs the shots on an executor, in as many tasks as there are processors. The calling thread is
+   * one of them, so that it may belong to the executor itself, even as its only thread.
    *
    * @param shots number of shots, at least 2
    * @param seed seed
-   * @param progress told the number of shots done, from any thread, in rising order per thread
-   * @param executor what runs the tasks; not one whose only thread is the caller
+   * @param progress told the number of shots done, from any thread, one call at a time, in rising
+   *     order
+   * @param executor what runs the tasks beside the caller's
    * @return mean error and standard error
    * @throws IllegalArgumentException if there are fewer than 2 shots
    * @throws CancellationException if the waiting thread was interrupted; its interrupt flag is kept
@@ -226,15 +230,14 @@ public final class ShotSimulation {
       throw new IllegalArgumentException("a simulation takes at least 2 shots, not " + shots);
     }
     Run run = new Run(shots, seed, progress);
-    int tasks = Math.min(run.sums.length, Runtime.getRuntime().availableProcessors());
+    int helpers = Math.min(run.sums.length, Runtime.getRuntime().availableProcessors()) - 1;
     List<Future<?>> futures = new ArrayList<>();
     try {
-      for (int t = 0; t < tasks; t++) {
+      for (int t = 0; t < helpers; t++) {
         futures.add(executor.submit(run));
       }
-      for (Future<?> future : futures) {
-        future.get();
-      }
+      run.takePart(true);
+      run.finished.get();
     } catch (InterruptedException e) {
       Thread.currentThread().interrupt();
       CancellationException cancelled =
@@ -245,6 +248,8 @@ public final class ShotSimulation {
       throw unchecked(e.getCause());
     } finally {
       run.stopped.set(true);
+      // what has not begun finds nothing left to do
+      futures.forEach(future -> future.cancel(false));
     }
     return run.result();
   }
@@ -253,9 +258,7 @@ public final class ShotSimulation {
     if (cause instanceof Error) {
       throw (Error) cause;
     }
-    return cause instanceof RuntimeException
-        ? (RuntimeException) cause
-        : new IllegalStateException("a task of the simulation failed", cause);
+    return (RuntimeException) cause; // a run throws nothing checked
   }
 
   /** The state of one run, shared by its tasks. */
@@ -268,7 +271,8 @@ public final class ShotSimulation {
     private final ShotDraw draw;
     private final double[][] sums; // by chunk: sum, squares about its mean, number
     private final AtomicInteger next = new AtomicInteger();
-    private final AtomicInteger done = new AtomicInteger();
+    private int done; // guarded by this
+    private final CompletableFuture<Void> finished = new CompletableFuture<>();
     private final AtomicBoolean stopped = new AtomicBoolean();
 
     Run(int shots, long seed, IntConsumer progress) {
@@ -295,25 +299,50 @@ public final class ShotSimulation {
 
     @Override
     public void run() {
-      ShotPropagator propagator = new ShotPropagator(shape, draw);
-      double[] errors = new double[chunk];
-      int c;
-      while ((c = next.getAndIncrement()) < sums.length) {
-        int from = (int) ((long) c * chunk);
-        int count = Math.min(shots - from, chunk);
-        for (int i = 0; i < count; i++) {
-          if (stopped.get()) {
-            return;
-          }
-          try {
+      try {
+        takePart(false);
+      } catch (InterruptedException impossible) {
+        throw new IllegalStateException(impossible);
+      }
+    }
+
+    /**
+     * Takes chunks until there are none left.
+     *
+     * @param interruptible whether to give up when interrupted, as the caller does
+     */
+    void takePart(boolean interruptible) throws InterruptedException {
+      try {
+        ShotPropagator propagator = new ShotPropagator(shape, draw);
+        double[] errors = new double[chunk];
+        int c;
+        while ((c = next.getAndIncrement()) < sums.length) {
+          int from = (int) ((long) c * chunk);
+          int count = Math.min(shots - from, chunk);
+          for (int i = 0; i < count; i++) {
+            if (stopped.get()) {
+              return;
+            }
+            if (interruptible && Thread.interrupted()) {
+              throw new InterruptedException();
+            }
             errors[i] = propagator.error(generator(seed, from + i));
-          } catch (RuntimeException | Error e) {
-            stopped.set(true);
-            throw e;
           }
+          sums[c] = moments(errors, count);
+          report(count);
         }
-        sums[c] = moments(errors, count);
-        progress.accept(done.addAndGet(count));
+      } catch (RuntimeException | Error e) {
+        stopped.set(true);
+        finished.completeExceptionally(e);
+      }
+    }
+
+    /** One at a time, so that what is told only rises. */
+    private synchronized void report(int count) {
+      done += count;
+      progress.accept(done);
+      if (done == shots) {
+        finished.complete(null);
       }
     }
 
