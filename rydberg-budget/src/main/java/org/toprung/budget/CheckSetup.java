@@ -114,6 +114,8 @@ public final class CheckSetup {
    *
    * @return the check
    * @throws CancellationException if the thread was interrupted; it stays interrupted
+   * @throws ArithmeticException if a disturbance takes a shot so far off that an intermediate level
+   *     becomes resonant
    */
   public Check run() {
     return budget.check(shots, seed, alone, progress, executor);

@@ -36,6 +36,7 @@ import org.toprung.core.quantity.MagneticField;
 import org.toprung.core.quantity.PhysicalConstants;
 import org.toprung.core.quantity.Power;
 import org.toprung.core.quantity.Temperature;
+import org.toprung.core.quantity.Time;
 import org.toprung.core.structure.Lifetimes;
 
 class BudgetTest {
@@ -252,6 +253,49 @@ class BudgetTest {
     double quiet = budget(drive, Bench.unknown()).check(2, 1).total();
     double composed = budget.total() - budget(drive, Bench.unknown()).total();
     assertEquals(check.total() - quiet, composed, 4 * check.standardError() + 0.03 * composed);
+  }
+
+  /**
+   * A spread far wider than the line, so that hardly a shot is on resonance. Closed form without
+   * the oscillations of the line: 1 − P = 1 − ∫N(δ)P(δ)dδ, P(δ) = Ω²/(Ω²+δ²) sin²(½π√(1+δ²/Ω²)), by
+   * a sum over a fine grid.
+   */
+  @Test
+  void averagesOverSpreadsFarWiderThanTheLine() {
+    for (double times : new double[] {0.5, 3, 30}) {
+      double rabi = budget(RUBIDIUM, Bench.unknown()).plan().rabi().hertz();
+      Bench bench = Bench.unknown().withDrifts(hertz(times * rabi), hertz(0));
+      double expected = 0;
+      double weights = 0;
+      for (double x = -8; x <= 8; x += 1e-4) {
+        double square = 1 + times * x * times * x;
+        double sine = Math.sin(0.5 * Math.PI * Math.sqrt(square));
+        weights += Math.exp(-0.5 * x * x);
+        expected += Math.exp(-0.5 * x * x) * (1 - sine * sine / square);
+      }
+      Budget budget = budget(RUBIDIUM, bench);
+      assertEquals(expected / weights, error(budget, "Laser drift, step 1"), 1e-3);
+    }
+  }
+
+  @Test
+  void saysWhichShotIsTooFarOff() {
+    Budget budget = budget(RUBIDIUM, Bench.unknown().withDrifts(megahertz(1000), megahertz(1000)));
+    String message =
+        assertThrows(ArithmeticException.class, () -> budget.check(300, 2)).getMessage();
+    assertTrue(message.startsWith("shot "), message);
+    assertTrue(message.contains("of seed 2 cannot be simulated"), message);
+  }
+
+  /** Two levels no longer: what the pulse leaves is no superposition of start and target. */
+  @Test
+  void refusesASuperpositionWhereAnIntermediateLevelTakesPart() {
+    Drive near = TestDrives.rubidium().detuned(megahertz(5)).resolve();
+    refused(() -> Budget.of(near, Pulse.square(0.5 * Math.PI)).on(Bench.unknown()).compose());
+    refused(
+        () -> Budget.of(near, Pulse.ramsey(Time.ofSeconds(1e-6), 1)).on(Bench.unknown()).compose());
+    double total = Budget.of(near, Pulse.pi()).on(Bench.unknown()).compose().total();
+    assertTrue(total >= 0 && total <= 1, "" + total);
   }
 
   /** In flat tops the place of the atom does not matter. */

@@ -17,13 +17,14 @@ import org.toprung.core.linear.Decoupling;
  *
  * <p>Changes of the program are followed with steps halved until the final state has settled to
  * {@value #SETTLED}, or there are more than half of {@value #MOST_STEPS} between two breaks, where
- * what was reached is taken. Operators are derivatives of the effective Hamiltonian, the change of
- * the dressed basis included.
+ * what was reached is taken if it is good to {@value #TOLERATED}. Operators are derivatives of the
+ * effective Hamiltonian, the change of the dressed basis included.
  *
  * <p>Immutable and thread-safe.
  */
 public final class LadderSystem implements DrivenSystem {
   private static final double SETTLED = 3e-10;
+  private static final double TOLERATED = 1e-5;
   private static final int FIRST_STEPS = 6;
   private static final int MOST_STEPS = 800;
 
@@ -77,7 +78,8 @@ public final class LadderSystem implements DrivenSystem {
    * @param calibrated the program on its ladder
    * @return the system
    * @throws ArithmeticException if the far-off states cannot be decoupled at some setting of the
-   *     program, though they can be at full power and in the dark
+   *     program, though they can be at full power and in the dark, or if the program changes too
+   *     fast to be followed
    */
   public static LadderSystem of(CalibratedProgram calibrated) {
     return settled(calibrated, activeStates(calibrated), SETTLED);
@@ -103,8 +105,18 @@ public final class LadderSystem implements DrivenSystem {
       }
       double[][] end = system.end();
       // halving the steps of an integrator of order four leaves a fifteenth of the change
-      if (last != null && difference(last, end) < 15 * amplitude || 2 * steps > MOST_STEPS) {
+      double left = last == null ? Double.POSITIVE_INFINITY : difference(last, end) / 15;
+      if (left < amplitude || 2 * steps > MOST_STEPS && left < Math.max(amplitude, TOLERATED)) {
         return system;
+      }
+      if (2 * steps > MOST_STEPS) {
+        throw new ArithmeticException(
+            calibrated.pulse().name()
+                + " changes too fast, or sweeps too far, to be followed: amplitudes are not good to "
+                + TOLERATED
+                + " with "
+                + steps
+                + " steps between two breaks");
       }
       last = end;
     }

@@ -51,6 +51,16 @@ final class Outcomes {
       }
       return outcomes;
     }
+    for (int state : active) {
+      if (goal != Goal.RETURN && ladder.isIntermediate(state)) {
+        throw new IllegalArgumentException(
+            calibrated.pulse().name()
+                + " has to leave start and target in a superposition, but "
+                + ladder.states().get(state).label()
+                + " is so near resonance that it takes part; allowed: a drive with more detuning"
+                + " from its intermediate levels, or a pulse that transfers or returns the atom");
+      }
+    }
     IdealRotation ideal =
         IdealRotation.of(calibrated.pulse(), ladder.steps(), calibrated.rabiHertz());
     double[][] vector = new double[2][p];

@@ -326,7 +326,7 @@ public final class ShotSimulation {
             if (interruptible && Thread.interrupted()) {
               throw new InterruptedException();
             }
-            errors[i] = propagator.error(generator(seed, from + i));
+            errors[i] = error(propagator, from + i);
           }
           sums[c] = moments(errors, count);
           report(count);
@@ -334,6 +334,25 @@ public final class ShotSimulation {
       } catch (RuntimeException | Error e) {
         stopped.set(true);
         finished.completeExceptionally(e);
+      }
+    }
+
+    private double error(ShotPropagator propagator, int shot) {
+      try {
+        return propagator.error(generator(seed, shot));
+      } catch (ArithmeticException e) {
+        ArithmeticException named =
+            new ArithmeticException(
+                "shot "
+                    + shot
+                    + " of seed "
+                    + seed
+                    + " cannot be simulated: the bench moves lasers or levels so far that "
+                    + e.getMessage()
+                    + "; allowed: disturbances that are small against the detuning of the"
+                    + " intermediate levels");
+        named.initCause(e);
+        throw named;
       }
     }
 
