@@ -10,6 +10,7 @@ import static org.toprung.core.quantity.Length.micrometres;
 import static org.toprung.core.quantity.Length.nanometres;
 import static org.toprung.core.quantity.Power.milliwatts;
 import static org.toprung.core.quantity.Temperature.kelvin;
+import static org.toprung.core.quantity.Temperature.microkelvin;
 
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
@@ -94,6 +95,27 @@ class PulseBudgetTest {
             cause.cause());
       }
     }
+  }
+
+  /** A warm atom in jittering beams: four numbers across two beams, from seven that are drawn. */
+  @Test
+  void agreesWithItsSimulationForAWarmAtomInJitteringBeams() {
+    Bench bench =
+        Bench.unknown()
+            .withTemperature(microkelvin(20))
+            .withTrapFrequencies(kilohertz(3), kilohertz(3), kilohertz(3))
+            .withPointing(micrometres(1), micrometres(2));
+    Budget budget = Budget.of(RUBIDIUM, Pulse.square(2 * Math.PI)).on(bench).compose();
+    CauseCheck place =
+        budget.check(20_000, 7).causes().stream()
+            .filter(c -> c.cause().equals("Position in the beams"))
+            .findFirst()
+            .orElseThrow();
+    assertEquals(
+        place.simulated(),
+        place.composed(),
+        4 * place.standardError() + 0.01 * place.simulated(),
+        place.toString());
   }
 
   /** Intensity noise in a 2π pulse, tabulated: the phase of the start is in the filter too. */

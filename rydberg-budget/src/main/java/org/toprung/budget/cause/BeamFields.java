@@ -17,11 +17,21 @@ import org.toprung.core.drive.Drive;
  * <p>The position is a normal variable in each direction of the lab, common to all beams; pointing
  * jitter is one in each of the two directions across a beam, of that beam alone.
  *
+ * <p>What counts is where the atom is across each beam, and along it where the beam is short. These
+ * are fewer numbers than there are pushes, and correlated ones: they are written as a Cholesky
+ * factor of their covariance times independent normal variables, few enough for a fine rule.
+ *
  * <p>Immutable and thread-safe.
  */
 final class BeamFields {
+  private static final double FAR = 6; // standard deviations
+  private static final double FELT = 1e-4; // of the field
+  private static final double NOTHING = 1e-12; // of the largest variance
+
   private final Drive drive;
   private final List<Push> pushes;
+  private final List<Axis> axes;
+  private final double[][] factor; // by axis and normal variable, m
   private final Points points; // field factors
   private final double[] meanSquare;
   private final double meanProduct;
@@ -39,10 +49,27 @@ final class BeamFields {
     }
   }
 
+  /** A direction in which the place of the atom relative to a beam matters. */
+  private record Axis(int beam, double[] unit) {
+    double along(Push push) {
+      return push.moves(beam) ? push.x() * unit[0] + push.y() * unit[1] + push.z() * unit[2] : 0;
+    }
+  }
+
   private BeamFields(Drive drive, List<Push> pushes) {
     this.drive = drive;
     this.pushes = pushes;
-    this.points = Points.of(pushes.size(), this::fields);
+    this.axes = axes();
+    double[][] covariance = new double[axes.size()][axes.size()];
+    for (int i = 0; i < covariance.length; i++) {
+      for (int j = 0; j < covariance.length; j++) {
+        for (Push push : pushes) {
+          covariance[i][j] += axes.get(i).along(push) * axes.get(j).along(push);
+        }
+      }
+    }
+    this.factor = cholesky(covariance);
+    this.points = Points.of(factor.length == 0 ? 0 : factor[0].length, this::fields);
     this.meanSquare = new double[drive.steps().size()];
     for (int k = 0; k < meanSquare.length; k++) {
       int step = k;
@@ -68,6 +95,76 @@ final class BeamFields {
       }
     }
     return new BeamFields(drive, List.copyOf(pushes));
+  }
+
+  private List<Axis> axes() {
+    List<Axis> found = new ArrayList<>();
+    for (int k = 0; k < drive.steps().size(); k++) {
+      double[] direction = drive.steps().get(k).beam().direction();
+      for (double[] unit : across(direction)) {
+        found.add(new Axis(k, unit));
+      }
+      Axis along = new Axis(k, direction);
+      double variance = 0;
+      for (Push push : pushes) {
+        variance += along.along(push) * along.along(push);
+      }
+      if (isFelt(k, direction, FAR * Math.sqrt(variance))) {
+        found.add(along);
+      }
+    }
+    return List.copyOf(found);
+  }
+
+  private boolean isFelt(int step, double[] unit, double metres) {
+    double largest = 0;
+    for (double d : new double[] {-metres, metres}) {
+      double field = drive.steps().get(step).fieldFactorAt(d * unit[0], d * unit[1], d * unit[2]);
+      largest = Math.max(largest, Math.abs(field - 1));
+    }
+    return largest > FELT;
+  }
+
+  /**
+   * A factor L with L·Lᵀ the covariance, of as many columns as its rank: Cholesky with complete
+   * pivoting (Higham, Accuracy and Stability of Numerical Algorithms, section 10.3).
+   */
+  private static double[][] cholesky(double[][] covariance) {
+    int n = covariance.length;
+    double[][] rest = new double[n][];
+    double largest = 0;
+    for (int i = 0; i < n; i++) {
+      rest[i] = covariance[i].clone();
+      largest = Math.max(largest, rest[i][i]);
+    }
+    List<double[]> columns = new ArrayList<>();
+    while (columns.size() < n) {
+      int pivot = 0;
+      for (int i = 1; i < n; i++) {
+        pivot = rest[i][i] > rest[pivot][pivot] ? i : pivot;
+      }
+      if (!(rest[pivot][pivot] > NOTHING * largest)) {
+        break;
+      }
+      double root = Math.sqrt(rest[pivot][pivot]);
+      double[] column = new double[n];
+      for (int i = 0; i < n; i++) {
+        column[i] = rest[i][pivot] / root;
+      }
+      for (int i = 0; i < n; i++) {
+        for (int j = 0; j < n; j++) {
+          rest[i][j] -= column[i] * column[j];
+        }
+      }
+      columns.add(column);
+    }
+    double[][] factor = new double[n][columns.size()];
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < columns.size(); j++) {
+        factor[i][j] = columns.get(j)[i];
+      }
+    }
+    return factor;
   }
 
   /** Whether nothing moves differently. */
@@ -115,20 +212,21 @@ final class BeamFields {
   }
 
   private double[] fields(double[] normal) {
-    double[] fields = new double[drive.steps().size()];
-    for (int k = 0; k < fields.length; k++) {
-      double x = 0;
-      double y = 0;
-      double z = 0;
+    int beams = drive.steps().size();
+    double[][] at = new double[beams][3];
+    for (int i = 0; i < axes.size(); i++) {
+      double metres = 0;
       for (int j = 0; j < normal.length; j++) {
-        Push push = pushes.get(j);
-        if (push.moves(k)) {
-          x += push.x() * normal[j];
-          y += push.y() * normal[j];
-          z += push.z() * normal[j];
-        }
+        metres += factor[i][j] * normal[j];
       }
-      fields[k] = drive.steps().get(k).fieldFactorAt(x, y, z);
+      Axis axis = axes.get(i);
+      for (int a = 0; a < 3; a++) {
+        at[axis.beam()][a] += metres * axis.unit()[a];
+      }
+    }
+    double[] fields = new double[beams];
+    for (int k = 0; k < beams; k++) {
+      fields[k] = drive.steps().get(k).fieldFactorAt(at[k][0], at[k][1], at[k][2]);
     }
     return fields;
   }

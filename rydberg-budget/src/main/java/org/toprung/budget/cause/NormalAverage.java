@@ -5,8 +5,8 @@ import org.apache.commons.math4.legacy.analysis.integration.gauss.GaussIntegrato
 
 /**
  * Points for averages over several independent standard normal variables: a product of
- * Gauss-Hermite rules: 9 points each in up to three dimensions (exact to degree 17), 5 in up to
- * five (degree 9), 3 above (degree 5).
+ * Gauss-Hermite rules of n points each, exact to degree 2n − 1: 9 in up to three dimensions, 7 in
+ * four, 5 in five, 4 in six, 3 above.
  *
  * <p>Immutable and thread-safe.
  */
@@ -32,7 +32,9 @@ final class NormalAverage {
     if (dimensions <= 3) {
       order = 9;
     } else if (dimensions <= 5) {
-      order = 5;
+      order = dimensions == 4 ? 7 : 5;
+    } else if (dimensions == 6) {
+      order = 4;
     }
     return new NormalAverage(dimensions, order);
   }
