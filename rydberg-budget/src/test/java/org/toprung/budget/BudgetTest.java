@@ -393,6 +393,22 @@ class BudgetTest {
   }
 
   @Test
+  void saysThatOnlyTheCheckPlaysMotionDuringThePulse() {
+    Bench moving = TestDrives.bench().withMotionDuringPulse();
+    assertTrue(
+        budget(RUBIDIUM, moving)
+            .notAssessed()
+            .contains(
+                "Motion during the pulse: not composed, the check by simulation alone plays it"));
+    assertTrue(
+        budget(RUBIDIUM, Bench.unknown().withMotionDuringPulse()).notAssessed().stream()
+            .anyMatch(s -> s.startsWith("Motion during the pulse: needs")));
+    assertTrue(
+        budget(RUBIDIUM, TestDrives.bench()).notAssessed().stream()
+            .noneMatch(s -> s.startsWith("Motion")));
+  }
+
+  @Test
   void countsAnIntendedOffset() {
     Frequency offset = megahertz(0.3);
     Budget budget = Budget.of(RUBIDIUM, Pulse.pi().offsetBy(offset)).on(Bench.unknown()).compose();

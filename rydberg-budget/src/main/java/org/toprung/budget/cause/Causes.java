@@ -177,6 +177,12 @@ public final class Causes {
     } else if (!pointing) {
       notAssessed.add("Position in the beams: thermal spread alone, no pointing");
     }
+    if (bench.movesDuringPulse()) {
+      notAssessed.add(
+          (trapped || pointing) && motion.isPresent()
+              ? "Motion during the pulse: not composed, the check by simulation alone plays it"
+              : "Motion during the pulse: needs a temperature, and trap frequencies or a pointing");
+    }
   }
 
   private double dopplerSpread(ThermalMotion motion) {

@@ -17,8 +17,8 @@ import org.toprung.core.linear.Decoupling;
  *
  * <p>Changes of the program are followed with steps halved until the final state has settled to
  * {@value #SETTLED}, or there are more than half of {@value #MOST_STEPS} between two breaks, where
- * what was reached is taken if it is good to {@value #TOLERATED}. Operators are derivatives of the
- * effective Hamiltonian, the change of the dressed basis included.
+ * what was reached is taken as soon as it is good to {@value #TOLERATED}. Operators are derivatives
+ * of the effective Hamiltonian, the change of the dressed basis included.
  *
  * <p>Immutable and thread-safe.
  */
@@ -27,6 +27,7 @@ public final class LadderSystem implements DrivenSystem {
   private static final double TOLERATED = 1e-5;
   private static final int FIRST_STEPS = 6;
   private static final int MOST_STEPS = 800;
+  private static final int UNBEARABLE_STEPS = 16 * MOST_STEPS;
 
   private final CalibratedProgram calibrated;
   private final LadderPlan plan;
@@ -109,7 +110,7 @@ public final class LadderSystem implements DrivenSystem {
       if (left < amplitude || 2 * steps > MOST_STEPS && left < Math.max(amplitude, TOLERATED)) {
         return system;
       }
-      if (2 * steps > MOST_STEPS) {
+      if (2 * steps > UNBEARABLE_STEPS) {
         throw new ArithmeticException(
             calibrated.pulse().name()
                 + " changes too fast, or sweeps too far, to be followed: amplitudes are not good to "

@@ -1,12 +1,14 @@
 package org.toprung.budget.dynamics;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.constraints.DoubleRange;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 import org.toprung.budget.TestDrives;
@@ -16,6 +18,7 @@ import org.toprung.core.drive.LadderSetting;
 import org.toprung.core.linear.ComplexMatrix;
 import org.toprung.core.linear.Decoupling;
 import org.toprung.core.linear.MatrixExponential;
+import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.Time;
 
 class LadderSystemTest {
@@ -113,5 +116,14 @@ class LadderSystemTest {
     ComplexMatrix m = ComplexMatrix.zeros(n, n);
     Propagation.propagator(MatrixExponential.ofSize(n), n, h[0], h[1], seconds, m);
     return m;
+  }
+
+  @Test
+  void refusesASweepThatItCannotFollow() {
+    Pulse far = Pulse.chirped(Time.ofSeconds(1e-4), Frequency.megahertz(2000));
+    CalibratedProgram program = CalibratedProgram.of(TestDrives.rubidium().resolve().ladder(), far);
+    String message =
+        assertThrows(ArithmeticException.class, () -> LadderSystem.of(program)).getMessage();
+    assertTrue(message.contains("over 2 GHz changes too fast"), message);
   }
 }
