@@ -1,5 +1,6 @@
 package org.toprung.budget;
 
+import java.util.Objects;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.CompletableFuture;
 import java.util.concurrent.ExecutorService;
@@ -85,18 +86,22 @@ public final class CheckSetup {
    * @param newProgress told the number of shots done so far of {@link #plannedShots()}, from any
    *     thread, one call at a time and in rising order
    * @return a copy
+   * @throws NullPointerException if it is null
    */
   public CheckSetup reporting(IntConsumer newProgress) {
+    Objects.requireNonNull(newProgress, "progress");
     return new CheckSetup(budget, shots, seed, alone, newProgress, executor);
   }
 
   /**
    * Sets who does the work beside the thread that waits for it; otherwise the processors at hand.
    *
-   * @param newExecutor an executor
+   * @param newExecutor an executor, at work until the check is done
    * @return a copy
+   * @throws NullPointerException if it is null
    */
   public CheckSetup on(ExecutorService newExecutor) {
+    Objects.requireNonNull(newExecutor, "executor");
     return new CheckSetup(budget, shots, seed, alone, progress, newExecutor);
   }
 

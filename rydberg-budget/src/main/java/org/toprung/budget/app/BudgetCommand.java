@@ -190,6 +190,8 @@ final class BudgetCommand implements Callable<Integer> {
     try (Progress progress =
         new Progress(err, Progress.isTerminal(), setup.plannedShots(), System::nanoTime)) {
       return setup.reporting(progress).run();
+    } catch (ArithmeticException e) {
+      throw refused(scenarioFile + ": no simulation: " + e.getMessage(), e);
     }
   }
 }

@@ -23,8 +23,9 @@ import org.toprung.core.quantity.Temperature;
  *
  * <p>Spreads are root mean squares of Gaussian distributions from shot to shot, or samples; a
  * linewidth is the full width at half maximum of a Lorentzian line (white frequency noise). Any
- * number may have a relative standard uncertainty: {@link #knownTo}. What is not given is not
- * assumed to be zero: the budget lists it as not assessed.
+ * number may have a relative standard uncertainty: {@link #knownTo}. None may exceed {@link
+ * BenchValue#highest}. What is not given is not assumed to be zero: the budget lists it as not
+ * assessed.
  *
  * <p>Immutable: each {@code with…} method gives a copy.
  */
@@ -344,10 +345,11 @@ public final class Bench {
    * @param step index of the step, from 0
    * @param density one-sided density, Hz²/Hz
    * @return a copy
-   * @throws IllegalArgumentException if no drive has such a step
+   * @throws IllegalArgumentException if no drive has such a step, or the root mean square over the
+   *     whole table is more than {@link BenchValue#DRIFT} may be
    */
   public Bench withFrequencyNoiseDensity(int step, NoiseDensity density) {
-    return with(BenchValue.FREQUENCY_NOISE_DENSITY, step, density);
+    return with(BenchValue.FREQUENCY_NOISE_DENSITY, step, density, BenchValue.DRIFT);
   }
 
   /**
@@ -356,15 +358,25 @@ public final class Bench {
    * @param step index of the step, from 0
    * @param density one-sided density, 1/Hz
    * @return a copy
-   * @throws IllegalArgumentException if no drive has such a step
+   * @throws IllegalArgumentException if no drive has such a step, or the root mean square over the
+   *     whole table is more than {@link BenchValue#INTENSITY_NOISE} may be
    */
   public Bench withIntensityNoiseDensity(int step, NoiseDensity density) {
-    return with(BenchValue.INTENSITY_NOISE_DENSITY, step, density);
+    return with(BenchValue.INTENSITY_NOISE_DENSITY, step, density, BenchValue.INTENSITY_NOISE);
   }
 
-  private Bench with(BenchValue value, int step, NoiseDensity density) {
+  private Bench with(BenchValue value, int step, NoiseDensity density, BenchValue slow) {
     value.requireIndex(step);
     Objects.requireNonNull(density, value.words());
+    double rms = density.rms();
+    if (!(rms <= slow.highest())) {
+      throw new IllegalArgumentException(
+          value.words()
+              + ": the root mean square over the whole table is "
+              + rms
+              + "; allowed: at most "
+              + slow.highest());
+    }
     return with(
         v -> {
           v.densities.computeIfAbsent(value, k -> new TreeMap<>()).put(step, density);

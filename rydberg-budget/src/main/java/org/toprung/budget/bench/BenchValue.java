@@ -5,29 +5,29 @@ import java.util.Locale;
 /** A kind of number that a {@link Bench} holds. */
 public enum BenchValue {
   /** Temperature of the atom, K. */
-  TEMPERATURE(Arity.ONE, "K", Double.MAX_VALUE),
+  TEMPERATURE(Arity.ONE, "K", 1e4),
   /** Frequencies of the trap along lab x, y and z, Hz. */
-  TRAP_FREQUENCY(Arity.AXES, "Hz", Double.MAX_VALUE),
+  TRAP_FREQUENCY(Arity.AXES, "Hz", 1e12),
   /** Temperature of the walls that the Rydberg atom sees, K. */
-  ENVIRONMENT_TEMPERATURE(Arity.ONE, "K", Double.MAX_VALUE),
+  ENVIRONMENT_TEMPERATURE(Arity.ONE, "K", 1e4),
   /** Root mean square of the magnetic field along the axis, T. */
-  MAGNETIC_NOISE(Arity.ONE, "T", Double.MAX_VALUE),
+  MAGNETIC_NOISE(Arity.ONE, "T", 1),
   /** Root mean square length of the residual electric field, V/m. */
-  ELECTRIC_FIELD(Arity.ONE, "V/m", Double.MAX_VALUE),
+  ELECTRIC_FIELD(Arity.ONE, "V/m", 1e7),
   /** Lorentzian full width of each laser, Hz. */
-  LINEWIDTH(Arity.STEPS, "Hz", Double.MAX_VALUE),
+  LINEWIDTH(Arity.STEPS, "Hz", 1e12),
   /** Root mean square frequency error of each laser from shot to shot, Hz. */
-  DRIFT(Arity.STEPS, "Hz", Double.MAX_VALUE),
+  DRIFT(Arity.STEPS, "Hz", 1e12),
   /** Relative root mean square intensity noise of each beam from shot to shot. */
   INTENSITY_NOISE(Arity.STEPS, "", 0.5),
   /** Root mean square displacement of each beam, in each direction across it, m. */
-  POINTING(Arity.STEPS, "m", Double.MAX_VALUE),
+  POINTING(Arity.STEPS, "m", 1),
   /** Part of the intensity of each beam in the orthogonal polarization, of unknown phase. */
   POLARIZATION_IMPURITY(Arity.STEPS, "", 0.5),
   /** Relative root mean square error of the length of the pulse. */
   LENGTH_ERROR(Arity.ONE, "", 0.5),
   /** Root mean square error of the frequency the laser is set to, Hz. */
-  FREQUENCY_ERROR(Arity.ONE, "Hz", Double.MAX_VALUE),
+  FREQUENCY_ERROR(Arity.ONE, "Hz", 1e12),
   /** Relative root mean square intensity noise of a trap that stays on. */
   TRAP_INTENSITY_NOISE(Arity.ONE, "", 0.5),
   /** Probability that the atom does not begin in the start. */
@@ -35,9 +35,9 @@ public enum BenchValue {
   /** Probability that the outcome is read wrongly. */
   DETECTION_ERROR(Arity.ONE, "", 0.5),
   /** Factor on the amplitude of the frequency noise that each laser's density describes. */
-  FREQUENCY_NOISE_DENSITY(Arity.STEPS, "", Double.MAX_VALUE),
+  FREQUENCY_NOISE_DENSITY(Arity.STEPS, "", 1e6),
   /** Factor on the amplitude of the intensity noise that each beam's density describes. */
-  INTENSITY_NOISE_DENSITY(Arity.STEPS, "", Double.MAX_VALUE);
+  INTENSITY_NOISE_DENSITY(Arity.STEPS, "", 1e6);
 
   /** How many numbers there are of a kind. */
   public enum Arity {
@@ -98,6 +98,16 @@ public enum BenchValue {
     return unit;
   }
 
+  /**
+   * The largest number allowed: beyond anything that an apparatus is meant to do, so that slips of
+   * the pen are caught.
+   *
+   * @return the number, in the {@link #unit()}
+   */
+  public double highest() {
+    return highest;
+  }
+
   /** Whether zero makes no sense: what is divided by, or a logarithm is taken of. */
   boolean isPositive() {
     return this == TEMPERATURE || this == TRAP_FREQUENCY || this == ENVIRONMENT_TEMPERATURE;
@@ -155,23 +165,26 @@ public enum BenchValue {
   }
 
   /**
-   * Refuses a number that the value cannot have even in the mind. What if a ratio were twice as
-   * large can be asked of every ratio that may be given.
+   * Refuses a number that the value cannot have even in the mind. What if a number were twice as
+   * large can be asked of every number that may be given.
    */
   void requireImaginable(double number) {
-    requireUpTo(highest < Double.MAX_VALUE ? 2 * highest : highest, number, number);
+    requireUpTo(2 * highest, number, number);
   }
 
   private void requireUpTo(double most, double number, Object shown) {
     if (number >= 0 && number <= most && (number > 0 || !isPositive())) {
       return;
     }
+    String largest =
+        (most < 1000 ? String.valueOf(most) : String.format(Locale.ROOT, "%.0e", most))
+            + (unit.isEmpty() ? "" : " " + unit);
     String range =
         isPositive()
-            ? "must be above zero and finite"
-            : most < Double.MAX_VALUE
-                ? "must be between 0 and " + most
-                : "must be at least zero and finite";
+            ? "must be above zero and at most " + largest
+            : unit.isEmpty()
+                ? "must be between 0 and " + largest
+                : "must be at least zero and at most " + largest;
     throw new IllegalArgumentException(words() + " " + shown + " " + range);
   }
 }

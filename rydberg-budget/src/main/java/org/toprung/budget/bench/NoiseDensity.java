@@ -21,6 +21,8 @@ import java.util.regex.Pattern;
 public final class NoiseDensity {
   private static final Pattern NUMBER =
       Pattern.compile("[+-]?(\\d+\\.?\\d*|\\.\\d+)([eE][+-]?\\d+)?");
+  private static final double LOWEST = 1e-9; // Hz
+  private static final double HIGHEST = 1e15; // Hz
   private static final int LONGEST = 60; // characters of a line in a message
 
   private final double[] hertz;
@@ -34,7 +36,8 @@ public final class NoiseDensity {
   /**
    * A table.
    *
-   * @param hertz frequencies, Hz, positive and rising, at least two; copied
+   * @param hertz frequencies, Hz, rising, from {@value #LOWEST} to {@value #HIGHEST}, at least two;
+   *     copied
    * @param perHertz density at each, at least 0; copied
    * @return the density
    * @throws IllegalArgumentException if the table is shorter, unsorted, negative or not finite; the
@@ -69,8 +72,14 @@ public final class NoiseDensity {
   }
 
   private static String problem(double before, double f, double s) {
-    if (!(f > 0 && f < Double.POSITIVE_INFINITY)) {
-      return "given frequency " + f + " Hz; allowed: positive and finite";
+    if (!(f >= LOWEST && f <= HIGHEST)) {
+      return "given frequency "
+          + f
+          + " Hz; allowed: positive and finite, "
+          + LOWEST
+          + " to "
+          + HIGHEST
+          + " Hz";
     }
     if (!(f > before)) {
       return "given frequency " + f + " Hz after " + before + " Hz; allowed: rising frequencies";

@@ -1,7 +1,9 @@
 package org.toprung.budget.dynamics;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
+import java.util.stream.IntStream;
 import org.toprung.core.drive.Ladder;
 import org.toprung.core.linear.Decoupling;
 
@@ -11,41 +13,47 @@ import org.toprung.core.linear.Decoupling;
  * <p>They are the start, the wanted states and every ground or Rydberg state less than half as far
  * from the start's energy as the nearest intermediate state: the rest is as far off as the
  * intermediate level itself. Without an intermediate level they are the states within a gigahertz,
- * since edges of a pulse last longer than its inverse. Where these cannot be decoupled from the
- * rest, an intermediate state is near resonance, and all states below the first wide gap in
- * |energy| that can be decoupled take part; all of the ladder, if there is no such gap.
+ * since edges of a pulse last longer than its inverse. Where an intermediate state is nearer to
+ * resonance than twice the Rabi frequency that leads to it, or where these states cannot be
+ * decoupled from the rest (at full power, in the dark, in each beam alone and all along the
+ * program), all of the ladder takes part: what is near does not follow closely enough.
  */
 final class ActiveStates {
-  private static final double WIDE_GAP = 4; // ratio of neighbouring energies
   private static final double FOLLOWS_ANY_EDGE = 1e9; // Hz
+  private static final double FAR_OFF = 2; // detuning over Rabi frequency
+  private static final int STEPS = 16; // between breaks where anything changes
 
   private ActiveStates() {}
 
   /**
    * The active states.
    *
-   * @param ladder the ladder
-   * @param fields field factors at full power
-   * @param lastOffset offset of the last laser there, Hz
+   * @param calibrated the program
+   * @param ladder the ladder, which may differ from the one that the program was calibrated on
    * @return ascending indices
    */
-  static int[] of(Ladder ladder, double[] fields, double lastOffset) {
+  static int[] of(CalibratedProgram calibrated, Ladder ladder) {
     LadderTerms terms = new LadderTerms(ladder);
+    List<Timeline.Sample> settings = settings(calibrated);
     int[] natural = natural(ladder);
-    if (isSeparable(terms, natural, fields, lastOffset)) {
+    if (isFarOff(ladder) && isSeparable(terms, natural, settings)) {
       return natural;
     }
-    double[] distances =
-        ladder.states().stream().mapToDouble(s -> Math.abs(s.energyHertz())).sorted().toArray();
-    for (int i = 0; i + 1 < distances.length; i++) {
-      if (distances[i + 1] > WIDE_GAP * distances[i]) {
-        int[] near = nearer(ladder, 0.5 * (distances[i] + distances[i + 1]));
-        if (isSeparable(terms, near, fields, lastOffset)) {
-          return near;
+    return IntStream.range(0, ladder.size()).toArray();
+  }
+
+  /** Whether every intermediate state is further off than twice what drives it. */
+  private static boolean isFarOff(Ladder ladder) {
+    for (Ladder.Coupling c : ladder.couplings()) {
+      double rabi = Math.hypot(c.rabiReHertz(), c.rabiImHertz());
+      for (int state : new int[] {c.lower(), c.upper()}) {
+        double energy = Math.abs(ladder.states().get(state).energyHertz());
+        if (ladder.isIntermediate(state) && !(energy >= FAR_OFF * rabi)) {
+          return false;
         }
       }
     }
-    return nearer(ladder, Double.POSITIVE_INFINITY);
+    return true;
   }
 
   private static int[] natural(Ladder ladder) {
@@ -65,34 +73,41 @@ final class ActiveStates {
     return found.stream().mapToInt(Integer::intValue).toArray();
   }
 
-  private static int[] nearer(Ladder ladder, double distance) {
-    List<Integer> found = new ArrayList<>();
-    for (int i = 0; i < ladder.size(); i++) {
-      if (isOwn(ladder, i) || Math.abs(ladder.states().get(i).energyHertz()) < distance) {
-        found.add(i);
-      }
-    }
-    return found.stream().mapToInt(Integer::intValue).toArray();
-  }
-
   private static boolean isOwn(Ladder ladder, int state) {
     return state == ladder.start() || ladder.isWanted(state);
   }
 
-  private static boolean isSeparable(
-      LadderTerms terms, int[] populated, double[] fields, double lastOffset) {
-    Decoupling decoupling = terms.decoupling(populated);
-    List<double[]> settings = new ArrayList<>(List.of(fields, new double[fields.length]));
-    for (int k = 0; k < fields.length; k++) {
+  private static List<Timeline.Sample> settings(CalibratedProgram calibrated) {
+    int steps = calibrated.ladder().steps();
+    double offset = calibrated.fullPowerOffsetHertz();
+    double[] full = new double[steps];
+    Arrays.fill(full, 1);
+    List<double[]> fields = new ArrayList<>(List.of(full, new double[steps]));
+    for (int k = 0; k < steps; k++) {
       // each beam alone, as in the wings of pulses that follow each other
-      double[] alone = new double[fields.length];
-      alone[k] = fields[k];
-      settings.add(alone);
+      double[] alone = new double[steps];
+      alone[k] = 1;
+      fields.add(alone);
     }
+    List<Timeline.Sample> settings = new ArrayList<>();
+    fields.forEach(f -> settings.add(new Timeline.Sample(f, offset, 0, true)));
+    settings.addAll(Timeline.of(calibrated, STEPS, Double.POSITIVE_INFINITY).samples());
+    return settings;
+  }
+
+  private static boolean isSeparable(
+      LadderTerms terms, int[] populated, List<Timeline.Sample> settings) {
+    Decoupling decoupling = terms.decoupling(populated);
+    ShotSetting nominal = ShotSetting.nominal(terms.steps());
+    Decoupling.Anchor full = null;
     try {
-      for (double[] f : settings) {
-        terms.fill(f, lastOffset, ShotSetting.nominal(fields.length), decoupling);
-        decoupling.anchor();
+      for (Timeline.Sample setting : settings) {
+        terms.fill(setting.fields(), setting.lastOffset(), nominal, decoupling);
+        if (full == null) {
+          full = decoupling.anchor();
+        } else {
+          decoupling.anchor(full);
+        }
       }
       return true;
     } catch (ArithmeticException notSeparable) {

@@ -131,7 +131,7 @@ final class LadderPlan {
         firstNode[s] = before;
         weights[s] = grid.weights(timeline.samples().get(s));
       }
-      if (isAccurate(work, smooth, before, accuracyHertz)) {
+      if (isAccurateWhereSeparable(work, smooth, before, accuracyHertz)) {
         return;
       }
     }
@@ -140,6 +140,16 @@ final class LadderPlan {
     nodeScaled.subList(before, nodeScaled.size()).clear();
     for (int s : smooth) {
       addOwnNode(s, timeline.samples().get(s));
+    }
+  }
+
+  /** A node of the grid may lie off the program, where the states cannot be told apart. */
+  private boolean isAccurateWhereSeparable(
+      Decoupling work, List<Integer> smooth, int before, double accuracyHertz) {
+    try {
+      return isAccurate(work, smooth, before, accuracyHertz);
+    } catch (ArithmeticException notSeparable) {
+      return false;
     }
   }
 

@@ -60,9 +60,7 @@ public final class LadderReaction {
    * @return the reaction
    */
   public LadderReaction on(Ladder ladder) {
-    double[] ones = new double[ladder.steps()];
-    Arrays.fill(ones, 1);
-    int[] active = ActiveStates.of(ladder, ones, calibrated.fullPowerOffsetHertz());
+    int[] active = ActiveStates.of(calibrated, ladder);
     return of(calibrated, ladder, active, plan.timeline());
   }
 

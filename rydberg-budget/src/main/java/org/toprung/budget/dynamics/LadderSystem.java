@@ -124,9 +124,7 @@ public final class LadderSystem implements DrivenSystem {
   }
 
   static int[] activeStates(CalibratedProgram calibrated) {
-    double[] ones = new double[calibrated.ladder().steps()];
-    Arrays.fill(ones, 1);
-    return ActiveStates.of(calibrated.ladder(), ones, calibrated.fullPowerOffsetHertz());
+    return ActiveStates.of(calibrated, calibrated.ladder());
   }
 
   /** How well a Hamiltonian has to be known for a final amplitude to be good to some figure. */

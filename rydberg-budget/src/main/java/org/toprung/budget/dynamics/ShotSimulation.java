@@ -254,7 +254,12 @@ public final class ShotSimulation {
     return run.result();
   }
 
-  private static RuntimeException unchecked(Throwable cause) {
+  private static RuntimeException unchecked(Throwable thrown) {
+    Throwable cause = thrown;
+    // a pool throws a copy without the message, which is in the original
+    while (cause.getCause() != null && cause.getCause().getClass() == cause.getClass()) {
+      cause = cause.getCause();
+    }
     if (cause instanceof Error) {
       throw (Error) cause;
     }

@@ -30,6 +30,7 @@ import org.toprung.core.quantity.Time;
  */
 public final class Pulse {
   private static final int MOST_STEPS = 3;
+  private static final double LONGEST_SECONDS = 0.1;
   private static final double SAME_AREA = 1e-4; // rad
   private static final double ROUNDING = 1e-9; // of lengths that are computed from an area
 
@@ -561,7 +562,8 @@ public final class Pulse {
    * @param rabi effective Rabi frequency with every beam at full power, more than 0
    * @return the program
    * @throws IllegalArgumentException if an argument is out of range, if the drive has not the steps
-   *     that the pulse needs, or if edges are too slow for the time between neighbouring jumps
+   *     that the pulse needs, if edges are too slow for the time between neighbouring jumps, or if
+   *     the pulse takes longer than {@value #LONGEST_SECONDS} s
    */
   public PulseProgram program(int steps, Frequency rabi) {
     requireSteps(steps);
@@ -582,6 +584,17 @@ public final class Pulse {
     }
     double lead = tracks[0].lead();
     double end = lead + tracks[0].rest();
+    if (!(end <= LONGEST_SECONDS)) {
+      throw new IllegalArgumentException(
+          String.format(
+              Locale.ROOT,
+              "the %s takes %.3g s at a Rabi frequency of %.3g Hz: allowed are up to %s s, longer than"
+                  + " any Rydberg level of the library lives",
+              name,
+              end,
+              rabi.hertz(),
+              LONGEST_SECONDS));
+    }
     if (together) {
       Track shaped = tracks[0].delayedBy(lead);
       Arrays.fill(tracks, options.shapingStep < 0 ? shaped : Track.on());

@@ -241,11 +241,10 @@ final class Pulses {
     return pulse.withEdges(edges.get(0), edges.get(1));
   }
 
-  /** Refuses edges that are too slow for the pulse, which only the drive tells. */
+  /** Refuses a pulse too long, or edges too slow for it, which only the drive tells. */
   static void requirePlayable(Table table, Pulse pulse, int steps, Frequency rabi) {
-    table
-        .optional("rise")
-        .filter(v -> pulse.isTwoLevel())
-        .ifPresent(v -> v.guarded(() -> pulse.program(steps, rabi)));
+    Pulse abrupt = pulse.withEdges(Time.ofSeconds(0), Time.ofSeconds(0));
+    table.required("kind", "").guarded(() -> abrupt.program(steps, rabi));
+    table.optional("rise").ifPresent(v -> v.guarded(() -> pulse.program(steps, rabi)));
   }
 }

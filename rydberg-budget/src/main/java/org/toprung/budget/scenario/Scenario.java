@@ -263,12 +263,13 @@ public final class Scenario {
    *
    * @return the budget
    * @throws ScenarioException if the budget cannot be had for this drive, for want of atomic data
-   *     for example; the message gives the file and says why
+   *     for example, or because the pulse sweeps too fast to be followed; the message gives the
+   *     file and says why
    */
   public Budget budget() {
     try {
       return Budget.of(drive, pulse).on(bench).compose();
-    } catch (IllegalArgumentException e) {
+    } catch (IllegalArgumentException | ArithmeticException e) {
       throw ScenarioException.ofFile(file, "no budget: " + e.getMessage(), e);
     }
   }

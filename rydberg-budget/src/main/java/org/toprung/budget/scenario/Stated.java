@@ -23,7 +23,9 @@ record Stated<Q>(Q quantity, Optional<Q> uncertainty) {
     if (!hasSign(text)) {
       return new Stated<>(value.parsed(parser, example), Optional.empty());
     }
-    Matcher parts = parts(value, text, "text such as \"" + example + "\"");
+    String withSpread = example.replaceFirst(" ", " \u00b1 1 ");
+    Matcher parts =
+        parts(value, text, "text such as \"" + example + "\" or \"" + withSpread + "\"");
     String unit = " " + parts.group(3);
     return value.guarded(
         () ->
@@ -38,9 +40,10 @@ record Stated<Q>(Q quantity, Optional<Q> uncertainty) {
     if (!value.isText()) {
       return new Stated<>(value.number(allowed), Optional.empty());
     }
-    Matcher parts = parts(value, value.text(allowed).strip(), allowed);
+    String text = allowed + ", or a text such as \"0.004 \u00b1 0.001\"";
+    Matcher parts = parts(value, value.text(text).strip(), text);
     if (!parts.group(3).isEmpty()) {
-      throw value.refused(allowed + " without a unit");
+      throw value.refused(text + ", without a unit");
     }
     return new Stated<>(
         Double.valueOf(parts.group(1)), Optional.of(Double.valueOf(parts.group(2))));
@@ -62,8 +65,7 @@ record Stated<Q>(Q quantity, Optional<Q> uncertainty) {
   private static Matcher parts(Value value, String text, String allowed) {
     Matcher parts = PLUS_MINUS.matcher(text);
     if (!parts.matches()) {
-      throw value.refused(
-          allowed + ", or with a standard uncertainty such as \"6 \u00b1 1\" and one unit, if any");
+      throw value.refused(allowed);
     }
     return parts;
   }

@@ -40,7 +40,7 @@ import org.toprung.core.quantity.Temperature;
 
 class BenchTest {
   private static final NoiseDensity DENSITY =
-      NoiseDensity.of(new double[] {10, 1000}, new double[] {4, 4});
+      NoiseDensity.of(new double[] {10, 1000}, new double[] {4e-6, 4e-6});
 
   /** Everything there is, for two steps; the first laser has a density and no linewidth. */
   private static Bench full() {
@@ -112,7 +112,7 @@ class BenchTest {
       assertEquals(moved ? factor * before : before, after, 1e-15 * before, other.name());
     }
     double variance = entry.value() == FREQUENCY_NOISE_DENSITY ? factor * factor : 1;
-    assertEquals(4 * variance, scaled.frequencyNoiseDensity(0).orElseThrow().at(100), 1e-12);
+    assertEquals(4e-6 * variance, scaled.frequencyNoiseDensity(0).orElseThrow().at(100), 1e-18);
   }
 
   @Test

@@ -118,6 +118,24 @@ class BareLadderTest {
   }
 
   /**
+   * Less than two Rabi frequencies off, at 20 MHz so that the states can be told apart at full
+   * power, in each beam alone and in the dark, but not everywhere between.
+   */
+  @ParameterizedTest
+  @ValueSource(doubles = {-60, 20, 60, 110})
+  void passageNearAResonantStateAgreesWithTheBareLadder(double detuning) {
+    Ladder ladder =
+        TestDrives.rubidium()
+            .withBeam(0, b -> b.brightened(0.2))
+            .detuned(megahertz(detuning))
+            .resolve()
+            .ladder();
+    Pulse pulse = Pulse.stirap(microseconds(1), microseconds(0.3));
+    double error = LadderSystem.of(CalibratedProgram.of(ladder, pulse)).noiseFreeError();
+    assertEquals(missed(ladder, end(ladder, pulse, false, 0)), error, 1e-6);
+  }
+
+  /**
    * The passage hardly populates the state that decays, though that lives shorter than it takes.
    */
   @Test

@@ -41,6 +41,10 @@ class ScenarioBenchTest {
   @BeforeEach
   void writeData() throws IOException {
     Files.writeString(folder.resolve("noise.csv"), "# Hz, Hz2/Hz\n10, 4\n1000, 4\n");
+    Files.writeString(folder.resolve("power.csv"), "10; 4e-6\n1000; 4e-6\n");
+    Files.writeString(folder.resolve("storm.csv"), "1, 1e300\n1000, 1e300\n");
+    Files.writeString(folder.resolve("storm.txt"), "1 mG\n1e300 G\n");
+    Files.writeString(folder.resolve("far.csv"), "1, 1\n1e300, 1\n");
     Files.writeString(folder.resolve("field.txt"), "1.2 mG\n# later\n-3 mG\n\n0.5 uT\n");
     Files.writeString(folder.resolve("stray.txt"), "3 mV/cm\n0 V/m\n");
     Files.writeString(folder.resolve("drift.txt"), "\uFEFF-1 kHz\r\n2 kHz\r\n");
@@ -91,7 +95,7 @@ class ScenarioBenchTest {
                 preparation_error = 0.003
                 detection_error = 0.004
                 frequency_noise_density = ["noise.csv", "none"]
-                intensity_noise_density = ["none", "noise.csv"]
+                intensity_noise_density = ["none", "power.csv"]
                 motion_during_pulse = true
                 """)
             .bench();
@@ -190,9 +194,18 @@ class ScenarioBenchTest {
       textBlock =
           """
           temperature = "6 ± 1"                       | temperature       | no unit        | uK
-          temperature = "6 uK ± 1 uK"                 | temperature       | 6 uK ± 1 uK    | 6 ± 1
-          temperature = "6 ± -1 uK"                   | temperature       | 6 ± -1 uK      | 6 ± 1
-          temperature = "± 1 uK"                      | temperature       | ± 1 uK         | 6 ± 1
+          temperature = "6 uK ± 1 uK"                 | temperature       | 6 uK ± 1 uK    | "10 ± 1 uK"
+          temperature = "6 ± -1 uK"                   | temperature       | 6 ± -1 uK      | "10 ± 1 uK"
+          temperature = "± 1 uK"                      | temperature       | ± 1 uK         | "10 ± 1 uK"
+          temperature = "1e300 K"                     | temperature       | 1e300 K        | at most 1e+04 K
+          environment_temperature = "2e4 K"           | environment_temperature | 20000 K  | at most 1e+04 K
+          trap_frequency = ["1 Hz", "1 Hz", "2 THz"]  | trap_frequency[3] | 2 THz          | at most 1e+12 Hz
+          pointing = ["0 m", "1e300 m"]               | pointing[2]       | 1e300 m        | at most 1.0 m
+          linewidth = ["0 Hz", "1e300 Hz"]            | linewidth[2]      | 1e300 Hz       | at most 1e+12 Hz
+          magnetic_noise_samples = "storm.txt"        | magnetic_noise_samples | samples   | at most 1.0 T
+          frequency_noise_density = ["storm.csv", "none"] | frequency_noise_density[1] | storm.csv | at most 1.0E12
+          intensity_noise_density = ["none", "storm.csv"] | intensity_noise_density[2] | storm.csv | at most 0.5
+          frequency_noise_density = ["none", "far.csv"] | frequency_noise_density[2] | 1.0E300 Hz | 1.0E15 Hz
           temperature = "6 ± 1 mG"                    | temperature       | mG             | uK
           temperature = "6 ± 6 uK"                    | temperature       | 1.0            | below 1
           temperature = "0 ± 1 uK"                    | temperature       | 0 K            | above zero
@@ -201,7 +214,7 @@ class ScenarioBenchTest {
           magnetic_noise = "0 ± 3 mG"                 | magnetic_noise    | 0 ± 3          | allowed: 0
           magnetic_noise = "-2 ± 1 mG"                | magnetic_noise    | -2 mG          | at least zero
           length_error = "0.01 ± 0.001 Hz"            | length_error      | Hz             | without a unit
-          length_error = "0.01"                       | length_error      | "0.01"         | number from 0 to 0.5
+          length_error = "0.01"                       | length_error      | "0.01"         | number from 0 to 0.5, or a text such as "0.004 ± 0.001"
           length_error = 0.6                          | length_error      | 0.6            | between 0 and 0.5
           length_error = nan                          | length_error      | NaN            | number
           preparation_error = -0.1                    | preparation_error | -0.1           | between 0 and 0.5

@@ -166,6 +166,10 @@ class ScenarioPulseTest {
           kind = "square"\\narea_rad = "pi"                   | area_rad   | "pi"      | radians
           kind = "bb1"\\narea_rad = 13                        | area_rad   | 13        | at most 4
           kind = "ramsey"\\nwait = "-1 us"                    | wait       | -1 us     | at least 0
+          wait = "1 s"\\nkind = "ramsey"                     | kind       | takes 1.00 s | up to 0.1 s
+          half_wait = "1e300 s"\\nkind = "echo"              | kind       | echo of twice | up to 0.1 s
+          sweep = "1 MHz"\\nduration = "1e9 s"\\nkind = "chirp" | kind     | takes 1.00e+09 s | up to 0.1 s
+          width = "9 s"\\ndelay = "1 us"\\nkind = "stirap"   | kind       | "stirap"  | up to 0.1 s
           kind = "ramsey"\\nwait = "1 us"\\nphase_rad = inf    | phase_rad  | Infinity  | finite
           kind = "echo"\\nhalf_wait = 1                       | half_wait  | given 1   | "2 us"
           kind = "chirp"\\nsweep = "1 MHz"\\nduration = "0 s"  | duration   | "0 s"     | above zero
