@@ -118,7 +118,7 @@ final class BudgetCommand implements Callable<Integer> {
   public Integer call() {
     requireAllowed();
     Scenario scenario = Scenario.read(scenarioFile);
-    Outputs<ReportContent> outputs = outputs();
+    Outputs<ReportContent> outputs = outputs(scenario);
     Optional<String> working = derivation ? Optional.of(working(scenario)) : Optional.empty();
     Budget budget = scenario.budget();
     requireSlices(budget);
@@ -150,8 +150,8 @@ final class BudgetCommand implements Callable<Integer> {
     return new ParameterException(spec.commandLine(), message, cause);
   }
 
-  private Outputs<ReportContent> outputs() {
-    Outputs<ReportContent> outputs = new Outputs<>(scenarioFile);
+  private Outputs<ReportContent> outputs(Scenario scenario) {
+    Outputs<ReportContent> outputs = new Outputs<>(scenario.files());
     outputs.add("--json", json, "JSON", JsonReport::render);
     outputs.add("--markdown", markdown, "Markdown", MarkdownReport::render);
     outputs.add("--csv", csv, "Table of causes", CsvReport::render);

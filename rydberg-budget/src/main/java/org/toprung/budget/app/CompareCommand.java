@@ -3,6 +3,7 @@ package org.toprung.budget.app;
 import java.io.PrintWriter;
 import java.nio.file.Path;
 import java.util.concurrent.Callable;
+import java.util.stream.Stream;
 import org.toprung.budget.report.ComparedBudget;
 import org.toprung.budget.report.ComparisonReport;
 import org.toprung.budget.scenario.Scenario;
@@ -39,7 +40,8 @@ final class CompareCommand implements Callable<Integer> {
   public Integer call() {
     Scenario before = Scenario.read(beforeFile);
     Scenario after = Scenario.read(afterFile);
-    Outputs<ComparisonReport> outputs = new Outputs<>(beforeFile, afterFile);
+    Outputs<ComparisonReport> outputs =
+        new Outputs<>(Stream.concat(before.files().stream(), after.files().stream()).toList());
     outputs.add("--markdown", markdown, "Markdown", ComparisonReport::markdown);
     ComparisonReport report =
         ComparisonReport.between(

@@ -19,8 +19,8 @@ final class Outputs<T> {
   /** A file, what is in it, and who fills it. */
   private record Output<T>(String option, OutputFile file, String what, Function<T, String> text) {}
 
-  Outputs(Path... inputs) {
-    this.inputs = List.of(inputs);
+  Outputs(List<Path> inputs) {
+    this.inputs = List.copyOf(inputs);
   }
 
   /**
@@ -39,7 +39,7 @@ final class Outputs<T> {
     OutputFile file = OutputFile.of(option, name);
     for (Path input : inputs) {
       if (file.isAt(input)) {
-        throw refused(option, name, "which is the scenario itself");
+        throw refused(option, name, "which the scenario is read from");
       }
     }
     for (Output<T> other : outputs) {

@@ -1,6 +1,5 @@
 package org.toprung.budget.scenario;
 
-import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -51,19 +50,19 @@ final class Benches {
       BiFunction<Bench, List<Q>, Bench> setter,
       String example) {}
 
-  private final Path file;
+  private final Sources sources;
   private final Table table;
   private final int steps;
   private Bench bench = Bench.unknown();
 
-  private Benches(Path file, Table table, int steps) {
-    this.file = file;
+  private Benches(Sources sources, Table table, int steps) {
+    this.sources = sources;
     this.table = table;
     this.steps = steps;
   }
 
-  static Bench read(Path file, Optional<Table> table, int steps) {
-    return table.map(t -> new Benches(file, t, steps).read()).orElse(Bench.unknown());
+  static Bench read(Sources sources, Optional<Table> table, int steps) {
+    return table.map(t -> new Benches(sources, t, steps).read()).orElse(Bench.unknown());
   }
 
   private Bench read() {
@@ -216,7 +215,8 @@ final class Benches {
       }
       int step = k;
       String square = value == BenchValue.FREQUENCY_NOISE_DENSITY ? "Hz2/Hz" : "1/Hz";
-      NoiseDensity density = DataFile.named(item, file, "two columns, Hz and " + square).density();
+      NoiseDensity density =
+          DataFile.named(item, sources, "two columns, Hz and " + square).density();
       bench =
           item.guarded(
               () -> {
@@ -244,7 +244,7 @@ final class Benches {
               value.key() + " or its samples, not both (in a list, 0 or \"" + NONE + "\")");
         }
         int step = k;
-        DataFile data = DataFile.named(item, file, "samples, one per line");
+        DataFile data = DataFile.named(item, sources, "samples, one per line");
         bench = item.guarded(() -> sampled(value, step, data));
       }
     }

@@ -1,6 +1,5 @@
 package org.toprung.budget.scenario;
 
-import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.function.Function;
@@ -28,10 +27,10 @@ final class DataFile {
   /**
    * The file that a value names.
    *
-   * @param scenario the scenario's own file
+   * @param sources the files of the scenario
    * @param kind what the file holds, for messages
    */
-  static DataFile named(Value value, Path scenario, String kind) {
+  static DataFile named(Value value, Sources sources, String kind) {
     String name = value.text("the name of a file of " + kind);
     if (name.isBlank()) {
       throw value.refused("the name of a file of " + kind);
@@ -40,7 +39,7 @@ final class DataFile {
         () -> {
           try {
             return new DataFile(
-                value, name, TextFile.read(scenario.resolveSibling(name), "text file", LARGEST));
+                value, name, TextFile.read(sources.named(name), "text file", LARGEST));
           } catch (IllegalArgumentException e) {
             throw new IllegalArgumentException(name + ": " + e.getMessage(), e);
           }

@@ -1,6 +1,5 @@
 package org.toprung.budget.scenario;
 
-import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.LinkedHashMap;
@@ -41,12 +40,12 @@ final class Pulses {
           .flatMap(keys -> keys)
           .toList();
 
-  private final Path file;
+  private final Sources sources;
   private final Table table;
   private final int steps;
 
-  private Pulses(Path file, Table table, int steps) {
-    this.file = file;
+  private Pulses(Sources sources, Table table, int steps) {
+    this.sources = sources;
     this.table = table;
     this.steps = steps;
   }
@@ -72,7 +71,7 @@ final class Pulses {
     return new Kind(List.of(AREA), p -> p.ofAreaOrPi(maker));
   }
 
-  static Pulse read(Path file, Table table, int steps) {
+  static Pulse read(Sources sources, Table table, int steps) {
     String names =
         KINDS.keySet().stream().map(k -> "\"" + k + "\"").collect(Collectors.joining(", "));
     Value name = table.required("kind", names);
@@ -86,7 +85,7 @@ final class Pulses {
             Stream.of(Stream.of("kind"), kind.keys().stream(), COMMON.stream())
                 .flatMap(keys -> keys)
                 .toList());
-    Pulses reader = new Pulses(file, own, steps);
+    Pulses reader = new Pulses(sources, own, steps);
     return reader.withOptions(kind.reader().apply(reader), name);
   }
 
@@ -153,7 +152,7 @@ final class Pulses {
     Goal goal = goal();
     String columns = "amplitude, detuning in Hz and phase in rad";
     Value name = table.required("file", "the name of a file of " + columns);
-    List<double[]> rows = DataFile.named(name, file, columns).lines(Pulses::row);
+    List<double[]> rows = DataFile.named(name, sources, columns).lines(Pulses::row);
     double[][] all = new double[3][rows.size()];
     for (int i = 0; i < rows.size(); i++) {
       for (int c = 0; c < 3; c++) {

@@ -76,6 +76,7 @@ public final class Scenario {
   private static final List<String> TRAP_KEYS = joined(List.of("wavelength"), Beams.KEYS);
 
   private final Path file;
+  private final List<Path> files;
   private final String title;
   private final DriveSetup setup;
   private final Drive drive;
@@ -86,7 +87,8 @@ public final class Scenario {
     this.file = file;
     Table root = TomlFile.root(file, text).of(KEYS);
     this.title = root.optional("title").map(Scenario::title).orElseGet(() -> nameOf(file));
-    Species species = species(root.table("atom", List.of("species", "values")));
+    Sources sources = new Sources(file);
+    Species species = species(sources, root.table("atom", List.of("species", "values")));
     DriveSetup inField =
         field(root.table("field", List.of("magnetic", "electric")), Drive.of(species));
     DriveSetup started = start(root.table("start", List.of("level", "F", "mF")), species, inField);
@@ -99,8 +101,9 @@ public final class Scenario {
     this.setup =
         root.optionalTable("trap", TRAP_KEYS).map(table -> trap(table, qubit)).orElse(qubit);
     Table played = root.table("pulse", Pulses.KEYS);
-    this.pulse = Pulses.read(file, played, steps.size());
-    this.bench = Benches.read(file, root.optionalTable("bench", Benches.KEYS), steps.size());
+    this.pulse = Pulses.read(sources, played, steps.size());
+    this.bench = Benches.read(sources, root.optionalTable("bench", Benches.KEYS), steps.size());
+    this.files = sources.files();
     this.drive = root.guarded("step", setup::resolve);
     Pulses.requirePlayable(played, pulse, steps.size(), drive.rabi());
   }
@@ -150,13 +153,13 @@ public final class Scenario {
   /**
    * The species, with values of the user's own file, beside the scenario, laid over the library's.
    */
-  private Species species(Table atom) {
+  private static Species species(Sources sources, Table atom) {
     Value name = atom.required("species", "text such as \"Rb-87\"");
     Optional<Value> values = atom.optional("values");
     if (values.isEmpty()) {
       return name.parsed(Species::parse, "Rb-87");
     }
-    Path own = file.resolveSibling(values.get().text("the name of a file of values (CSV)"));
+    Path own = sources.named(values.get().text("the name of a file of values (CSV)"));
     Catalogue catalogue = values.get().guarded(() -> overlaid(own));
     return name.parsed(catalogue::species, "Rb-87");
   }
@@ -272,6 +275,16 @@ public final class Scenario {
     } catch (IllegalArgumentException | ArithmeticException e) {
       throw ScenarioException.ofFile(file, "no budget: " + e.getMessage(), e);
     }
+  }
+
+  /**
+   * The files that the scenario was read from.
+   *
+   * @return its own file, or the name that was given with a text, and then every file that it
+   *     names, each as a path relative to the same place
+   */
+  public List<Path> files() {
+    return files;
   }
 
   /**

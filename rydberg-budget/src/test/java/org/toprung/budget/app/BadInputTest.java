@@ -335,7 +335,7 @@ class BadInputTest {
     CommandLineRun run =
         CommandLineRun.of("budget", scenario.toString(), option, scenario.toString());
     assertEquals(2, run.status());
-    assertTrue(run.err().contains("the scenario itself"), run.err());
+    assertTrue(run.err().contains("the scenario is read from"), run.err());
     assertEquals(ReferenceScenario.text(), Files.readString(scenario));
   }
 
@@ -378,7 +378,7 @@ class BadInputTest {
         CommandLineRun.of(
             "compare", good.toString(), good.toString(), "--markdown", good.toString());
     assertEquals(2, over.status());
-    assertTrue(over.err().contains("the scenario itself"), over.err());
+    assertTrue(over.err().contains("the scenario is read from"), over.err());
     assertEquals(ReferenceScenario.text(), Files.readString(good));
   }
 
@@ -410,5 +410,26 @@ class BadInputTest {
     assertEquals(1, CommandLineRun.of().errLines().size());
     assertEquals(2, CommandLineRun.of("budget").status());
     assertEquals(1, CommandLineRun.of("budget").errLines().size());
+  }
+
+  @Test
+  void keepsTheFilesThatTheScenarioNames() throws IOException {
+    String table = "1, 100\n1e7, 100\n";
+    Path noise = Files.writeString(folder.resolve("noise.csv"), table);
+    String bench = "[bench]\nfrequency_noise_density = [\"noise.csv\", \"none\"]\n";
+    String text = ReferenceScenario.text();
+    Path file =
+        Files.writeString(
+            folder.resolve("lab.toml"), text.substring(0, text.indexOf("[bench]")) + bench);
+    String[][] commands = {
+      {"budget", file.toString(), "--csv", noise.toString()},
+      {"compare", file.toString(), file.toString(), "--markdown", noise.toString()}
+    };
+    for (String[] command : commands) {
+      CommandLineRun run = CommandLineRun.of(command);
+      assertEquals(2, run.status(), run.err());
+      assertTrue(run.err().contains("noise.csv, which the scenario is read from"), run.err());
+    }
+    assertEquals(table, Files.readString(noise));
   }
 }
