@@ -256,8 +256,8 @@ public final class ShotSimulation {
 
   private static RuntimeException unchecked(Throwable thrown) {
     Throwable cause = thrown;
-    // a pool throws a copy without the message, which is in the original
-    while (cause.getCause() != null && cause.getCause().getClass() == cause.getClass()) {
+    // a pool may throw a copy without the message, which is in the original
+    while (cause.getMessage() == null && cause.getCause() != null) {
       cause = cause.getCause();
     }
     if (cause instanceof Error) {
