@@ -7,10 +7,10 @@ import org.toprung.budget.response.Fate;
  * The total of independent causes.
  *
  * <p>To lowest order errors add. When they are not small, two disturbances of the rotation can undo
- * each other, and an atom can be lost only once. Each disturbance i that wrongly turns the state
- * shrinks the contrast 1 − 2E by its own factor 1 − 2E<sub>i</sub> (exact for an amplitude error
- * with a Gaussian spread and for dephasing, within a tenth of the second-order term for a
- * detuning), and each way of losing the atom leaves 1 − E<sub>i</sub>:
+ * each other, and an atom can be lost only once. Each disturbance i that wrongly turns the state or
+ * its reading shrinks the contrast 1 − 2E by its own factor 1 − 2E<sub>i</sub> (exact for an
+ * amplitude error with a Gaussian spread and for dephasing, within a tenth of the second-order term
+ * for a detuning), and each way of losing the atom leaves 1 − E<sub>i</sub>:
  *
  * <pre>1 − E = (½ + ½ Π(1 − 2E<sub>i</sub>)) · Π(1 − E<sub>j</sub>)</pre>
  *
@@ -39,6 +39,6 @@ final class Composition {
   record Part(Fate.Kind kind, double error) {}
 
   private static boolean isTurn(Fate.Kind kind) {
-    return kind == Fate.Kind.PHASE || kind == Fate.Kind.RECOVERABLE;
+    return kind == Fate.Kind.PHASE || kind == Fate.Kind.READOUT || kind == Fate.Kind.RECOVERABLE;
   }
 }

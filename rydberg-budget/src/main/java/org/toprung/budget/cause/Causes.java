@@ -397,7 +397,7 @@ public final class Causes {
         BenchValue.DETECTION_ERROR,
         "State detection",
         DETECTION,
-        "read as the other outcome",
+        "start and target, read as the other",
         "a longer or cleaner detection");
   }
 
@@ -414,7 +414,7 @@ public final class Causes {
             "given, measured on the apparatus",
             only(kind),
             m -> probability.getAsDouble(),
-            kind == DETECTION ? Fate.Kind.PHASE : Fate.Kind.LEAK,
+            kind == DETECTION ? Fate.Kind.READOUT : Fate.Kind.LEAK,
             m -> place,
             m -> lever));
   }

@@ -9,6 +9,7 @@ import org.toprung.core.linear.MatrixExponential;
  */
 final class TimeInStates {
   private static final double TURN = 0.5;
+  private static final int MOST_STEPS = 5_000_000;
 
   private final DrivenSystem system;
   private final double[] seconds;
@@ -41,7 +42,19 @@ final class TimeInStates {
     for (int m = 0; m < system.segments(); m++) {
       system.hamiltonianHertz(m, hRe, hIm);
       double length = system.segmentSeconds(m);
-      int steps = (int) Math.max(1, Math.ceil(2 * Math.PI * spread(hRe, hIm, p) * length / TURN));
+      double spread = spread(hRe, hIm, p);
+      double wanted = Math.ceil(2 * Math.PI * spread * length / TURN);
+      if (!(wanted <= MOST_STEPS)) {
+        throw new ArithmeticException(
+            "states that take part lie "
+                + spread
+                + " Hz apart, which turns too often in "
+                + length
+                + " s to be followed: more than "
+                + MOST_STEPS
+                + " steps (light on a resonance, or much too strong?)");
+      }
+      int steps = (int) Math.max(1, wanted);
       double step = length / steps;
       Propagation.propagator(exponential, p, hRe, hIm, 0.5 * step, halfStep);
       time.segment(m, steps, step, halfStep);

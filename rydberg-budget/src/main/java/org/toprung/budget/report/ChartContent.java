@@ -132,6 +132,7 @@ record ChartContent(
       case PHASE -> List.of();
       case LEAK -> List.of(Hatch.RISING);
       case LOSS -> List.of(Hatch.FALLING);
+      case READOUT -> List.of(Hatch.UPRIGHT);
       case RECOVERABLE -> List.of(Hatch.RISING, Hatch.FALLING);
     };
   }

@@ -34,9 +34,9 @@ import org.toprung.core.drive.PulsePlan;
  *       frequency_Hz}, a logarithmic grid about the inverse duration
  *   <li>{@code budget}: {@code total}, its uncertainty, whole and from atomic data and bench values
  *       apart; {@code overlap}, the total minus the sum of all causes; {@code causes}, each with
- *       error, uncertainties, share, {@code fate} (phase, leak, loss or recoverable), {@code
- *       place}, lever and source; {@code not_assessed}; {@code sensitivities}, each with {@code
- *       slope} dE/d(ln value) and what half and twice the value save
+ *       error, uncertainties, share, {@code fate} (phase, leak, loss, readout or recoverable),
+ *       {@code place}, lever and source; {@code not_assessed}; {@code sensitivities}, each with
+ *       {@code slope} dE/d(ln value) and what half and twice the value save
  *   <li>{@code check}: simulated total, whether it agrees, and {@code causes}, each alone; empty
  *       where only the total was simulated
  *   <li>{@code warnings}, {@code cautions}: sentences

@@ -16,6 +16,8 @@ public record Fate(Kind kind, String place) {
     LEAK("leak"),
     /** The atom has left the ladder by emitting or absorbing a photon of its own. */
     LOSS("loss"),
+    /** The atom is where it should be and its state is read wrongly. */
+    READOUT("readout"),
     /** The same in every shot, so that setting the pulse better takes it away. */
     RECOVERABLE("recoverable");
 

@@ -243,8 +243,8 @@ class ChartReportTest {
           new CauseEntry(kind.word(), 0.01, 0, 0, new Fate(kind, "place"), "lever", "source");
     }
     ChartDocument svg = drawn(content("t", 0.04, causes));
-    assertEquals(4, svg.all("cause").size());
-    assertEquals(4, svg.all("hatch").size()); // none, one, one and two
+    assertEquals(5, svg.all("cause").size());
+    assertEquals(5, svg.all("hatch").size()); // none, one, one, one and two
     String text = svg.joinedText();
     for (Fate.Kind kind : Fate.Kind.values()) {
       assertTrue(
@@ -252,7 +252,7 @@ class ChartReportTest {
     }
   }
 
-  /** Every line of a hatching lies in its rectangle, at 45 degrees. */
+  /** Every line of a hatching lies in its rectangle, upright or at 45 degrees. */
   @Test
   void hatchesWithinTheBar() {
     for (Hatch hatch : Hatch.values()) {
@@ -266,9 +266,14 @@ class ChartReportTest {
       for (int i = 0; i < points.size(); i += 2) {
         double[] a = points.get(i);
         double[] b = points.get(i + 1);
-        assertTrue(a[0] >= 10 && b[0] <= 47 && a[0] < b[0]);
+        boolean upright = hatch == Hatch.UPRIGHT;
+        assertTrue(a[0] >= 10 && b[0] <= 47 && (upright ? a[0] == b[0] : a[0] < b[0]));
         assertTrue(Math.min(a[1], b[1]) >= 20 && Math.max(a[1], b[1]) <= 34);
-        assertEquals(b[0] - a[0], (hatch == Hatch.RISING ? -1 : 1) * (b[1] - a[1]), 0.011);
+        if (upright) {
+          assertEquals(14, b[1] - a[1], 0.011);
+        } else {
+          assertEquals(b[0] - a[0], (hatch == Hatch.RISING ? -1 : 1) * (b[1] - a[1]), 0.011);
+        }
       }
     }
   }
