@@ -3,6 +3,9 @@ package org.toprung.budget.dynamics;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.toprung.core.quantity.Frequency.megahertz;
+import static org.toprung.core.quantity.Length.micrometres;
+import static org.toprung.core.quantity.MagneticField.gauss;
+import static org.toprung.core.quantity.Power.milliwatts;
 import static org.toprung.core.quantity.Time.microseconds;
 import static org.toprung.core.quantity.Time.nanoseconds;
 
@@ -12,10 +15,14 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 import org.junit.jupiter.params.provider.ValueSource;
+import org.toprung.angular.Polarization;
 import org.toprung.budget.SchrodingerEquation;
 import org.toprung.budget.TestDrives;
 import org.toprung.budget.pulse.Pulse;
 import org.toprung.budget.response.PulseResponse;
+import org.toprung.core.atom.Species;
+import org.toprung.core.atom.Sublevel;
+import org.toprung.core.drive.Beam;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.drive.Ladder;
 
@@ -81,6 +88,28 @@ class BareLadderTest {
     Pulse pulse = Pulse.gaussian(Math.PI);
     double error = LadderSystem.of(CalibratedProgram.of(ladder, pulse)).noiseFreeError();
     assertEquals(missed(ladder, end(ladder, pulse, false, 0)), error, 1e-6);
+  }
+
+  /** Neighbours of a one-photon target that a smooth pulse is too slow to populate. */
+  @Test
+  void neighboursThatASmoothPulseLeavesAloneAgreeWithTheBareLadder() {
+    Drive drive =
+        Drive.of(Species.RUBIDIUM_87)
+            .from(Sublevel.hyperfine("5S1/2", 2, 2))
+            .step(
+                Sublevel.fine("60P3/2", 1.5),
+                Beam.gaussian(milliwatts(50), micrometres(15))
+                    .polarized(Polarization.linearDegrees(45))
+                    .along(0, 1, 0))
+            .in(gauss(20))
+            .resolve();
+    Ladder ladder = drive.ladder();
+    for (Pulse pulse : List.of(Pulse.gaussian(Math.PI), Pulse.sineSquared(Math.PI))) {
+      LadderSystem system = LadderSystem.of(CalibratedProgram.of(ladder, pulse));
+      assertTrue(system.size() < 20, "takes part: " + system.size());
+      double expected = missed(ladder, end(ladder, pulse, false, 0));
+      assertEquals(expected, system.noiseFreeError(), 1e-6, pulse.name());
+    }
   }
 
   /** What decays is the time spent in each level, to first order. */
