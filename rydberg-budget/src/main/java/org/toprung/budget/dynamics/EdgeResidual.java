@@ -101,6 +101,9 @@ public final class EdgeResidual {
     double[] im = new double[states];
     Energies shifts = new Energies(calibrated.ladder(), followers);
     double[] phases = new double[states];
+    double[] cosine = new double[states];
+    double[] sine = new double[states];
+    int[] following = followers.stream().mapToInt(Follower::state).distinct().toArray();
     double[] breaks = program.breaks();
     for (int b = 0; b + 1 < breaks.length; b++) {
       double from = breaks[b];
@@ -130,6 +133,14 @@ public final class EdgeResidual {
         shifts.addPhases(middle, 0.5 * length / n, phases);
         double t = from + (s + 0.5) * length / n;
         double[] psi = course.at(t);
+        for (int state : following) {
+          cosine[state] = Math.cos(phases[state]);
+          sine[state] = Math.sin(phases[state]);
+        }
+        // the coupling to the target carries the phase of the light
+        double phase = program.phaseRadians(t);
+        double lightRe = Math.cos(phase);
+        double lightIm = Math.sin(phase);
         for (Follower f : followers) {
           double rise = fields[f.step()][s + 1] - fields[f.step()][s];
           if (rise == 0) {
@@ -137,11 +148,12 @@ public final class EdgeResidual {
           }
           double pRe = psi[f.activeIndex()];
           double pIm = psi[psi.length / 2 + f.activeIndex()];
-          // the coupling to the target carries the phase of the light
-          double phase = f.fromStart() ? 0 : program.phaseRadians(t);
-          double angle = phases[f.state()] + phase;
-          double cos = Math.cos(angle);
-          double sin = Math.sin(angle);
+          double cos = cosine[f.state()];
+          double sin = sine[f.state()];
+          if (!f.fromStart()) {
+            cos = cosine[f.state()] * lightRe - sine[f.state()] * lightIm;
+            sin = cosine[f.state()] * lightIm + sine[f.state()] * lightRe;
+          }
           double aRe = f.re() * pRe - f.im() * pIm;
           double aIm = f.re() * pIm + f.im() * pRe;
           re[f.state()] += rise * (aRe * cos - aIm * sin);
