@@ -63,8 +63,6 @@ class ArchitectureTest {
         .mayNotAccessAnyLayer()
         .whereLayer("linear")
         .mayNotAccessAnyLayer()
-        .whereLayer("cache")
-        .mayNotAccessAnyLayer()
         .whereLayer("atom")
         .mayOnlyAccessLayers("quantity", "angular", "cache")
         .whereLayer("radial")

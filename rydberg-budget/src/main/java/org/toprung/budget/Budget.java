@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Locale;
 import java.util.Set;
 import java.util.concurrent.ExecutorService;
 import java.util.function.IntConsumer;
@@ -316,5 +317,16 @@ public final class Budget {
    */
   public List<Sensitivity> sensitivities() {
     return Sensitivities.of(assessment);
+  }
+
+  /**
+   * The budget in one line.
+   *
+   * @return pulse, drive, total and uncertainty
+   */
+  @Override
+  public String toString() {
+    return String.format(
+        Locale.ROOT, "%s on %s: error %.3g ± %.2g", pulse, drive, total(), uncertainty());
   }
 }

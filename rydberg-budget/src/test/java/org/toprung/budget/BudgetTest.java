@@ -523,6 +523,17 @@ class BudgetTest {
   }
 
   @Test
+  void saysItselfInALine() {
+    Budget budget = budget(RUBIDIUM, TestDrives.bench());
+    String line = budget.toString();
+    assertTrue(line.startsWith("pi on Rb-87 5S1/2"), line);
+    assertTrue(line.contains(String.format(Locale.ROOT, "error %.3g ±", budget.total())), line);
+    String bench = budget.bench().toString();
+    assertTrue(bench.contains("linewidth, step 2 500.0 Hz"), bench);
+    assertTrue(bench.contains("intensity noise, step 1 0.005;"), bench);
+  }
+
+  @Test
   void refusesImpossibleValues() {
     Bench bench = Bench.unknown();
     refused(() -> bench.withTemperature(kelvin(0)));

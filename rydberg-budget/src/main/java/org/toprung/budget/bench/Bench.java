@@ -12,6 +12,7 @@ import java.util.TreeMap;
 import java.util.function.Consumer;
 import java.util.function.Function;
 import java.util.function.ToDoubleFunction;
+import java.util.stream.Collectors;
 import org.toprung.core.quantity.ElectricField;
 import org.toprung.core.quantity.Frequency;
 import org.toprung.core.quantity.Length;
@@ -738,5 +739,22 @@ public final class Bench {
                 + " its white noise would count twice");
       }
     }
+  }
+
+  /**
+   * What is known, in one line.
+   *
+   * @return names and numbers in SI units
+   */
+  @Override
+  public String toString() {
+    return entries().stream()
+        .map(
+            e ->
+                e.name()
+                    + " "
+                    + value(e.value(), e.index()).orElseThrow()
+                    + (e.value().unit().isEmpty() ? "" : " " + e.value().unit()))
+        .collect(Collectors.joining("; ", "bench of ", ""));
   }
 }

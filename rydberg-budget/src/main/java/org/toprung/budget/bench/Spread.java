@@ -193,4 +193,11 @@ public final class Spread {
   public double draw(RandomGenerator random) {
     return samples == null ? rms * random.nextGaussian() : samples[random.nextInt(samples.length)];
   }
+
+  @Override
+  public String toString() {
+    return samples == null
+        ? "Gaussian of rms " + rms()
+        : samples.length + " samples of rms " + rms();
+  }
 }

@@ -3,7 +3,6 @@ package org.toprung.budget.dynamics;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;
-import org.apache.commons.numbers.gamma.InverseErf;
 import org.toprung.budget.pulse.PulseProgram;
 import org.toprung.core.drive.Ladder;
 
@@ -23,50 +22,11 @@ import org.toprung.core.drive.Ladder;
  * adiabatic approximation).
  */
 public final class EdgeResidual {
-  private static final double RISE_OVER_SIGMA = 2 * Math.sqrt(2) * InverseErf.value(0.8);
   private static final int SAMPLES_PER_PERIOD = 24;
   private static final int FEWEST_SAMPLES = 400;
   private static final int MOST_SAMPLES = 240_000;
 
   private EdgeResidual() {}
-
-  /**
-   * Left by error-function edges of all fields at the beginning and at the end of a pulse.
-   *
-   * @param system the pulse on its ladder, which tells what is populated at its end
-   * @param riseSeconds 10–90 % rise time of the fields at the beginning, positive, s
-   * @param fallSeconds 90–10 % fall time of the fields at the end, positive, s
-   * @return population of the intermediate levels, what the two edges leave being added without
-   *     interference
-   * @throws IllegalArgumentException if a time is not positive and finite
-   */
-  public static double ofErrorFunctions(
-      LadderSystem system, double riseSeconds, double fallSeconds) {
-    for (double time : new double[] {riseSeconds, fallSeconds}) {
-      if (!(time > 0 && time < Double.POSITIVE_INFINITY)) {
-        throw new IllegalArgumentException("edge time " + time + " s must be positive and finite");
-      }
-    }
-    double[][] begin = new double[2][system.size()];
-    system.begin(begin[0], begin[1]);
-    return ofErrorFunction(system, begin, riseSeconds)
-        + ofErrorFunction(system, system.end(), fallSeconds);
-  }
-
-  private static double ofErrorFunction(LadderSystem system, double[][] psi, double seconds) {
-    int states = system.calibrated().ladder().size();
-    double[] re = new double[states];
-    double[] im = new double[states];
-    for (Follower f : followers(system)) {
-      double exponent = 2 * Math.PI * f.energy() * seconds / RISE_OVER_SIGMA;
-      double left = Math.exp(-0.5 * exponent * exponent);
-      double pRe = psi[0][f.activeIndex()];
-      double pIm = psi[1][f.activeIndex()];
-      re[f.state()] += left * (f.re() * pRe - f.im() * pIm);
-      im[f.state()] += left * (f.re() * pIm + f.im() * pRe);
-    }
-    return squares(re, im);
-  }
 
   private static double squares(double[] re, double[] im) {
     double sum = 0;
