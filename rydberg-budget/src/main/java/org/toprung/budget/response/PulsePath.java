@@ -31,6 +31,10 @@ final class PulsePath {
   private static final double LARGEST_LOSS = 0.5;
 
   private static final int MOST_PANELS = 100_000;
+
+  /** Panels times states: what is kept for each stays below some hundred megabytes. */
+  private static final long MOST_KEPT = 1_000_000;
+
   private static final int NODES = FilonMoments.NODES;
   private static final double[] BOOLE = {7 / 90.0, 32 / 90.0, 12 / 90.0, 32 / 90.0, 7 / 90.0};
 
@@ -80,12 +84,12 @@ final class PulsePath {
       count[m] = panelsOf(m, hamiltonians[m], operators);
       total += count[m];
       sum += system.segmentSeconds(m);
-      if (total > MOST_PANELS) {
+      if (total > MOST_PANELS || (long) total * n > MOST_KEPT) {
         throw new ArithmeticException(
             "the pulse of "
                 + system.segments()
                 + " segments turns too fast to follow: more than "
-                + MOST_PANELS
+                + Math.min(MOST_PANELS, MOST_KEPT / n)
                 + " panels");
       }
     }

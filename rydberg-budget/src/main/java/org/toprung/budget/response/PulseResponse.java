@@ -436,6 +436,18 @@ public final class PulseResponse {
   }
 
   /**
+   * Moduli of the amplitudes at the end of states that the ideal pulse does not use: what the next
+   * pulse of a sequence interferes with.
+   *
+   * @return label of the state → modulus, the root of {@link #leakage()}; immutable
+   */
+  public Map<String, Double> leakAmplitudes() {
+    Map<String, Double> moduli = new LinkedHashMap<>();
+    leakage.forEach((label, population) -> moduli.put(label, Math.sqrt(Math.max(0, population))));
+    return Collections.unmodifiableMap(moduli);
+  }
+
+  /**
    * Frequencies equally spaced on a logarithmic scale.
    *
    * @param from first frequency, positive, Hz

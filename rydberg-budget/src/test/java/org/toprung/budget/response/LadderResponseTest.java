@@ -8,11 +8,18 @@ import java.util.List;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
+import org.toprung.angular.Polarization;
 import org.toprung.budget.TestDrives;
 import org.toprung.budget.dynamics.CalibratedProgram;
 import org.toprung.budget.pulse.Pulse;
+import org.toprung.core.atom.Species;
+import org.toprung.core.atom.Sublevel;
+import org.toprung.core.drive.Beam;
 import org.toprung.core.drive.Drive;
 import org.toprung.core.quantity.Frequency;
+import org.toprung.core.quantity.Length;
+import org.toprung.core.quantity.MagneticField;
+import org.toprung.core.quantity.Power;
 import org.toprung.core.quantity.Time;
 
 class LadderResponseTest {
@@ -88,5 +95,40 @@ class LadderResponseTest {
     double leaked = response.leakage().values().stream().mapToDouble(Double::doubleValue).sum();
     assertTrue(leaked > 0 && leaked <= response.error() + 1e-2);
     assertTrue(response.frequencyFilter(0, 1e5) > 0);
+  }
+
+  /**
+   * Exact to first order in the coupling Ω′ to a sublevel that lies δ away: an abrupt π pulse
+   * leaves πΩ′|∫cos(πΩt) exp(2πiδt) dt| there.
+   */
+  @Test
+  void leavesTheAmplitudesOfFirstOrderInNeighbours() {
+    Drive drive =
+        Drive.of(Species.RUBIDIUM_87)
+            .from(Sublevel.hyperfine("5S1/2", 2, 2))
+            .step(
+                Sublevel.fine("60P3/2", 1.5),
+                Beam.gaussian(Power.milliwatts(20), Length.micrometres(20))
+                    .polarized(Polarization.linearDegrees(45))
+                    .along(0, 1, 0))
+            .in(MagneticField.gauss(20))
+            .resolve();
+    PulseResponse response = PulseResponse.ladder(drive, Pulse.pi());
+    double a = Math.PI * 0.5 / response.seconds();
+    int strong = 0;
+    for (Drive.OtherTarget other : drive.otherTargets()) {
+      double b = -2 * Math.PI * other.detuning().hertz();
+      double square =
+          (a * a + b * b - 2 * a * b * Math.sin(b * Math.PI / (2 * a)))
+              / ((a * a - b * b) * (a * a - b * b));
+      double expected = Math.PI * other.rabi().hertz() * Math.sqrt(square);
+      if (expected > 1e-3) {
+        double found = response.leakAmplitudes().get(other.sublevel());
+        assertEquals(expected, found, 0.05 * expected, other.toString());
+        assertEquals(found * found, response.leakage().get(other.sublevel()), 1e-15);
+        strong++;
+      }
+    }
+    assertTrue(strong > 0);
   }
 }
