@@ -22,6 +22,7 @@ import org.junit.jupiter.api.function.Executable;
 import org.toprung.angular.Polarization;
 import org.toprung.budget.bench.Bench;
 import org.toprung.budget.pulse.Pulse;
+import org.toprung.budget.response.ClosedForms;
 import org.toprung.core.atom.Level;
 import org.toprung.core.atom.Species;
 import org.toprung.core.atom.Sublevel;
@@ -468,10 +469,7 @@ class BudgetTest {
     assertEquals(1, variance / stated, 0.7);
   }
 
-  /**
-   * Exact to first order in the coupling Ω′ to a sublevel that lies δ away: an abrupt π pulse
-   * leaves π²Ω′²|∫cos(πΩt) exp(2πiδt) dt|² there, which is Ω′²/4δ² when δ is large.
-   */
+  /** Exact to first order in the couplings to the neighbours. */
   @Test
   void countsTheNeighboursOfAOnePhotonTarget() {
     Drive drive =
@@ -485,14 +483,11 @@ class BudgetTest {
             .in(MagneticField.gauss(20))
             .resolve();
     Budget budget = budget(drive, Bench.unknown());
-    double a = Math.PI * budget.plan().rabi().hertz();
     double expected = 0;
     for (Drive.OtherTarget other : drive.otherTargets()) {
-      double b = -2 * Math.PI * other.detuning().hertz();
-      double integral =
-          (a * a + b * b - 2 * a * b * Math.sin(b * Math.PI / (2 * a)))
-              / ((a * a - b * b) * (a * a - b * b));
-      expected += Math.pow(Math.PI * other.rabi().hertz(), 2) * integral;
+      expected +=
+          ClosedForms.neighbour(
+              budget.plan().rabi().hertz(), other.rabi().hertz(), -other.detuning().hertz());
     }
     assertTrue(expected > 1e-6, "too weak to test: " + expected);
     assertEquals(expected, error(budget, "Other Rydberg sublevels"), 0.05 * expected);

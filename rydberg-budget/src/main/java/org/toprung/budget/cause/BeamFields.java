@@ -89,7 +89,7 @@ final class BeamFields {
     for (int k = 0; k < drive.steps().size(); k++) {
       double rms = bench.value(BenchValue.POINTING, k).orElse(0);
       if (rms > 0) {
-        for (double[] axis : across(drive.steps().get(k).beam().direction())) {
+        for (double[] axis : drive.steps().get(k).beam().across()) {
           pushes.add(new Push(k, rms * axis[0], rms * axis[1], rms * axis[2]));
         }
       }
@@ -101,7 +101,7 @@ final class BeamFields {
     List<Axis> found = new ArrayList<>();
     for (int k = 0; k < drive.steps().size(); k++) {
       double[] direction = drive.steps().get(k).beam().direction();
-      for (double[] unit : across(direction)) {
+      for (double[] unit : drive.steps().get(k).beam().across()) {
         found.add(new Axis(k, unit));
       }
       Axis along = new Axis(k, direction);
@@ -184,31 +184,6 @@ final class BeamFields {
     return bench
         .temperature()
         .map(t -> ThermalMotion.of(drive.species().massKilograms(), t, bench.trapFrequencies()));
-  }
-
-  /** Two unit vectors across a direction. */
-  private static List<double[]> across(double[] direction) {
-    int least = 0;
-    for (int a = 1; a < 3; a++) {
-      if (Math.abs(direction[a]) < Math.abs(direction[least])) {
-        least = a;
-      }
-    }
-    double[] axis = new double[3];
-    axis[least] = 1;
-    double[] first = unit(cross(direction, axis));
-    return List.of(first, unit(cross(direction, first)));
-  }
-
-  private static double[] cross(double[] a, double[] b) {
-    return new double[] {
-      a[1] * b[2] - a[2] * b[1], a[2] * b[0] - a[0] * b[2], a[0] * b[1] - a[1] * b[0]
-    };
-  }
-
-  private static double[] unit(double[] v) {
-    double length = Math.sqrt(v[0] * v[0] + v[1] * v[1] + v[2] * v[2]);
-    return new double[] {v[0] / length, v[1] / length, v[2] / length};
   }
 
   private double[] fields(double[] normal) {

@@ -101,7 +101,7 @@ public final class Causes {
   }
 
   private static Set<Disturbance> only(Disturbance.Kind kind) {
-    return Set.of(new Disturbance(kind, -1));
+    return Set.of(new Disturbance(kind, Disturbance.COMMON));
   }
 
   private static String moreDetuning(PulseModel model) {
@@ -125,7 +125,11 @@ public final class Causes {
             m ->
                 String.format(
                     Locale.ROOT,
-                    "double the Rabi frequency: %.2g remains; or a higher level",
+                    "%s: %.2g remains; or a higher level",
+                    // a length that follows from the area alone
+                    m.pulse().areaRadians().isPresent()
+                        ? "double the Rabi frequency"
+                        : "spend half the time in the Rydberg level",
                     0.5 * m.decayError(m.spontaneousPerSecond()))));
     if (bench.environment().isEmpty()) {
       notAssessed.add("Rydberg decay, blackbody: no environment temperature");
@@ -160,7 +164,7 @@ public final class Causes {
                     "Doppler shift",
                     "the thermal velocity (a quarter of the temperature), or the summed wave vector",
                     STATIC_DETUNING + "; δ = k·v, thermal velocity with the zero-point floor",
-                    new Disturbance(DOPPLER, -1),
+                    new Disturbance(DOPPLER, Disturbance.COMMON),
                     m -> Spread.gaussian(dopplerSpread(moving)))),
         () -> notAssessed.add("Doppler shift: no temperature"));
     boolean pointing = bench.isKnown(BenchValue.POINTING);
@@ -205,7 +209,7 @@ public final class Causes {
                         "Magnetic field noise",
                         "the magnetic noise",
                         STATIC_DETUNING + "; δ = (dν/dB) δB",
-                        new Disturbance(MAGNETIC_FIELD, -1),
+                        new Disturbance(MAGNETIC_FIELD, Disturbance.COMMON),
                         m -> tesla.scaled(-drive.magneticSensitivityHertzPerTesla()))),
             () -> notAssessed.add("Magnetic field noise: no magnetic noise"));
     bench
@@ -299,7 +303,7 @@ public final class Causes {
                         "Miscalibrated frequency",
                         "the error of the laser frequency",
                         STATIC_DETUNING,
-                        new Disturbance(LASER_FREQUENCY, -1),
+                        new Disturbance(LASER_FREQUENCY, Disturbance.COMMON),
                         m -> hertz)),
             () -> notAssessed.add("Miscalibrated frequency: no frequency error"));
   }
@@ -352,8 +356,8 @@ public final class Causes {
       assessed.add(
           new FixedCause(
               "Residual intermediate population",
-              "first-order non-adiabatic amplitude ∫(dω/dt) exp(2πiΔt) dt over the edges of the"
-                  + " pulse, both edges added as probabilities",
+              "first-order non-adiabatic amplitude ∫(dω/dt) exp(2πiΔt) dt over the pulse as it is"
+                  + " played",
               Set.of(),
               m -> m.residualIntermediate().orElse(0),
               Fate.Kind.LOSS,
@@ -379,7 +383,7 @@ public final class Causes {
                         "Trap intensity noise",
                         "the rms intensity noise of the trap",
                         STATIC_DETUNING + "; δ = differential light shift of the trap × δI/I",
-                        new Disturbance(TRAP_INTENSITY, -1),
+                        new Disturbance(TRAP_INTENSITY, Disturbance.COMMON),
                         m -> relative.scaled(-shift))),
             () -> notAssessed.add("Trap intensity noise: no trap intensity noise"));
     notAssessed.add(
@@ -405,7 +409,7 @@ public final class Causes {
       BenchValue value, String name, Disturbance.Kind kind, String place, String lever) {
     OptionalDouble probability = bench.value(value, 0);
     if (probability.isEmpty()) {
-      notAssessed.add(name + ": no " + value.key().replace('_', ' '));
+      notAssessed.add(name + ": no " + value.words());
       return;
     }
     assessed.add(

@@ -20,7 +20,7 @@ final class PositionInBeams extends Halvable {
             + " the pointing jitter",
         "response of the pulse over the whole beam profiles, all beams jointly, mean loss of field"
             + " calibrated out",
-        new Disturbance(Disturbance.Kind.POSITION, -1));
+        new Disturbance(Disturbance.Kind.POSITION, Disturbance.COMMON));
     this.fields = fields;
   }
 

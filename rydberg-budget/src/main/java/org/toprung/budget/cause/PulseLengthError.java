@@ -16,7 +16,7 @@ final class PulseLengthError extends Halvable {
         "Miscalibrated length",
         "the error of the pulse length",
         "exact response to a stretched pulse, averaged over its spread; (πx/2)² for a square π pulse",
-        new Disturbance(Disturbance.Kind.PULSE_LENGTH, -1));
+        new Disturbance(Disturbance.Kind.PULSE_LENGTH, Disturbance.COMMON));
     this.relative = relative;
   }
 

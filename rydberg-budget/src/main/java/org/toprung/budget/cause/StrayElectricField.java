@@ -31,7 +31,7 @@ final class StrayElectricField extends Halvable {
         "the residual electric field",
         "exact response of the pulse over an isotropic field; static polarizability by sum over"
             + " states",
-        new Disturbance(Disturbance.Kind.ELECTRIC_FIELD, -1));
+        new Disturbance(Disturbance.Kind.ELECTRIC_FIELD, Disturbance.COMMON));
     this.length = length;
   }
 

@@ -61,19 +61,19 @@ final class Outcomes {
                 + " from its intermediate levels, or a pulse that transfers or returns the atom");
       }
     }
-    IdealRotation ideal =
-        IdealRotation.of(calibrated.pulse(), ladder.steps(), calibrated.rabiHertz());
+    double[] ideal =
+        TwoLevelSystem.idealEnd(calibrated.pulse(), ladder.steps(), calibrated.rabiHertz());
     double[][] vector = new double[2][p];
     if (goal == Goal.RETURN) {
-      double phase = Math.atan2(ideal.startIm(), ideal.startRe()) - calibrated.startPhaseRadians();
+      double phase = Math.atan2(ideal[1], ideal[0]) - calibrated.startPhaseRadians();
       vector[0][start] = 0.5 * Math.cos(phase);
       vector[1][start] = 0.5 * Math.sin(phase);
       Outcomes outcomes = new Outcomes(0.5);
       outcomes.vectors.add(vector);
       return outcomes;
     }
-    vector[0][start] = ideal.startRe();
-    vector[1][start] = ideal.startIm();
+    vector[0][start] = ideal[0];
+    vector[1][start] = ideal[1];
     double square = 0;
     for (int i = 0; i < p; i++) {
       if (ladder.isWanted(active[i])) {
@@ -84,8 +84,8 @@ final class Outcomes {
       if (ladder.isWanted(active[i])) {
         double a = re[i * p + start] / Math.sqrt(square);
         double b = im[i * p + start] / Math.sqrt(square);
-        vector[0][i] = a * ideal.targetRe() - b * ideal.targetIm();
-        vector[1][i] = a * ideal.targetIm() + b * ideal.targetRe();
+        vector[0][i] = a * ideal[2] - b * ideal[3];
+        vector[1][i] = a * ideal[3] + b * ideal[2];
       }
     }
     Outcomes outcomes = new Outcomes(0);

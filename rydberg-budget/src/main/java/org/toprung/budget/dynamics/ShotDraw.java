@@ -72,7 +72,7 @@ final class ShotDraw {
     this.across = new double[n][][];
     for (int k = 0; k < n; k++) {
       waveVector[k] = drive.waveVectorPerMetre(k);
-      across[k] = across(waveVector[k]);
+      across[k] = steps.get(k).beam().across().toArray(double[][]::new);
     }
     this.scatters = has(active, Kind.SCATTERING);
     this.rydbergDecay =
@@ -125,30 +125,6 @@ final class ShotDraw {
 
   private static Spread spread(Bench bench, Set<Disturbance> active, BenchValue value, Kind kind) {
     return has(active, kind) ? bench.spread(value, 0).orElse(null) : null;
-  }
-
-  private static double[][] across(double[] k) {
-    double length = Math.sqrt(k[0] * k[0] + k[1] * k[1] + k[2] * k[2]);
-    int least = 0;
-    for (int a = 1; a < 3; a++) {
-      least = Math.abs(k[a]) < Math.abs(k[least]) ? a : least;
-    }
-    // an axis well away from the beam, made orthogonal to it
-    double[] one = new double[3];
-    for (int a = 0; a < 3; a++) {
-      one[a] = (a == least ? 1 : 0) - k[least] * k[a] / (length * length);
-    }
-    double norm = Math.sqrt(one[0] * one[0] + one[1] * one[1] + one[2] * one[2]);
-    double[] two = new double[3];
-    for (int a = 0; a < 3; a++) {
-      one[a] /= norm;
-    }
-    for (int a = 0; a < 3; a++) {
-      int b = (a + 1) % 3;
-      int c = (a + 2) % 3;
-      two[a] = (k[b] * one[c] - k[c] * one[b]) / length;
-    }
-    return new double[][] {one, two};
   }
 
   /** Whether intensities change during the pulse because the atom flies through the beams. */

@@ -205,20 +205,22 @@ public final class TwoLevelSystem implements DrivenSystem {
     if (pulse.goal() == Goal.TRANSFER) {
       return new double[] {0, 0, 1, 0};
     }
-    PulseProgram ideal = pulse.ideal().program(steps, Frequency.ofHertz(rabiHertz));
-    double[] end =
-        refined(
-                ideal,
-                rabiHertz,
-                new Shifts(new double[steps], new double[steps]),
-                pulse.goal(),
-                new double[4])
-            .end(1, 0, ones(steps), 1);
+    double[] end = idealEnd(pulse, steps, rabiHertz);
     if (pulse.goal() == Goal.RETURN) {
       double size = 2 * Math.hypot(end[0], end[1]);
       return new double[] {end[0] / size, end[1] / size, 0, 0};
     }
     return end;
+  }
+
+  /**
+   * Final state of the ideal pulse in the resonant system: real and imaginary part of the start's
+   * amplitude, then of the target's.
+   */
+  static double[] idealEnd(Pulse pulse, int steps, double rabiHertz) {
+    PulseProgram ideal = pulse.ideal().program(steps, Frequency.ofHertz(rabiHertz));
+    Shifts none = new Shifts(new double[steps], new double[steps]);
+    return refined(ideal, rabiHertz, none, pulse.goal(), new double[4]).end(1, 0, ones(steps), 1);
   }
 
   private static TwoLevelSystem refined(

@@ -12,10 +12,23 @@ import org.toprung.core.quantity.Frequency;
  *
  * <p>The integrals here are done by brute force, Simpson's rule on many points of each interval.
  */
-final class ClosedForms {
+public final class ClosedForms {
   private static final int POINTS = 4000;
 
   private ClosedForms() {}
+
+  /**
+   * To first order in the coupling Ω′ to a sublevel that lies δ away an abrupt π pulse of the Rabi
+   * frequency Ω leaves π²Ω′²|∫cos(πΩt) exp(2πiδt) dt|² there, Ω′²/4δ² when δ is large.
+   */
+  public static double neighbour(double rabiHertz, double otherRabiHertz, double awayHertz) {
+    double a = Math.PI * rabiHertz;
+    double b = 2 * Math.PI * awayHertz;
+    double integral =
+        (a * a + b * b - 2 * a * b * Math.sin(b * Math.PI / (2 * a)))
+            / ((a * a - b * b) * (a * a - b * b));
+    return Math.pow(Math.PI * otherRabiHertz, 2) * integral;
+  }
 
   /** |∫ g(θ(t)) e^{2πift} dt|². */
   static double power(Pulse pulse, double rabiHertz, DoubleUnaryOperator g, double hertz) {

@@ -97,10 +97,7 @@ class LadderResponseTest {
     assertTrue(response.frequencyFilter(0, 1e5) > 0);
   }
 
-  /**
-   * Exact to first order in the coupling Ω′ to a sublevel that lies δ away: an abrupt π pulse
-   * leaves πΩ′|∫cos(πΩt) exp(2πiδt) dt| there.
-   */
+  /** Exact to first order in the couplings to the neighbours. */
   @Test
   void leavesTheAmplitudesOfFirstOrderInNeighbours() {
     Drive drive =
@@ -114,14 +111,11 @@ class LadderResponseTest {
             .in(MagneticField.gauss(20))
             .resolve();
     PulseResponse response = PulseResponse.ladder(drive, Pulse.pi());
-    double a = Math.PI * 0.5 / response.seconds();
+    double rabi = 0.5 / response.seconds();
     int strong = 0;
     for (Drive.OtherTarget other : drive.otherTargets()) {
-      double b = -2 * Math.PI * other.detuning().hertz();
-      double square =
-          (a * a + b * b - 2 * a * b * Math.sin(b * Math.PI / (2 * a)))
-              / ((a * a - b * b) * (a * a - b * b));
-      double expected = Math.PI * other.rabi().hertz() * Math.sqrt(square);
+      double expected =
+          Math.sqrt(ClosedForms.neighbour(rabi, other.rabi().hertz(), -other.detuning().hertz()));
       if (expected > 1e-3) {
         double found = response.leakAmplitudes().get(other.sublevel());
         assertEquals(expected, found, 0.05 * expected, other.toString());

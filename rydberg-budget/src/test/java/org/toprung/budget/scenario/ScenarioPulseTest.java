@@ -255,27 +255,7 @@ class ScenarioPulseTest {
   @Test
   void refusesStirapOverOneStep() {
     String text =
-        """
-        [atom]
-        species = "Cs-133"
-        [field]
-        magnetic = "5 G"
-        [start]
-        level = "6S1/2"
-        F = 4
-        mF = 4
-        [[step]]
-        to = "60P3/2"
-        mJ = 1.5
-        power = "60 mW"
-        waist = "20 um"
-        polarization = "sigma+"
-        direction = [0, 0, 1]
-        [pulse]
-        kind = "stirap"
-        width = "2 us"
-        delay = "1 us"
-        """;
+        ScenarioTest.oneStep().replace("\"pi\"", "\"stirap\"\nwidth = \"2 us\"\ndelay = \"1 us\"");
     ScenarioException e =
         assertThrows(ScenarioException.class, () -> Scenario.parse(text, "one.toml"));
     assertTrue(

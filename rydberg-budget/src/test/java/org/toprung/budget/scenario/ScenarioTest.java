@@ -136,7 +136,7 @@ class ScenarioTest {
     return new ReportContent(s.title(), budget, budget.check(10, 1));
   }
 
-  private static String oneStep() {
+  static String oneStep() {
     return """
             [atom]
             species = "Cs-133"

@@ -1,5 +1,6 @@
 package org.toprung.core.drive;
 
+import java.util.List;
 import java.util.Locale;
 import org.toprung.angular.Polarization;
 import org.toprung.angular.PolarizationVector;
@@ -290,6 +291,34 @@ public final class Beam {
    */
   public double impurityPhaseDegrees() {
     return impurity.phaseDegrees();
+  }
+
+  /**
+   * Two unit vectors across the direction of travel and across each other, for displacements of the
+   * beam.
+   *
+   * @return two fresh arrays of three components in the lab frame
+   * @throws IllegalStateException if no direction was given
+   */
+  public List<double[]> across() {
+    double[] k = direction();
+    int least = 0;
+    for (int a = 1; a < 3; a++) {
+      least = Math.abs(k[a]) < Math.abs(k[least]) ? a : least;
+    }
+    // an axis well away from the beam, made orthogonal to it
+    double[] first = new double[3];
+    double norm = Math.sqrt(1 - k[least] * k[least]);
+    for (int a = 0; a < 3; a++) {
+      first[a] = ((a == least ? 1 : 0) - k[least] * k[a]) / norm;
+    }
+    double[] second = new double[3];
+    for (int a = 0; a < 3; a++) {
+      int b = (a + 1) % 3;
+      int c = (a + 2) % 3;
+      second[a] = k[b] * first[c] - k[c] * first[b];
+    }
+    return List.of(first, second);
   }
 
   /**

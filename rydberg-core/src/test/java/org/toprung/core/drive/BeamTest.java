@@ -46,6 +46,24 @@ class BeamTest {
     assertEquals(Math.sqrt(2 * 376.730313), flat.peakFieldVoltsPerMetre(), 1e-5);
   }
 
+  /** Exact: three orthogonal unit vectors, whatever the direction. */
+  @Property(tries = 100, seed = "71")
+  void hasTwoDirectionsAcross(
+      @ForAll @DoubleRange(min = -1, max = 1) double x,
+      @ForAll @DoubleRange(min = -1, max = 1) double y) {
+    for (double z : new double[] {0.3, -1e-3}) {
+      double[] k = round().along(x, y, z).direction();
+      List<double[]> across = round().along(x, y, z).across();
+      double[][] all = {k, across.get(0), across.get(1)};
+      for (int i = 0; i < 3; i++) {
+        for (int j = 0; j < 3; j++) {
+          double dot = all[i][0] * all[j][0] + all[i][1] * all[j][1] + all[i][2] * all[j][2];
+          assertEquals(i == j ? 1 : 0, dot, 1e-14);
+        }
+      }
+    }
+  }
+
   /** Exact: the field goes with the square root of the power, whatever the profile. */
   @Test
   void brightensByTheSquareRootInField() {
